@@ -1,0 +1,75 @@
+import type { Line, LineReader } from "./line";
+
+const wallCounts = (read: LineReader) => read.choice("4.08") === "lumped";
+const shell = { part: 4, group: "Shell" } as const;
+
+export const steelLines: Line[] = [
+  {
+    ...shell,
+    kind: "choice",
+    no: "4.08",
+    label: "Wall in the balance",
+    radios: true,
+    sourceFree: true,
+    options: [
+      { value: "lumped", label: "One wall temperature", phrase: "the steel gives heat to the gas" },
+      { value: "none", label: "No wall", phrase: "adiabatic: coldest gas, no steel figure" },
+    ],
+    initial: "lumped",
+  },
+  {
+    ...shell,
+    kind: "choice",
+    no: "4.02",
+    label: "Steel",
+    hint: "sets heat capacity",
+    asked: wallCounts,
+    options: [
+      { value: "carbon_steel", label: "Carbon steel, not impact tested" },
+      { value: "carbon_steel_lt", label: "Carbon steel, impact tested for low temperature" },
+      { value: "nickel_3_5", label: "3.5 % nickel steel" },
+      { value: "nickel_9", label: "9 % nickel steel" },
+      { value: "ss304", label: "Stainless steel 304 / 304L" },
+      { value: "ss316", label: "Stainless steel 316 / 316L" },
+      { value: "duplex2205", label: "Duplex stainless steel 2205" },
+      { value: "al5083", label: "Aluminium alloy 5083-O" },
+    ],
+    initial: "carbon_steel",
+  },
+  { ...shell, kind: "quantity", no: "4.03", label: "Wall thickness", hint: "nominal less corrosion allowance", asked: wallCounts, quantity: "length", min: 5e-4, max: 0.5, shown: { SI: "mm", US: "in" } },
+  {
+    ...shell,
+    kind: "quantity",
+    no: "4.04",
+    label: "Inside surface in contact with gas",
+    asked: (read) => wallCounts(read) && read.choice("2.02") === "volume",
+    quantity: "area",
+    min: 1e-4,
+    max: 1e5,
+    shown: { SI: "m²", US: "ft²" },
+  },
+  {
+    ...shell,
+    kind: "derived",
+    no: "4.09",
+    label: "Inside surface from the dimensions",
+    asked: (read) => wallCounts(read) && read.choice("2.02") !== "volume",
+    quantity: "area",
+    shown: { SI: "m²", US: "ft²" },
+  },
+  { ...shell, kind: "quantity", no: "4.10", label: "Mass of steel", hint: "leave empty to take it from dimensions and thickness", asked: wallCounts, optional: true, quantity: "mass", min: 0.1, max: 1e8, shown: { SI: "kg", US: "lb" } },
+  { ...shell, kind: "quantity", no: "4.11", label: "Design pressure", asked: wallCounts, optional: true, quantity: "pressure", min: 1e5, max: 2e8, shown: { SI: "bar(g)", US: "psig" } },
+  {
+    ...shell,
+    kind: "quantity",
+    no: "4.05",
+    label: "Minimum design metal temperature",
+    hint: "without it the verdict stays Open",
+    asked: wallCounts,
+    optional: true,
+    quantity: "temperature",
+    min: 20,
+    max: 373.15,
+    shown: { SI: "°C", US: "°F" },
+  },
+];
