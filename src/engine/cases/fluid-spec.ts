@@ -1,0 +1,51 @@
+/** The `fluid` object of a case document, as plain types. */
+
+export const equationIds = [
+  "van-der-waals",
+  "redlich-kwong",
+  "soave-redlich-kwong",
+  "peng-robinson-1976",
+  "peng-robinson-1978",
+  "gerg-2008",
+  "reference",
+] as const;
+export type EquationId = (typeof equationIds)[number];
+
+/** cp0/R = a0 + a1 T + a2 T² + …, T in K, one to eight coefficients. */
+export interface HeatCapacityPolynomial {
+  polynomial: readonly number[];
+  rangeK: readonly [number, number];
+}
+
+export interface CustomComponent {
+  molarMassKgPerMol: number;
+  criticalTemperatureK: number;
+  criticalPressurePa: number;
+  acentricFactor: number;
+  idealGasHeatCapacityOverR: HeatCapacityPolynomial;
+}
+
+/** A heavy end known by its molar mass and its relative density (60/60 °F). */
+export interface PseudoComponent {
+  molarMassKgPerMol: number;
+  relativeDensity: number;
+}
+
+export interface ComponentSpec {
+  id: string;
+  moleFraction: number;
+  pseudo?: PseudoComponent;
+  custom?: CustomComponent;
+}
+
+export interface PairInteraction {
+  pair: readonly [string, string];
+  kij: number;
+}
+
+export interface FluidSpec {
+  components: readonly ComponentSpec[];
+  equation: EquationId;
+  /** Left out: "library". Pairs that a list does not name have kij = 0. */
+  interaction?: "library" | "none" | readonly PairInteraction[];
+}
