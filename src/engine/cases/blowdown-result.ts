@@ -1,0 +1,116 @@
+/** The result document of a blowdown. Times from the opening of the valve; energies on the zero of `eos/fluid-model.ts`. */
+
+export type EndedBy = "pressure" | "time" | "solid-phase" | "back-pressure";
+export type Verdict = "within" | "near" | "beyond" | "open";
+
+export type BlowdownSummary = {
+  initialMassKg: number;
+  finalMassKg: number;
+  ventedMassKg: number;
+  initialPressurePa: number;
+  initialTemperatureK: number;
+  finalTemperatureK: number;
+  finalPressurePa: number;
+  endTimeS: number;
+  endedBy: EndedBy;
+  peakVentRateKgPerS: number;
+  peakVentRateTimeS: number;
+  minimumFluidTemperatureK: number;
+  minimumFluidTemperatureTimeS: number;
+  minimumWallTemperatureK?: number;
+  minimumWallTemperatureTimeS?: number;
+  minimumOutletTemperatureK: number;
+  minimumOutletTemperatureTimeS: number;
+  /** Absent when not reached. */
+  timeToHalfGaugePressureS?: number;
+  timeToSixPointNineBarGaugeS?: number;
+  timeToTargetPressureS?: number;
+  energyVentedJ: number;
+  heatFromWallJ: number;
+  heatFromOutsideJ: number;
+  massClosure: number;
+  energyClosure: number;
+};
+
+/** Columns of equal length. A phase change or a jump has its time twice: before, after. Absent columns do not apply. */
+export type BlowdownSeries = {
+  timeS: number[];
+  pressurePa: number[];
+  fluidTemperatureK: number[];
+  vapourTemperatureK?: number[];
+  liquidTemperatureK?: number[];
+  gasWallTemperatureK?: number[];
+  liquidWallTemperatureK?: number[];
+  massKg: number[];
+  ventRateKgPerS: number[];
+  ventedMassKg: number[];
+  ventedEnergyJ: number[];
+  vapourMoleFraction: number[];
+  liquidLevelM?: number[];
+  outletTemperatureK: number[];
+};
+
+/** Three steps between the first state and another, J/mol of the fluid that is there, and the balance of the whole run. */
+export type ThreeSteps = { departureOut: number; idealGas: number; departureBack: number; total: number };
+export type EnergyAccount = {
+  /** From the state at the start to the coldest state of the fluid. */
+  startToColdest: { internalEnergyJPerMol: ThreeSteps; enthalpyJPerMol: ThreeSteps; entropyJPerMolK: ThreeSteps; atTimeS: number };
+  /** From the state at the start to the state at the end. */
+  startToEnd: { internalEnergyJPerMol: ThreeSteps; enthalpyJPerMol: ThreeSteps; entropyJPerMolK: ThreeSteps; atTimeS: number };
+  /** start + heatFromWall + heatFromOutside − vented − end = leftOver */
+  wholeRun: { startJ: number; heatFromWallJ: number; heatFromOutsideJ: number; ventedJ: number; endJ: number; leftOverJ: number };
+};
+
+export type LimitId =
+  | "time-to-target"
+  | "minimum-wall-temperature"
+  | "minimum-outlet-temperature"
+  | "peak-vent-rate";
+
+export type AssessedLimit = {
+  id: LimitId;
+  title: string;
+  /** Absent when the run did not give one. */
+  value?: number;
+  /** Absent when none was entered. */
+  limit?: number;
+  /** SI unit of both. */
+  unit: "s" | "K" | "kg/s";
+  /** Which side of the limit is the right one. */
+  sense: "at-most" | "at-least";
+  /** Distance left to the limit in its unit; negative past it. */
+  inHand?: number;
+  /** Part of the limit used up, where that makes sense (not for temperatures). */
+  share?: number;
+  verdict: Verdict;
+  governs: boolean;
+  /** Why a line is open, or what stands beside the figure. */
+  note?: string;
+};
+
+export type Warning = { code: string; message: string };
+
+export type BlowdownResult = {
+  format: "ebbmark-result/1";
+  kind: "blowdown";
+  engineVersion: string;
+  caseSha256: string;
+  summary: BlowdownSummary;
+  series: BlowdownSeries;
+  energyAccount: EnergyAccount;
+  verdict: Verdict;
+  /** In the order of the form; the one with the least in hand governs. */
+  limits: AssessedLimit[];
+  warnings: Warning[];
+  /** The words; `cautionIds` names them in the same order. */
+  cautions: string[];
+  cautionIds: string[];
+  numerics: { relativeTolerance: number; steps: number; evaluations: number; wallClockMs: number };
+};
+
+/** The run again at a tenfold tighter tolerance, and how far the governing figures moved. */
+export type Confirmation = {
+  relativeTolerance: number;
+  figures: { id: string; title: string; unit: string; value: number; confirmed: number; change: number }[];
+  result: BlowdownResult;
+};
