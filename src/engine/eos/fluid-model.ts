@@ -195,11 +195,19 @@ export interface ResidualDerivatives {
 }
 
 export interface ResidualModel {
-  evaluate(T: number, V: number, n: ArrayLike<number>, order: 0 | 1 | 2, out: ResidualDerivatives): void;
-  /** Molar volume of the wanted root at (T, p); throws "no-convergence". `z` sums to 1. */
-  volumeAtPressure(T: number, p: number, z: ArrayLike<number>, root: Root): number;
+  /**
+   * Fixes the mole numbers of the evaluations that follow. Evaluations at other temperatures and volumes of the same
+   * composition then cost no mixing sums. The flashes call it before each phase; nothing else may rely on it.
+   */
+  setComposition(n: ArrayLike<number>): void;
+  evaluate(T: number, V: number, order: 0 | 1 | 2, out: ResidualDerivatives): void;
+  /**
+   * Molar volume of the wanted root at (T, p) for the composition that is set, which must sum to 1. Where only one
+   * root exists it is returned whatever was asked for. Throws "no-convergence".
+   */
+  volumeAtPressure(T: number, p: number, root: Root): number;
   /** Volumes at or below this are impossible (the co-volume of a cubic; the density bound of a reference equation). */
-  minimumVolume(n: ArrayLike<number>): number;
+  minimumVolume(): number;
 }
 
 /** Pure-component ideal-gas functions of temperature: cp0_i, h0_i (zero at 298.15 K), s0_i at 100000 Pa (zero at 298.15 K). */

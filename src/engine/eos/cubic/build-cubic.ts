@@ -1,0 +1,38 @@
+import type { FluidSpec } from "../../cases/fluid-spec";
+import { gasConstant } from "../../gas-constant";
+import type { Substance } from "../../substances/substance";
+import { deriveFluidModel } from "../derive-fluid-model";
+import type { FluidModel } from "../fluid-model";
+import { createIdealGasModel } from "../ideal-gas";
+import { interactionMatrix } from "../interaction-matrix";
+import { cubicEquations, type CubicEquation, type CubicEquationId } from "./cubic-equations";
+import { CubicResidual } from "./cubic-residual";
+
+/** Below this no cubic and no heat-capacity form means anything for the fluids in the library but helium. */
+const minimumTemperatureK = 10;
+const maximumTemperatureK = 2500;
+
+export function buildCubic(
+  id: CubicEquationId,
+  fluid: FluidSpec,
+  substances: readonly Substance[],
+  feed: Float64Array,
+): FluidModel {
+  const equation: CubicEquation = cubicEquations[id];
+  const { kij, notes } = interactionMatrix(fluid, substances, equation.interaction);
+  const residual = new CubicResidual(equation, substances, kij);
+  return deriveFluidModel({
+    equation: id,
+    componentIds: substances.map((substance) => substance.id),
+    molarMassesKgPerMol: Float64Array.from(substances, (substance) => substance.molarMassKgPerMol),
+    feed,
+    gasConstantJPerMolK: gasConstant,
+    temperatureRangeK: [minimumTemperatureK, Math.min(maximumTemperatureK, residual.maximumTemperatureK)],
+    criticalTemperaturesK: Float64Array.from(substances, (substance) => substance.criticalTemperatureK),
+    criticalPressuresPa: Float64Array.from(substances, (substance) => substance.criticalPressurePa),
+    acentricFactors: Float64Array.from(substances, (substance) => substance.acentricFactor),
+    notes: [...substances.flatMap((substance) => substance.notes), ...notes],
+    residual,
+    idealHelmholtz: createIdealGasModel(substances.map((substance) => substance.heatCapacity)),
+  });
+}
