@@ -1,0 +1,4 @@
+/** @type {import("postcss-load-config").Config} */
+const config = { plugins: { tailwindcss: {}, autoprefixer: {} } };
+
+export default config;

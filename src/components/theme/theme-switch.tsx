@@ -1,0 +1,32 @@
+"use client";
+
+import { useState } from "react";
+import { keepInCookie } from "../cookie";
+import { themeAttribute, themeCookie, themes, type Theme } from "./theme";
+
+const words: Record<Theme, string> = { light: "Light", dark: "Dark", system: "As the system" };
+
+/** Radios for the sheet: light, dark, or as the system says. Takes effect at once; the cookie holds it for the next page. */
+export function ThemeSwitch({ initial }: { initial: Theme }) {
+  const [theme, setTheme] = useState(initial);
+
+  const choose = (chosen: Theme) => {
+    setTheme(chosen);
+    keepInCookie(themeCookie, chosen);
+    const attribute = themeAttribute(chosen);
+    if (attribute) document.documentElement.dataset.theme = attribute;
+    else delete document.documentElement.dataset.theme;
+  };
+
+  return (
+    <fieldset>
+      <legend className="text-label font-medium text-ink-3">Sheet</legend>
+      {themes.map((option) => (
+        <label key={option} className="flex min-h-[34px] cursor-pointer items-center gap-2 phone:min-h-[44px]">
+          <input type="radio" name="theme" className="h-4 w-4 accent-[var(--ink)]" checked={theme === option} onChange={() => choose(option)} />
+          {words[option]}
+        </label>
+      ))}
+    </fieldset>
+  );
+}
