@@ -2,6 +2,7 @@
 import type { VesselShape } from "../vessel/geometry";
 import type { FluidSpec } from "./fluid-spec";
 
+export type VesselGeometry = VesselShape;
 export type Insulation = { thicknessM: number; conductivityWPerMK: number };
 
 export type WallSpec = {
@@ -58,7 +59,7 @@ export type BlowdownCase = {
   kind: "blowdown";
   title?: string;
   fluid: FluidSpec;
-  vessel: { geometry: VesselShape; wall?: WallSpec };
+  vessel: { geometry: VesselGeometry; wall?: WallSpec };
   start: StartSpec;
   release: ReleaseSpec;
   heat: { inside: InsideFilm; wall: WallModel; outside: Outside };

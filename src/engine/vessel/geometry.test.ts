@@ -1,6 +1,6 @@
 import fc from "fast-check";
 import { describe, expect, it } from "vitest";
-import { levelAtVolume, vesselGeometry, type VesselShape } from "./geometry";
+import { levelAtVolume, measureVessel, type VesselShape } from "./geometry";
 import { headShapes, makeHead, wholeHead, type HeadShape } from "./head";
 
 const lying = (heads: HeadShape, D = 2, L = 6): VesselShape => ({ shape: "cylinder", orientation: "horizontal", insideDiameterM: D, tangentLengthM: L, heads });
@@ -37,7 +37,7 @@ describe("heads", () => {
   });
 });
 
-describe("vesselGeometry", () => {
+describe("measureVessel", () => {
   // Independent quadrature in Python; a second open geometry library agrees to 1e-8 (the flanged and dished row: quadrature only).
   it.each([
     ["lying, 2:1 ellipsoidal", lying("ellipsoidal-2-1"), 0.5, 4.012358, 14.53764],
@@ -46,7 +46,7 @@ describe("vesselGeometry", () => {
     ["standing, Klöpper", standing("torispherical-kloepper"), 0.5, 1.14500492, 4.66650234],
     ["sphere of 12 m", { shape: "sphere", insideDiameterM: 12 } as VesselShape, 4, 234.5723, 150.7964],
   ] as [string, VesselShape, number, number, number][])("%s: liquid volume and wetted area at a level", (_title, shape, level, volume, area) => {
-    const filled = vesselGeometry(shape).below?.(level);
+    const filled = measureVessel(shape).below?.(level);
     expect(relative(filled?.volumeM3 ?? 0, volume)).toBeLessThan(1e-6);
     expect(relative(filled?.areaM2 ?? 0, area)).toBeLessThan(1e-6);
   });
@@ -54,14 +54,14 @@ describe("vesselGeometry", () => {
   it("agrees with the closed form of a liquid in a lying spheroid head at every level", () => {
     const [R, a] = [1, 0.5];
     for (const h of [0.01, 0.3, 0.999, 1, 1.001, 1.7, 1.99]) {
-      const both = (vesselGeometry(lying("ellipsoidal-2-1", 2, 1e-13)).below?.(h).volumeM3 ?? 0) / 2;
+      const both = (measureVessel(lying("ellipsoidal-2-1", 2, 1e-13)).below?.(h).volumeM3 ?? 0) / 2;
       expect(relative(both, ((a / R) * (Math.PI * h * h) * (R - h / 3)) / 2)).toBeLessThan(1e-8);
     }
   });
 
   it("weighs the wall of a nitrogen test vessel: 312.163 kg of steel at 7850 kg/m³", () => {
     // D 0.273 m, L 1.524 m, flat ends, 25 mm: independent sum of shell and end plates.
-    const geometry = vesselGeometry(standing("flat", 0.273, 1.524));
+    const geometry = measureVessel(standing("flat", 0.273, 1.524));
     expect(relative(geometry.volumeM3, 0.0892072)).toBeLessThan(1e-6);
     expect(relative(geometry.innerAreaM2 ?? 0, 1.424136)).toBeLessThan(1e-6);
     expect(relative(7850 * (geometry.wallVolume(0.025) ?? 0), 312.163)).toBeLessThan(2e-6);
@@ -70,12 +70,12 @@ describe("vesselGeometry", () => {
   it("has a wall volume that tends to area times thickness as the wall thins, for every shape", () => {
     const shapes: VesselShape[] = [...headShapes.flatMap((heads) => [lying(heads), standing(heads)]), { shape: "sphere", insideDiameterM: 3 }];
     for (const shape of shapes) {
-      const geometry = vesselGeometry(shape);
+      const geometry = measureVessel(shape);
       // Two ellipses of equally enlarged axes are not parallel curves: the head's steel comes out a little low, never high.
       const allowed = shape.shape === "cylinder" && shape.heads === "ellipsoidal-2-1" ? 0.01 : 1e-5;
       expect(relative((geometry.wallVolume(1e-6) ?? 0) / 1e-6, geometry.innerAreaM2 ?? 0)).toBeLessThan(allowed);
     }
-    expect(vesselGeometry({ shape: "volume", volumeM3: 1 }).wallVolume(0.01)).toBeUndefined();
+    expect(measureVessel({ shape: "volume", volumeM3: 1 }).wallVolume(0.01)).toBeUndefined();
   });
 
   it("fills from nothing to all, never falling, and gives the level back", () => {
@@ -91,7 +91,7 @@ describe("vesselGeometry", () => {
     );
     fc.assert(
       fc.property(shape, fc.double({ min: 0.001, max: 0.999, noNaN: true }), (vessel, part) => {
-        const geometry = vesselGeometry(vessel);
+        const geometry = measureVessel(vessel);
         const height = geometry.heightM ?? 0;
         const whole = geometry.below?.(height);
         expect(geometry.below?.(0).volumeM3).toBeLessThan(1e-12 * geometry.volumeM3);

@@ -15,7 +15,7 @@ export type VesselShape =
 
 export type Filled = { volumeM3: number; areaM2: number };
 
-export type VesselGeometry = {
+export type MeasuredVessel = {
   volumeM3: number;
   /** Inside area, heads included. Absent for a plain volume that states none. */
   innerAreaM2: number | undefined;
@@ -27,14 +27,18 @@ export type VesselGeometry = {
   wallVolume: (thicknessM: number) => number | undefined;
 };
 
-export function vesselGeometry(vessel: VesselShape): VesselGeometry {
+export function measureVessel(vessel: VesselShape): MeasuredVessel {
   if (vessel.shape === "volume") return plainVolume(vessel.volumeM3, vessel.innerAreaM2);
   if (vessel.shape === "sphere") return sphere(vessel.insideDiameterM);
   return cylinder(vessel);
 }
 
+export const totalVolume = (vessel: VesselShape): number => measureVessel(vessel).volumeM3;
+
+export const insideArea = (vessel: VesselShape): number | undefined => measureVessel(vessel).innerAreaM2;
+
 /** Level [m] at which the liquid has the wanted volume; the volume rises strictly with the level. */
-export function levelAtVolume(geometry: VesselGeometry, liquidVolumeM3: number): number | undefined {
+export function levelAtVolume(geometry: MeasuredVessel, liquidVolumeM3: number): number | undefined {
   const { below, heightM, volumeM3 } = geometry;
   if (!below || heightM === undefined) return undefined;
   if (liquidVolumeM3 <= 0) return 0;
@@ -43,7 +47,7 @@ export function levelAtVolume(geometry: VesselGeometry, liquidVolumeM3: number):
   return bracketedRoot(excess, { a: 0, fa: -liquidVolumeM3, b: heightM, fb: volumeM3 - liquidVolumeM3 }, 1e-12 * heightM);
 }
 
-function plainVolume(volumeM3: number, innerAreaM2: number | undefined): VesselGeometry {
+function plainVolume(volumeM3: number, innerAreaM2: number | undefined): MeasuredVessel {
   return {
     volumeM3,
     innerAreaM2,
@@ -53,7 +57,7 @@ function plainVolume(volumeM3: number, innerAreaM2: number | undefined): VesselG
   };
 }
 
-function sphere(D: number): VesselGeometry {
+function sphere(D: number): MeasuredVessel {
   const R = D / 2;
   return {
     volumeM3: (Math.PI * D ** 3) / 6,
@@ -67,7 +71,7 @@ function sphere(D: number): VesselGeometry {
   };
 }
 
-function cylinder(vessel: Extract<VesselShape, { shape: "cylinder" }>): VesselGeometry {
+function cylinder(vessel: Extract<VesselShape, { shape: "cylinder" }>): MeasuredVessel {
   const { insideDiameterM: D, tangentLengthM: L, heads } = vessel;
   const R = D / 2;
   const head = makeHead(heads, D);
