@@ -1,0 +1,271 @@
+/**
+ * The case document as a schema: what a form, the API, a file or the log may hand to the engine.
+ *
+ * Unknown keys are refused. Defaults are written out, so that the hash of a case covers them. Values that are valid but not computed yet
+ * pass here and are refused by the engine.
+ */
+import { z } from "zod";
+import type { BlowdownCase, StartSpec } from "@/engine/cases/blowdown-case";
+import { equationIds } from "@/engine/cases/fluid-spec";
+import type { NozzleCase } from "@/engine/cases/nozzle-case";
+import { steelIds } from "@/engine/steels/steel";
+import { headShapes } from "@/engine/vessel/head";
+import { choice, describe, fraction, pressure, quantity, temperature, text } from "./case-fields";
+import { readJsonText } from "./json-text";
+
+export type CaseProblem = { path: string; message: string };
+
+const custom = z.strictObject({
+  molarMassKgPerMol: quantity({ unit: "kg/mol", above: 0, max: 10 }),
+  criticalTemperatureK: quantity({ unit: "K", above: 0, max: 3000 }),
+  criticalPressurePa: quantity({ unit: "Pa", above: 0, max: 1e9 }),
+  acentricFactor: quantity({ unit: "", min: -1, max: 3 }),
+  idealGasHeatCapacityOverR: z.strictObject({
+    polynomial: z.array(quantity({ unit: "" })).min(1, "Give 1 to 8 coefficients a0, a1, …").max(8, "Give 1 to 8 coefficients a0, a1, …"),
+    rangeK: z.tuple([temperature, temperature]).refine(([low, high]) => low < high, { error: "The range must rise: give the lower temperature first." }),
+  }),
+});
+
+const pseudo = z.strictObject({
+  molarMassKgPerMol: quantity({ unit: "kg/mol", above: 0, max: 2 }),
+  relativeDensity: quantity({ unit: "", min: 0.1, max: 2 }),
+});
+
+const component = z
+  .strictObject({ id: text(60).refine((id) => id.length > 0, { error: "This is empty. Give the component's id." }), moleFraction: fraction, pseudo: pseudo.optional(), custom: custom.optional() })
+  .refine((one) => !(one.pseudo && one.custom), { error: "A component is either a pseudo-component or has its own constants. Keep one of the two.", path: ["custom"] });
+
+const interaction = z.union(
+  [z.enum(["library", "none"]), z.array(z.strictObject({ pair: z.tuple([text(60), text(60)]), kij: quantity({ unit: "", above: -1, below: 1 }) }))],
+  { error: 'Use "library", "none" or a list of { "pair": [id, id], "kij": number } with kij between -1 and 1.' },
+);
+
+const fluid = z.strictObject({
+  components: z
+    .array(component, { error: ({ input }) => `${describe(input)} Give a list of components.` })
+    .min(1, "There is no component. Give at least one.")
+    .max(50, "There are more than 50 components. Lump the smallest.")
+    .superRefine((components, context) => {
+      const sum = components.reduce((total, one) => total + one.moleFraction, 0);
+      if (!(Math.abs(sum - 1) <= 1e-6)) context.addIssue({ code: "custom", message: `The mole fractions sum to ${sum}. Make them sum to 1 within 1e-6.` });
+      components.forEach(({ id }, i) => {
+        if (components.findIndex((other) => other.id === id) < i) context.addIssue({ code: "custom", path: [i, "id"], message: `"${id}" stands twice. Add the two fractions and keep one.` });
+      });
+    }),
+  equation: choice(equationIds),
+  interaction: interaction.default("library"),
+});
+
+const head = { format: z.literal("ebbmark-case/1", { error: 'Give "format": "ebbmark-case/1".' }), title: text(200).optional() };
+const point = z.strictObject({ temperatureK: temperature, pressurePa: pressure });
+
+export const pathCaseSchema = z.strictObject({ ...head, kind: z.literal("path"), fluid, from: point, to: point });
+
+const molar = quantity({ unit: "J/mol", min: -1e9, max: 1e9 });
+const entropy = quantity({ unit: "J/(mol K)", min: -1e6, max: 1e6 });
+const flashHead = { ...head, kind: z.literal("flash"), fluid };
+export const flashCaseSchema = z.discriminatedUnion(
+  "specification",
+  [
+    z.strictObject({ ...flashHead, specification: z.literal("PT"), pressurePa: pressure, temperatureK: temperature }),
+    z.strictObject({ ...flashHead, specification: z.literal("PH"), pressurePa: pressure, enthalpyJPerMol: molar }),
+    z.strictObject({ ...flashHead, specification: z.literal("PS"), pressurePa: pressure, entropyJPerMolK: entropy }),
+    z.strictObject({
+      ...flashHead,
+      specification: z.literal("UV"),
+      internalEnergyJPerMol: molar,
+      molarVolumeM3PerMol: quantity({ unit: "m³/mol", above: 0, max: 1e3 }),
+    }),
+    z.strictObject({ ...flashHead, specification: z.literal("TQ"), temperatureK: temperature, vapourMoleFraction: fraction }),
+    z.strictObject({ ...flashHead, specification: z.literal("PQ"), pressurePa: pressure, vapourMoleFraction: fraction }),
+  ],
+  { error: 'Use one of "PT", "PH", "PS", "UV", "TQ", "PQ".' },
+);
+
+const stagnation = z
+  .strictObject({ pressurePa: pressure, temperatureK: temperature.optional(), vapourMoleFraction: fraction.optional() })
+  .refine((state) => (state.temperatureK === undefined) !== (state.vapourMoleFraction === undefined), {
+    error: "Give temperatureK, or vapourMoleFraction of a saturated state, and not both.",
+  })
+  .transform((state) => state as NozzleCase["stagnation"]); // the refinement above leaves exactly one of the two
+
+export const nozzleCaseSchema = z.strictObject({
+  ...head,
+  kind: z.literal("nozzle"),
+  fluid,
+  stagnation,
+  backPressurePa: pressure,
+  flowModel: choice(["frozen", "equilibrium"]),
+});
+
+const diameter = quantity({ unit: "m", above: 0, max: 100 });
+const geometry = z.discriminatedUnion(
+  "shape",
+  [
+    z.strictObject({
+      shape: z.literal("volume"),
+      volumeM3: quantity({ unit: "m³", above: 0, max: 1e6 }),
+      innerAreaM2: quantity({ unit: "m²", above: 0, max: 1e7 }).optional(),
+    }),
+    z.strictObject({
+      shape: z.literal("cylinder"),
+      orientation: choice(["vertical", "horizontal"]),
+      insideDiameterM: diameter,
+      tangentLengthM: quantity({ unit: "m", min: 0, max: 1e4 }),
+      heads: choice(headShapes),
+    }),
+    z.strictObject({ shape: z.literal("sphere"), insideDiameterM: diameter }),
+  ],
+  { error: 'Use one of "volume", "cylinder", "sphere".' },
+);
+
+const wall = z.strictObject({
+  steel: choice(steelIds),
+  thicknessM: quantity({ unit: "m", above: 0, max: 2 }),
+  massKg: quantity({ unit: "kg", above: 0, max: 1e9 }).optional(),
+  specificHeatJPerKgK: quantity({ unit: "J/(kg K)", above: 0, max: 1e5 }).optional(),
+  designPressurePa: pressure.optional(),
+  minimumDesignMetalTemperatureK: temperature.optional(),
+  insulation: z
+    .strictObject({ thicknessM: quantity({ unit: "m", above: 0, max: 5 }), conductivityWPerMK: quantity({ unit: "W/(m K)", above: 0, max: 1e3 }) })
+    .optional(),
+});
+
+const start = z
+  .strictObject({ pressurePa: pressure.optional(), temperatureK: temperature.optional(), liquidVolumeFraction: fraction.optional() })
+  .refine((given) => Object.values(given).filter((value) => value !== undefined).length === 2, {
+    error: "Give exactly two of pressurePa, temperatureK and liquidVolumeFraction.",
+  })
+  .transform((given) => given as StartSpec); // the refinement above leaves exactly two
+
+const outlet = {
+  from: choice(["vapour", "liquid", "whole"]).default("vapour"),
+  backPressurePa: pressure.default(101325),
+  openingTimeS: quantity({ unit: "s", min: 0, max: 1e6 }).default(0),
+  flowModel: choice(["frozen", "equilibrium"]).default("frozen"),
+};
+const dischargeCoefficient = quantity({ unit: "", above: 0, max: 1 });
+const release = z.discriminatedUnion(
+  "path",
+  [
+    z.strictObject({ path: z.literal("orifice"), diameterM: quantity({ unit: "m", above: 0, max: 10 }), dischargeCoefficient, ...outlet }),
+    z.strictObject({ path: z.literal("valve"), cv: quantity({ unit: "", above: 0, max: 1e6 }), xt: quantity({ unit: "", above: 0, max: 1 }), ...outlet }),
+    z.strictObject({ path: z.literal("sized"), targetPressurePa: pressure, targetTimeS: quantity({ unit: "s", above: 0, max: 1e7 }), dischargeCoefficient, ...outlet }),
+  ],
+  { error: 'Use one of "orifice", "valve", "sized".' },
+);
+
+const coefficient = quantity({ unit: "W/(m² K)", min: 0, max: 1e6 });
+const none = z.strictObject({ model: z.literal("none") });
+const inside = z.discriminatedUnion(
+  "model",
+  [none, z.strictObject({ model: z.literal("constant"), coefficientWPerM2K: coefficient }), z.strictObject({ model: z.literal("correlations") })],
+  { error: 'Use one of "none", "constant", "correlations".' },
+);
+const wallModel = z.discriminatedUnion("model", [none, z.strictObject({ model: z.literal("lumped") }), z.strictObject({ model: z.literal("conduction") })], {
+  error: 'Use one of "none", "lumped", "conduction".',
+});
+const outside = z.discriminatedUnion(
+  "model",
+  [
+    z.strictObject({ model: z.literal("adiabatic") }),
+    z.strictObject({ model: z.literal("constant-heat"), heatW: quantity({ unit: "W", min: -1e10, max: 1e10 }) }),
+    z.strictObject({ model: z.literal("ambient"), temperatureK: temperature, coefficientWPerM2K: coefficient }),
+    z.strictObject({ model: z.literal("pool-fire"), drainage: choice(["adequate", "inadequate"]), environmentFactor: quantity({ unit: "", above: 0, max: 1 }) }),
+    z.strictObject({
+      model: z.literal("surface-fire"),
+      basis: choice(["open-pool", "confined-pool", "jet"]),
+      heatFluxWPerM2: quantity({ unit: "W/m²", above: 0, max: 1e6 }).optional(),
+    }),
+  ],
+  { error: 'Use one of "adiabatic", "constant-heat", "ambient", "pool-fire", "surface-fire".' },
+);
+
+const limits = z.strictObject({
+  targetPressurePa: pressure.optional(),
+  targetTimeS: quantity({ unit: "s", above: 0, max: 1e7 }).optional(),
+  minimumMetalMarginK: quantity({ unit: "K", min: 0, max: 500 }).optional(),
+  ventCapacityKgPerS: quantity({ unit: "kg/s", above: 0, max: 1e6 }).optional(),
+  minimumOutletTemperatureK: temperature.optional(),
+  nearBandK: quantity({ unit: "K", min: 10, max: 500 }).optional(),
+  nearBandFraction: quantity({ unit: "", min: 0.1, max: 1 }).optional(),
+});
+
+export const blowdownCaseSchema = z
+  .strictObject({
+    ...head,
+    kind: z.literal("blowdown"),
+    fluid,
+    vessel: z.strictObject({ geometry, wall: wall.optional() }),
+    start,
+    release,
+    heat: z
+      .strictObject({ inside: inside.default({ model: "none" }), wall: wallModel.default({ model: "none" }), outside: outside.default({ model: "adiabatic" }) })
+      .default({ inside: { model: "none" }, wall: { model: "none" }, outside: { model: "adiabatic" } }),
+    run: z.strictObject({
+      stopTimeS: quantity({ unit: "s", above: 0, max: 1e8 }),
+      stopPressurePa: pressure,
+      relativeTolerance: quantity({ unit: "", min: 1e-9, max: 1e-3 }).default(1e-6),
+    }),
+    limits: limits.optional(),
+  })
+  .superRefine((document, context) => {
+    for (const { path, message } of blowdownContradictions(document)) context.addIssue({ code: "custom", path, message });
+  });
+
+export const caseFileSchema = z.discriminatedUnion("kind", [pathCaseSchema, flashCaseSchema, nozzleCaseSchema, blowdownCaseSchema], {
+  error: ({ input }) => (isObject(input) ? 'Use one of "path", "flash", "nozzle", "blowdown".' : "Give one case document, a JSON object."),
+});
+
+export type CaseFile = z.output<typeof caseFileSchema>;
+
+/** What no single field can know. Paths into the document, in order. */
+function blowdownContradictions({ vessel, start: from, release: out, heat, run }: BlowdownCase): { path: string[]; message: string }[] {
+  const found: { path: string[]; message: string }[] = [];
+  const walled = heat.wall.model !== "none";
+  const bare = vessel.geometry.shape === "volume" && vessel.geometry.innerAreaM2 === undefined;
+  const needsArea = (walled && (heat.inside.model !== "none" || vessel.wall?.massKg === undefined)) || heat.outside.model === "ambient" || heat.outside.model === "surface-fire";
+  if (walled && !vessel.wall) found.push({ path: ["vessel", "wall"], message: `This is missing. A wall that is "${heat.wall.model}" needs its steel and thickness.` });
+  if (!walled && heat.inside.model !== "none") found.push({ path: ["heat", "inside", "model"], message: 'There is no wall for the film to touch. Set heat.wall, or the inside to "none".' });
+  if (bare && needsArea) found.push({ path: ["vessel", "geometry", "innerAreaM2"], message: "This is missing. Heat passes through the inside of the vessel, so give its area in m²." });
+  if ("pressurePa" in from && out.backPressurePa >= from.pressurePa) {
+    found.push({ path: ["release", "backPressurePa"], message: `The back pressure must be below the pressure at start, ${from.pressurePa} Pa, or nothing leaves.` });
+  }
+  if ("pressurePa" in from && run.stopPressurePa >= from.pressurePa) {
+    found.push({ path: ["run", "stopPressurePa"], message: `The run must end below the pressure at start, ${from.pressurePa} Pa.` });
+  }
+  return found;
+}
+
+export type ParsedCase = { ok: true; document: CaseFile } | { ok: false; problems: CaseProblem[] };
+
+/** Checks a document that is already an object. The answer holds every default. */
+export function parseCase(document: unknown): ParsedCase {
+  const parsed = caseFileSchema.safeParse(document, { reportInput: true });
+  if (parsed.success) return { ok: true, document: parsed.data };
+  return { ok: false, problems: parsed.error.issues.flatMap(problemsOfIssue) };
+}
+
+/** Checks a document as text; a key that stands twice is refused. */
+export function parseCaseText(jsonText: string): ParsedCase {
+  const read = readJsonText(jsonText);
+  return read.ok ? parseCase(read.value) : { ok: false, problems: [{ path: read.path, message: read.message }] };
+}
+
+function problemsOfIssue(issue: z.core.$ZodIssue): CaseProblem[] {
+  const path = pathText(issue.path);
+  if (issue.code === "unrecognized_keys") {
+    return issue.keys.map((key) => ({ path: pathText([...issue.path, key]), message: `"${key}" is not a key of the case format here. Check its spelling, or remove it.` }));
+  }
+  if (issue.code === "invalid_type" && issue.message.startsWith("Invalid input")) {
+    return [{ path, message: `${describe(issue.input)} Give ${issue.expected === "object" ? "an object" : `a ${issue.expected}`}.` }];
+  }
+  return [{ path, message: issue.message }];
+}
+
+/** `fluid.components[1].moleFraction` */
+function pathText(path: readonly PropertyKey[]): string {
+  return path.reduce<string>((before, part) => (typeof part === "number" ? `${before}[${part}]` : before === "" ? String(part) : `${before}.${String(part)}`), "");
+}
+
+const isObject = (value: unknown): boolean => typeof value === "object" && value !== null && !Array.isArray(value);
