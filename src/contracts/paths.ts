@@ -26,6 +26,7 @@ const api = "/api/v1";
 export const endpoints = {
   health: `${api}/health`,
   session: `${api}/session`,
+  oneSession: (sessionId: string) => `${api}/sessions/${sessionId}`,
   password: `${api}/password`,
   preferences: `${api}/preferences`,
   people: `${api}/people`,

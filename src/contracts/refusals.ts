@@ -35,4 +35,6 @@ export type Problem = {
   detail?: string;
   requestId: string;
   problems?: { path: string; message: string }[];
+  /** With "draft-changed": the draft as the other saved it. */
+  current?: unknown;
 };

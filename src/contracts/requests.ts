@@ -3,6 +3,7 @@ import { z } from "zod";
 import { draftDocumentSchema } from "./draft";
 import { limitPolicySchema } from "./policy";
 import { roles } from "./roles";
+import { revisionStates } from "./views";
 
 const id = z.uuid();
 const text = (max: number) => z.string().trim().min(1).max(max).normalize("NFC");
@@ -33,7 +34,9 @@ export const invitePersonSchema = z.strictObject({
 export const changePersonSchema = z.discriminatedUnion("act", [
   z.strictObject({ act: z.literal("disable"), reason: text(400) }),
   z.strictObject({ act: z.literal("re-enable"), reason: text(400) }),
+  /** Takes effect at once while there is one administrator; from two on it waits for another one's "confirm-role". */
   z.strictObject({ act: z.literal("change-role"), role: z.enum(roles), reason: text(400) }),
+  z.strictObject({ act: z.literal("confirm-role"), role: z.enum(roles) }),
   z.strictObject({ act: z.literal("set-password"), firstPassword: newPassword }),
 ]);
 
@@ -64,6 +67,21 @@ export const returnSchema = z.strictObject({ ...signature, remarks: z.array(rema
 export const withdrawSchema = z.strictObject({ ...signature, reason: text(1200) });
 export const newRevisionSchema = z.strictObject({ fromRev: z.int().min(1), reason: text(600) });
 
+export const screeningFilterSchema = z.strictObject({
+  sectionId: id.optional(),
+  facilityId: id.optional(),
+  state: z.enum(revisionStates).optional(),
+  /** Looked for in the record's number, its title and the section's tag and name. */
+  text: z.string().trim().max(80).optional(),
+  before: z.coerce.number().int().min(1).optional(),
+  limit: z.coerce.number().int().min(1).max(200).default(50),
+});
+
+export const verificationRangeSchema = z.strictObject({
+  from: z.coerce.number().int().min(1).default(1),
+  limit: z.coerce.number().int().min(1).max(500).default(500),
+});
+
 export const logFilterSchema = z.strictObject({
   record: z.string().trim().max(20).optional(),
   badge: z.string().trim().max(12).optional(),
@@ -88,4 +106,8 @@ export type Return = z.infer<typeof returnSchema>;
 export type Withdraw = z.infer<typeof withdrawSchema>;
 export type Remark = z.infer<typeof remarkSchema>;
 export type NewRevision = z.infer<typeof newRevisionSchema>;
+export type ChangePassword = z.infer<typeof changePasswordSchema>;
+export type Preferences = z.infer<typeof preferencesSchema>;
+export type ChangeMembers = z.infer<typeof changeMembersSchema>;
+export type ScreeningFilter = z.infer<typeof screeningFilterSchema>;
 export type LogFilter = z.infer<typeof logFilterSchema>;

@@ -7,10 +7,20 @@ import type { RecordContent, Verdict } from "./record-content";
 import type { Role } from "./roles";
 
 export type PersonView = { id: string; badge: string; printedName: string; role: Role; active: boolean };
-export type PersonDetailView = PersonView & { facilities: { id: string; name: string }[]; mustChangePassword: boolean; lastSignIn: string | null };
+export type PersonDetailView = PersonView & {
+  facilities: { id: string; name: string }[];
+  mustChangePassword: boolean;
+  lastSignIn: string | null;
+  /** A change of role that waits for a second administrator. `mine`: the viewer proposed it, so another one confirms. */
+  proposedRole: { role: Role; mine: boolean } | null;
+};
 
 /** The signed-in person, as pages know them. */
 export type ViewerView = PersonView & { mustChangePassword: boolean; units: "SI" | "US"; demo: boolean };
+
+export type SessionView = { id: string; startedAt: string; lastSeenAt: string; browser: string; current: boolean };
+export type AccountView = { person: ViewerView; facilities: { id: string; name: string }[]; sessions: SessionView[] };
+export type DemoAccountView = { badge: string; role: Role; printedName: string; password: string };
 
 export type FacilityView = {
   id: string;

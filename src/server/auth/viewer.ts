@@ -1,0 +1,74 @@
+import "server-only";
+import { cookies } from "next/headers";
+import { redirect } from "next/navigation";
+import { pages } from "@/contracts/paths";
+import type { Role } from "@/contracts/roles";
+import type { ViewerView } from "@/contracts/views";
+import { env } from "@/server/env";
+import { Refusal } from "@/server/refusal";
+import { cookieName } from "./cookie";
+import { loadSession, type LoadedSession } from "./session";
+
+const made: unique symbol = Symbol("viewer");
+
+/**
+ * Who asks. Only this file can make one, so a function that takes a `Viewer` knows that somebody signed in (or that a named job runs).
+ * It says who, not whether: every read and write asks `authorise` first.
+ */
+export type Viewer = {
+  readonly id: string;
+  readonly badge: string;
+  readonly printedName: string;
+  readonly role: Role | "system";
+  readonly active: boolean;
+  readonly mustChangePassword: boolean;
+  readonly units: "SI" | "US";
+  readonly facilityIds: ReadonlySet<string>;
+  /** SHA-256 of the session id; null for a job. */
+  readonly sessionId: string | null;
+  readonly [made]: true;
+};
+
+const fromSession = (loaded: LoadedSession): Viewer => ({ ...loaded, [made]: true });
+
+/** The viewer behind a sealed cookie, or null. Role, membership and the active flag come from the database each time. */
+export async function viewerFromCookie(sealed: string | undefined): Promise<Viewer | null> {
+  const loaded = await loadSession(sealed);
+  return loaded && fromSession(loaded);
+}
+
+/** For pages that also serve strangers. */
+export async function currentViewer(): Promise<Viewer | null> {
+  return viewerFromCookie((await cookies()).get(cookieName())?.value);
+}
+
+/** For pages. Sends strangers to the sign-in page, and people with a first password to the page that changes it. */
+export async function requireViewer(options: { evenIfPasswordMustChange?: true } = {}): Promise<Viewer> {
+  const viewer = await currentViewer();
+  if (!viewer) redirect(pages.signIn);
+  if (viewer.mustChangePassword && !options.evenIfPasswordMustChange) redirect(pages.changePassword);
+  return viewer;
+}
+
+/** A job that acts for nobody. The matrix lists the little it may do. */
+export function systemViewer(job: "seed"): Viewer {
+  return {
+    id: "system",
+    badge: "system",
+    printedName: job,
+    role: "system",
+    active: true,
+    mustChangePassword: false,
+    units: "SI",
+    facilityIds: new Set(),
+    sessionId: null,
+    [made]: true,
+  };
+}
+
+/** What the browser may know of the person. */
+export function viewerView(viewer: Viewer): ViewerView {
+  if (viewer.role === "system") throw new Refusal("not-signed-in");
+  const { id, badge, printedName, role, active, mustChangePassword, units } = viewer;
+  return { id, badge, printedName, role, active, mustChangePassword, units, demo: env().demo };
+}

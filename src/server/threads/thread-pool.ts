@@ -1,0 +1,118 @@
+import "server-only";
+import { Worker, type ResourceLimits } from "node:worker_threads";
+
+export type PoolSettings = {
+  /** Path of the bundled thread file. */
+  file: string;
+  size: number;
+  /** Jobs that may wait; one more is refused. */
+  longestQueue: number;
+  /** A job that takes longer loses its thread. */
+  budgetMs: number;
+  resourceLimits?: ResourceLimits;
+  workerData?: unknown;
+};
+
+export type PoolTrouble = "queue-full" | "out-of-time" | "thread-died" | "stopped";
+
+/** The job was not done, and nothing came of it. */
+export class PoolError extends Error {
+  override readonly name = "PoolError";
+  constructor(
+    readonly trouble: PoolTrouble,
+    message: string,
+  ) {
+    super(message);
+  }
+}
+
+type Waiting = { job: unknown; settle: (answer: unknown) => void; fail: (error: PoolError) => void };
+type Seat = { worker: Worker; busy: { id: number; waiting: Waiting; timer: NodeJS.Timeout } | null };
+
+/**
+ * A few worker threads and one queue. Threads start when first needed and stay; one that dies or runs over its budget is ended, its job
+ * answered with a `PoolError`, and the next job gets a new one.
+ *
+ * A thread gets `{ id, job }` and posts `{ id, done }` once; messages without `done` are ignored.
+ */
+export class ThreadPool {
+  private readonly seats: Seat[] = [];
+  private readonly queue: Waiting[] = [];
+  private nextId = 1;
+  private stopped = false;
+
+  constructor(private readonly settings: PoolSettings) {}
+
+  run<T>(job: unknown): Promise<T> {
+    if (this.stopped) return Promise.reject(new PoolError("stopped", "The pool is stopped."));
+    const free = this.seats.some((seat) => !seat.busy) || this.seats.length < this.settings.size;
+    if (!free && this.queue.length >= this.settings.longestQueue) {
+      return Promise.reject(new PoolError("queue-full", `${this.queue.length} jobs wait already.`));
+    }
+    return new Promise<T>((resolve, reject) => {
+      this.queue.push({ job, settle: (answer) => resolve(answer as T), fail: reject });
+      this.serve();
+    });
+  }
+
+  /** Ends every thread; jobs under way are refused. */
+  async stop(): Promise<void> {
+    this.stopped = true;
+    for (const waiting of this.queue.splice(0)) waiting.fail(new PoolError("stopped", "The pool is stopped."));
+    await Promise.all(this.seats.splice(0).map((seat) => this.dismiss(seat, "stopped", "The pool is stopped.")));
+  }
+
+  private serve(): void {
+    while (this.queue.length > 0) {
+      const seat = this.seats.find((candidate) => !candidate.busy) ?? this.newSeat();
+      if (!seat) return;
+      const waiting = this.queue.shift() as Waiting;
+      const id = this.nextId++;
+      const timer = setTimeout(
+        () => this.drop(seat, "out-of-time", `The thread ran longer than ${this.settings.budgetMs / 1000} s.`),
+        this.settings.budgetMs,
+      );
+      seat.busy = { id, waiting, timer };
+      seat.worker.ref();
+      seat.worker.postMessage({ id, job: waiting.job });
+    }
+  }
+
+  private newSeat(): Seat | undefined {
+    if (this.seats.length >= this.settings.size) return undefined;
+    const { file, workerData, resourceLimits } = this.settings;
+    const worker = new Worker(file, { workerData, ...(resourceLimits ? { resourceLimits } : {}) });
+    const seat: Seat = { worker, busy: null };
+    worker.on("message", (message: { id: number; done?: unknown }) => {
+      if (!seat.busy || message.id !== seat.busy.id || !("done" in message)) return;
+      const { waiting, timer } = seat.busy;
+      clearTimeout(timer);
+      seat.busy = null;
+      worker.unref();
+      waiting.settle(message.done);
+      this.serve();
+    });
+    worker.on("error", (error) => this.drop(seat, "thread-died", error.message));
+    worker.on("exit", (code) => this.drop(seat, "thread-died", `The thread ended with code ${code}.`));
+    worker.unref();
+    this.seats.push(seat);
+    return seat;
+  }
+
+  private drop(seat: Seat, trouble: PoolTrouble, message: string): void {
+    const at = this.seats.indexOf(seat);
+    if (at < 0) return;
+    this.seats.splice(at, 1);
+    void this.dismiss(seat, trouble, message);
+    this.serve();
+  }
+
+  private async dismiss(seat: Seat, trouble: PoolTrouble, message: string): Promise<void> {
+    if (seat.busy) {
+      clearTimeout(seat.busy.timer);
+      seat.busy.waiting.fail(new PoolError(trouble, message));
+      seat.busy = null;
+    }
+    await seat.worker.terminate();
+  }
+}
