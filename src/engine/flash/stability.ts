@@ -1,7 +1,190 @@
 import { EngineError } from "../errors";
 import type { FluidModel, Stability } from "../eos/fluid-model";
+import { solvePositiveDefinite } from "./linear-solve";
+import { createPhaseWork, evaluateLnPhi, type PhaseWork } from "./phase-work";
+import { wilsonLnK } from "./wilson";
 
-/** Placeholder until the next commit. */
+/** Below this a negative tangent-plane distance is a split and not round-off. */
+const negativeDistance = -1e-10;
+const substitutions = 4;
+const newtonSteps = 40;
+
+interface Trial {
+  distance: number;
+  trivial: boolean;
+}
+
+/**
+ * Does the homogeneous phase of lowest Gibbs energy at (T, p) split?
+ *
+ *   tm(W) = 1 + Σ W_i (ln W_i + ln φ_i(W) − d_i − 1),   d_i = ln z_i + ln φ_i(z)
+ *
+ * The phase is unstable as soon as one W has tm < 0, so a search may stop there; it is called stable only when every search
+ * has converged to a stationary point with tm ≥ 0 or back to z.
+ *
+ * Source   Michelsen, Fluid Phase Equilib. 9 (1982) 1-19: Wilson trials on both sides, then each component nearly pure;
+ *          successive substitution, then Newton in 2√W.
+ * Throws   "no-convergence" when a search does neither: a failed test is never a verdict
+ */
 export function testStability(model: FluidModel, T: number, p: number, z: ArrayLike<number>): Stability {
-  throw new EngineError("not-applicable", "stability", { T, p, n: z.length, c: model.componentIds.length });
+  const count = z.length;
+  const work = stabilityWork(count);
+  const { feed, trial, d, lnK, W, best } = work;
+  feed.composition.set(z);
+  evaluateLnPhi(model, feed, T, p, "stable", 1);
+  let active = 0;
+  for (let i = 0; i < count; i++) {
+    const present = z[i]! > 0;
+    if (present) active++;
+    d[i] = present ? Math.log(z[i]!) + feed.lnPhi[i]! : -Infinity;
+  }
+  if (active === 1) {
+    return { stable: true, tangentPlaneDistance: 0, trialComposition: Float64Array.from(z), trialIsVapour: false };
+  }
+  wilsonLnK(model, T, p, lnK);
+
+  let lowest = Infinity;
+  let lightest = false;
+  const consider = (start: (i: number) => number): boolean => {
+    for (let i = 0; i < count; i++) W[i] = z[i]! > 0 ? start(i) : 0;
+    const { distance, trivial } = search(model, T, p, z, work);
+    if (!trivial && distance < lowest) {
+      lowest = distance;
+      best.set(trial.composition);
+      lightest = trial.molarVolume > feed.molarVolume;
+    }
+    return distance < negativeDistance && !trivial;
+  };
+
+  const unstable =
+    consider((i) => z[i]! * Math.exp(lnK[i]!)) ||
+    consider((i) => z[i]! * Math.exp(-lnK[i]!)) ||
+    pureTrials(z, (pure) => consider((i) => (i === pure ? 0.999 : 0.001 * z[i]!)));
+
+  return {
+    stable: !unstable,
+    tangentPlaneDistance: lowest === Infinity ? 0 : lowest,
+    trialComposition: Float64Array.from(lowest === Infinity ? z : best),
+    trialIsVapour: lightest,
+  };
+}
+
+function pureTrials(z: ArrayLike<number>, attempt: (index: number) => boolean): boolean {
+  for (let i = 0; i < z.length; i++) if (z[i]! > 1e-12 && attempt(i)) return true;
+  return false;
+}
+
+/** Follows W from where it stands to a stationary point of tm, or until tm < 0 is certain. */
+function search(model: FluidModel, T: number, p: number, z: ArrayLike<number>, work: StabilityWork): Trial {
+  const { trial, d, W, hessian, step, root } = work;
+  const count = z.length;
+  let distance = Infinity;
+
+  for (let iteration = 0; iteration < substitutions + newtonSteps; iteration++) {
+    const newton = iteration >= substitutions;
+    let sum = 0;
+    for (let i = 0; i < count; i++) sum += W[i]!;
+    if (!(sum > 0 && sum < Infinity)) break;
+    for (let i = 0; i < count; i++) trial.composition[i] = W[i]! / sum;
+    evaluateLnPhi(model, trial, T, p, "stable", newton ? 2 : 1);
+
+    let tm = 1;
+    let slopeToFeed = 0;
+    let gap = 0;
+    let error = 0;
+    for (let i = 0; i < count; i++) {
+      if (!(z[i]! > 0)) continue;
+      const lnW = Math.log(W[i]!);
+      const gradient = lnW + trial.lnPhi[i]! - d[i]!;
+      tm += W[i]! * (gradient - 1);
+      slopeToFeed += (W[i]! - z[i]!) * gradient;
+      gap += (W[i]! - z[i]!) ** 2 / z[i]!;
+      error = Math.max(error, Math.sqrt(W[i]!) * Math.abs(gradient));
+      step[i] = gradient;
+    }
+    distance = tm;
+    if (gap < 1e-8) return { distance: 0, trivial: true };
+    if (iteration >= 2 && tm < -1e-6) return { distance, trivial: false };
+    if (error < 1e-9) return { distance, trivial: false };
+    // On the way back to z, tm is half its slope along W − z (Michelsen 1982).
+    if (iteration >= 1 && Math.abs(tm) < 1e-3 && gap < 0.05 && Math.abs((2 * tm) / slopeToFeed - 1) < 0.1 && tm > 0) {
+      return { distance: 0, trivial: true };
+    }
+
+    if (!newton || !newtonStep(trial, W, step, hessian, root, sum)) {
+      for (let i = 0; i < count; i++) {
+        if (z[i]! > 0) W[i] = Math.exp(Math.max(-600, Math.min(600, d[i]! - trial.lnPhi[i]!)));
+      }
+    }
+  }
+  throw new EngineError("no-convergence", "the phase stability test did not converge", {
+    temperatureK: T,
+    pressurePa: p,
+    tangentPlaneDistance: distance,
+    iterations: substitutions + newtonSteps,
+  });
+}
+
+/** One Newton step of tm in α = 2√W; false where the Hessian is not positive definite or the step leaves W > 0. */
+function newtonStep(
+  trial: PhaseWork,
+  W: Float64Array,
+  gradient: Float64Array,
+  hessian: Float64Array,
+  root: Float64Array,
+  sum: number,
+): boolean {
+  const count = W.length;
+  for (let i = 0; i < count; i++) root[i] = Math.sqrt(W[i]!);
+  for (let i = 0; i < count; i++) {
+    for (let j = 0; j <= i; j++) {
+      // lnPhiByMoles is for one mole of phase; W holds `sum` moles
+      hessian[i * count + j] = (root[i]! * root[j]! * trial.lnPhiByMoles[i * count + j]!) / sum;
+    }
+    const own = i * count + i;
+    hessian[own] = hessian[own]! + 1 + (W[i]! > 0 ? 0.5 * gradient[i]! : 0);
+  }
+  const step = gradient;
+  for (let i = 0; i < count; i++) step[i] = W[i]! > 0 ? -root[i]! * gradient[i]! : 0;
+  if (!solvePositiveDefinite(hessian, step, count)) return false;
+  for (let i = 0; i < count; i++) if (W[i]! > 0 && !(Math.abs(step[i]!) < 1.6 * root[i]!)) return false;
+  for (let i = 0; i < count; i++) {
+    if (!(W[i]! > 0)) continue;
+    const alpha = root[i]! + 0.5 * step[i]!;
+    W[i] = alpha * alpha;
+  }
+  return true;
+}
+
+interface StabilityWork {
+  feed: PhaseWork;
+  trial: PhaseWork;
+  d: Float64Array;
+  lnK: Float64Array;
+  W: Float64Array;
+  best: Float64Array;
+  step: Float64Array;
+  root: Float64Array;
+  hessian: Float64Array;
+}
+
+const works = new Map<number, StabilityWork>();
+
+function stabilityWork(count: number): StabilityWork {
+  let work = works.get(count);
+  if (!work) {
+    work = {
+      feed: createPhaseWork(count),
+      trial: createPhaseWork(count),
+      d: new Float64Array(count),
+      lnK: new Float64Array(count),
+      W: new Float64Array(count),
+      best: new Float64Array(count),
+      step: new Float64Array(count),
+      root: new Float64Array(count),
+      hessian: new Float64Array(count * count),
+    };
+    works.set(count, work);
+  }
+  return work;
 }

@@ -1,0 +1,125 @@
+import { EngineError } from "../errors";
+import type { FluidModel } from "../eos/fluid-model";
+import { assemble } from "./assemble";
+import type { Equilibrium } from "./equilibrium";
+import { createTwoPhaseWork, solveTwoPhase, type TwoPhaseWork } from "./two-phase-pt";
+import { wilsonLnK } from "./wilson";
+
+/**
+ * Equilibrium at given temperature and pressure: one phase, or vapour and liquid.
+ *
+ * A two-phase answer is accepted only when its Gibbs energy is below that of the homogeneous phase; one phase is accepted only
+ * from a stability test that converged. A pure fluid is one phase here at every pressure but its saturation pressure.
+ *
+ * z        mole fractions, in the order of the model's components; defaults to the feed
+ * seed     an equilibrium near by: its K-values are tried first
+ * Throws   EngineError "no-convergence" when the feed is unstable but no split could be found
+ */
+export function flashPT(
+  model: FluidModel,
+  { temperatureK: T, pressurePa: p }: { temperatureK: number; pressurePa: number },
+  z: ArrayLike<number> = model.feed,
+  seed?: Equilibrium,
+): Equilibrium {
+  requireState(model, T, p);
+  const work = flashWork(z.length);
+  if (findSplit(model, T, p, z, work, seed)) {
+    return assemble(model, T, p, [
+      { moleFraction: work.beta, composition: work.vapour.composition, molarVolume: work.vapour.molarVolume },
+      { moleFraction: 1 - work.beta, composition: work.liquid.composition, molarVolume: work.liquid.molarVolume },
+    ]);
+  }
+  model.residual.setComposition(z);
+  const molarVolume = model.residual.volumeAtPressure(T, p, "stable");
+  return assemble(model, T, p, [{ moleFraction: 1, composition: z, molarVolume }]);
+}
+
+/** Leaves a converged split in `work` and returns true, or returns false when the feed is one phase. */
+export function findSplit(
+  model: FluidModel,
+  T: number,
+  p: number,
+  z: ArrayLike<number>,
+  work: TwoPhaseWork,
+  seed?: Equilibrium,
+): boolean {
+  let active = 0;
+  for (let i = 0; i < z.length; i++) if (z[i]! > 0) active++;
+  if (active === 1) return false;
+
+  if (seed?.phases.length === 2) {
+    for (let i = 0; i < z.length; i++) {
+      const [light, dense] = [seed.phases[0]!, seed.phases[1]!];
+      work.lnK[i] = z[i]! > 0 ? dense.lnFugacityCoefficients[i]! - light.lnFugacityCoefficients[i]! : 0;
+    }
+    work.beta = seed.phases[0]!.moleFraction;
+    if (solveTwoPhase(model, T, p, z, work) === "converged" && lowersGibbs(model, T, p, z, work)) return true;
+  }
+  wilsonLnK(model, T, p, work.lnK);
+  if (straddles(z, work.lnK)) {
+    work.beta = 0.5;
+    if (solveTwoPhase(model, T, p, z, work) === "converged" && lowersGibbs(model, T, p, z, work)) return true;
+  }
+
+  const test = model.stability(T, p, z);
+  if (test.stable) return false;
+  for (const attempt of [0, 1]) {
+    for (let i = 0; i < z.length; i++) {
+      const ratio = z[i]! > 0 ? Math.log(Math.max(test.trialComposition[i]!, 1e-290) / z[i]!) : 0;
+      work.lnK[i] = (test.trialIsVapour ? ratio : -ratio) * (attempt === 0 ? 1 : 0.5);
+    }
+    work.beta = test.trialIsVapour ? 0.1 : 0.9;
+    if (solveTwoPhase(model, T, p, z, work) === "converged" && lowersGibbs(model, T, p, z, work)) return true;
+  }
+  throw new EngineError("no-convergence", "the feed is unstable, but the two phases could not be found", {
+    temperatureK: T,
+    pressurePa: p,
+    tangentPlaneDistance: test.tangentPlaneDistance,
+  });
+}
+
+/** Is the split below the homogeneous phase in Gibbs energy? Fills scratch; leaves the split as it is. */
+function lowersGibbs(model: FluidModel, T: number, p: number, z: ArrayLike<number>, work: TwoPhaseWork): boolean {
+  const lnPhi = work.step; // free between solves
+  model.lnFugacityCoefficients(T, p, z, "stable", lnPhi);
+  let change = 0;
+  for (let i = 0; i < z.length; i++) {
+    if (!(z[i]! > 0)) continue;
+    const vapourShare = work.beta * work.vapour.composition[i]!;
+    // both phases have the same fugacity: take the one in which the component is plentiful
+    const rich = work.lnK[i]! > 0 ? work.vapour : work.liquid;
+    change += z[i]! * (Math.log(rich.composition[i]! / z[i]!) + rich.lnPhi[i]! - lnPhi[i]!);
+    if (!(vapourShare <= z[i]! * (1 + 1e-9))) return false;
+  }
+  return change < 0;
+}
+
+function straddles(z: ArrayLike<number>, lnK: Float64Array): boolean {
+  let bubble = 0;
+  let dew = 0;
+  for (let i = 0; i < z.length; i++) {
+    if (!(z[i]! > 0)) continue;
+    bubble += z[i]! * Math.expm1(lnK[i]!);
+    dew += z[i]! * Math.expm1(-lnK[i]!);
+  }
+  return bubble > 0 && dew > 0;
+}
+
+function requireState(model: FluidModel, T: number, p: number): void {
+  if (!(T > 0 && Number.isFinite(T))) throw new EngineError("invalid-case", "temperature must be above 0 K", {}, "temperatureK");
+  if (!(p > 0 && Number.isFinite(p))) throw new EngineError("invalid-case", "pressure must be above 0 Pa", {}, "pressurePa");
+  const [low, high] = model.temperatureRangeK;
+  if (T < low || T > high) {
+    throw new EngineError("outside-validity", `temperature must lie between ${low} and ${high} K for this equation`, {
+      temperatureK: T,
+    });
+  }
+}
+
+const works = new Map<number, TwoPhaseWork>();
+
+export function flashWork(count: number): TwoPhaseWork {
+  let work = works.get(count);
+  if (!work) works.set(count, (work = createTwoPhaseWork(count)));
+  return work;
+}
