@@ -69,7 +69,14 @@ const config: Config = {
         "@media (prefers-color-scheme: dark)": { ":root:not([data-theme])": dark },
         "[data-theme=dark]": dark,
         // Paper has one theme, whatever the screen shows.
-        "@media print": { ":root, :root:not([data-theme]), [data-theme]": { ...light, "--sheet": "#FFFFFF", "--tint": "#FFFFFF", "--desk": "#FFFFFF" } },
+        "@media print": {
+          ":root, :root:not([data-theme]), [data-theme]": {
+            ...light,
+            "--sheet": "#FFFFFF",
+            "--tint": "#FFFFFF",
+            "--desk": "#FFFFFF",
+          },
+        },
       });
     }),
   ],

@@ -32,7 +32,8 @@ describe("the one address", () => {
 
 describe("the content policy", () => {
   it("carries a fresh nonce for every answer and passes it to the page", () => {
-    const nonceOf = () => /'nonce-([^']+)'/.exec(ask("http://localhost/", "localhost").headers.get("content-security-policy") ?? "")?.[1];
+    const nonceOf = () =>
+      /'nonce-([^']+)'/.exec(ask("http://localhost/", "localhost").headers.get("content-security-policy") ?? "")?.[1];
     const first = nonceOf();
     expect(first).toMatch(/^[A-Za-z0-9+/]{22}==$/);
     expect(nonceOf()).not.toBe(first);

@@ -21,10 +21,7 @@ export default async function RootLayout({ children }: { children: ReactNode }) 
   return (
     <html lang="en" data-theme={themeAttribute(readTheme(kept.get(themeCookie)?.value))}>
       <body>
-        <a
-          href="#main"
-          className="absolute -left-[999px] top-2 z-50 bg-sheet p-2 focus:left-3"
-        >
+        <a href="#main" className="absolute -left-[999px] top-2 z-50 bg-sheet p-2 focus:left-3">
           Skip to the sheet
         </a>
         <UnitsProvider initial={readUnitSystem(kept.get(unitsCookie)?.value)}>{children}</UnitsProvider>

@@ -9,3 +9,10 @@ export const readTheme = (cookie: string | undefined): Theme => themes.find((the
 
 /** Value of `data-theme` on the root element: absent while the system decides. */
 export const themeAttribute = (theme: Theme): "light" | "dark" | undefined => (theme === "system" ? undefined : theme);
+
+/** Puts the choice on the page that is open, without drawing it anew. */
+export function showTheme(theme: Theme): void {
+  const attribute = themeAttribute(theme);
+  if (attribute) document.documentElement.dataset.theme = attribute;
+  else delete document.documentElement.dataset.theme;
+}

@@ -12,9 +12,6 @@ type Units = {
   barometricPressurePa: number;
 };
 
-
-
-
 const UnitsContext = createContext<Units>({
   system: "SI",
   setSystem: () => {},

@@ -1,0 +1,36 @@
+"use client";
+
+import { Button } from "@/components/button/button";
+import { ButtonLink } from "@/components/button/button-link";
+import { BarePage } from "@/components/shell/bare-page";
+import { Stop } from "@/components/states/stop";
+
+export default function ErrorPage({ error, reset }: { error: Error & { digest?: string }; reset: () => void }) {
+  return (
+    <BarePage>
+      <Stop
+        level={1}
+        serious
+        title="This page could not be drawn"
+        action={
+          <>
+            <Button kind="main" onClick={reset}>
+              Try again
+            </Button>
+            <ButtonLink href="/" kind="quiet">
+              Back to the desk
+            </ButtonLink>
+          </>
+        }
+      >
+        The fault is ours, not yours. Nothing was changed by it, and what was kept before is still kept.
+        {error.digest && (
+          <>
+            {" "}
+            When you report it, give the reference <span className="digest">{error.digest}</span>.
+          </>
+        )}
+      </Stop>
+    </BarePage>
+  );
+}
