@@ -1,5 +1,6 @@
 import type { EquationId } from "../cases/fluid-spec";
 import { EngineError } from "../errors";
+import type { Substance } from "../substances/substance";
 import { testStability } from "../flash/stability";
 import { referencePressurePa } from "../gas-constant";
 import { createPhaseState, type Departures, type FluidModel, type IdealGasModel, type IdealGasState } from "./fluid-model";
@@ -9,14 +10,11 @@ import { solveTemperature } from "./solve-temperature";
 
 export interface FluidModelParts {
   equation: EquationId;
-  componentIds: readonly string[];
+  substances: readonly Substance[];
   molarMassesKgPerMol: Float64Array;
   feed: Float64Array;
   gasConstantJPerMolK: number;
   temperatureRangeK: readonly [number, number];
-  criticalTemperaturesK: Float64Array;
-  criticalPressuresPa: Float64Array;
-  acentricFactors: Float64Array;
   notes: readonly string[];
   residual: ResidualModel;
   idealHelmholtz: IdealGasModel;
@@ -33,7 +31,7 @@ export interface FluidModelParts {
  */
 export function deriveFluidModel(parts: FluidModelParts): FluidModel {
   const { residual, idealHelmholtz, gasConstantJPerMolK: R, molarMassesKgPerMol, temperatureRangeK } = parts;
-  const count = parts.componentIds.length;
+  const count = parts.substances.length;
   const F = createResidualDerivatives(count);
   const cp0 = new Float64Array(count);
   const h0 = new Float64Array(count);
@@ -120,14 +118,15 @@ export function deriveFluidModel(parts: FluidModelParts): FluidModel {
 
   const model: FluidModel = {
     equation: parts.equation,
-    componentIds: parts.componentIds,
+    componentIds: parts.substances.map((substance) => substance.id),
+    substances: parts.substances,
     molarMassesKgPerMol,
     feed: parts.feed,
     gasConstantJPerMolK: R,
     temperatureRangeK,
-    criticalTemperaturesK: parts.criticalTemperaturesK,
-    criticalPressuresPa: parts.criticalPressuresPa,
-    acentricFactors: parts.acentricFactors,
+    criticalTemperaturesK: Float64Array.from(parts.substances, (substance) => substance.criticalTemperatureK),
+    criticalPressuresPa: Float64Array.from(parts.substances, (substance) => substance.criticalPressurePa),
+    acentricFactors: Float64Array.from(parts.substances, (substance) => substance.acentricFactor),
     notes: parts.notes,
     residual,
     idealHelmholtz,

@@ -1,4 +1,5 @@
 import type { EquationId } from "../cases/fluid-spec";
+import type { Substance } from "../substances/substance";
 
 /**
  * What every equation of state offers to the rest of the engine. Molar, SI: Pa, K, m³/mol, J/mol, J/(mol K).
@@ -31,6 +32,8 @@ export interface FluidModel {
   readonly criticalTemperaturesK: Float64Array;
   readonly criticalPressuresPa: Float64Array;
   readonly acentricFactors: Float64Array;
+  /** The components with their constants, triple points and the range of their heat-capacity data. */
+  readonly substances: readonly Substance[];
   /** What the reader must know about the constants in use (estimated pseudo-component, missing interaction, …). */
   readonly notes: readonly string[];
 

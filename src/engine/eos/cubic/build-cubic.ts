@@ -23,14 +23,11 @@ export function buildCubic(
   const residual = new CubicResidual(equation, substances, kij);
   return deriveFluidModel({
     equation: id,
-    componentIds: substances.map((substance) => substance.id),
+    substances,
     molarMassesKgPerMol: Float64Array.from(substances, (substance) => substance.molarMassKgPerMol),
     feed,
     gasConstantJPerMolK: gasConstant,
     temperatureRangeK: [minimumTemperatureK, Math.min(maximumTemperatureK, residual.maximumTemperatureK)],
-    criticalTemperaturesK: Float64Array.from(substances, (substance) => substance.criticalTemperatureK),
-    criticalPressuresPa: Float64Array.from(substances, (substance) => substance.criticalPressurePa),
-    acentricFactors: Float64Array.from(substances, (substance) => substance.acentricFactor),
     notes: [...substances.flatMap((substance) => substance.notes), ...notes],
     residual,
     idealHelmholtz: createIdealGasModel(substances.map((substance) => substance.heatCapacity)),
