@@ -3,6 +3,7 @@
 import { Button } from "@/components/button/button";
 import { ButtonLink } from "@/components/button/button-link";
 import { BarePage } from "@/components/shell/bare-page";
+import { pages } from "@/contracts/paths";
 import { Stop } from "@/components/states/stop";
 
 export default function ErrorPage({ error, reset }: { error: Error & { digest?: string }; reset: () => void }) {
@@ -17,7 +18,7 @@ export default function ErrorPage({ error, reset }: { error: Error & { digest?: 
             <Button kind="main" onClick={reset}>
               Try again
             </Button>
-            <ButtonLink href="/" kind="quiet">
+            <ButtonLink href={pages.desk} kind="quiet">
               Back to the desk
             </ButtonLink>
           </>

@@ -1,6 +1,7 @@
 import type { Metadata, Viewport } from "next";
 import { cookies, headers } from "next/headers";
 import type { ReactNode } from "react";
+import { PlainCopy } from "@/components/quantity/plain-copy";
 import { readTheme, themeAttribute, themeCookie } from "@/components/theme/theme";
 import { readUnitSystem, unitsCookie } from "@/components/units/unit-system";
 import { UnitsProvider } from "@/components/units/units-provider";
@@ -25,6 +26,7 @@ export default async function RootLayout({ children }: { children: ReactNode }) 
           Skip to the sheet
         </a>
         <UnitsProvider initial={readUnitSystem(kept.get(unitsCookie)?.value)}>{children}</UnitsProvider>
+        <PlainCopy />
       </body>
     </html>
   );
