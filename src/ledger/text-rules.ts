@@ -1,5 +1,4 @@
 const lone = /[\uD800-\uDBFF](?![\uDC00-\uDFFF])|(?<![\uD800-\uDBFF])[\uDC00-\uDFFF]/;
-// eslint-disable-next-line no-control-regex -- these are the characters to refuse
 const control = /[\u0000-\u0008\u000b-\u001f\u007f]/;
 const turning = /[\u202a-\u202e\u2066-\u2069]/;
 
