@@ -148,7 +148,7 @@ function readIfThere(file) {
 }
 
 function reasonIn(logFile) {
-  const all = readIfThere(logFile).slice(Math.max(0, begun - 20_000));
+  const all = readIfThere(logFile);
   const last = all.split("\n").findLast((line) => /FATAL|PANIC/.test(line)) ?? "no reason given";
   return { all, last: `${last.replace(/^.*?(FATAL|PANIC):\s*/, "").replace(/\.?$/, ".")}` };
 }

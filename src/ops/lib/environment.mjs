@@ -1,6 +1,7 @@
 /** The variables of the caller that a service may see: nothing of npm's, no stray setting of a developer. */
 const passedOn = ["PATH", "HOME", "USER", "LANG", "LC_ALL", "TZ", "TMPDIR", "CI"];
 
+/** @param {Record<string, string | undefined>} from */
 export function baseEnvironment(from = process.env) {
   const kept = Object.fromEntries(passedOn.filter((name) => from[name] !== undefined).map((name) => [name, from[name]]));
   return { ...kept, NEXT_TELEMETRY_DISABLED: "1" };
