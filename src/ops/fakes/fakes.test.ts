@@ -131,7 +131,7 @@ describe("the stand-in for mail", () => {
       messageId: "<one@ebbmark>",
       to: ["ada@demo.invalid"],
       subject: "Für Sie: 85 °C ≥ −29 °C",
-      text: "Line one\nLine two\n",
+      text: "Line one\nLine two",
       html: "<p>Line</p>",
     });
     expect(readFileSync(join(folder, "mail", raw as string), "utf8")).toContain("Message-ID: <one@ebbmark>");

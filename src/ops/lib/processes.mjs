@@ -16,6 +16,11 @@ import { isAlive, processIdentity } from "./process-identity.mjs";
 import { Trouble } from "./trouble.mjs";
 
 /**
+ * @typedef {{ env?: Record<string, string | undefined>, cwd?: string, uid?: number, gid?: number, stdio?: any, ipc?: boolean,
+ *   stopSignal?: string, toGroup?: boolean, patienceMs?: number }} StartOptions
+ */
+
+/**
  * Starts processes, each in a group of its own so that a Ctrl-C in the terminal reaches only us, and ends them in reverse order.
  * Every one leaves a note in the run folder until it has ended: after a kill -9 the next start finds and ends what was left.
  */
@@ -33,6 +38,8 @@ export function createProcesses({ run, logs }) {
    * ipc         opens a channel for messages
    * stopSignal  what asks it to end; `toGroup: false` sends it to the process alone (PostgreSQL tells its own children)
    * Returns     the process, with `ended`: a promise of `{ code, signal }`
+   *
+   * @param {string} name @param {string} command @param {string[]} args @param {StartOptions} options
    */
   function start(
     name,
@@ -68,7 +75,11 @@ export function createProcesses({ run, logs }) {
     return entry;
   }
 
-  /** Runs a process to its end and returns `{ code, signal, output }`; the output is in the log as well. */
+  /**
+   * Runs a process to its end and returns `{ code, signal, output }`; the output is in the log as well.
+   *
+   * @param {string} name @param {string} command @param {string[]} args @param {StartOptions} options
+   */
   async function runToEnd(name, command, args, options = {}) {
     const { ended, logFile } = start(name, command, args, options);
     const end = await ended;
