@@ -2,6 +2,7 @@ import { existsSync } from "node:fs";
 import { join } from "node:path";
 import { baseEnvironment } from "./environment.mjs";
 import { home, root } from "./places.mjs";
+import { lastWords } from "./scripts.mjs";
 import { underLock } from "./single-start.mjs";
 import { Trouble } from "./trouble.mjs";
 
@@ -22,8 +23,7 @@ export async function buildEngineFiles(processes, places, say) {
       [join(root, "src/ops/build-engine.mjs")],
       { cwd: root, env },
     );
-    if (code !== 0)
-      throw new Trouble(`The engine could not be built: ${output.trim().split("\n").at(-1)} The whole output is in ${logFile}.`);
+    if (code !== 0) throw new Trouble(`The engine could not be built: ${lastWords(output)} The whole output is in ${logFile}.`);
     return buildThreads(places.engines);
   });
 }

@@ -50,6 +50,7 @@ export function createProcesses({ run, logs }) {
     if (closing) throw new Trouble("Stopping.");
     const logFile = join(logs, `${name}.log`);
     const log = stdio ? undefined : openLog(logFile);
+    /** @type {import("node:child_process").ChildProcess} */
     const child = spawn(command, args, {
       env,
       cwd,
