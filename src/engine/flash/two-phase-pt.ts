@@ -20,7 +20,7 @@ export interface TwoPhaseWork {
 
 export type TwoPhaseOutcome = "converged" | "one-phase" | "failed";
 
-const substitutions = 12;
+const substitutions = 30;
 const newtonSteps = 40;
 /** Largest difference of ln fugacity at convergence. */
 const equalFugacity = 1e-11;
@@ -46,7 +46,7 @@ export function solveTwoPhase(
   let before = 0;
 
   for (let iteration = 0; iteration < substitutions; iteration++) {
-    if (!split(z, work)) return "one-phase";
+    split(z, work);
     evaluateLnPhi(model, vapour, T, p, "stable", 1);
     evaluateLnPhi(model, liquid, T, p, "stable", 1);
     let along = 0;
@@ -63,7 +63,7 @@ export function solveTwoPhase(
     }
     if (distinct < 1e-5) return "one-phase";
     const inside = work.beta > 0 && work.beta < 1;
-    if (error < 1e-20 && !inside) return "one-phase";
+    if (error < 1e-18 && !inside) return "one-phase";
     if (inside && iteration >= 2 && error < 1e-4) break;
     const lambda = iteration > 0 ? along / before : 0;
     if (iteration % 4 === 3 && lambda > 0 && lambda < 0.97) {
@@ -71,34 +71,45 @@ export function solveTwoPhase(
     }
     before = error;
   }
-  if (!split(z, work)) return "one-phase";
+  split(z, work);
   if (!(work.beta > 0 && work.beta < 1)) return "one-phase";
   return newton(model, T, p, z, work);
 }
 
-/** Compositions and β (any β between the poles) for the current ln K; false when all K lie on one side of 1. */
-function split(z: ArrayLike<number>, work: TwoPhaseWork): boolean {
+/**
+ * Compositions and β for the current ln K. Where the K-values ask for β outside [0, 1], the feed stands for one phase and the
+ * other is its trial phase: the next substitution is then one of the stability test, which brings an unstable feed back inside.
+ */
+function split(z: ArrayLike<number>, work: TwoPhaseWork): void {
   const { lnK, K, vapour, liquid, v, l } = work;
   const count = z.length;
-  let above = false;
-  let below = false;
+  let vapourSum = 0; // Σ z K > 1 and Σ z/K > 1 together: 0 < β < 1
+  let liquidSum = 0;
   for (let i = 0; i < count; i++) {
     if (!(z[i]! > 0)) continue;
     K[i] = Math.exp(lnK[i]!);
-    if (K[i]! > 1) above = true;
-    else if (K[i]! < 1) below = true;
+    vapourSum += z[i]! * K[i]!;
+    liquidSum += z[i]! / K[i]!;
   }
-  if (!above || !below) return false;
-  const beta = rachfordRice(z, K, work.beta);
-  work.beta = beta;
+  if (vapourSum > 1 && liquidSum > 1) {
+    const beta = rachfordRice(z, K, work.beta);
+    work.beta = beta;
+    for (let i = 0; i < count; i++) {
+      const x = z[i]! > 0 ? z[i]! / (1 + beta * (K[i]! - 1)) : 0;
+      liquid.composition[i] = x;
+      vapour.composition[i] = z[i]! > 0 ? K[i]! * x : 0;
+      v[i] = beta * vapour.composition[i]!;
+      l[i] = (1 - beta) * x;
+    }
+    return;
+  }
+  const bubble = vapourSum <= 1;
+  work.beta = bubble ? 0 : 1;
   for (let i = 0; i < count; i++) {
-    const x = z[i]! > 0 ? z[i]! / (1 + beta * (K[i]! - 1)) : 0;
-    liquid.composition[i] = x;
-    vapour.composition[i] = z[i]! > 0 ? K[i]! * x : 0;
-    v[i] = beta * vapour.composition[i]!;
-    l[i] = (1 - beta) * x;
+    const present = z[i]! > 0;
+    liquid.composition[i] = bubble ? z[i]! : present ? z[i]! / (K[i]! * liquidSum) : 0;
+    vapour.composition[i] = bubble ? (present ? (z[i]! * K[i]!) / vapourSum : 0) : z[i]!;
   }
-  return true;
 }
 
 function newton(model: FluidModel, T: number, p: number, z: ArrayLike<number>, work: TwoPhaseWork): TwoPhaseOutcome {

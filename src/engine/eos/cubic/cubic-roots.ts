@@ -3,43 +3,60 @@
  *
  *   B (w − 1)(w + δ1)(w + δ2) − (w + δ1)(w + δ2) + α (w − 1) = 0,   B = p b/(R T),  α = a/(b R T)
  *
- * Source   the generic cubic of `cubic-equations.ts` cleared of fractions; roots by Cardano in Z, then polished in w,
- *          where neither a dense liquid (w near 1) nor a thin gas (w near 1/B) loses digits.
+ * Source   the generic cubic of `cubic-equations.ts` cleared of fractions. Cardano places the roots, in Z = B w or, at low
+ *          pressure, in ζ = 1/w: near zero pressure the two dense roots are a double root of the cubic in Z to within
+ *          round-off, and the liquid would be lost. Newton in w then restores every digit.
  * Returns  the number of roots written to `roots` (1, 2 or 3); the middle one of three is unstable
  */
 export function cubicRoots(B: number, alpha: number, delta1: number, delta2: number, roots: Float64Array): number {
   const sum = delta1 + delta2;
   const product = delta1 * delta2;
-  const A = alpha * B;
-  // Z³ + c2 Z² + c1 Z + c0 = 0
-  const c2 = (sum - 1) * B - 1;
-  const c1 = A + product * B * B - sum * B * (B + 1);
-  const c0 = -(A * B + product * B * B * (B + 1));
+  let count: number;
+  if (B < 0.02 && alpha > 3) {
+    const lead = -(alpha + product * (1 + B));
+    count = realRoots((B * (product - sum) - sum + alpha) / lead, (B * (sum - 1) - 1) / lead, B / lead, roots);
+    if (count === 3) {
+      const dense = roots[2]!;
+      roots[2] = 1 / Math.max(roots[0]!, 0.5 * B); // ζ rises where w falls; the thin root may be all round-off
+      roots[1] = 1 / roots[1]!;
+      roots[0] = 1 / dense;
+    } else {
+      roots[0] = 1 / Math.max(roots[0]!, 0.5 * B);
+    }
+  } else {
+    const A = alpha * B;
+    const c2 = (sum - 1) * B - 1;
+    const c1 = A + product * B * B - sum * B * (B + 1);
+    count = realRoots(c2, c1, -(A * B + product * B * B * (B + 1)), roots);
+    for (let k = 0; k < count; k++) roots[k] = roots[k]! / B;
+  }
+  let kept = 0;
+  for (let k = 0; k < count; k++) {
+    const w = polish(roots[k]!, B, alpha, sum, product);
+    if (w > 1 && (kept === 0 || w > roots[kept - 1]!)) roots[kept++] = w;
+  }
+  return kept;
+}
+
+/** Roots of x³ + c2 x² + c1 x + c0 by Cardano, in rising order; 1 or 3 of them. */
+function realRoots(c2: number, c1: number, c0: number, roots: Float64Array): number {
   const shift = c2 / 3;
   const q = shift * shift - c1 / 3;
   const r = shift * (shift * shift - c1 / 2) + c0 / 2;
   const discriminant = r * r - q * q * q;
-  let count = 0;
   if (discriminant < 0) {
     const root = Math.sqrt(q);
     const angle = Math.acos(Math.max(-1, Math.min(1, r / (q * root)))) / 3;
     const third = (2 * Math.PI) / 3;
-    // cos falls over [0, π]: these come out in rising order
+    // the cosine falls over [0, π]: these come out in rising order
     roots[0] = -2 * root * Math.cos(angle) - shift;
     roots[1] = -2 * root * Math.cos(angle - third) - shift;
     roots[2] = -2 * root * Math.cos(angle + third) - shift;
-    count = 3;
-  } else {
-    const s = -Math.sign(r || 1) * Math.cbrt(Math.abs(r) + Math.sqrt(discriminant));
-    roots[0] = s + (s === 0 ? 0 : q / s) - shift;
-    count = 1;
+    return 3;
   }
-  let kept = 0;
-  for (let k = 0; k < count; k++) {
-    const w = polish(roots[k]! / B, B, alpha, sum, product);
-    if (w > 1 && (kept === 0 || w > roots[kept - 1]!)) roots[kept++] = w;
-  }
-  return kept;
+  const s = -Math.sign(r || 1) * Math.cbrt(Math.abs(r) + Math.sqrt(discriminant));
+  roots[0] = s + (s === 0 ? 0 : q / s) - shift;
+  return 1;
 }
 
 /** Newton on the cleared cubic; a root that Cardano places is at most a few steps away. */

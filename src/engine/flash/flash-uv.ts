@@ -1,0 +1,269 @@
+import { createPhaseState, type FluidModel, type PhaseState } from "../eos/fluid-model";
+import { EngineError } from "../errors";
+import { assemble } from "./assemble";
+import { bracketedRoot } from "./bracketed-root";
+import type { Equilibrium } from "./equilibrium";
+import { flashPT } from "./flash-pt";
+import { insideDome, saturatedMix } from "./pure-volume";
+import { onlyComponent } from "./saturation-pure";
+import { solveAtVolume, type TwoPhaseVolumes, type VolumeTarget } from "./two-phase-volume";
+import { createTwoPhaseVolumes, seedFrom } from "./volume-seed";
+
+/**
+ * Equilibrium of a closed rigid volume: given molar internal energy and molar volume (kind "UV"), or molar entropy and molar
+ * volume. Of all states with that energy and volume the answer is the one of highest entropy.
+ *
+ * Order of attempts: two phases from the seed; one phase, accepted only if a stability test passes; two phases from the PT flash
+ * at the one-phase state; nested one-dimensional searches, which always close.
+ *
+ * z        mole fractions; defaults to the feed
+ * seed     an equilibrium near by; changes the cost, not the answer
+ * Throws   EngineError "no-convergence" | "outside-validity"
+ */
+export function flashUV(
+  model: FluidModel,
+  target: { internalEnergyJPerMol: number; molarVolumeM3PerMol: number },
+  z: ArrayLike<number> = model.feed,
+  seed?: Equilibrium,
+): Equilibrium {
+  return flashAtVolume(
+    model,
+    { hold: "energy", value: target.internalEnergyJPerMol, molarVolume: target.molarVolumeM3PerMol },
+    z,
+    seed,
+  );
+}
+
+/** As `flashUV`, with the molar entropy given: the walk down an isentrope through the two-phase region. */
+export function flashSV(
+  model: FluidModel,
+  target: { entropyJPerMolK: number; molarVolumeM3PerMol: number },
+  z: ArrayLike<number> = model.feed,
+  seed?: Equilibrium,
+): Equilibrium {
+  return flashAtVolume(
+    model,
+    { hold: "entropy", value: target.entropyJPerMolK, molarVolume: target.molarVolumeM3PerMol },
+    z,
+    seed,
+  );
+}
+
+type HeldTarget = VolumeTarget & { hold: "energy" | "entropy" };
+
+function flashAtVolume(model: FluidModel, target: HeldTarget, z: ArrayLike<number>, seed?: Equilibrium): Equilibrium {
+  const v = target.molarVolume;
+  model.residual.setComposition(z);
+  if (!(v > model.residual.minimumVolume())) {
+    throw new EngineError("outside-validity", "the molar volume is below the smallest that the equation allows", {
+      molarVolumeM3PerMol: v,
+      minimumM3PerMol: model.residual.minimumVolume(),
+    });
+  }
+  const state = volumesFor(z.length);
+  if (seed && seed.phases.length === 2 && seedFrom(seed, z, v, state) && solveAtVolume(model, z, target, state)) {
+    return assembleTwo(model, state);
+  }
+
+  const only = onlyComponent(z);
+  const single = onePhase(model, target, z, seed?.temperatureK ?? 300);
+  if (only >= 0) return pure(model, target, z, single, state);
+
+  if (single && single.pressurePa > 0 && single.pressureByVolume < 0) {
+    if (isStable(model, single, z)) return assembleOne(model, single, z);
+    const near = tryFlash(model, single.temperatureK, single.pressurePa, z);
+    if (near && seedFrom(near, z, v, state) && solveAtVolume(model, z, target, state)) return assembleTwo(model, state);
+  }
+  return nested(model, target, z, single, state, seed);
+}
+
+/** The root of lowest Gibbs energy at its own pressure, and no split there. */
+function isStable(model: FluidModel, single: PhaseState, z: ArrayLike<number>): boolean {
+  const { temperatureK: T, pressurePa: p, molarVolumeM3PerMol: v } = single;
+  model.residual.setComposition(z);
+  const best = model.residual.volumeAtPressure(T, p, "stable");
+  if (Math.abs(best / v - 1) > 1e-6) return false;
+  return model.stability(T, p, z).stable;
+}
+
+function onePhase(model: FluidModel, target: HeldTarget, z: ArrayLike<number>, guess: number): PhaseState | undefined {
+  try {
+    return target.hold === "energy"
+      ? model.phaseFromEnergy(target.value, target.molarVolume, z, guess, createPhaseState())
+      : model.phaseFromEntropyVolume(target.value, target.molarVolume, z, guess, createPhaseState());
+  } catch (error) {
+    if (error instanceof EngineError && (error.code === "no-convergence" || error.code === "outside-validity")) return undefined;
+    throw error;
+  }
+}
+
+function tryFlash(model: FluidModel, T: number, p: number, z: ArrayLike<number>): Equilibrium | undefined {
+  try {
+    return flashPT(model, { temperatureK: T, pressurePa: p }, z);
+  } catch (error) {
+    if (error instanceof EngineError) return undefined;
+    throw error;
+  }
+}
+
+function pure(
+  model: FluidModel,
+  target: HeldTarget,
+  z: ArrayLike<number>,
+  single: PhaseState | undefined,
+  state: TwoPhaseVolumes,
+): Equilibrium {
+  const v = target.molarVolume;
+  if (single && !insideDome(model, single.temperatureK, v, z)) {
+    if (single.pressurePa > 0) return assembleOne(model, single, z);
+  }
+  const start = domeStart(model, v, z, single?.temperatureK);
+  if (start === undefined) {
+    throw new EngineError("no-convergence", "no equilibrium state has this energy at this volume", {
+      molarVolumeM3PerMol: v,
+      value: target.value,
+    });
+  }
+  const { saturation, quality } = saturatedMix(model, z, { v, value: target.value, kind: target.hold }, start);
+  const index = onlyComponent(z);
+  state.v.fill(0);
+  state.l.fill(0);
+  state.v[index] = quality;
+  state.l[index] = 1 - quality;
+  state.temperatureK = saturation.temperatureK;
+  state.vapourVolume = quality * saturation.vapourVolume;
+  state.liquidVolume = v - state.vapourVolume;
+  if (quality > 1e-12 && quality < 1 - 1e-12 && solveAtVolume(model, z, target, state)) return assembleTwo(model, state);
+  return assemble(model, saturation.temperatureK, saturation.pressurePa, [
+    { moleFraction: quality, composition: z, molarVolume: saturation.vapourVolume },
+    { moleFraction: 1 - quality, composition: z, molarVolume: saturation.liquidVolume },
+  ]);
+}
+
+/** A temperature at which v lies inside the dome, starting where the one-phase state was found. */
+function domeStart(model: FluidModel, v: number, z: ArrayLike<number>, near: number | undefined): number | undefined {
+  const Tc = model.criticalTemperaturesK[onlyComponent(z)]!;
+  const candidates = near !== undefined && near < Tc ? [near] : [];
+  for (let reduced = 0.98; reduced > 0.25; reduced -= 0.06) candidates.push(reduced * Tc);
+  return candidates.find((T) => T > model.temperatureRangeK[0] && insideDome(model, T, v, z) !== undefined);
+}
+
+/**
+ * Last resort for mixtures: T by a bracketed search on the energy (or entropy), which rises with T at constant volume; for each
+ * T the pressure by a bracketed search on the volume, which falls with p at constant T. Slow, but each search must close.
+ */
+function nested(
+  model: FluidModel,
+  target: HeldTarget,
+  z: ArrayLike<number>,
+  single: PhaseState | undefined,
+  state: TwoPhaseVolumes,
+  seed: Equilibrium | undefined,
+): Equilibrium {
+  const v = target.molarVolume;
+  const [coldest, hottest] = model.temperatureRangeK;
+  let latest: Equilibrium | undefined;
+  const excess = (T: number): number => {
+    latest = equilibriumAtVolume(model, T, v, z, latest);
+    const have = target.hold === "energy" ? latest.internalEnergyJPerMol : latest.entropyJPerMolK;
+    return have - target.value;
+  };
+  // A one-phase state in tension says nothing of the equilibrium temperature.
+  const hint = seed?.temperatureK ?? (single && single.pressurePa > 0 ? single.temperatureK : undefined);
+  let a = Math.min(Math.max(hint ?? 0.8 * meanCriticalTemperature(model, z), coldest * 1.01), hottest * 0.99);
+  let fa = excess(a);
+  let b = a;
+  let fb = fa;
+  for (let k = 0; k < 60 && fa * fb > 0; k++) {
+    a = b;
+    fa = fb;
+    b = fb > 0 ? Math.max(0.94 * b, coldest) : Math.min(1.06 * b, hottest);
+    if (b === a) break;
+    fb = excess(b);
+  }
+  const T = bracketedRoot(excess, { a, fa, b, fb }, { within: 1e-12 * a, what: "temperature at given energy and volume" });
+  excess(T);
+  const found = latest!;
+  if (found.phases.length === 2 && seedFrom(found, z, v, state) && solveAtVolume(model, z, target, state)) {
+    return assembleTwo(model, state);
+  }
+  const polished = found.phases.length === 1 ? onePhase(model, target, z, T) : undefined;
+  return polished && isStable(model, polished, z) ? assembleOne(model, polished, z) : found;
+}
+
+function meanCriticalTemperature(model: FluidModel, z: ArrayLike<number>): number {
+  let mean = 0;
+  for (let i = 0; i < z.length; i++) mean += z[i]! * model.criticalTemperaturesK[i]!;
+  return mean;
+}
+
+/** Equilibrium at given temperature and molar volume. */
+export function equilibriumAtVolume(
+  model: FluidModel,
+  T: number,
+  v: number,
+  z: ArrayLike<number>,
+  seed?: Equilibrium,
+): Equilibrium {
+  const single = model.phaseAtVolume(T, v, z, createPhaseState());
+  if (single.pressurePa > 0 && single.pressureByVolume < 0 && isStable(model, single, z)) return assembleOne(model, single, z);
+  const state = volumesFor(z.length);
+  const target: VolumeTarget = { hold: "temperature", value: T, molarVolume: v };
+  if (seed?.phases.length === 2 && seedFrom(seed, z, v, state)) {
+    state.temperatureK = T;
+    if (solveAtVolume(model, z, target, state)) return assembleTwo(model, state);
+  }
+  let latest: Equilibrium | undefined;
+  const excess = (lnP: number): number => {
+    latest = flashPT(model, { temperatureK: T, pressurePa: Math.exp(lnP) }, z, latest);
+    return Math.log(latest.molarVolumeM3PerMol / v);
+  };
+  const start = single.pressurePa > 1e3 ? single.pressurePa : (0.5 * model.gasConstantJPerMolK * T) / v;
+  let a = Math.log(start);
+  let fa = excess(a);
+  let b = a;
+  let fb = fa;
+  for (let k = 0; k < 80 && fa * fb > 0; k++) {
+    a = b;
+    fa = fb;
+    b += fb > 0 ? 0.5 : -0.5;
+    fb = excess(b);
+  }
+  const lnP = bracketedRoot(excess, { a, fa, b, fb }, { within: 1e-13, what: "pressure at given temperature and volume" });
+  excess(lnP);
+  const found = latest!;
+  if (found.phases.length === 2 && seedFrom(found, z, v, state)) {
+    state.temperatureK = T;
+    if (solveAtVolume(model, z, target, state)) return assembleTwo(model, state);
+  }
+  return found;
+}
+
+function assembleOne(model: FluidModel, single: PhaseState, z: ArrayLike<number>): Equilibrium {
+  return assemble(model, single.temperatureK, single.pressurePa, [
+    { moleFraction: 1, composition: z, molarVolume: single.molarVolumeM3PerMol },
+  ]);
+}
+
+function assembleTwo(model: FluidModel, state: TwoPhaseVolumes): Equilibrium {
+  const { v, l, vapourVolume, liquidVolume, temperatureK, pressurePa } = state;
+  let nv = 0;
+  let nl = 0;
+  for (let i = 0; i < v.length; i++) {
+    nv += v[i]!;
+    nl += l[i]!;
+  }
+  const share = (moles: Float64Array, total: number) => moles.map((amount) => amount / total);
+  return assemble(model, temperatureK, pressurePa, [
+    { moleFraction: nv, composition: share(v, nv), molarVolume: vapourVolume / nv },
+    { moleFraction: nl, composition: share(l, nl), molarVolume: liquidVolume / nl },
+  ]);
+}
+
+const states = new Map<number, TwoPhaseVolumes>();
+
+function volumesFor(count: number): TwoPhaseVolumes {
+  let state = states.get(count);
+  if (!state) states.set(count, (state = createTwoPhaseVolumes(count)));
+  return state;
+}
