@@ -1,0 +1,116 @@
+import { createPhaseState, type FluidModel, type PhaseState } from "../eos/fluid-model";
+import { EngineError } from "../errors";
+import { assemble } from "./assemble";
+import { bracketedRoot } from "./bracketed-root";
+import type { Equilibrium } from "./equilibrium";
+import { flashPT } from "./flash-pt";
+import { onlyComponent, saturationAtPressure } from "./saturation-pure";
+
+/**
+ * Equilibrium at given pressure and molar enthalpy. Enthalpy rises with temperature at constant pressure through every phase
+ * change, so the answer is a bracketed search on T; a pure fluid inside its dome is the lever rule at its boiling point.
+ *
+ * Throws   EngineError "no-convergence" where no temperature the equation allows has this enthalpy
+ */
+export function flashPH(
+  model: FluidModel,
+  { pressurePa, enthalpyJPerMol }: { pressurePa: number; enthalpyJPerMol: number },
+  z: ArrayLike<number> = model.feed,
+  seed?: Equilibrium,
+): Equilibrium {
+  return flashAtPressure(model, pressurePa, { of: "enthalpy", value: enthalpyJPerMol }, z, seed);
+}
+
+/** As `flashPH`, with the molar entropy given: the end of an isentropic expansion to a pressure. */
+export function flashPS(
+  model: FluidModel,
+  { pressurePa, entropyJPerMolK }: { pressurePa: number; entropyJPerMolK: number },
+  z: ArrayLike<number> = model.feed,
+  seed?: Equilibrium,
+): Equilibrium {
+  return flashAtPressure(model, pressurePa, { of: "entropy", value: entropyJPerMolK }, z, seed);
+}
+
+interface PressureTarget {
+  of: "enthalpy" | "entropy";
+  value: number;
+}
+
+const read = (target: PressureTarget, state: { enthalpyJPerMol: number; entropyJPerMolK: number }) =>
+  target.of === "enthalpy" ? state.enthalpyJPerMol : state.entropyJPerMolK;
+
+function flashAtPressure(
+  model: FluidModel,
+  p: number,
+  target: PressureTarget,
+  z: ArrayLike<number>,
+  seed: Equilibrium | undefined,
+): Equilibrium {
+  if (!(p > 0 && Number.isFinite(p))) throw new EngineError("invalid-case", "pressure must be above 0 Pa", {}, "pressurePa");
+  if (onlyComponent(z) >= 0) return pure(model, p, target, z, seed?.temperatureK ?? 300);
+
+  const [coldest, hottest] = model.temperatureRangeK;
+  let latest = seed;
+  const excess = (T: number): number => {
+    latest = flashPT(model, { temperatureK: T, pressurePa: p }, z, latest);
+    return read(target, latest) - target.value;
+  };
+  let a = seed?.temperatureK ?? onePhaseGuess(model, p, target, z);
+  let fa = excess(a);
+  let b = a;
+  let fb = fa;
+  for (let k = 0; k < 80 && fa * fb > 0; k++) {
+    a = b;
+    fa = fb;
+    const heatCapacity = Math.max(40, latest!.phases[0]!.state.heatCapacityPJPerMolK);
+    const slope = target.of === "enthalpy" ? heatCapacity : heatCapacity / b;
+    const jump = Math.max(0.5, Math.min(0.25 * b, (1.2 * Math.abs(fb)) / slope));
+    b = fb > 0 ? Math.max(b - jump, coldest) : Math.min(b + jump, hottest);
+    if (b === a) break;
+    fb = excess(b);
+  }
+  const scale = target.of === "enthalpy" ? model.gasConstantJPerMolK * a : model.gasConstantJPerMolK;
+  const what = `temperature of given ${target.of} and pressure`;
+  const T = bracketedRoot(excess, { a, fa, b, fb }, { within: 1e-14 * a, accept: 1e-14 * scale, what });
+  excess(T);
+  return latest!;
+}
+
+function onePhaseGuess(model: FluidModel, p: number, target: PressureTarget, z: ArrayLike<number>): number {
+  try {
+    return onePhase(model, p, target, z, 300).temperatureK;
+  } catch (error) {
+    if (error instanceof EngineError) return 300;
+    throw error;
+  }
+}
+
+function onePhase(model: FluidModel, p: number, target: PressureTarget, z: ArrayLike<number>, guess: number): PhaseState {
+  return target.of === "enthalpy"
+    ? model.phaseFromEnthalpy(target.value, p, z, guess, "stable", createPhaseState())
+    : model.phaseFromEntropyPressure(target.value, p, z, guess, "stable", createPhaseState());
+}
+
+function pure(model: FluidModel, p: number, target: PressureTarget, z: ArrayLike<number>, guess: number): Equilibrium {
+  const pc = model.criticalPressuresPa[onlyComponent(z)]!;
+  if (p < pc) {
+    const saturation = saturationAtPressure(model, p, z);
+    const vapour = model.phaseAtVolume(saturation.temperatureK, saturation.vapourVolume, z, createPhaseState());
+    const liquid = model.phaseAtVolume(saturation.temperatureK, saturation.liquidVolume, z, createPhaseState());
+    const quality = (target.value - read(target, liquid)) / (read(target, vapour) - read(target, liquid));
+    if (quality >= 0 && quality <= 1) {
+      return assemble(model, saturation.temperatureK, p, [
+        { moleFraction: quality, composition: z, molarVolume: saturation.vapourVolume },
+        { moleFraction: 1 - quality, composition: z, molarVolume: saturation.liquidVolume },
+      ]);
+    }
+    const above = quality > 1;
+    const start = above ? Math.max(guess, saturation.temperatureK * 1.001) : Math.min(guess, saturation.temperatureK * 0.999);
+    return single(model, p, z, onePhase(model, p, target, z, start));
+  }
+  return single(model, p, z, onePhase(model, p, target, z, guess));
+}
+
+function single(model: FluidModel, p: number, z: ArrayLike<number>, state: PhaseState): Equilibrium {
+  return assemble(model, state.temperatureK, p, [{ moleFraction: 1, composition: z, molarVolume: state.molarVolumeM3PerMol }]);
+}
