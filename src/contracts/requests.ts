@@ -77,6 +77,8 @@ export const screeningFilterSchema = z.strictObject({
   limit: z.coerce.number().int().min(1).max(200).default(50),
 });
 
+export const revisionQuerySchema = z.strictObject({ rev: z.coerce.number().int().min(1).optional() });
+
 export const verificationRangeSchema = z.strictObject({
   from: z.coerce.number().int().min(1).default(1),
   limit: z.coerce.number().int().min(1).max(500).default(500),

@@ -141,7 +141,16 @@ export type EntryView = EntryRow & {
   neighbours: { before: { seq: number; hash: string } | null; after: { seq: number; hash: string } | null };
 };
 
-/** One entry as the browser needs it to recompute the seal. `body` is absent where the viewer may not read it. */
-export type VerificationRow = { seq: number; envelope: string; hash: string; body: string | null; saltHex: string | null };
+/** One entry as the browser needs it to recompute the seal (a `StoredEntry` of the ledger library). */
+export type VerificationRow = {
+  seq: number;
+  envelope: string;
+  hash: string;
+  mirrors: { kind: string; actor: string; subject: string; at: string };
+  /** "withheld": this viewer may not read it, so it is not judged. */
+  body: { saltHex: string; text: string } | "withheld" | "redacted";
+};
+/** A run of entries, with the origin the first one starts from and the newest entry known to the server. */
+export type VerificationView = { origin: string; head: { seq: number; hash: string }; rows: VerificationRow[] };
 
 export type Page<T> = { rows: T[]; total: number; next: number | null };

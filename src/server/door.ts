@@ -1,6 +1,6 @@
 import "server-only";
 import type { z } from "zod";
-import { refusals, type Problem, type RefusalCode } from "@/contracts/refusals";
+import type { Problem } from "@/contracts/refusals";
 import { ruleFor, type Act, type OpenAct } from "./auth/matrix";
 import { cookieOf } from "./auth/cookie";
 import { viewerFromCookie, type Viewer } from "./auth/viewer";
@@ -8,6 +8,7 @@ import { Answer } from "./door-answer";
 import { problemFor, problemsOf } from "./door-problem";
 import { readBody } from "./door-body";
 import { env } from "./env";
+import { asRefusal } from "./ledger/as-refusal";
 import { logLine } from "./log-lines";
 import { Refusal } from "./refusal";
 
@@ -114,7 +115,7 @@ function toResponse(result: unknown, status = 200): Response {
 }
 
 function refuse(error: unknown, requestId: string): Response {
-  const expected = error instanceof Refusal ? error : undefined;
+  const expected = expectedRefusal(error);
   if (!expected) logLine().error({ requestId, err: error }, "unexpected error");
   const problem: Problem = problemFor(expected, requestId);
   const headers = new Headers({ "content-type": "application/problem+json" });
@@ -122,5 +123,8 @@ function refuse(error: unknown, requestId: string): Response {
   return new Response(JSON.stringify(problem), { status: problem.status, headers });
 }
 
-/** For tests and for pages that show a refusal. */
-export const titleOf = (code: RefusalCode): string => refusals[code].title;
+/** Our own refusals and those of the record. A database that can't be reached is no fault of the request either. */
+function expectedRefusal(error: unknown): Refusal | undefined {
+  const known = asRefusal(error);
+  return known instanceof Refusal ? known : undefined;
+}

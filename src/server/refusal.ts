@@ -21,3 +21,9 @@ export class Refusal extends Error {
     super(parts.detail ?? refusals[code].title);
   }
 }
+
+/** What a read found; a refusal when it found nothing that is open to the viewer. */
+export function orNotFound<T>(found: T | null): T {
+  if (found === null) throw new Refusal("not-found");
+  return found;
+}

@@ -42,6 +42,20 @@ export function mayDo(viewer: Viewer, act: Act, matter: Matter = {}): boolean {
   }
 }
 
+/**
+ * Which facilities a list may show: all of them, or the viewer's own (perhaps none).
+ *
+ * Throws   Refusal "not-allowed" where the role has no such act
+ */
+export function reachOf(viewer: Viewer, act: Act): "all" | ReadonlySet<string> {
+  if (viewer.role === "system") throw new Refusal("not-allowed");
+  if (!viewer.active) throw new Refusal("account-disabled");
+  const rule = ruleFor(act, viewer.role);
+  if (rule === "M") return viewer.facilityIds;
+  if (rule === "Y" || rule === "S" || rule === "E") return "all";
+  throw new Refusal("not-allowed");
+}
+
 function refusalUnder(rule: Rule, viewer: Viewer, matter: Matter): "not-allowed" | "not-found" | "own-work" | undefined {
   const member = matter.facilityId !== undefined && viewer.facilityIds.has(matter.facilityId);
   const hadAHand = matter.authorId === viewer.id || (matter.contributors?.includes(viewer.id) ?? false);

@@ -1,0 +1,13 @@
+import { createScreeningSchema, screeningFilterSchema } from "@/contracts/requests";
+import { defineRoute } from "@/server/door";
+import { createScreening } from "@/server/screenings/create";
+import { listScreenings } from "@/server/screenings/list";
+
+export const GET = defineRoute({ act: "screening.list", query: screeningFilterSchema, work: (viewer, { query }) => listScreenings(viewer, query) });
+
+export const POST = defineRoute({
+  act: "screening.create",
+  body: createScreeningSchema,
+  status: 201,
+  work: (viewer, { body }) => createScreening(viewer, body),
+});
