@@ -1,0 +1,108 @@
+/**
+ * The balances of a rigid vessel with one outlet, as the right-hand side of dy/dt.
+ *
+ *   dn_i/dt = −ṅ y_i        dU/dt = −ṅ h + Q_wall (+ Q_out without a wall)        dE_wall/dt = Q_out − Q_wall
+ *   ṅ = C_d A(t) G / M       Q_wall = h_f S (T_w − T)
+ *
+ * with y_i, h, M of the stream that leaves (h its stagnation enthalpy) and G from the nozzle. Kinetic energy inside is neglected.
+ * Carried along: mass vented, enthalpy vented, heat from the wall, heat from outside.
+ *
+ * Scales   amounts by n0, every energy by n0 R T0
+ */
+import { EngineError } from "../../errors";
+import { frozenNozzle, type NozzleFlow } from "../../flow/frozen-nozzle";
+import { ContentsFinder, type Contents, type PhaseMode } from "./contents";
+import type { VesselModel } from "./vessel-model";
+
+/** Everything about one instant that a series, an event or a limit may ask for. */
+export type Instant = {
+  contents: Contents;
+  flow: NozzleFlow;
+  ventRateKgPerS: number;
+  wallTemperatureK: number | undefined;
+};
+
+export class Balance {
+  readonly size: number;
+  readonly massScaleKg: number;
+  readonly energyScaleJ: number;
+  private readonly count: number;
+  private readonly finder: ContentsFinder;
+  private readonly moles: Float64Array;
+  private last: { y: readonly number[]; mode: PhaseMode; t: number; instant: Instant } | undefined;
+
+  constructor(readonly model: VesselModel) {
+    const { fluid, start, vessel } = model;
+    this.count = fluid.componentIds.length;
+    this.size = this.count + 6;
+    this.massScaleKg = start.totalMolesMol * fluid.mixtureMolarMass(fluid.feed);
+    this.energyScaleJ = start.totalMolesMol * fluid.gasConstantJPerMolK * start.temperatureK;
+    this.finder = new ContentsFinder(fluid, vessel.volumeM3, start.temperatureK);
+    this.moles = new Float64Array(this.count);
+  }
+
+  startState(): number[] {
+    const { molesMol, totalMolesMol, internalEnergyJ } = this.model.start;
+    return [...Array.from(molesMol, (n) => n / totalMolesMol), internalEnergyJ / this.energyScaleJ, 0, 0, 0, 0, 0];
+  }
+
+  molesOf(y: readonly number[]): Float64Array {
+    for (let i = 0; i < this.count; i++) this.moles[i] = (y[i] ?? 0) * this.model.start.totalMolesMol;
+    return this.moles;
+  }
+
+  internalEnergyJ = (y: readonly number[]): number => (y[this.count] ?? 0) * this.energyScaleJ;
+  wallEnergyJ = (y: readonly number[]): number => (y[this.count + 1] ?? 0) * this.energyScaleJ;
+  ventedMassKg = (y: readonly number[]): number => (y[this.count + 2] ?? 0) * this.massScaleKg;
+  ventedEnergyJ = (y: readonly number[]): number => (y[this.count + 3] ?? 0) * this.energyScaleJ;
+  heatFromWallJ = (y: readonly number[]): number => (y[this.count + 4] ?? 0) * this.energyScaleJ;
+  heatFromOutsideJ = (y: readonly number[]): number => (y[this.count + 5] ?? 0) * this.energyScaleJ;
+
+  /** State of everything at (t, y). Kept for the same arguments, because events and output ask for the same point in turn. */
+  at(t: number, y: readonly number[], mode: PhaseMode): Instant {
+    const { last } = this;
+    if (last && last.y === y && last.mode === mode && last.t === t) return last.instant;
+    const { fluid, wall, effectiveAreaM2, openingTimeS, backPressurePa } = this.model;
+    const contents = this.finder.find(mode, this.molesOf(y), this.internalEnergyJ(y));
+    const opening = openingTimeS > 0 ? Math.min(t / openingTimeS, 1) : 1;
+    const flow = frozenNozzle(fluid, contents.outlet, contents.outletComposition, backPressurePa);
+    const instant: Instant = {
+      contents,
+      flow,
+      ventRateKgPerS: opening * effectiveAreaM2 * flow.massFluxKgPerM2S,
+      wallTemperatureK: wall?.temperatureAtK(this.wallEnergyJ(y)),
+    };
+    this.last = { y, mode, t, instant };
+    return instant;
+  }
+
+  /** dy/dt, or undefined for a trial state that no fluid can be in. */
+  derivative(t: number, y: number[], mode: PhaseMode): number[] | undefined {
+    let instant: Instant;
+    try {
+      instant = this.at(t, y, mode);
+    } catch (error) {
+      if (error instanceof EngineError && error.code !== "cancelled") return undefined;
+      throw error;
+    }
+    const { contents, ventRateKgPerS, wallTemperatureK } = instant;
+    if (!(contents.pressurePa > 0)) return undefined;
+    const { fluid, filmWPerK, outside, start } = this.model;
+    const { outlet, outletComposition: leaving } = contents;
+    const molesPerS = ventRateKgPerS / fluid.mixtureMolarMass(leaving);
+    const enthalpyW = molesPerS * outlet.enthalpyJPerMol;
+    const fromWallW = wallTemperatureK === undefined ? 0 : filmWPerK * (wallTemperatureK - contents.temperatureK);
+    const fromOutsideW = outside(wallTemperatureK ?? contents.temperatureK);
+    const intoFluidW = wallTemperatureK === undefined ? fromOutsideW : fromWallW;
+
+    const rates = new Array<number>(this.size);
+    for (let i = 0; i < this.count; i++) rates[i] = (-molesPerS * (leaving[i] ?? 0)) / start.totalMolesMol;
+    rates[this.count] = (intoFluidW - enthalpyW) / this.energyScaleJ;
+    rates[this.count + 1] = wallTemperatureK === undefined ? 0 : (fromOutsideW - fromWallW) / this.energyScaleJ;
+    rates[this.count + 2] = ventRateKgPerS / this.massScaleKg;
+    rates[this.count + 3] = enthalpyW / this.energyScaleJ;
+    rates[this.count + 4] = fromWallW / this.energyScaleJ;
+    rates[this.count + 5] = fromOutsideW / this.energyScaleJ;
+    return rates;
+  }
+}

@@ -1,0 +1,143 @@
+/**
+ * The run itself: segments of one phase mode each, joined at the events that end them.
+ *
+ * Events: the pressure to stop at; the phase that appears or disappears; solid; and, only noted, the pressures that people ask about.
+ * A change of the valve's opening law is a known time and starts a segment of its own.
+ */
+import { EngineError } from "../../errors";
+import { integrate, type IntegrationEvent } from "../../ode/integrate";
+import type { BlowdownCase } from "../blowdown-case";
+import type { EndedBy } from "../blowdown-result";
+import type { Balance } from "./balance";
+import type { PhaseMode } from "./contents";
+import { DenseRun } from "./dense-run";
+import { isStableAlone } from "./phase-check";
+import { solidMargin, type SolidCurve } from "./solid-check";
+
+export type Segment = { mode: PhaseMode; dense: DenseRun };
+export type PhaseChange = { timeS: number; to: PhaseMode; temperatureK: number; pressurePa: number };
+export type Run = {
+  segments: Segment[];
+  endTimeS: number;
+  endedBy: EndedBy;
+  marks: Map<string, number>;
+  phaseChanges: PhaseChange[];
+  steps: number;
+  evaluations: number;
+};
+
+export type RunOptions = {
+  relativeTolerance: number;
+  maxEvaluations: number;
+  onProgress?: (part: number) => void;
+  isCancelled?: () => boolean;
+};
+
+const maxSegments = 60;
+/** The flow stops where the pressure meets the back pressure; so near it, nothing is left to leave. */
+const backPressureReached = 1e-5;
+
+export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: RunOptions): Run {
+  const { model } = balance;
+  const { start, backPressurePa, openingTimeS } = model;
+  const { stopTimeS, stopPressurePa } = blowdown.run;
+  const lowest = backPressurePa * (1 + backPressureReached);
+  const stopAt = Math.max(stopPressurePa, lowest);
+  const marksWanted = markPressures(blowdown, start.pressurePa);
+
+  const run: Run = { segments: [], endTimeS: 0, endedBy: "time", marks: new Map(), phaseChanges: [], steps: 0, evaluations: 0 };
+  let t = 0;
+  let y = balance.startState();
+  let mode: PhaseMode = start.twoPhase ? "two-phase" : "one-phase";
+  const emptyingTimeS = Math.max(balance.massScaleKg / Math.max(fullRate(balance, y, mode), 1e-300), 1e-9);
+
+  while (t < stopTimeS) {
+    if (run.segments.length >= maxSegments) {
+      throw new EngineError("no-convergence", `The fluid changed between one and two phases ${maxSegments} times by ${t.toPrecision(4)} s, and the run was given up. Check the pressure near the critical point.`, { timeS: t });
+    }
+    const segment: Segment = { mode, dense: new DenseRun() };
+    run.segments.push(segment);
+    const until = t < openingTimeS && openingTimeS < stopTimeS ? openingTimeS : stopTimeS;
+    const result = integrate({
+      derivative: (time, state) => balance.derivative(time, state, segment.mode),
+      t0: t,
+      tEnd: until,
+      y0: y,
+      relativeTolerance: options.relativeTolerance,
+      absoluteTolerance: new Array<number>(balance.size).fill(0.01 * options.relativeTolerance),
+      timeScaleS: t < openingTimeS ? Math.sqrt(emptyingTimeS * Math.min(openingTimeS, emptyingTimeS)) : emptyingTimeS,
+      maxEvaluations: options.maxEvaluations - run.evaluations,
+      events: [
+        { id: "stop", stops: true, value: (time, state) => balance.at(time, state, segment.mode).contents.pressurePa / stopAt - 1 },
+        phaseEvent(balance, segment.mode),
+        ...solidEvent(balance, segment.mode, model.solids),
+        ...marksWanted
+          .filter(({ id }) => !run.marks.has(id))
+          .map(({ id, pressurePa }): IntegrationEvent => ({ id, stops: false, value: (time, state) => balance.at(time, state, segment.mode).contents.pressurePa / pressurePa - 1 })),
+      ],
+      onStep: (step) => {
+        segment.dense.keep(step);
+        options.onProgress?.(progress(step.t1 / stopTimeS, balance.at(step.t1, step.y1, segment.mode).contents.pressurePa, start.pressurePa, stopAt));
+      },
+      isCancelled: options.isCancelled,
+    });
+    run.steps += result.steps;
+    run.evaluations += result.evaluations;
+    for (const { id, t: time } of result.marks) if (!run.marks.has(id)) run.marks.set(id, time);
+    t = result.t;
+    y = result.y;
+    if (result.stoppedBy === "stop") {
+      for (const { id, pressurePa } of marksWanted) if (pressurePa === stopAt && !run.marks.has(id)) run.marks.set(id, t);
+      run.endedBy = stopPressurePa >= lowest || stopPressurePa === backPressurePa ? "pressure" : "back-pressure";
+      break;
+    }
+    if (result.stoppedBy === "solid") {
+      run.endedBy = "solid-phase";
+      break;
+    }
+    if (result.stoppedBy === "phase") {
+      mode = mode === "one-phase" ? "two-phase" : "one-phase";
+      const { temperatureK, pressurePa } = balance.at(t, y, mode).contents;
+      run.phaseChanges.push({ timeS: t, to: mode, temperatureK, pressurePa });
+    }
+  }
+  run.endTimeS = t;
+  return run;
+}
+
+/** Pressures that the summary and the limits report a time for. Gauge here means above 101325 Pa. */
+function markPressures(blowdown: BlowdownCase, startPa: number): { id: string; pressurePa: number }[] {
+  const atmosphere = 101325;
+  const wanted = [
+    { id: "half-gauge", pressurePa: atmosphere + 0.5 * (startPa - atmosphere) },
+    { id: "6.9-bar-gauge", pressurePa: 791325 },
+  ];
+  const target = blowdown.limits?.targetPressurePa;
+  if (target !== undefined) wanted.push({ id: "target", pressurePa: target });
+  return wanted.filter(({ pressurePa }) => pressurePa < startPa && pressurePa > 0);
+}
+
+/** Falls through zero where the pinned number of phases stops being the right one. */
+function phaseEvent(balance: Balance, mode: PhaseMode): IntegrationEvent {
+  return {
+    id: "phase",
+    stops: true,
+    value: (time, state) => {
+      const { contents } = balance.at(time, state, mode);
+      if (mode === "two-phase") return contents.phases === 2 ? 1 : -1;
+      return isStableAlone(balance.model.fluid, contents) ? 1 : -1;
+    },
+  };
+}
+
+function solidEvent(balance: Balance, mode: PhaseMode, curves: readonly SolidCurve[]): IntegrationEvent[] {
+  if (curves.length === 0) return [];
+  return [{ id: "solid", stops: true, value: (time, state) => solidMargin(balance.model.fluid, balance.at(time, state, mode).contents, curves) }];
+}
+
+const fullRate = (balance: Balance, y: number[], mode: PhaseMode): number => balance.model.effectiveAreaM2 * balance.at(0, y, mode).flow.massFluxKgPerM2S;
+
+function progress(timePart: number, pressurePa: number, startPa: number, stopPa: number): number {
+  const fallen = Math.log(startPa / pressurePa) / Math.log(startPa / stopPa);
+  return Math.min(Math.max(timePart, fallen, 0), 1);
+}

@@ -1,0 +1,191 @@
+/** A blowdown from case to result: state, balances, integration, series, extremes, account, limits, cautions. */
+import { threeSteps } from "../../account/three-steps";
+import { EngineError } from "../../errors";
+import { assess } from "../../limits/assess";
+import { blowdownFigures } from "../../limits/blowdown-figures";
+import type { BlowdownCase } from "../blowdown-case";
+import type { BlowdownResult, BlowdownSummary, EnergyAccount } from "../blowdown-result";
+import { Balance } from "./balance";
+import { cautionsOfRun } from "./cautions-of-run";
+import { DenseRun } from "./dense-run";
+import { highest, lowest, type Extreme } from "./extremes";
+import { integrateRun, type Run } from "./integrate-run";
+import { rebuiltState, type RebuiltState } from "./molar-state";
+import { outletTemperatureAt, sampleAt } from "./sample";
+import { outletColumn, sampleRows, seriesOf, type Row } from "./series";
+import { solidMargin } from "./solid-check";
+import { makeVesselModel } from "./vessel-model";
+import { closureLimit, warningsOf } from "./warnings";
+
+export type BlowdownOptions = {
+  onProgress?: (part: number) => void;
+  isCancelled?: () => boolean;
+  /** For a preview: a loose tolerance and wider gaps in the series. */
+  coarse?: boolean;
+  relativeTolerance?: number;
+  maxEvaluations?: number;
+};
+
+export type BlowdownBody = Omit<BlowdownResult, "engineVersion" | "caseSha256" | "numerics"> & { numerics: Omit<BlowdownResult["numerics"], "wallClockMs"> };
+
+const previewTolerance = 1e-4;
+const previewGaps = 3;
+
+export function runBlowdown(blowdown: BlowdownCase, options: BlowdownOptions = {}): BlowdownBody {
+  const model = makeVesselModel(blowdown);
+  const balance = new Balance(model);
+  refuseSolidStart(balance);
+
+  const relativeTolerance = options.relativeTolerance ?? (options.coarse ? Math.max(previewTolerance, blowdown.run.relativeTolerance) : blowdown.run.relativeTolerance);
+  const run = integrateRun(balance, blowdown, {
+    relativeTolerance,
+    maxEvaluations: options.maxEvaluations ?? 200_000,
+    onProgress: options.onProgress,
+    isCancelled: options.isCancelled,
+  });
+  const rows = sampleRows(balance, run, options.coarse ? previewGaps : 1);
+  const outletK = outletColumn(balance, rows);
+
+  const found = extremesOf(balance, rows, outletK);
+  const ends = endStates(balance, run, found.fluid);
+  const summary = summarise(balance, run, rows, found, ends);
+  const warnings = warningsOf(blowdown, model, run, rows, summary);
+  const assessed = assess(blowdownFigures(blowdown, summary), { bandK: blowdown.limits?.nearBandK, bandFraction: blowdown.limits?.nearBandFraction });
+  const closes = summary.massClosure <= closureLimit && summary.energyClosure <= closureLimit;
+  const cautions = cautionsOfRun(blowdown, run, warnings);
+  return {
+    format: "ebbmark-result/1",
+    kind: "blowdown",
+    summary,
+    series: seriesOf(balance, rows, outletK),
+    energyAccount: accountOf(balance, ends, found.fluid.timeS, run.endTimeS),
+    verdict: closes ? assessed.verdict : "open",
+    limits: closes ? assessed.limits : assessed.limits.map((limit) => ({ ...limit, verdict: "open" as const, governs: false, note: "The run does not close." })),
+    warnings,
+    cautions: cautions.map((caution) => caution.words),
+    cautionIds: cautions.map((caution) => caution.id),
+    numerics: { relativeTolerance, steps: run.steps, evaluations: run.evaluations },
+  };
+}
+
+function refuseSolidStart(balance: Balance): void {
+  const { start, solids, fluid } = balance.model;
+  const { contents } = balance.at(0, balance.startState(), start.twoPhase ? "two-phase" : "one-phase");
+  if (solids.length > 0 && solidMargin(fluid, contents, solids) <= 0) {
+    throw new EngineError("solid-phase", `At ${start.temperatureK} K and ${Math.round(start.pressurePa)} Pa part of the fluid is already solid, which is outside this program. Start warmer.`, {}, "start");
+  }
+}
+
+type Extremes = { fluid: Extreme; wall: Extreme | undefined; outlet: Extreme; ventRate: Extreme };
+
+function extremesOf(balance: Balance, rows: Row[], outletK: number[]): Extremes {
+  const again = (row: Row, t: number) => sampleAt(balance, row.segment, row.step, t);
+  const column = (pick: (row: Row) => number): number[] => rows.map(pick);
+  return {
+    fluid: lowest(
+      rows,
+      column((row) => row.temperatureK),
+      (row, t) => again(row, t).temperatureK,
+    ),
+    wall: balance.model.wall
+      ? lowest(
+          rows,
+          column((row) => row.wallTemperatureK ?? 0),
+          (row, t) => again(row, t).wallTemperatureK ?? 0,
+        )
+      : undefined,
+    outlet: lowest(rows, outletK, (row, t) => outletTemperatureAt(balance, row.segment, row.step, t)),
+    ventRate: highest(
+      rows,
+      column((row) => row.ventRateKgPerS),
+      (row, t) => again(row, t).ventRateKgPerS,
+    ),
+  };
+}
+
+/** First, coldest and last state, each rebuilt from its temperature and pressure. */
+type Ends = { first: RebuiltState; coldest: RebuiltState; last: RebuiltState; lastY: number[] };
+
+function endStates(balance: Balance, run: Run, coldest: Extreme): Ends {
+  const stateAt = (t: number, side: "first" | "last"): { state: RebuiltState; y: number[] } => {
+    const all = run.segments.flatMap((segment) => segment.dense.steps.map((step) => ({ segment, step })));
+    const inside = all.filter(({ step }) => t >= step.t0 && t <= step.t1);
+    const place = (side === "first" ? inside[0] : inside.at(-1)) ?? all.at(side === "first" ? 0 : -1);
+    if (!place) throw new EngineError("no-convergence", "The run ended before its first step.");
+    const y = DenseRun.inside(place.step, t);
+    return { state: rebuiltState(balance.model.fluid, balance.at(t, y, place.segment.mode).contents), y };
+  };
+  const last = stateAt(run.endTimeS, "last");
+  return { first: stateAt(0, "first").state, coldest: stateAt(coldest.timeS, "last").state, last: last.state, lastY: last.y };
+}
+
+function summarise(balance: Balance, run: Run, rows: Row[], found: Extremes, ends: Ends): BlowdownSummary {
+  const first = rows[0];
+  const last = rows.at(-1);
+  if (!first || !last) throw new EngineError("no-convergence", "The run ended before its first step.");
+  const { energy, mass } = closures(balance, ends);
+  const time = (id: string): number | undefined => run.marks.get(id);
+  const optional = <K extends string>(key: K, value: number | undefined) => (value === undefined ? {} : ({ [key]: value } as Record<K, number>));
+  return {
+    initialMassKg: first.massKg,
+    finalMassKg: last.massKg,
+    ventedMassKg: last.ventedMassKg,
+    initialPressurePa: first.pressurePa,
+    initialTemperatureK: first.temperatureK,
+    finalTemperatureK: last.temperatureK,
+    finalPressurePa: last.pressurePa,
+    endTimeS: run.endTimeS,
+    endedBy: run.endedBy,
+    peakVentRateKgPerS: found.ventRate.value,
+    peakVentRateTimeS: found.ventRate.timeS,
+    minimumFluidTemperatureK: found.fluid.value,
+    minimumFluidTemperatureTimeS: found.fluid.timeS,
+    ...optional("minimumWallTemperatureK", found.wall?.value),
+    ...optional("minimumWallTemperatureTimeS", found.wall?.timeS),
+    minimumOutletTemperatureK: found.outlet.value,
+    minimumOutletTemperatureTimeS: found.outlet.timeS,
+    ...optional("timeToHalfGaugePressureS", time("half-gauge")),
+    ...optional("timeToSixPointNineBarGaugeS", time("6.9-bar-gauge")),
+    ...optional("timeToTargetPressureS", time("target")),
+    energyVentedJ: last.ventedEnergyJ,
+    heatFromWallJ: balance.heatFromWallJ(ends.lastY),
+    heatFromOutsideJ: balance.heatFromOutsideJ(ends.lastY),
+    massClosure: mass,
+    energyClosure: energy,
+  };
+}
+
+/**
+ * Mass:   |V/v0 M0 − V/v1 M1 − vented| over the start mass.
+ * Energy: |ΔU + ΔU_wall + vented − external heat| over the sum of their magnitudes, U from the rebuilt states.
+ */
+function closures(balance: Balance, { first, last, lastY }: Ends): { energy: number; mass: number } {
+  const { fluid, vessel, wall } = balance.model;
+  const amount = (state: RebuiltState): number => vessel.volumeM3 / state.molarVolumeM3PerMol;
+  const massOf = (state: RebuiltState): number => amount(state) * fluid.mixtureMolarMass(state.composition);
+  const change = amount(last) * last.internalEnergyJPerMol - amount(first) * first.internalEnergyJPerMol;
+  const wallChange = wall ? wall.energyAtJ(wall.temperatureAtK(balance.wallEnergyJ(lastY))) : 0;
+  const vented = balance.ventedEnergyJ(lastY);
+  const outside = balance.heatFromOutsideJ(lastY);
+  const sum = Math.abs(change) + Math.abs(wallChange) + Math.abs(vented) + Math.abs(outside);
+  return {
+    mass: Math.abs(massOf(first) - massOf(last) - balance.ventedMassKg(lastY)) / massOf(first),
+    energy: Math.abs(change + wallChange + vented - outside) / sum,
+  };
+}
+
+function accountOf(balance: Balance, { first, coldest, last, lastY }: Ends, coldestTimeS: number, endTimeS: number): EnergyAccount {
+  const { fluid, vessel, wall } = balance.model;
+  const total = (state: RebuiltState): number => (vessel.volumeM3 / state.molarVolumeM3PerMol) * state.internalEnergyJPerMol;
+  const [startJ, endJ] = [total(first), total(last)];
+  const heatFromWallJ = balance.heatFromWallJ(lastY);
+  const outsideJ = balance.heatFromOutsideJ(lastY);
+  // With a wall the outside heats the wall; what of it reached the fluid is in the heat from the wall.
+  const heatFromOutsideJ = wall ? 0 : outsideJ;
+  const ventedJ = balance.ventedEnergyJ(lastY);
+  return {
+    startToColdest: { ...threeSteps(fluid, first, coldest), atTimeS: coldestTimeS },
+    startToEnd: { ...threeSteps(fluid, first, last), atTimeS: endTimeS },
+    wholeRun: { startJ, heatFromWallJ, heatFromOutsideJ, ventedJ, endJ, leftOverJ: startJ + heatFromWallJ + heatFromOutsideJ - ventedJ - endJ },
+  };
+}

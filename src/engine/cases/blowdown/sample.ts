@@ -1,0 +1,46 @@
+/** One row of the series, copied out of the instant it was taken at. */
+import { throttleTemperature } from "../../flow/throttle";
+import { levelAtVolume } from "../../vessel/geometry";
+import type { Balance } from "./balance";
+import { DenseRun, type KeptStep } from "./dense-run";
+import type { Segment } from "./integrate-run";
+
+export type Sample = {
+  timeS: number;
+  pressurePa: number;
+  temperatureK: number;
+  wallTemperatureK: number | undefined;
+  massKg: number;
+  ventRateKgPerS: number;
+  ventedMassKg: number;
+  ventedEnergyJ: number;
+  vapourMoleFraction: number;
+  liquidVolumeM3: number;
+  throatTemperatureK: number;
+};
+
+export function sampleAt(balance: Balance, segment: Segment, step: KeptStep, t: number): Sample {
+  const y = DenseRun.inside(step, t);
+  const { contents, flow, ventRateKgPerS, wallTemperatureK } = balance.at(t, y, segment.mode);
+  return {
+    timeS: t,
+    pressurePa: contents.pressurePa,
+    temperatureK: contents.temperatureK,
+    wallTemperatureK,
+    massKg: contents.totalMolesMol * balance.model.fluid.mixtureMolarMass(contents.composition),
+    ventRateKgPerS,
+    ventedMassKg: balance.ventedMassKg(y),
+    ventedEnergyJ: balance.ventedEnergyJ(y),
+    vapourMoleFraction: contents.vapourMoleFraction,
+    liquidVolumeM3: contents.liquidVolumeM3,
+    throatTemperatureK: flow.throatTemperatureK,
+  };
+}
+
+/** Temperature of the stream behind the opening, at the back pressure. */
+export function outletTemperatureAt(balance: Balance, segment: Segment, step: KeptStep, t: number): number {
+  const { contents } = balance.at(t, DenseRun.inside(step, t), segment.mode);
+  return throttleTemperature(balance.model.fluid, contents.outlet, contents.outletComposition, balance.model.backPressurePa);
+}
+
+export const levelOf = (balance: Balance, sample: Sample): number | undefined => levelAtVolume(balance.model.vessel, sample.liquidVolumeM3);

@@ -1,0 +1,76 @@
+/** What the reader of a run must know: data used outside their range, doubtful regions, a run that was cut short. */
+import { findLibraryRow } from "../../substances/library";
+import type { BlowdownCase } from "../blowdown-case";
+import type { BlowdownSummary, Warning } from "../blowdown-result";
+import type { Run } from "./integrate-run";
+import type { Row } from "./series";
+import { carbonDioxideSublimationPa, solidCurves } from "./solid-check";
+import type { VesselModel } from "./vessel-model";
+
+export const closureLimit = 1e-4;
+
+export function warningsOf(blowdown: BlowdownCase, model: VesselModel, run: Run, rows: Row[], summary: BlowdownSummary): Warning[] {
+  return [
+    ...model.fluid.notes.map((message) => ({ code: "fluid-data", message })),
+    ...dataRange(blowdown, summary),
+    ...nearCritical(blowdown, model, rows),
+    ...solids(blowdown, run, rows, summary),
+    ...wallTable(model, summary),
+    ...howItEnded(blowdown, run),
+    ...closure(summary),
+  ];
+}
+
+function dataRange({ fluid }: BlowdownCase, { minimumFluidTemperatureK, minimumOutletTemperatureK }: BlowdownSummary): Warning[] {
+  const coldest = Math.min(minimumFluidTemperatureK, minimumOutletTemperatureK);
+  return fluid.components.flatMap(({ id, moleFraction, custom }) => {
+    const low = custom ? custom.idealGasHeatCapacityOverR.rangeK[0] : findLibraryRow(id)?.cp0.range_K[0];
+    if (low === undefined || moleFraction === 0 || coldest >= low) return [];
+    return [{ code: "outside-data-range", message: `The fluid reaches ${coldest.toFixed(1)} K; the heat capacity of ${id} is known from ${low} K upward.` }];
+  });
+}
+
+/** Density within 30 % of the critical and temperature within 2 %: the cubic's energies are least sure there (pure fluids). */
+function nearCritical({ fluid }: BlowdownCase, model: VesselModel, rows: Row[]): Warning[] {
+  if (fluid.components.filter((component) => component.moleFraction > 0).length !== 1) return [];
+  const only = fluid.components.findIndex((component) => component.moleFraction > 0);
+  const Tc = model.fluid.criticalTemperaturesK[only] ?? 0;
+  const pc = model.fluid.criticalPressuresPa[only] ?? 0;
+  const close = rows.find((row) => Math.abs(row.temperatureK / Tc - 1) < 0.02 && Math.abs(row.pressurePa / pc - 1) < 0.1);
+  return close ? [{ code: "near-critical", message: `At ${close.timeS.toPrecision(3)} s the fluid is near its critical point, where the equation of state is least sure.` }] : [];
+}
+
+function solids(blowdown: BlowdownCase, run: Run, rows: Row[], { minimumFluidTemperatureK }: BlowdownSummary): Warning[] {
+  const found: Warning[] = [];
+  if (run.endedBy === "solid-phase") {
+    found.push({ code: "solid-phase", message: `At ${run.endTimeS.toPrecision(4)} s solid begins to form. The run ends there: solid may plug the outlet and hold back pressure, and re-warming releases it.` });
+  }
+  const dioxide = solidCurves(blowdown.fluid).find((curve) => curve.sublimationPa);
+  const throat = rows.find((row) => dioxide?.pure && row.throatTemperatureK < dioxide.triplePointK && carbonDioxideSublimationPa(row.throatTemperatureK) < row.pressurePa);
+  if (throat && run.endedBy !== "solid-phase") found.push({ code: "solid-in-throat", message: `From ${throat.timeS.toPrecision(3)} s the throat is below the triple point of carbon dioxide: solid can form in the outlet.` });
+  const present = blowdown.fluid.components.filter(({ moleFraction, custom, pseudo }) => moleFraction > 0 && !custom && !pseudo);
+  for (const { id, moleFraction } of present.length > 1 ? present : []) {
+    const triple = findLibraryRow(id)?.triplePoint.T_K;
+    if (triple !== undefined && minimumFluidTemperatureK < triple) {
+      found.push({ code: "below-triple-point", message: `The fluid reaches ${minimumFluidTemperatureK.toFixed(1)} K, below the triple point of ${id} (${triple.toFixed(1)} K, mole fraction ${moleFraction}). Check whether it freezes out; this is not computed.` });
+    }
+  }
+  return found;
+}
+
+function wallTable({ wall }: VesselModel, { minimumWallTemperatureK }: BlowdownSummary): Warning[] {
+  if (!wall?.fromTable || minimumWallTemperatureK === undefined) return [];
+  const [low, high] = wall.steel.specificHeatRangeK;
+  if (minimumWallTemperatureK >= low && minimumWallTemperatureK <= high) return [];
+  return [{ code: "outside-data-range", message: `The wall reaches ${minimumWallTemperatureK.toFixed(1)} K; the specific heat of ${wall.steel.name.toLowerCase()} is tabulated from ${low} to ${high} K.` }];
+}
+
+function howItEnded({ run: asked }: BlowdownCase, run: Run): Warning[] {
+  if (run.endedBy !== "back-pressure") return [];
+  return [{ code: "back-pressure-reached", message: `The pressure met the back pressure before it reached ${asked.stopPressurePa} Pa; nothing flows from there on.` }];
+}
+
+function closure({ massClosure, energyClosure }: BlowdownSummary): Warning[] {
+  if (massClosure <= closureLimit && energyClosure <= closureLimit) return [];
+  return [{ code: "does-not-close", message: `Mass closes to ${massClosure.toExponential(1)} and energy to ${energyClosure.toExponential(1)}, worse than ${closureLimit}. No verdict is given; tighten the tolerance.` }];
+}

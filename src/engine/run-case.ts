@@ -1,0 +1,52 @@
+/** One case in, one result document out, whatever its kind. */
+import { runBlowdown, type BlowdownOptions } from "./cases/blowdown/run-blowdown";
+import type { BlowdownCase } from "./cases/blowdown-case";
+import type { BlowdownResult, Confirmation } from "./cases/blowdown-result";
+import { confirm } from "./cases/blowdown/confirm";
+import type { FlashCase, FlashResult } from "./cases/flash-case";
+import type { NozzleCase, NozzleResult } from "./cases/nozzle-case";
+import type { PathCase, PathResult } from "./cases/path-case";
+import { runNozzle } from "./cases/nozzle/run-nozzle";
+import { runFlash } from "./flash/run-flash";
+import { runPath } from "./path/run-path";
+
+export type EngineCase = PathCase | FlashCase | NozzleCase | BlowdownCase;
+export type EngineResult = PathResult | FlashResult | NozzleResult | BlowdownResult;
+
+export type RunContext = Pick<BlowdownOptions, "onProgress" | "isCancelled" | "coarse"> & {
+  engineVersion: string;
+  caseSha256: string;
+  /** A clock in milliseconds, where the caller has one; the engine has none of its own. */
+  now?: () => number;
+};
+
+/** Throws EngineError: the case is well formed but cannot be computed, or it was cancelled. */
+export function runCase(document: BlowdownCase, context: RunContext): BlowdownResult;
+export function runCase(document: EngineCase, context: RunContext): EngineResult;
+export function runCase(document: EngineCase, context: RunContext): EngineResult {
+  switch (document.kind) {
+    case "path":
+      return runPath(document);
+    case "flash":
+      return runFlash(document);
+    case "nozzle":
+      return runNozzle(document);
+    case "blowdown":
+      return stamp(() => runBlowdown(document, context), context);
+  }
+}
+
+/** A blowdown and the same again at a tenfold tighter tolerance, with the change in the governing figures. */
+export function runConfirmed(document: BlowdownCase, context: RunContext): { result: BlowdownResult; confirmation: Confirmation } {
+  const half = (from: number) => (part: number) => context.onProgress?.(from + part / 2);
+  const result = stamp(() => runBlowdown(document, { ...context, onProgress: half(0) }), context);
+  const relativeTolerance = result.numerics.relativeTolerance / 10;
+  const tighter = stamp(() => runBlowdown(document, { ...context, relativeTolerance, onProgress: half(0.5) }), context);
+  return { result, confirmation: confirm(result, tighter) };
+}
+
+function stamp(work: () => ReturnType<typeof runBlowdown>, { engineVersion, caseSha256, now }: RunContext): BlowdownResult {
+  const started = now?.() ?? 0;
+  const { format, kind, numerics, ...body } = work();
+  return { format, kind, engineVersion, caseSha256, ...body, numerics: { ...numerics, wallClockMs: (now?.() ?? 0) - started } };
+}
