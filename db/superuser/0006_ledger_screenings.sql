@@ -159,8 +159,8 @@ BEGIN
   IF p_rev <> coalesce(last.rev, 0) + 1 THEN
     PERFORM ledger.refuse('EB409', 'wrong-state', format('The next revision to sign is %s.', coalesce(last.rev, 0) + 1));
   END IF;
-  IF body -> 'replaces' IS DISTINCT FROM CASE WHEN last.rev IS NULL THEN 'null'::jsonb ELSE
-       jsonb_build_object('contentSha256', last.content_sha256, 'reason', draft.reason, 'rev', last.rev) END THEN
+  IF body -> 'replaces' IS DISTINCT FROM (CASE WHEN last.rev IS NULL THEN 'null'::jsonb ELSE
+       jsonb_build_object('contentSha256', last.content_sha256, 'reason', draft.reason, 'rev', last.rev) END) THEN
     PERFORM ledger.refuse('EB422', 'invalid-request', 'The statement must name the revision it replaces, its content and the reason.');
   END IF;
 

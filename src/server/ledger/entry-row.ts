@@ -1,7 +1,7 @@
 import "server-only";
 import type { EntryRow } from "@/contracts/views";
 import { type EntryKind, entryKinds } from "@/ledger/entry-kinds";
-import { recordName } from "./record-name";
+import { recordName } from "@/contracts/record-name";
 
 export type EntryColumns = {
   seq: number;

@@ -10,7 +10,7 @@ import type { EntryRow, Page } from "@/contracts/views";
 import type { StoredEntry } from "@/ledger/verify-entry";
 import { entryRow } from "./entry-row";
 import { entriesWithin, type LedgerReader } from "./reader";
-import { recordNumber } from "./record-name";
+import { recordNumber } from "@/contracts/record-name";
 
 /** What the log can be asked for. `before` is the number of the last row of the page before. Times are UTC days, both included. */
 export type EntryFilter = {
@@ -63,14 +63,17 @@ function described(readDatabase: Pick<Database, "select">) {
   return readDatabase
     .select(columns)
     .from(entry)
-    .leftJoin(person, sql`${person.id}::text = ${entry.actor}`)
+    .leftJoin(person, sql`${person.id} = case when ${entry.actor} <> 'system' then ${entry.actor}::uuid end`)
     .leftJoin(
       about,
-      sql`${about.id}::text = case when ${entry.subject} like 'person:%' then ${entry.subjectId}
-        when ${entry.subject} like 'member:%' then split_part(${entry.subject}, ':', 3) end`,
+      sql`${about.id} = case when ${entry.subject} like 'person:%' then ${entry.subjectId}::uuid
+        when ${entry.subject} like 'member:%' then split_part(${entry.subject}, ':', 3)::uuid end`,
     )
-    .leftJoin(facility, sql`${facility.id}::text = ${entry.subjectId}`)
-    .leftJoin(screening, sql`${screening.id}::text = ${entry.subjectId}`)
+    .leftJoin(
+      facility,
+      sql`${facility.id} = case when ${entry.subject} like 'facility:%' or ${entry.subject} like 'member:%' then ${entry.subjectId}::uuid end`,
+    )
+    .leftJoin(screening, sql`${screening.id} = case when ${entry.subject} like 'screening:%' then ${entry.subjectId}::uuid end`)
     .$dynamic();
 }
 

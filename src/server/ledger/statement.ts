@@ -11,7 +11,7 @@ import { type RecordContent, recordContentSchema } from "@/contracts/record-cont
 import type { AcknowledgedCaution, SigningAct, SigningMethod, SigningPerson } from "@/ledger/statements";
 import { meanings } from "@/ledger/statements";
 import { Refusal } from "../refusal";
-import { recordName } from "./record-name";
+import { recordName } from "@/contracts/record-name";
 
 /** One database for each login. */
 export type Databases = Record<keyof DatabaseUrls, Database>;
