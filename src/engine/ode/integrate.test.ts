@@ -108,6 +108,14 @@ describe("integrate", () => {
     expect(Math.abs((second.y[0] ?? 0) / Math.exp(-5) - 1)).toBeLessThan(1e-6);
   });
 
+  it("ends on the far side of an event that is a jump, so that a restart does not meet it again", () => {
+    const value = (_t: number, y: number[]) => ((y[0] ?? 0) > 0.37 ? 1 : -1);
+    const run = integrate(decay({ events: [{ id: "jump", stops: true, value }] }));
+    expect(run.stoppedBy).toBe("jump");
+    expect(value(run.t, run.y)).toBe(-1);
+    expect(Math.abs(run.t + Math.log(0.37))).toBeLessThan(1e-8);
+  });
+
   it("hands over steps that join, with dense output as good as the ends", () => {
     let end = 0;
     let worst = 0;

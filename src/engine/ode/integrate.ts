@@ -139,6 +139,13 @@ function checkArguments({ t0, tEnd, y0, relativeTolerance, absoluteTolerance, ti
   if (!(tEnd >= t0)) throw new RangeError("the end must not be before the start");
 }
 
+/** The root from the side that the event leads to, so that a restart there doesn't meet it again. */
+function farSide(f: (t: number) => number, bracket: { a: number; fa: number; b: number; fb: number }, tolerance: number): number {
+  let place = bracketedRoot(f, bracket, tolerance);
+  for (let step = tolerance; place < bracket.b && f(place) > 0; step *= 2) place = Math.min(place + step, bracket.b);
+  return place;
+}
+
 /** Looks for the earliest stopping event of a step and notes the others that come before it. */
 class EventWatch {
   readonly marks: { id: string; t: number; y: number[] }[] = [];
@@ -164,8 +171,7 @@ class EventWatch {
         const before = this.last[i] ?? Number.NaN;
         const now = event.value(to, y);
         if (before > 0 && now <= 0 && !this.done.has(event.id)) {
-          const place = bracketedRoot((time) => event.value(time, at(time)), { a: from, fa: before, b: to, fb: now }, 1e-10 * Math.max(to, 1e-3 * (t - told)));
-          found.push({ event, t: place });
+          found.push({ event, t: farSide((time) => event.value(time, at(time)), { a: from, fa: before, b: to, fb: now }, 1e-10 * Math.max(to, 1e-3 * (t - told))) });
         }
         this.last[i] = now;
       });

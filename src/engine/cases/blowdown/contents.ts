@@ -6,6 +6,7 @@
  * Objects are reused: copy what has to survive the next call.
  */
 import { createPhaseState, type FluidModel, type PhaseState } from "../../eos/fluid-model";
+import { EngineError } from "../../errors";
 import type { Equilibrium } from "../../flash/equilibrium";
 import { flashUV } from "../../flash/flash-uv";
 
@@ -27,6 +28,9 @@ export type Contents = {
   /** Present where two phases were found. */
   equilibrium: Equilibrium | undefined;
 };
+
+/** A tangent-plane distance this close to zero lies on the phase boundary: what splits off there is too little to weigh. */
+const onTheBoundary = -1e-7;
 
 export class ContentsFinder {
   private readonly z: Float64Array;
@@ -54,6 +58,12 @@ export class ContentsFinder {
     return mode === "one-phase" ? this.homogeneous(total, u, v) : this.equilibrium(total, u, v);
   }
 
+  /** The last drop or bubble may be too small for a flash to find; the stability test still measures how near the boundary is. */
+  private isOnBoundary({ temperatureK, pressurePa, composition }: Contents): boolean {
+    if (!(pressurePa > 0)) return false;
+    return this.fluid.stability(temperatureK, pressurePa, composition).tangentPlaneDistance > onTheBoundary;
+  }
+
   private homogeneous(total: number, u: number, v: number): Contents {
     const state = this.fluid.phaseFromEnergy(u, v, this.z, this.guessK, this.state);
     this.guessK = state.temperatureK;
@@ -72,7 +82,14 @@ export class ContentsFinder {
   }
 
   private equilibrium(total: number, u: number, v: number): Contents {
-    const found = flashUV(this.fluid, { internalEnergyJPerMol: u, molarVolumeM3PerMol: v }, this.z, this.seed);
+    let found: Equilibrium;
+    try {
+      found = flashUV(this.fluid, { internalEnergyJPerMol: u, molarVolumeM3PerMol: v }, this.z, this.seed);
+    } catch (error) {
+      const alone = error instanceof EngineError && error.code === "no-convergence" ? this.homogeneous(total, u, v) : undefined;
+      if (alone && this.isOnBoundary(alone)) return alone;
+      throw error;
+    }
     const [light, dense] = found.phases;
     if (!light) throw new RangeError("an equilibrium without a phase");
     if (dense) this.seed = found;

@@ -70,6 +70,7 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
       events: [
         { id: "stop", stops: true, value: (time, state) => balance.at(time, state, segment.mode).contents.pressurePa / stopAt - 1 },
         phaseEvent(balance, segment.mode),
+        subsonicEvent(balance, segment.mode),
         ...solidEvent(balance, segment.mode, model.solids),
         ...marksWanted
           .filter(({ id }) => !run.marks.has(id))
@@ -126,6 +127,19 @@ function phaseEvent(balance: Balance, mode: PhaseMode): IntegrationEvent {
       const { contents } = balance.at(time, state, mode);
       if (mode === "two-phase") return contents.phases === 2 ? 1 : -1;
       return isStableAlone(balance.model.fluid, contents) ? 1 : -1;
+    },
+  };
+}
+
+/** Where the throat stops being sonic the rate has a kink; the integrator starts afresh there. Armed only while the flow is choked. */
+function subsonicEvent(balance: Balance, mode: PhaseMode): IntegrationEvent {
+  const { backPressurePa } = balance.model;
+  return {
+    id: "subsonic",
+    stops: true,
+    value: (time, state) => {
+      const { flow } = balance.at(time, state, mode);
+      return flow.choked ? flow.throatPressurePa / backPressurePa - 1 : -1;
     },
   };
 }
