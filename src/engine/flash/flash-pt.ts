@@ -2,7 +2,7 @@ import { EngineError } from "../errors";
 import type { FluidModel } from "../eos/fluid-model";
 import { assemble } from "./assemble";
 import type { Equilibrium } from "./equilibrium";
-import { createTwoPhaseWork, solveTwoPhase, type TwoPhaseWork } from "./two-phase-pt";
+import { createTwoPhaseWork, solveTwoPhase, splitOffTrial, type TwoPhaseWork } from "./two-phase-pt";
 import { wilsonLnK } from "./wilson";
 
 /**
@@ -63,14 +63,14 @@ export function findSplit(
 
   const test = model.stability(T, p, z);
   if (test.stable) return false;
-  for (const attempt of [0, 1]) {
-    for (let i = 0; i < z.length; i++) {
-      const ratio = z[i]! > 0 ? Math.log(Math.max(test.trialComposition[i]!, 1e-290) / z[i]!) : 0;
-      work.lnK[i] = (test.trialIsVapour ? ratio : -ratio) * (attempt === 0 ? 1 : 0.5);
-    }
-    work.beta = test.trialIsVapour ? 0.1 : 0.9;
-    if (solveTwoPhase(model, T, p, z, work) === "converged" && lowersGibbs(model, T, p, z, work)) return true;
+  for (let i = 0; i < z.length; i++) {
+    const ratio = z[i]! > 0 ? Math.log(Math.max(test.trialComposition[i]!, 1e-290) / z[i]!) : 0;
+    work.lnK[i] = test.trialIsVapour ? ratio : -ratio;
   }
+  work.beta = test.trialIsVapour ? 0.1 : 0.9;
+  if (solveTwoPhase(model, T, p, z, work) === "converged" && lowersGibbs(model, T, p, z, work)) return true;
+  if (splitOffTrial(model, T, p, z, test.trialComposition, work) === "converged" && lowersGibbs(model, T, p, z, work))
+    return true;
   throw new EngineError("no-convergence", "the feed is unstable, but the two phases could not be found", {
     temperatureK: T,
     pressurePa: p,
@@ -78,20 +78,13 @@ export function findSplit(
   });
 }
 
-/** Is the split below the homogeneous phase in Gibbs energy? Fills scratch; leaves the split as it is. */
+/** Is the split below the homogeneous phase in Gibbs energy? */
 function lowersGibbs(model: FluidModel, T: number, p: number, z: ArrayLike<number>, work: TwoPhaseWork): boolean {
-  const lnPhi = work.step; // free between solves
+  const lnPhi = work.gradient; // free between solves
   model.lnFugacityCoefficients(T, p, z, "stable", lnPhi);
-  let change = 0;
-  for (let i = 0; i < z.length; i++) {
-    if (!(z[i]! > 0)) continue;
-    const vapourShare = work.beta * work.vapour.composition[i]!;
-    // both phases have the same fugacity: take the one in which the component is plentiful
-    const rich = work.lnK[i]! > 0 ? work.vapour : work.liquid;
-    change += z[i]! * (Math.log(rich.composition[i]! / z[i]!) + rich.lnPhi[i]! - lnPhi[i]!);
-    if (!(vapourShare <= z[i]! * (1 + 1e-9))) return false;
-  }
-  return change < 0;
+  let homogeneous = 0;
+  for (let i = 0; i < z.length; i++) if (z[i]! > 0) homogeneous += z[i]! * (Math.log(z[i]!) + lnPhi[i]!);
+  return work.gibbs < homogeneous;
 }
 
 function straddles(z: ArrayLike<number>, lnK: Float64Array): boolean {
