@@ -11,9 +11,9 @@ import { Trouble } from "./trouble.mjs";
  * wanted   the data folder in the home
  * Returns  `{ dataFolder, account }`
  */
-export function placeCluster(wanted, elsewhere = "/var/tmp") {
+export async function placeCluster(processes, wanted, elsewhere = "/var/tmp") {
   const account = postgresAccount(wanted);
-  if (account.uid === undefined || (canReach(dirname(wanted), account) && canOwn(wanted, account)))
+  if (account.uid === undefined || ((await canReach(processes, dirname(wanted), account)) && canOwn(wanted, account)))
     return { dataFolder: wanted, account };
 
   const fallback = fallbackFolder(wanted, elsewhere);

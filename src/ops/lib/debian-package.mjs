@@ -4,10 +4,11 @@ import { Trouble } from "./trouble.mjs";
 /**
  * Installs one Debian package as root. Without root, or without apt, it stops with the one command to run.
  *
- * name  of the package
- * what  the program in words
+ * name           of the package
+ * what           the program in words
+ * before, after  shell commands around the installation; `after` runs however it ends
  */
-export async function installDebianPackage(processes, { name, what, say }) {
+export async function installDebianPackage(processes, { name, what, say, before = "true", after = "true" }) {
   const command = `apt-get update && apt-get install -y --no-install-recommends ${name}`;
   if (!existsSync("/usr/bin/apt-get")) {
     throw new Trouble(
@@ -18,8 +19,13 @@ export async function installDebianPackage(processes, { name, what, say }) {
     throw new Trouble(`${what} is not installed. Install it, then run the command again: sudo sh -c '${command}'`);
   }
   say(`Installing ${what} from Debian …`);
-  const { code, output, logFile } = await processes.runToEnd(`apt-${name}`, "sh", ["-c", command], {
+  // Packages that an earlier, broken-off installation left half done would make apt-get refuse.
+  const script = `trap '${after}' EXIT; trap 'exit 143' TERM; ${before} && dpkg --configure -a && ${command}`;
+  const { code, output, logFile } = await processes.runToEnd(`apt-${name}`, "sh", ["-c", script], {
     env: { ...process.env, DEBIAN_FRONTEND: "noninteractive" },
+    // The signal is for the shell alone, which lets the package manager finish: breaking it off would leave the system half configured.
+    toGroup: false,
+    patienceMs: 180_000,
   });
   if (code !== 0) {
     const reason = output.split("\n").findLast((line) => line.startsWith("E:")) ?? "E: no reason given";

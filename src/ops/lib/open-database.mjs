@@ -10,7 +10,7 @@ import { readSecrets } from "./secrets.mjs";
  */
 export async function openDatabase(processes, places, { say, throwAway = false }) {
   const servers = await findOrInstallPostgres(processes, { say });
-  const { dataFolder, account } = placeCluster(places.cluster);
+  const { dataFolder, account } = await placeCluster(processes, places.cluster);
   const { bin, major } = choosePostgres(servers, dataFolder);
   const haveData = clusterExists(dataFolder);
   const secrets = readSecrets(places.home, { haveData });

@@ -1,4 +1,3 @@
-import { execFileSync } from "node:child_process";
 import { existsSync, readFileSync, statSync } from "node:fs";
 import { Trouble } from "./trouble.mjs";
 
@@ -23,11 +22,12 @@ export function postgresAccount(dataFolder) {
 }
 
 /** True when the account may pass through the folder and every parent of it. */
-export function canReach(folder, { uid, gid }) {
-  try {
-    execFileSync("test", ["-x", folder], { uid, gid, cwd: "/", stdio: "ignore" });
-    return true;
-  } catch {
-    return false;
-  }
+export async function canReach(processes, folder, { uid, gid }) {
+  const { code } = await processes.runToEnd("reach", "test", ["-x", folder], {
+    uid,
+    gid,
+    cwd: "/",
+    env: { PATH: process.env.PATH },
+  });
+  return code === 0;
 }

@@ -1,11 +1,17 @@
-import { execFileSync } from "node:child_process";
-import { accessSync, constants, existsSync, mkdirSync, readFileSync, readdirSync, rmSync, writeFileSync } from "node:fs";
-import { dirname, join } from "node:path";
+import { accessSync, constants, existsSync, readFileSync, readdirSync } from "node:fs";
+import { join } from "node:path";
 import { installDebianPackage } from "./debian-package.mjs";
 import { Trouble } from "./trouble.mjs";
 
 /** The oldest server that the migrations are tested with. */
 const lowestMajor = 15;
+
+/** Keeps Debian from making and starting a cluster of its own on port 5432 while the package installs. */
+const withoutDebianCluster = {
+  before:
+    "mkdir -p /etc/postgresql-common/createcluster.d && echo create_main_cluster = false > /etc/postgresql-common/createcluster.d/ebbmark.conf",
+  after: "rm -f /etc/postgresql-common/createcluster.d/ebbmark.conf",
+};
 
 /**
  * Every server that can be used, installed from Debian when there is none.
@@ -13,10 +19,10 @@ const lowestMajor = 15;
  * Returns  `{ bin, major }[]`, newest first
  */
 export async function findOrInstallPostgres(processes, { say }) {
-  const found = usable(listPostgres());
+  const found = await listPostgres(processes);
   if (found.length > 0) return found;
-  await withoutDebianCluster(() => installDebianPackage(processes, { name: "postgresql", what: "PostgreSQL", say }));
-  const installed = usable(listPostgres());
+  await installDebianPackage(processes, { name: "postgresql", what: "PostgreSQL", say, ...withoutDebianCluster });
+  const installed = await listPostgres(processes);
   if (installed.length === 0) {
     throw new Trouble(
       `Debian's PostgreSQL is older than ${lowestMajor}. Install PostgreSQL ${lowestMajor} or newer, then run the command again.`,
@@ -25,18 +31,25 @@ export async function findOrInstallPostgres(processes, { say }) {
   return installed;
 }
 
-const usable = (servers) => servers.filter(({ major }) => major >= lowestMajor);
+/**
+ * Every installed server, newest first: Debian's folders, which are named by the version, then those on PATH, which are asked for it.
+ * `psql` alone is only a client.
+ */
+async function listPostgres(processes) {
+  const debian = "/usr/lib/postgresql";
+  const known = existsSync(debian)
+    ? readdirSync(debian).map((version) => ({ bin: join(debian, version, "bin"), major: Number.parseInt(version, 10) }))
+    : [];
+  const servers = known.filter(({ bin }) => isServer(bin));
+  for (const bin of (process.env.PATH ?? "").split(":").filter((folder) => folder && isServer(folder))) {
+    const { output } = await processes.runToEnd("postgres-version", join(bin, "postgres"), ["--version"], { cwd: "/" });
+    servers.push({ bin, major: Number(/\(PostgreSQL\) (\d+)/.exec(output)?.[1] ?? 0) });
+  }
+  return servers.filter(({ major }) => major >= lowestMajor).sort((a, b) => b.major - a.major);
+}
 
-/** Every installed server, newest first: Debian's folders, then the one on PATH. `psql` alone is only a client. */
-export function listPostgres(debian = "/usr/lib/postgresql", path = process.env.PATH ?? "") {
-  const versions = existsSync(debian) ? readdirSync(debian).map((version) => join(debian, version, "bin")) : [];
-  const bins = [...new Set([...versions, ...path.split(":").filter(Boolean)])].filter((bin) =>
-    ["initdb", "postgres", "pg_controldata"].every((name) => canRun(join(bin, name))),
-  );
-  return bins
-    .map((bin) => ({ bin, major: majorOf(bin) }))
-    .filter(({ major }) => major > 0)
-    .sort((a, b) => b.major - a.major);
+function isServer(bin) {
+  return ["initdb", "postgres", "pg_controldata"].every((name) => canRun(join(bin, name)));
 }
 
 /** The newest server, or the one of the major version that made the cluster in the data folder. */
@@ -54,34 +67,11 @@ export function choosePostgres(servers, dataFolder) {
   return match;
 }
 
-function majorOf(bin) {
-  try {
-    const text = execFileSync(join(bin, "postgres"), ["--version"], { encoding: "utf8", cwd: dirname(bin) });
-    return Number(/\(PostgreSQL\) (\d+)/.exec(text)?.[1] ?? 0);
-  } catch {
-    return 0;
-  }
-}
-
 function canRun(file) {
   try {
     accessSync(file, constants.X_OK);
     return true;
   } catch {
     return false;
-  }
-}
-
-/** Keeps Debian from making and starting a cluster of its own on port 5432 while the package installs. */
-async function withoutDebianCluster(install) {
-  const folder = "/etc/postgresql-common/createcluster.d";
-  const file = join(folder, "ebbmark.conf");
-  if (process.getuid?.() !== 0) return install();
-  mkdirSync(folder, { recursive: true });
-  writeFileSync(file, "create_main_cluster = false\n");
-  try {
-    return await install();
-  } finally {
-    rmSync(file, { force: true });
   }
 }

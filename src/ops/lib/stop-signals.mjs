@@ -1,3 +1,6 @@
+/** A Ctrl-C reaches us twice, from the terminal and from npm, which passes on its own; only a later one is a second wish. */
+const sameWishMs = 1500;
+
 const numbers = { SIGHUP: 1, SIGINT: 2, SIGTERM: 15 };
 
 /**
@@ -8,14 +11,17 @@ const numbers = { SIGHUP: 1, SIGINT: 2, SIGTERM: 15 };
  */
 export function onStopSignals({ stop, stopNow, say }) {
   const state = { stopping: false };
+  let since = 0;
 
   async function take(signal, words) {
     const exitCode = 128 + numbers[signal];
     if (state.stopping) {
+      if (performance.now() - since < sameWishMs) return;
       stopNow();
       process.exit(exitCode);
     }
     state.stopping = true;
+    since = performance.now();
     say(words);
     try {
       await stop();
