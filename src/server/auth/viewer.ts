@@ -1,6 +1,4 @@
 import "server-only";
-import { cookies } from "next/headers";
-import { redirect } from "next/navigation";
 import { pages } from "@/contracts/paths";
 import type { Role } from "@/contracts/roles";
 import type { ViewerView } from "@/contracts/views";
@@ -37,16 +35,20 @@ export async function viewerFromCookie(sealed: string | undefined): Promise<View
   return loaded && fromSession(loaded);
 }
 
+// Next.js is loaded where a page asks for it: jobs and tests use this file too, and have no page.
+
 /** For pages that also serve strangers. */
 export async function currentViewer(): Promise<Viewer | null> {
+  const { cookies } = await import("next/headers");
   return viewerFromCookie((await cookies()).get(cookieName())?.value);
 }
 
 /** For pages. Sends strangers to the sign-in page, and people with a first password to the page that changes it. */
 export async function requireViewer(options: { evenIfPasswordMustChange?: true } = {}): Promise<Viewer> {
   const viewer = await currentViewer();
-  if (!viewer) redirect(pages.signIn);
-  if (viewer.mustChangePassword && !options.evenIfPasswordMustChange) redirect(pages.changePassword);
+  const { redirect } = await import("next/navigation");
+  if (!viewer) return redirect(pages.signIn);
+  if (viewer.mustChangePassword && !options.evenIfPasswordMustChange) return redirect(pages.changePassword);
   return viewer;
 }
 
