@@ -29,6 +29,19 @@ BEGIN
 END
 $$;
 
+-- Kinds come with a migration, not even from the owner of the record.
+CREATE FUNCTION ledger.check_kind() RETURNS trigger LANGUAGE plpgsql
+SET search_path = pg_catalog, pg_temp AS $$
+BEGIN
+  IF NOT (SELECT r.rolsuper FROM pg_catalog.pg_roles r WHERE r.rolname = session_user) THEN
+    RAISE EXCEPTION USING ERRCODE = 'EB403', MESSAGE = 'not-allowed', DETAIL = 'Entry kinds are added by migrations only.';
+  END IF;
+  RETURN NEW;
+END
+$$;
+CREATE TRIGGER by_migration BEFORE INSERT ON ledger.kind FOR EACH ROW EXECUTE FUNCTION ledger.check_kind();
+ALTER TABLE ledger.kind ENABLE ALWAYS TRIGGER by_migration;
+
 CREATE FUNCTION ledger.check_entry() RETURNS trigger LANGUAGE plpgsql
 SET search_path = pg_catalog, pg_temp AS $$
 DECLARE

@@ -118,6 +118,7 @@ $$;
 CREATE FUNCTION ledger.found(p_origin text) RETURNS ledger.receipt LANGUAGE plpgsql SECURITY DEFINER
 SET search_path = pg_catalog, pg_temp AS $$
 BEGIN
+  IF EXISTS (SELECT FROM ledger.origin) THEN PERFORM ledger.refuse('EB409', 'wrong-state', 'The record is founded already.'); END IF;
   INSERT INTO ledger.origin (origin) VALUES (p_origin);
   INSERT INTO ledger.head (size, hash, at) VALUES (0, sha256(convert_to(p_origin, 'UTF8')), '0001-01-01T00:00:00.000000Z');
   RETURN ledger.append_('genesis', 'system', 'ledger', 'genesis-1', format('{"format":"ebbmark-ledger/1","origin":"%s"}', p_origin));
