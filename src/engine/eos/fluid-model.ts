@@ -13,7 +13,8 @@ import type { Substance } from "../substances/substance";
  *
  * One-phase methods answer for ONE homogeneous phase whether or not it is stable; they never look for a second one.
  * `stability` says whether a phase splits, and `src/engine/flash/` finds the equilibrium:
- *   flash-pt.ts  flash-ph.ts  flash-ps.ts  flash-uv.ts  flash-tq.ts  flash-pq.ts  (see `Equilibrium` in flash/equilibrium.ts)
+ *   flash-pt.ts (flashPT)   flash-ph.ts (flashPH, flashPS)   flash-uv.ts (flashUV, flashSV)   flash-quality.ts (flashTQ, flashPQ)
+ *   verify-phases.ts (test of an accepted step)   saturation-pure.ts   all answer with an `Equilibrium` (flash/equilibrium.ts)
  *
  * A model holds scratch arrays: it is cheap to share inside one thread and must not be shared across threads.
  * Every answer is a pure function of the arguments; guesses are seeds only and change the answer by round-off at most.

@@ -26,4 +26,9 @@ export interface Equilibrium {
   vapourMoleFraction: number;
   phase: PhaseKind | "two-phase";
   phases: EquilibriumPhase[];
+  /**
+   * Set when one of the two phases would split again: a third phase (free water, a second liquid) exists and is not in the
+   * answer. `verifyPhases` makes the same test for an equilibrium from any flash.
+   */
+  thirdPhase?: boolean;
 }

@@ -2,7 +2,8 @@ import { EngineError } from "../errors";
 import type { FluidModel } from "../eos/fluid-model";
 import { assemble } from "./assemble";
 import type { Equilibrium } from "./equilibrium";
-import { createTwoPhaseWork, solveTwoPhase, splitOffTrial, type TwoPhaseWork } from "./two-phase-pt";
+import { minimiseGibbs } from "./minimise-gibbs";
+import { createTwoPhaseWork, solveTwoPhase, splitOffTrial, type TwoPhaseOutcome, type TwoPhaseWork } from "./two-phase-pt";
 import { wilsonLnK } from "./wilson";
 
 /**
@@ -23,19 +24,54 @@ export function flashPT(
 ): Equilibrium {
   requireState(model, T, p);
   const work = flashWork(z.length);
-  if (findSplit(model, T, p, z, work, seed)) {
-    return assemble(model, T, p, [
+  const split = findSplit(model, T, p, z, work, seed);
+  if (split !== "one-phase") {
+    const found = assemble(model, T, p, [
       { moleFraction: work.beta, composition: work.vapour.composition, molarVolume: work.vapour.molarVolume },
       { moleFraction: 1 - work.beta, composition: work.liquid.composition, molarVolume: work.liquid.molarVolume },
     ]);
+    return split === "third-phase" ? { ...found, thirdPhase: true } : found;
   }
   model.residual.setComposition(z);
   const molarVolume = model.residual.volumeAtPressure(T, p, "stable");
   return assemble(model, T, p, [{ moleFraction: 1, composition: z, molarVolume }]);
 }
 
-/** Leaves a converged split in `work` and returns true, or returns false when the feed is one phase. */
+type Split = "one-phase" | "two-phase" | "third-phase";
+
+/**
+ * Leaves the split of lowest Gibbs energy that was found in `work`. A split is tested like any phase: where one of its own phases
+ * would split again, the new phase is tried as a partner of the feed, and what still fails the test is reported as three phases.
+ */
 export function findSplit(
+  model: FluidModel,
+  T: number,
+  p: number,
+  z: ArrayLike<number>,
+  work: TwoPhaseWork,
+  seed?: Equilibrium,
+): Split {
+  if (!convergedSplit(model, T, p, z, work, seed)) return "one-phase";
+  for (let round = 0; round < 3; round++) {
+    const test = model.stability(T, p, work.liquid.composition);
+    if (test.tangentPlaneDistance > thirdPhaseDistance) return "two-phase";
+    const before = work.gibbs;
+    const kept = [work.v.slice(), work.l.slice()] as const;
+    const better = splitOffTrial(model, T, p, z, test.trialComposition, work) === "converged" && work.gibbs < before - 1e-12;
+    if (!better) {
+      work.v.set(kept[0]);
+      work.l.set(kept[1]);
+      minimiseGibbs(model, T, p, z, work);
+      return "third-phase";
+    }
+  }
+  return "third-phase";
+}
+
+/** A tangent-plane distance this small is the round-off of two phases that have just been found equal. */
+const thirdPhaseDistance = -1e-7;
+
+function convergedSplit(
   model: FluidModel,
   T: number,
   p: number,
@@ -46,20 +82,19 @@ export function findSplit(
   let active = 0;
   for (let i = 0; i < z.length; i++) if (z[i]! > 0) active++;
   if (active === 1) return false;
+  const accepted = (outcome: TwoPhaseOutcome) => outcome === "converged" && lowersGibbs(model, T, p, z, work);
 
-  if (seed?.phases.length === 2) {
+  const [light, dense] = seed?.phases ?? [];
+  if (light && dense) {
     for (let i = 0; i < z.length; i++) {
-      const [light, dense] = [seed.phases[0]!, seed.phases[1]!];
       work.lnK[i] = z[i]! > 0 ? dense.lnFugacityCoefficients[i]! - light.lnFugacityCoefficients[i]! : 0;
     }
-    work.beta = seed.phases[0]!.moleFraction;
-    if (solveTwoPhase(model, T, p, z, work) === "converged" && lowersGibbs(model, T, p, z, work)) return true;
+    work.beta = light.moleFraction;
+    if (accepted(solveTwoPhase(model, T, p, z, work))) return true;
   }
   wilsonLnK(model, T, p, work.lnK);
-  if (straddles(z, work.lnK)) {
-    work.beta = 0.5;
-    if (solveTwoPhase(model, T, p, z, work) === "converged" && lowersGibbs(model, T, p, z, work)) return true;
-  }
+  work.beta = 0.5;
+  if (straddles(z, work.lnK) && accepted(solveTwoPhase(model, T, p, z, work))) return true;
 
   const test = model.stability(T, p, z);
   if (test.stable) return false;
@@ -68,9 +103,8 @@ export function findSplit(
     work.lnK[i] = test.trialIsVapour ? ratio : -ratio;
   }
   work.beta = test.trialIsVapour ? 0.1 : 0.9;
-  if (solveTwoPhase(model, T, p, z, work) === "converged" && lowersGibbs(model, T, p, z, work)) return true;
-  if (splitOffTrial(model, T, p, z, test.trialComposition, work) === "converged" && lowersGibbs(model, T, p, z, work))
-    return true;
+  if (accepted(solveTwoPhase(model, T, p, z, work))) return true;
+  if (accepted(splitOffTrial(model, T, p, z, test.trialComposition, work))) return true;
   throw new EngineError("no-convergence", "the feed is unstable, but the two phases could not be found", {
     temperatureK: T,
     pressurePa: p,

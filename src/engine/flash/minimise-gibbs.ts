@@ -75,7 +75,7 @@ export function minimiseGibbs(
     for (let i = 0; i < count; i++) scale[i] = z[i]! > 0 ? Math.sqrt((v[i]! * l[i]!) / z[i]!) : 0;
     let damping = 0;
     while (!solveStep(work, count, 1 / V, 1 / L, damping)) {
-      damping = damping === 0 ? 0.05 : damping * 4;
+      damping = damping === 0 ? 1e-5 : damping * 8;
       if (damping > 1e12) return "failed";
     }
     length = 1;

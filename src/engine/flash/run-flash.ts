@@ -8,6 +8,7 @@ import { flashPH, flashPS } from "./flash-ph";
 import { flashPT } from "./flash-pt";
 import { flashPQ, flashTQ } from "./flash-quality";
 import { flashUV } from "./flash-uv";
+import { phaseWarnings } from "./phase-warnings";
 
 /** kind "flash". Throws EngineError with the path of the field where one field is at fault. */
 export function runFlash(document: FlashCase): FlashResult {
@@ -26,7 +27,7 @@ export function runFlash(document: FlashCase): FlashResult {
       ...(single ? { soundSpeedMPerS: single.state.soundSpeedMPerS } : {}),
     },
     phases: state.phases.map((phase) => describe(model, phase)),
-    warnings: stateWarnings(model, [state.temperatureK]),
+    warnings: [...phaseWarnings(model, state), ...stateWarnings(model, [state.temperatureK])],
   };
 }
 

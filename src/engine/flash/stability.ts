@@ -7,7 +7,9 @@ import { wilsonLnK } from "./wilson";
 /** Below this a negative tangent-plane distance is a split and not round-off. */
 const negativeDistance = -1e-10;
 const substitutions = 4;
-const newtonSteps = 40;
+const newtonSteps = 60;
+/** Strongly non-ideal trials (water in the cold) defeat Newton from afar: half-length substitutions bring them near. */
+const dampedSubstitutions = 300;
 
 interface Trial {
   distance: number;
@@ -76,15 +78,18 @@ function pureTrials(z: ArrayLike<number>, attempt: (index: number) => boolean): 
 
 /** Follows W from where it stands to a stationary point of tm, or until tm < 0 is certain. */
 function search(model: FluidModel, T: number, p: number, z: ArrayLike<number>, work: StabilityWork): Trial {
-  const { trial, d, W, hessian, step, root } = work;
+  const { trial, d, W, saved, step, gradient } = work;
   const count = z.length;
   let distance = Infinity;
+  let accepted = Infinity;
+  let length = 1;
 
-  for (let iteration = 0; iteration < substitutions + newtonSteps; iteration++) {
-    const newton = iteration >= substitutions;
+  const rescue = substitutions + newtonSteps;
+  const lastNewton = rescue + dampedSubstitutions;
+  for (let iteration = 0; iteration < lastNewton + newtonSteps; iteration++) {
+    const newton = (iteration >= substitutions && iteration < rescue) || iteration >= lastNewton;
     let sum = 0;
     for (let i = 0; i < count; i++) sum += W[i]!;
-    if (!(sum > 0 && sum < Infinity)) break;
     for (let i = 0; i < count; i++) trial.composition[i] = W[i]! / sum;
     evaluateLnPhi(model, trial, T, p, "stable", newton ? 2 : 1);
 
@@ -94,13 +99,12 @@ function search(model: FluidModel, T: number, p: number, z: ArrayLike<number>, w
     let error = 0;
     for (let i = 0; i < count; i++) {
       if (!(z[i]! > 0)) continue;
-      const lnW = Math.log(W[i]!);
-      const gradient = lnW + trial.lnPhi[i]! - d[i]!;
-      tm += W[i]! * (gradient - 1);
-      slopeToFeed += (W[i]! - z[i]!) * gradient;
+      const g = Math.log(W[i]!) + trial.lnPhi[i]! - d[i]!;
+      gradient[i] = g;
+      tm += W[i]! * (g - 1);
+      slopeToFeed += (W[i]! - z[i]!) * g;
       gap += (W[i]! - z[i]!) ** 2 / z[i]!;
-      error = Math.max(error, Math.sqrt(W[i]!) * Math.abs(gradient));
-      step[i] = gradient;
+      error = Math.max(error, Math.sqrt(W[i]!) * Math.abs(g));
     }
     distance = tm;
     if (gap < 1e-8) return { distance: 0, trivial: true };
@@ -110,11 +114,37 @@ function search(model: FluidModel, T: number, p: number, z: ArrayLike<number>, w
     if (iteration >= 1 && Math.abs(tm) < 1e-3 && gap < 0.05 && Math.abs((2 * tm) / slopeToFeed - 1) < 0.1 && tm > 0) {
       return { distance: 0, trivial: true };
     }
-
-    if (!newton || !newtonStep(trial, W, step, hessian, root, sum)) {
+    if (!newton) {
       for (let i = 0; i < count; i++) {
-        if (z[i]! > 0) W[i] = Math.exp(Math.max(-600, Math.min(600, d[i]! - trial.lnPhi[i]!)));
+        if (!(z[i]! > 0)) continue;
+        const lnW = Math.log(W[i]!) - (iteration < substitutions ? 1 : 0.5) * gradient[i]!;
+        W[i] = Math.exp(Math.max(-600, Math.min(600, lnW)));
       }
+      accepted = Infinity;
+      continue;
+    }
+    if (tm > accepted + 1e-13 * Math.max(1, Math.abs(accepted)) && error > 1e-6) {
+      length *= 0.3;
+      if (length < 1e-9) {
+        if (iteration >= rescue) break;
+        iteration = rescue - 1;
+        W.set(saved);
+        continue;
+      }
+    } else {
+      accepted = tm;
+      saved.set(W);
+      newtonDirection(work, sum);
+      length = 1;
+      // √W may fall to a fifth at most; growth is left to the energy test.
+      for (let i = 0; i < count; i++) {
+        if (W[i]! > 0 && step[i]! < 0) length = Math.min(length, (1.6 * Math.sqrt(W[i]!)) / -step[i]!);
+      }
+    }
+    for (let i = 0; i < count; i++) {
+      if (!(saved[i]! > 0)) continue;
+      const root = Math.sqrt(saved[i]!) + 0.5 * length * step[i]!;
+      W[i] = Math.max(root * root, 1e-270);
     }
   }
   throw new EngineError("no-convergence", "the phase stability test did not converge", {
@@ -125,35 +155,22 @@ function search(model: FluidModel, T: number, p: number, z: ArrayLike<number>, w
   });
 }
 
-/** One Newton step of tm in α = 2√W; false where the Hessian is not positive definite or the step leaves W > 0. */
-function newtonStep(
-  trial: PhaseWork,
-  W: Float64Array,
-  gradient: Float64Array,
-  hessian: Float64Array,
-  root: Float64Array,
-  sum: number,
-): boolean {
+/** Newton direction of tm in α = 2√W, damped until it points downhill. */
+function newtonDirection({ trial, W, gradient, step, root, hessian }: StabilityWork, sum: number): void {
   const count = W.length;
   for (let i = 0; i < count; i++) root[i] = Math.sqrt(W[i]!);
-  for (let i = 0; i < count; i++) {
-    for (let j = 0; j <= i; j++) {
-      // lnPhiByMoles is for one mole of phase; W holds `sum` moles
-      hessian[i * count + j] = (root[i]! * root[j]! * trial.lnPhiByMoles[i * count + j]!) / sum;
+  for (let damping = 0; ; damping = damping === 0 ? 0.05 : damping * 4) {
+    for (let i = 0; i < count; i++) {
+      for (let j = 0; j <= i; j++) {
+        // lnPhiByMoles is for one mole of phase; W holds `sum` moles
+        hessian[i * count + j] = (root[i]! * root[j]! * trial.lnPhiByMoles[i * count + j]!) / sum;
+      }
+      const own = i * count + i;
+      hessian[own] = hessian[own]! + 1 + damping + (W[i]! > 0 ? 0.5 * gradient[i]! : 0);
+      step[i] = W[i]! > 0 ? -root[i]! * gradient[i]! : 0;
     }
-    const own = i * count + i;
-    hessian[own] = hessian[own]! + 1 + (W[i]! > 0 ? 0.5 * gradient[i]! : 0);
+    if (damping > 1e12 || solvePositiveDefinite(hessian, step, count)) return;
   }
-  const step = gradient;
-  for (let i = 0; i < count; i++) step[i] = W[i]! > 0 ? -root[i]! * gradient[i]! : 0;
-  if (!solvePositiveDefinite(hessian, step, count)) return false;
-  for (let i = 0; i < count; i++) if (W[i]! > 0 && !(Math.abs(step[i]!) < 1.6 * root[i]!)) return false;
-  for (let i = 0; i < count; i++) {
-    if (!(W[i]! > 0)) continue;
-    const alpha = root[i]! + 0.5 * step[i]!;
-    W[i] = alpha * alpha;
-  }
-  return true;
 }
 
 interface StabilityWork {
@@ -163,7 +180,9 @@ interface StabilityWork {
   lnK: Float64Array;
   W: Float64Array;
   best: Float64Array;
+  saved: Float64Array;
   step: Float64Array;
+  gradient: Float64Array;
   root: Float64Array;
   hessian: Float64Array;
 }
@@ -180,7 +199,9 @@ function stabilityWork(count: number): StabilityWork {
       lnK: new Float64Array(count),
       W: new Float64Array(count),
       best: new Float64Array(count),
+      saved: new Float64Array(count),
       step: new Float64Array(count),
+      gradient: new Float64Array(count),
       root: new Float64Array(count),
       hessian: new Float64Array(count * count),
     };

@@ -5,6 +5,7 @@ import { stateWarnings } from "../eos/state-warnings";
 import { EngineError } from "../errors";
 import type { Equilibrium } from "../flash/equilibrium";
 import { flashPT } from "../flash/flash-pt";
+import { phaseWarnings } from "../flash/phase-warnings";
 import { changeOfState } from "./change-of-state";
 
 /** kind "path". Throws EngineError with the path of the field. */
@@ -18,7 +19,11 @@ export function runPath(document: PathCase): PathResult {
     ...changeOfState(model, from, to),
     from: summarise(model, from),
     to: summarise(model, to),
-    warnings: stateWarnings(model, [from.temperatureK, to.temperatureK]),
+    warnings: [
+      ...phaseWarnings(model, from),
+      ...phaseWarnings(model, to),
+      ...stateWarnings(model, [from.temperatureK, to.temperatureK]),
+    ],
   };
 }
 
