@@ -13,6 +13,7 @@ import {
 import { join } from "node:path";
 import { setTimeout as sleep } from "node:timers/promises";
 import { freePort } from "./free-port.mjs";
+import { shellWord } from "./shell-word.mjs";
 import { Trouble } from "./trouble.mjs";
 
 const startPatienceMs = 60_000;
@@ -43,6 +44,8 @@ export async function initCluster(processes, { bin, dataFolder, account, superus
   });
   rmSync(passwordFile, { force: true });
   if (code !== 0) {
+    if (/No space left on device|could not extend file/i.test(output))
+      throw Object.assign(new Error("initdb"), { code: "ENOSPC", path: dataFolder });
     const reason = output.split("\n").findLast((line) => /error|fatal|could not/i.test(line)) ?? "no reason given";
     throw new Trouble(`The database could not be made: ${reason.trim()}. The whole output is in ${logFile}.`);
   }
@@ -110,9 +113,11 @@ export async function startCluster(processes, { bin, dataFolder, account, throwA
       /lock file .*already exists|shared memory block .*in use|could not bind|Address already in use|could not create any TCP/i.test(
         reason.all,
       );
+    if (/No space left on device/i.test(reason.all))
+      throw Object.assign(new Error(reason.last), { code: "ENOSPC", path: dataFolder });
     if (!passing || performance.now() > deadline) {
       throw new Trouble(
-        `PostgreSQL did not start: ${reason.last} If the data folder ${dataFolder} is damaged, restore a backup, or begin empty: mv ${dataFolder} ${dataFolder}.damaged`,
+        `PostgreSQL did not start: ${reason.last} If the data folder ${dataFolder} is damaged, restore a backup, or begin empty: mv ${shellWord(dataFolder)} ${shellWord(`${dataFolder}.damaged`)}`,
       );
     }
     await sleep(500);
@@ -125,7 +130,7 @@ export function clusterExists(dataFolder) {
 
 function damaged(dataFolder, what) {
   return new Trouble(
-    `The database in ${dataFolder} is damaged (${what}). Restore a backup, or begin empty: mv ${dataFolder} ${dataFolder}.damaged`,
+    `The database in ${dataFolder} is damaged (${what}). Restore a backup, or begin empty: mv ${shellWord(dataFolder)} ${shellWord(`${dataFolder}.damaged`)}`,
   );
 }
 

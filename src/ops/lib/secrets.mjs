@@ -1,6 +1,7 @@
 import { randomBytes } from "node:crypto";
 import { chmodSync, existsSync, readFileSync, renameSync, writeFileSync } from "node:fs";
 import { join } from "node:path";
+import { shellWord } from "./shell-word.mjs";
 import { Trouble } from "./trouble.mjs";
 
 const names = [
@@ -25,7 +26,7 @@ export function readSecrets(home, { haveData }) {
   const kept = existsSync(file) ? parse(file) : undefined;
   if (!kept && haveData) {
     throw new Trouble(
-      `${file} is missing, but the database that needs it exists. Restore the file, or move the database away to begin empty: mv ${join(home, "cluster")} ${join(home, "cluster.old")}`,
+      `${file} is missing, but the database that needs it exists. Restore the file, or move the database away to begin empty: mv ${shellWord(join(home, "cluster"))} ${shellWord(join(home, "cluster.old"))}`,
     );
   }
   const secrets = Object.fromEntries(names.map((name) => [name, kept?.[name] ?? randomBytes(32).toString("base64url")]));

@@ -2,12 +2,14 @@ import { mkdirSync, mkdtempSync, readFileSync, rmSync, statSync, writeFileSync }
 import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { afterEach, beforeEach, describe, expect, it } from "vitest";
+import { checkDisk } from "./check-disk.mjs";
 import { reaches } from "./check-node.mjs";
 import { matchesLock } from "./install-packages.mjs";
 import { choosePostgres } from "./postgres-binaries.mjs";
 import { stepLine } from "./progress.mjs";
 import { lastJsonLine, lastWords } from "./scripts.mjs";
 import { readSecrets } from "./secrets.mjs";
+import { shellWord } from "./shell-word.mjs";
 import { abandonedHomes, takeLock } from "./single-start.mjs";
 import { Trouble, troubleLine } from "./trouble.mjs";
 import { welcomeLines } from "./welcome.mjs";
@@ -28,6 +30,20 @@ describe("the version of Node.js", () => {
     // prettier-ignore
     expect(reaches(have, "20.19")).toBe(answer);
   });
+});
+
+describe("checkDisk", () => {
+  it("asks for room for what is missing, and for less once it is there", () => {
+    expect(() => checkDisk(base, 1.5e9)).toThrow(/^Only 1500 MB are free on the disk of .*, and 2050 MB are needed/);
+    for (const folder of ["node_modules", ".ebbmark/builds", ".ebbmark/cluster"])
+      mkdirSync(join(base, folder), { recursive: true });
+    expect(() => checkDisk(base, 1.5e9)).not.toThrow();
+    expect(() => checkDisk(base, 5e7)).toThrow(/Only 50 MB/);
+  });
+});
+
+it("writes a path so that it can be pasted", () => {
+  expect([shellWord("/a/b-1.x"), shellWord("/a b/it's")]).toEqual(["/a/b-1.x", `'/a b/it'\\''s'`]);
 });
 
 describe("matchesLock", () => {

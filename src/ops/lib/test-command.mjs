@@ -3,13 +3,14 @@ import { join } from "node:path";
 import { parseTestArguments } from "./arguments.mjs";
 import { buildProduct } from "./build.mjs";
 import { fallbackFolder } from "./cluster-place.mjs";
+import { checkDisk } from "./check-disk.mjs";
 import { refuse, runCommand } from "./command.mjs";
 import { addCounts, closingLine, failure } from "./count-tests.mjs";
 import { baseEnvironment } from "./environment.mjs";
 import { findChromium } from "./find-chromium.mjs";
 import { freePort } from "./free-port.mjs";
 import { installPackages } from "./install-packages.mjs";
-import { home, makePlaces, placesOf } from "./places.mjs";
+import { home, makePlaces, placesOf, root } from "./places.mjs";
 import { processIdentity } from "./process-identity.mjs";
 import { endLeftovers } from "./processes.mjs";
 import { createProgress } from "./progress.mjs";
@@ -26,6 +27,7 @@ export async function test(args) {
   let options;
   try {
     options = parseTestArguments(args);
+    checkDisk(root);
     makePlaces(places);
     writeFileSync(join(places.home, "holder.json"), JSON.stringify({ pid: process.pid, identity: processIdentity(process.pid) }));
   } catch (error) {

@@ -2,6 +2,7 @@ import { join } from "node:path";
 import { parseUpArguments } from "./arguments.mjs";
 import { buildEngineFiles } from "./build-engine-files.mjs";
 import { buildProduct } from "./build.mjs";
+import { checkDisk } from "./check-disk.mjs";
 import { refuse, runCommand } from "./command.mjs";
 import { baseEnvironment, migrateEnvironment, webEnvironment } from "./environment.mjs";
 import { checkPortFree, parsePort } from "./free-port.mjs";
@@ -25,6 +26,7 @@ export async function up(args) {
   try {
     options = parseUpArguments(args);
     port = parsePort(process.env.PORT);
+    checkDisk(root);
     makePlaces(places);
     lock = takeLock(join(home, "up.lock"), { port });
     if (lock.heldBy) throw alreadyRunning(lock.heldBy);
