@@ -54,4 +54,8 @@ CREATE FUNCTION "app"."reader_sees_screening"(p_screening uuid) RETURNS boolean 
       WHERE s.id = p_screening AND p.id::text = current_setting('ebbmark.person', true) AND p.active AND p.role IN ('engineer', 'approver'));
 $$;--> statement-breakpoint
 CREATE POLICY members ON "app"."draft" TO eb_read, eb_write USING ("app"."reader_sees_screening"("screening_id"));--> statement-breakpoint
+-- An auditor reads what was signed, never what is being worked on.
+CREATE POLICY auditors ON "app"."draft" FOR SELECT TO eb_read USING (
+  ledger.is_signed("screening_id", "rev") AND EXISTS (
+    SELECT FROM ledger.person p WHERE p.id::text = current_setting('ebbmark.person', true) AND p.active AND p.role = 'auditor'));--> statement-breakpoint
 CREATE POLICY record ON "app"."draft" TO eb_vault USING (true);

@@ -63,6 +63,15 @@ BEGIN
     person := ledger.acting_person(p_actor::uuid, kind.roles);
   END IF;
 
+  IF p_kind IN ('person_enrolled', 'role_proposed', 'role_confirmed')
+     AND coalesce(body ->> 'role', '') NOT IN ('engineer', 'approver', 'auditor', 'administrator') THEN
+    PERFORM ledger.refuse('EB422', 'invalid-request', 'The role must be engineer, approver, auditor or administrator.');
+  END IF;
+  IF p_kind = 'person_enrolled' AND (coalesce(body ->> 'badge', '') !~ '^[A-Z]{1,3}-[0-9]{1,5}$'
+     OR length(coalesce(btrim(body ->> 'printedName'), '')) NOT BETWEEN 1 AND 80) THEN
+    PERFORM ledger.refuse('EB422', 'invalid-request', 'A badge looks like E-114, and the printed name has 1 to 80 characters.');
+  END IF;
+
   IF kind.noun IN ('person', 'member') THEN
     about := split_part(p_subject, ':', CASE kind.noun WHEN 'person' THEN 2 ELSE 3 END)::uuid;
     IF about = person.id THEN PERFORM ledger.refuse('EB403', 'not-allowed', 'Nobody changes their own account, role or membership.'); END IF;

@@ -12,7 +12,7 @@ GRANT SELECT ON ledger.kind, ledger.origin, ledger.head, ledger.entry, ledger.bo
   ledger.member, ledger.role_proposal, ledger.revision TO eb_read;
 GRANT SELECT ON ledger.person, ledger.membership, ledger.member, ledger.revision TO eb_write;
 GRANT EXECUTE ON FUNCTION ledger.put_content(text, bytea) TO eb_write;
-GRANT EXECUTE ON FUNCTION ledger.is_signed(uuid, integer) TO eb_owner, eb_write;
+GRANT EXECUTE ON FUNCTION ledger.is_signed(uuid, integer) TO eb_owner, eb_read, eb_write;
 GRANT EXECUTE ON FUNCTION
   ledger.sign(uuid, uuid, integer, text, text, text, text, jsonb),
   ledger.countersign(uuid, uuid, integer, text, text, text, text, jsonb),

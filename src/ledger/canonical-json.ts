@@ -21,12 +21,13 @@ export const maxBytes = 1_048_576;
  *
  * Source   RFC 8785: keys in order of their UTF-16 units, no white space, numbers as ECMAScript writes them.
  * Holds    beyond the RFC we refuse what it would drop or let pass: undefined, functions, dates and other objects, integers beyond
- *          ±(2^53−1), texts that `faultOfText` names, depth over 32, more than 1 MiB. −0 becomes 0, as the RFC has it.
+ *          ±(2^53−1), texts that `faultOfText` names, depth over 32, more bytes than the limit. −0 becomes 0, as the RFC has it.
  * value    any JSON value
+ * limit    bytes allowed; 1 MiB for bodies of entries, more for stored contents such as curves
  * Returns  text; its UTF-8 bytes are what is hashed
  * Throws   CanonicalError with the path of the offending member
  */
-export function canonicalJson(value: Json): string {
+export function canonicalJson(value: Json, limit = maxBytes): string {
   const text = write(value, "", 1);
   // UTF-8 is never shorter than UTF-16 counts units, so the cheap test comes first.
   if (text.length > maxBytes || new TextEncoder().encode(text).length > maxBytes)

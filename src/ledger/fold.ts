@@ -14,6 +14,8 @@ export type Fold = {
   members: Set<string>;
   /** Keyed by subject, "screening:…:rev". */
   revisions: Map<string, FoldedRevision>;
+  /** The newest open proposal for a person, keyed by the person. */
+  proposals: Map<string, { seq: number; role: string; by: string }>;
 };
 
 type Body = Record<string, unknown>;
@@ -27,7 +29,7 @@ type Step = (fold: Fold, envelope: Envelope, body: Body) => string[];
  * An entry whose body can't be read is skipped here: what it did is not known, and later steps about the same subject may be named for it.
  */
 export function createFold() {
-  const state: Fold = { persons: new Map(), members: new Set(), revisions: new Map() };
+  const state: Fold = { persons: new Map(), members: new Set(), revisions: new Map(), proposals: new Map() };
   const push = (envelope: Envelope, body: Body | undefined): string[] => {
     const step = Object.hasOwn(steps, envelope.kind) ? steps[envelope.kind] : undefined;
     return step && body ? step(state, envelope, body) : [];
@@ -52,9 +54,19 @@ const steps: Record<string, Step> = {
   },
   person_disabled: (fold, envelope) => changePerson(fold, envelope, (person) => (person.active = false)),
   person_reenabled: (fold, envelope) => changePerson(fold, envelope, (person) => (person.active = true)),
-  role_proposed: (fold, envelope, body) => [...changePerson(fold, envelope, () => undefined), ...ruleFaults(fold, body)],
+  role_proposed: (fold, envelope, body) => {
+    const faults = [...changePerson(fold, envelope, () => undefined), ...ruleFaults(fold, body)];
+    fold.proposals.set(idOf(envelope.subject), { seq: envelope.seq, role: text(body.role), by: envelope.actor });
+    return faults;
+  },
   role_confirmed: (fold, envelope, body) => {
     const faults = ruleFaults(fold, body);
+    const proposal = fold.proposals.get(idOf(envelope.subject));
+    if (!proposal || proposal.seq !== body.proposed || proposal.role !== body.role)
+      faults.push("No entry proposed this change of role.");
+    else if (twoPersonRule(fold) === "bound" && proposal.by === envelope.actor)
+      faults.push("The change of role was confirmed by who proposed it.");
+    fold.proposals.delete(idOf(envelope.subject));
     return [...faults, ...changePerson(fold, envelope, (person) => (person.role = text(body.role)))];
   },
 
@@ -143,9 +155,13 @@ function signerFaults(actor: string, subject: string, body: Body): string[] {
   return faults;
 }
 
-function ruleFaults({ persons }: Fold, body: Body): string[] {
+function twoPersonRule({ persons }: Fold): "bound" | "not yet bound: one administrator" {
   const administrators = [...persons.values()].filter(({ role, active }) => role === "administrator" && active).length;
-  const rule = administrators >= 2 ? "bound" : "not yet bound: one administrator";
+  return administrators >= 2 ? "bound" : "not yet bound: one administrator";
+}
+
+function ruleFaults(fold: Fold, body: Body): string[] {
+  const rule = twoPersonRule(fold);
   return body.twoPersonRule === rule ? [] : [`The two-person rule was ${rule} then; the entry says otherwise.`];
 }
 
