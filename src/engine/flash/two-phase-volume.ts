@@ -161,8 +161,14 @@ export function solveAtVolume(model: FluidModel, z: ArrayLike<number>, target: V
       }
     }
     state.temperatureK = T + length * changeT;
-    state.vapourVolume = Vv + length * changeV;
-    state.liquidVolume = target.molarVolume - state.vapourVolume;
+    // The smaller volume carries the digits: of a last drop, v − V^v would be round-off.
+    if (Vv < Vl) {
+      state.vapourVolume = Vv + length * changeV;
+      state.liquidVolume = target.molarVolume - state.vapourVolume;
+    } else {
+      state.liquidVolume = Vl - length * changeV;
+      state.vapourVolume = target.molarVolume - state.liquidVolume;
+    }
   }
   return false;
 }

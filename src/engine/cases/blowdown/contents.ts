@@ -9,6 +9,7 @@ import { createPhaseState, type FluidModel, type PhaseState } from "../../eos/fl
 import { EngineError } from "../../errors";
 import type { Equilibrium } from "../../flash/equilibrium";
 import { flashUV } from "../../flash/flash-uv";
+import { incipientSplit } from "./incipient-split";
 
 export type PhaseMode = "one-phase" | "two-phase";
 
@@ -58,12 +59,6 @@ export class ContentsFinder {
     return mode === "one-phase" ? this.homogeneous(total, u, v) : this.equilibrium(total, u, v);
   }
 
-  /** The last drop or bubble may be too small for a flash to find; the stability test still measures how near the boundary is. */
-  private isOnBoundary({ temperatureK, pressurePa, composition }: Contents): boolean {
-    if (!(pressurePa > 0)) return false;
-    return this.fluid.stability(temperatureK, pressurePa, composition).tangentPlaneDistance > onTheBoundary;
-  }
-
   private homogeneous(total: number, u: number, v: number): Contents {
     const state = this.fluid.phaseFromEnergy(u, v, this.z, this.guessK, this.state);
     this.guessK = state.temperatureK;
@@ -82,14 +77,8 @@ export class ContentsFinder {
   }
 
   private equilibrium(total: number, u: number, v: number): Contents {
-    let found: Equilibrium;
-    try {
-      found = flashUV(this.fluid, { internalEnergyJPerMol: u, molarVolumeM3PerMol: v }, this.z, this.seed);
-    } catch (error) {
-      const alone = error instanceof EngineError && error.code === "no-convergence" ? this.homogeneous(total, u, v) : undefined;
-      if (alone && this.isOnBoundary(alone)) return alone;
-      throw error;
-    }
+    const found = this.split(total, u, v);
+    if (!found) return this.homogeneous(total, u, v);
     const [light, dense] = found.phases;
     if (!light) throw new RangeError("an equilibrium without a phase");
     if (dense) this.seed = found;
@@ -105,5 +94,21 @@ export class ContentsFinder {
       outletComposition: light.composition,
       equilibrium: dense ? found : undefined,
     };
+  }
+
+  /** The equilibrium, or undefined where the fluid stands on its phase boundary and counts as one phase. */
+  private split(total: number, u: number, v: number): Equilibrium | undefined {
+    try {
+      return flashUV(this.fluid, { internalEnergyJPerMol: u, molarVolumeM3PerMol: v }, this.z, this.seed);
+    } catch (error) {
+      if (!(error instanceof EngineError && error.code === "no-convergence")) throw error;
+      const alone = this.homogeneous(total, u, v);
+      if (!(alone.pressurePa > 0)) throw error;
+      const test = this.fluid.stability(alone.temperatureK, alone.pressurePa, this.z);
+      if (test.stable) return undefined;
+      const trace = incipientSplit(this.fluid, alone, test, { energy: u, molarVolume: v });
+      if (!trace && test.tangentPlaneDistance < onTheBoundary) throw error;
+      return trace;
+    }
   }
 }
