@@ -71,7 +71,13 @@ function flashAtVolume(model: FluidModel, target: HeldTarget, z: ArrayLike<numbe
 
   if (single && single.pressurePa > 0 && single.pressureByVolume < 0) {
     if (isStable(model, single, z)) return assembleOne(model, single, z);
-    const near = tryFlash(model, single.temperatureK, single.pressurePa, z);
+    const near = attempted(() => flashPT(model, single, z));
+    if (near && seedFrom(near, z, v, state) && solveAtVolume(model, z, target, state)) return assembleTwo(model, state);
+  }
+  const guess = single && single.pressurePa > 0 ? single.temperatureK : undefined;
+  for (const T of [guess, single?.temperatureK, 0.8 * meanCriticalTemperature(model, z)]) {
+    if (T === undefined || T < 0.35 * meanCriticalTemperature(model, z)) continue;
+    const near = attempted(() => equilibriumAtVolume(model, T, v, z));
     if (near && seedFrom(near, z, v, state) && solveAtVolume(model, z, target, state)) return assembleTwo(model, state);
   }
   return nested(model, target, z, single, state, seed);
@@ -97,9 +103,10 @@ function onePhase(model: FluidModel, target: HeldTarget, z: ArrayLike<number>, g
   }
 }
 
-function tryFlash(model: FluidModel, T: number, p: number, z: ArrayLike<number>): Equilibrium | undefined {
+/** The value, or undefined where the engine says no: one attempt of several. */
+function attempted<Value>(attempt: () => Value): Value | undefined {
   try {
-    return flashPT(model, { temperatureK: T, pressurePa: p }, z);
+    return attempt();
   } catch (error) {
     if (error instanceof EngineError) return undefined;
     throw error;
@@ -223,10 +230,10 @@ export function equilibriumAtVolume(
   let fa = excess(a);
   let b = a;
   let fb = fa;
-  for (let k = 0; k < 80 && fa * fb > 0; k++) {
+  for (let k = 0, jump = 0.25; k < 40 && fa * fb > 0; k++, jump = Math.min(2 * jump, 3)) {
     a = b;
     fa = fb;
-    b += fb > 0 ? 0.5 : -0.5;
+    b += fb > 0 ? jump : -jump;
     fb = excess(b);
   }
   const lnP = bracketedRoot(excess, { a, fa, b, fb }, { within: 1e-13, what: "pressure at given temperature and volume" });
