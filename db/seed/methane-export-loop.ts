@@ -19,7 +19,7 @@ export const methaneExportLoop = (): DraftDocument =>
       ["4.03", "45", "mm", demoSheet("DS-0801 rev B, less corrosion allowance")],
       ["4.11", "92", "bar(g)", demoSheet("DS-0801 rev B")],
       ["4.05", "-29", "°C", demoSheet("DS-0801 rev B")],
-      ["A5.02", "22", "mm", demoSheet("PID 0801 rev F, RO-0806")],
+      ["A5.02", "11", "mm", demoSheet("PID 0801 rev F, RO-0806")],
       ["A6.08", "120", "W/(m²·K)", demoAssumption("free convection at settle-out pressure, order of magnitude")],
     ],
     {

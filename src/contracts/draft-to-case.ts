@@ -198,6 +198,8 @@ function assemble(draft: DraftDocument, letter: string, site: SiteFacts): Blowdo
       ...(walled ? { minimumMetalMarginK: si("7.02") ?? policy.minimumMetalMarginK } : {}),
       ...optional("ventCapacityKgPerS", si("7.04") ?? policy.ventCapacityKgPerS),
       ...optional("minimumOutletTemperatureK", si("7.03") ?? policy.minimumOutletTemperatureK),
+      nearBandK: policy.nearBandK,
+      nearBandFraction: policy.nearBandFraction,
     },
   };
 }

@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import type { AssessedLimit } from "@/engine/cases/blowdown-result";
+import type { AssessedLimit, BlowdownSummary } from "@/engine/cases/blowdown-result";
 import { limitSentence, runSentence, worstVerdict } from "./verdict-sentence";
 
 const wall = (value: number | undefined, verdict: AssessedLimit["verdict"], limit: number | undefined = 227.15): AssessedLimit => ({
@@ -66,15 +66,25 @@ describe("limitSentence", () => {
 });
 
 describe("runSentence", () => {
+  const run = (verdict: AssessedLimit["verdict"], limits: AssessedLimit[], timeToTargetPressureS?: number) =>
+    runSentence({ verdict, limits, summary: { timeToTargetPressureS } as BlowdownSummary });
+  const missing = { ...wall(228, "open"), limit: undefined, governs: false };
+
   it("speaks of the limit that governs", () => {
-    expect(runSentence("near", [time(504, "within"), wall(228.95, "near")])).toContain("1.8\u00a0K");
+    expect(run("near", [time(504, "within"), wall(228.95, "near")], 504)).toContain("1.8\u00a0K");
   });
   it("speaks of the missing limit while nothing is past another, and of the one past it otherwise", () => {
-    const missing = { ...wall(228, "open"), limit: undefined, governs: false };
-    expect(runSentence("open", [{ ...time(504, "within"), governs: true }, missing])).toContain("not judged");
-    expect(runSentence("beyond", [{ ...time(1038, "beyond"), governs: true }, missing])).toContain("after the time allowed");
+    expect(run("open", [{ ...time(504, "within"), governs: true }, missing], 504)).toContain("so the wall is not judged");
+    expect(run("beyond", [{ ...time(1038, "beyond"), governs: true }, missing], 1038)).toContain("after the time allowed");
   });
-  it("says so where there is no limit at all", () => expect(runSentence("open", [])).toBe("No limit is set, so nothing is judged."));
+  it("does not take the end of a run for an arrival at the target", () => {
+    const cut = { ...time(3600, "beyond"), governs: true };
+    expect(run("beyond", [cut])).toBe("The pressure does not reach its target while it is computed.");
+  });
+  it("says that the steel is not judged where no wall is in the balance", () => {
+    expect(run("open", [{ ...wall(undefined, "open"), governs: false }])).toBe("No wall is in the balance, so the steel is not judged.");
+  });
+  it("says so where there is no limit at all", () => expect(run("open", [])).toBe("No limit is set, so nothing is judged."));
 });
 
 describe("worstVerdict", () => {

@@ -3,10 +3,11 @@
  *
  * Distances are in SI (K, min, %), as stored words can't follow a reader's choice of units. A figure is never rounded across its limit.
  */
-import type { AssessedLimit, LimitId } from "@/engine/cases/blowdown-result";
+import type { AssessedLimit, BlowdownResult, LimitId } from "@/engine/cases/blowdown-result";
 import type { Verdict } from "./record-content";
 
-type Wording = { within: string; near: string; beyond: string; at: string; open: string; unreached?: string };
+/** `none`: the run gave no such figure. */
+type Wording = { within: string; near: string; beyond: string; at: string; open: string; none: string };
 
 /** `{d}` is the distance to the limit, written out. */
 const words: Record<LimitId, Wording> = {
@@ -16,6 +17,7 @@ const words: Record<LimitId, Wording> = {
     beyond: "The wall falls {d} below its minimum design metal temperature{margin}.",
     at: "The wall comes down to its minimum design metal temperature{margin}.",
     open: "No minimum design metal temperature is entered, so the wall is not judged.",
+    none: "No wall is in the balance, so the steel is not judged.",
   },
   "time-to-target": {
     within: "The pressure reaches its target {d} before the time allowed is over.",
@@ -23,7 +25,7 @@ const words: Record<LimitId, Wording> = {
     beyond: "The pressure reaches its target {d} after the time allowed.",
     at: "The pressure reaches its target at the very end of the time allowed.",
     open: "No time to the target pressure is set, so the time is not judged.",
-    unreached: "The pressure does not reach its target while it is computed.",
+    none: "The pressure does not reach its target while it is computed.",
   },
   "minimum-outlet-temperature": {
     within: "The fluid leaving the opening stays {d} above its lowest temperature allowed.",
@@ -31,6 +33,7 @@ const words: Record<LimitId, Wording> = {
     beyond: "The fluid leaving the opening falls {d} below its lowest temperature allowed.",
     at: "The fluid leaving the opening comes down to its lowest temperature allowed.",
     open: "No lowest temperature is set for the fluid leaving the opening, so it is not judged.",
+    none: "The fluid leaving the opening is not judged.",
   },
   "peak-vent-rate": {
     within: "The vent load stays {d} below its capacity.",
@@ -38,6 +41,7 @@ const words: Record<LimitId, Wording> = {
     beyond: "The vent load passes its capacity by {d}.",
     at: "The vent load comes up to its capacity.",
     open: "No vent capacity is set, so the load is not judged.",
+    none: "The vent load is not judged.",
   },
 };
 
@@ -48,8 +52,8 @@ type Judged = Pick<AssessedLimit, "id" | "value" | "limit" | "unit" | "sense" | 
  */
 export function limitSentence({ id, value, limit, unit, sense, verdict }: Judged, marginK = 0): string {
   const wording = words[id];
+  if (value === undefined) return wording.none;
   if (limit === undefined) return wording.open;
-  if (value === undefined) return wording.unreached ?? wording.open;
   const inHand = sense === "at-most" ? limit - value : value - limit;
   const template = inHand === 0 ? wording.at : verdict === "open" ? wording.open : inHand < 0 ? wording.beyond : wording[verdict === "near" ? "near" : "within"];
   return template
@@ -73,12 +77,17 @@ function figure(size: number, decimals: number): string {
   return "less than 0.000001";
 }
 
-/** The sentence of a whole run: of the limit that governs; of a required limit that is missing, while nothing is past its limit. */
-export function runSentence(verdict: Verdict, limits: readonly AssessedLimit[], marginK = 0): string {
+/**
+ * The sentence of a whole run: of the limit that governs; of the required limit that is missing, while nothing is past its limit.
+ */
+export function runSentence({ verdict, limits, summary }: Pick<BlowdownResult, "verdict" | "limits" | "summary">, marginK = 0): string {
   const governing = limits.find(({ governs }) => governs);
-  const missing = limits.find((one) => one.verdict === "open");
+  const missing = limits.find(({ id, verdict: one }) => one === "open" && id === "minimum-wall-temperature") ?? limits.find((one) => one.verdict === "open");
   const told = verdict === "open" ? (missing ?? governing) : (governing ?? missing);
-  return told ? limitSentence(told, marginK) : "No limit is set, so nothing is judged.";
+  if (!told) return "No limit is set, so nothing is judged.";
+  // Where the target was not reached the engine gives the end of the run for its time, so that the line can be judged; it is no arrival.
+  const arrived = told.id !== "time-to-target" || summary.timeToTargetPressureS !== undefined || told.value === 0;
+  return limitSentence(arrived ? told : { ...told, value: undefined }, marginK);
 }
 
 /** The verdict over several: past a limit counts most, then what is not judged, then near. */

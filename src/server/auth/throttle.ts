@@ -58,9 +58,9 @@ export async function takeAttempt(key: string): Promise<void> {
   if (wait > 0) throw new Refusal("account-locked", { detail: `Wait ${waitWords(wait)}, then try again.`, retryAfterS: wait });
 }
 
-/** The password was right: the count starts again. */
+/** The password was right: the count starts again. The row stays, because another attempt may hold it at this moment. */
 export async function clearAttempts(key: string): Promise<void> {
-  await writeDatabase().delete(authThrottle).where(eq(authThrottle.key, key));
+  await writeDatabase().update(authThrottle).set({ failures: 0, blockedUntil: null }).where(eq(authThrottle.key, key));
 }
 
 /** "30 s", "2 min": rounded up, so that waiting as long as told is enough. */

@@ -66,7 +66,7 @@ function shownContent(found: Found, act: CeremonyAct, rev: number): string {
 
 /**
  * The password, given again on an open page. Whether the page can still be used is asked first, so an expired page costs no attempt; a wrong
- * password leaves the page open.
+ * password leaves the page open. A page that was used already can only bring its first receipt again, so a retry is not asked twice.
  */
 export async function proveOnPage(viewer: Viewer, { nonce, idempotencyKey, password }: { nonce: string; idempotencyKey: string; password: string }): Promise<void> {
   const [open] = await writeDatabase()
@@ -74,7 +74,8 @@ export async function proveOnPage(viewer: Viewer, { nonce, idempotencyKey, passw
     .from(ceremony)
     .where(eq(ceremony.nonce, nonce));
   if (!open || open.personId !== viewer.id || open.sessionId !== viewer.sessionId || open.key !== idempotencyKey) throw new Refusal("ceremony-expired");
-  if (!open.usedAt && open.expiresAt <= new Date()) throw new Refusal("ceremony-expired");
+  if (open.usedAt) return;
+  if (open.expiresAt <= new Date()) throw new Refusal("ceremony-expired");
   await provePassword(viewer, password, "signature-password-failed");
   await proveCeremony(writeDatabase(), { nonce, personId: viewer.id, sessionIdSha256: viewer.sessionId, method: "password" });
 }

@@ -11,9 +11,22 @@ export type PoolSettings = {
   budgetMs: number;
   resourceLimits?: ResourceLimits;
   workerData?: unknown;
+  /** How a job is put to the thread and how its words are read, where they differ from `{ id, job }` and `{ id, done }`. */
+  protocol?: Protocol;
+};
+
+export type Protocol = {
+  ask(id: number, job: unknown): unknown;
+  /** Undefined for a message that answers nothing, such as progress. */
+  read(message: unknown): { id: number; done: unknown } | { id: number; failed: string } | undefined;
 };
 
 export type PoolTrouble = "queue-full" | "out-of-time" | "thread-died" | "stopped";
+
+const plainProtocol: Protocol = {
+  ask: (id, job) => ({ id, job }),
+  read: (message) => message as { id: number; done: unknown },
+};
 
 /** The job was not done, and nothing came of it. */
 export class PoolError extends Error {
@@ -26,14 +39,12 @@ export class PoolError extends Error {
   }
 }
 
-type Waiting = { job: unknown; settle: (answer: unknown) => void; fail: (error: PoolError) => void };
+type Waiting = { job: unknown; settle: (answer: unknown) => void; fail: (error: Error) => void };
 type Seat = { worker: Worker; busy: { id: number; waiting: Waiting; timer: NodeJS.Timeout } | null };
 
 /**
  * A few worker threads and one queue. Threads start when first needed and stay; one that dies or runs over its budget is ended, its job
  * answered with a `PoolError`, and the next job gets a new one.
- *
- * A thread gets `{ id, job }` and posts `{ id, done }` once; messages without `done` are ignored.
  */
 export class ThreadPool {
   private readonly seats: Seat[] = [];
@@ -41,7 +52,11 @@ export class ThreadPool {
   private nextId = 1;
   private stopped = false;
 
-  constructor(private readonly settings: PoolSettings) {}
+  private readonly protocol: Protocol;
+
+  constructor(private readonly settings: PoolSettings) {
+    this.protocol = settings.protocol ?? plainProtocol;
+  }
 
   run<T>(job: unknown): Promise<T> {
     if (this.stopped) return Promise.reject(new PoolError("stopped", "The pool is stopped."));
@@ -74,7 +89,7 @@ export class ThreadPool {
       );
       seat.busy = { id, waiting, timer };
       seat.worker.ref();
-      seat.worker.postMessage({ id, job: waiting.job });
+      seat.worker.postMessage(this.protocol.ask(id, waiting.job));
     }
   }
 
@@ -83,13 +98,15 @@ export class ThreadPool {
     const { file, workerData, resourceLimits } = this.settings;
     const worker = new Worker(file, { workerData, ...(resourceLimits ? { resourceLimits } : {}) });
     const seat: Seat = { worker, busy: null };
-    worker.on("message", (message: { id: number; done?: unknown }) => {
-      if (!seat.busy || message.id !== seat.busy.id || !("done" in message)) return;
+    worker.on("message", (message: unknown) => {
+      const answer = this.protocol.read(message);
+      if (!seat.busy || answer?.id !== seat.busy.id) return;
       const { waiting, timer } = seat.busy;
       clearTimeout(timer);
       seat.busy = null;
       worker.unref();
-      waiting.settle(message.done);
+      if ("failed" in answer) waiting.fail(new Error(answer.failed));
+      else waiting.settle(answer.done);
       this.serve();
     });
     worker.on("error", (error) => this.drop(seat, "thread-died", error.message));
