@@ -62,7 +62,7 @@ describe("canonicalJson", () => {
     ["NaN", { a: { b: Number.NaN } }, "a.b is not a finite number"],
     ["Infinity", [Number.POSITIVE_INFINITY], "[0] is not a finite number"],
     ["undefined", { a: undefined }, "a is undefined, which JSON can't say"],
-    ["a hole in a list", [1, , 2], "[1] is undefined, which JSON can't say"], // eslint-disable-line no-sparse-arrays -- the hole is the point
+    ["a hole in a list", [1, , 2], "[1] is undefined, which JSON can't say"],
     ["a function", { a: () => 1 }, "a is function, which JSON can't say"],
     ["a bigint", { a: 1n }, "a is bigint, which JSON can't say"],
     ["a date", { a: new Date(0) }, "a is not a plain object"],

@@ -30,8 +30,9 @@ export const maxBytes = 1_048_576;
 export function canonicalJson(value: Json, limit = maxBytes): string {
   const text = write(value, "", 1);
   // UTF-8 is never shorter than UTF-16 counts units, so the cheap test comes first.
-  if (text.length > maxBytes || new TextEncoder().encode(text).length > maxBytes)
-    throw new CanonicalError("", "is larger than 1 MiB");
+  if (text.length > limit || new TextEncoder().encode(text).length > limit) {
+    throw new CanonicalError("", `is larger than ${limit / 1_048_576} MiB`);
+  }
   return text;
 }
 
