@@ -11,7 +11,7 @@
  */
 import { EngineError } from "../../errors";
 import { frozenNozzle, type NozzleFlow } from "../../flow/frozen-nozzle";
-import { ContentsFinder, type Contents, type PhaseMode } from "./contents";
+import { ContentsFinder, type Contents, type Effort, type PhaseMode } from "./contents";
 import type { VesselModel } from "./vessel-model";
 
 /** Everything about one instant that a series, an event or a limit may ask for. */
@@ -22,6 +22,9 @@ export type Instant = {
   wallTemperatureK: number | undefined;
 };
 
+/** After so many refusals in a row the long searches are worth their time. */
+const quickRefusals = 6;
+
 export class Balance {
   readonly size: number;
   readonly massScaleKg: number;
@@ -29,6 +32,7 @@ export class Balance {
   private readonly count: number;
   private readonly finder: ContentsFinder;
   private readonly moles: Float64Array;
+  private refusedInARow = 0;
   private last: { y: readonly number[]; mode: PhaseMode; t: number; instant: Instant } | undefined;
 
   constructor(readonly model: VesselModel) {
@@ -59,11 +63,11 @@ export class Balance {
   heatFromOutsideJ = (y: readonly number[]): number => (y[this.count + 5] ?? 0) * this.energyScaleJ;
 
   /** State of everything at (t, y). Kept for the same arguments, because events and output ask for the same point in turn. */
-  at(t: number, y: readonly number[], mode: PhaseMode): Instant {
+  at(t: number, y: readonly number[], mode: PhaseMode, effort: Effort = "thorough"): Instant {
     const { last } = this;
     if (last && last.y === y && last.mode === mode && last.t === t) return last.instant;
     const { fluid, wall, effectiveAreaM2, openingTimeS, backPressurePa } = this.model;
-    const contents = this.finder.find(mode, this.molesOf(y), this.internalEnergyJ(y));
+    const contents = this.finder.find(mode, this.molesOf(y), this.internalEnergyJ(y), effort);
     const opening = openingTimeS > 0 ? Math.min(t / openingTimeS, 1) : 1;
     const flow = frozenNozzle(fluid, contents.outlet, contents.outletComposition, backPressurePa);
     const instant: Instant = {
@@ -80,11 +84,13 @@ export class Balance {
   derivative(t: number, y: number[], mode: PhaseMode): number[] | undefined {
     let instant: Instant;
     try {
-      instant = this.at(t, y, mode);
+      instant = this.at(t, y, mode, this.refusedInARow < quickRefusals ? "quick" : "thorough");
     } catch (error) {
-      if (error instanceof EngineError && error.code !== "cancelled") return undefined;
-      throw error;
+      if (!(error instanceof EngineError) || error.code === "cancelled") throw error;
+      this.refusedInARow++;
+      return undefined;
     }
+    this.refusedInARow = 0;
     const { contents, ventRateKgPerS, wallTemperatureK } = instant;
     if (!(contents.pressurePa > 0)) return undefined;
     const { fluid, filmWPerK, outside, start } = this.model;

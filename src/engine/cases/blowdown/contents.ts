@@ -9,9 +9,15 @@ import { createPhaseState, type FluidModel, type PhaseState } from "../../eos/fl
 import { EngineError } from "../../errors";
 import type { Equilibrium } from "../../flash/equilibrium";
 import { flashUV } from "../../flash/flash-uv";
-import { incipientSplit } from "./incipient-split";
+import { solveAtVolume } from "../../flash/two-phase-volume";
+import { createTwoPhaseVolumes, seedFrom } from "../../flash/volume-seed";
+import { assembleVolumes, incipientSplit } from "./incipient-split";
+import { isStableAlone } from "./phase-check";
 
 export type PhaseMode = "one-phase" | "two-phase";
+
+/** "quick" gives up where only a long search could help: right for a trial state that the integrator may as well shorten its step for. */
+export type Effort = "quick" | "thorough";
 
 export type Contents = {
   temperatureK: number;
@@ -36,6 +42,7 @@ const onTheBoundary = -1e-7;
 export class ContentsFinder {
   private readonly z: Float64Array;
   private readonly state = createPhaseState();
+  private readonly volumes;
   private guessK: number;
   private seed: Equilibrium | undefined;
 
@@ -45,18 +52,19 @@ export class ContentsFinder {
     startTemperatureK: number,
   ) {
     this.z = new Float64Array(fluid.componentIds.length);
+    this.volumes = createTwoPhaseVolumes(fluid.componentIds.length);
     this.guessK = startTemperatureK;
   }
 
   /** n_i [mol] and U [J] of the contents; throws EngineError where no state exists. */
-  find(mode: PhaseMode, moles: ArrayLike<number>, internalEnergyJ: number): Contents {
+  find(mode: PhaseMode, moles: ArrayLike<number>, internalEnergyJ: number, effort: Effort): Contents {
     const z = this.z;
     let total = 0;
     for (let i = 0; i < z.length; i++) total += Math.max(moles[i] ?? 0, 0);
     for (let i = 0; i < z.length; i++) z[i] = Math.max(moles[i] ?? 0, 0) / total;
     const u = internalEnergyJ / total;
     const v = this.volumeM3 / total;
-    return mode === "one-phase" ? this.homogeneous(total, u, v) : this.equilibrium(total, u, v);
+    return mode === "one-phase" ? this.homogeneous(total, u, v) : this.equilibrium(total, u, v, effort);
   }
 
   private homogeneous(total: number, u: number, v: number): Contents {
@@ -76,8 +84,8 @@ export class ContentsFinder {
     };
   }
 
-  private equilibrium(total: number, u: number, v: number): Contents {
-    const found = this.split(total, u, v);
+  private equilibrium(total: number, u: number, v: number, effort: Effort): Contents {
+    const found = this.fromSeed(u, v) ?? this.split(total, u, v, effort);
     if (!found) return this.homogeneous(total, u, v);
     const [light, dense] = found.phases;
     if (!light) throw new RangeError("an equilibrium without a phase");
@@ -96,19 +104,43 @@ export class ContentsFinder {
     };
   }
 
-  /** The equilibrium, or undefined where the fluid stands on its phase boundary and counts as one phase. */
-  private split(total: number, u: number, v: number): Equilibrium | undefined {
+  /** Two phases from those of the last call, which is where they nearly always are. */
+  private fromSeed(u: number, v: number): Equilibrium | undefined {
+    const { seed, fluid, z, volumes } = this;
+    if (!seed || !seedFrom(seed, z, v, volumes) || !solveAtVolume(fluid, z, { hold: "energy", value: u, molarVolume: v }, volumes)) return undefined;
+    return assembleVolumes(fluid, volumes);
+  }
+
+  /** The equilibrium, or undefined where the fluid is one phase, or so near its phase boundary that it counts as one. */
+  private split(total: number, u: number, v: number, effort: Effort): Equilibrium | undefined {
+    try {
+      const alone = this.homogeneous(total, u, v);
+      if (isStableAlone(this.fluid, alone)) return undefined;
+      const trace = alone.pressurePa > 0 ? this.traceOf(alone, u, v) : undefined;
+      if (trace) return trace;
+    } catch (error) {
+      if (!isRefusal(error) || effort === "quick") throw error;
+    }
+    if (effort === "quick") throw new EngineError("no-convergence", "No equilibrium was found near the last one.");
+    return this.thorough(total, u, v);
+  }
+
+  private traceOf(alone: Contents, u: number, v: number): Equilibrium | undefined {
+    const test = this.fluid.stability(alone.temperatureK, alone.pressurePa, this.z);
+    return test.stable ? undefined : incipientSplit(this.fluid, alone, test, { energy: u, molarVolume: v });
+  }
+
+  private thorough(total: number, u: number, v: number): Equilibrium | undefined {
     try {
       return flashUV(this.fluid, { internalEnergyJPerMol: u, molarVolumeM3PerMol: v }, this.z, this.seed);
     } catch (error) {
-      if (!(error instanceof EngineError && error.code === "no-convergence")) throw error;
+      if (!isRefusal(error)) throw error;
       const alone = this.homogeneous(total, u, v);
-      if (!(alone.pressurePa > 0)) throw error;
-      const test = this.fluid.stability(alone.temperatureK, alone.pressurePa, this.z);
-      if (test.stable) return undefined;
-      const trace = incipientSplit(this.fluid, alone, test, { energy: u, molarVolume: v });
-      if (!trace && test.tangentPlaneDistance < onTheBoundary) throw error;
-      return trace;
+      const onIt = alone.pressurePa > 0 && this.fluid.stability(alone.temperatureK, alone.pressurePa, this.z).tangentPlaneDistance > onTheBoundary;
+      if (!onIt) throw error;
+      return undefined;
     }
   }
 }
+
+const isRefusal = (error: unknown): boolean => error instanceof EngineError && error.code === "no-convergence";

@@ -7,7 +7,7 @@
 import type { FluidModel, Stability } from "../../eos/fluid-model";
 import { assemble } from "../../flash/assemble";
 import type { Equilibrium } from "../../flash/equilibrium";
-import { solveAtVolume } from "../../flash/two-phase-volume";
+import { solveAtVolume, type TwoPhaseVolumes } from "../../flash/two-phase-volume";
 import { createTwoPhaseVolumes } from "../../flash/volume-seed";
 
 type Homogeneous = { temperatureK: number; pressurePa: number; composition: Float64Array };
@@ -33,13 +33,16 @@ export function incipientSplit(fluid: FluidModel, { temperatureK, pressurePa, co
     state.vapourVolume = traceIsVapour ? smallVolume : target.molarVolume - smallVolume;
     state.liquidVolume = target.molarVolume - state.vapourVolume;
     if (!fits || !(state.vapourVolume > 0 && state.liquidVolume > 0)) continue;
-    if (!solveAtVolume(fluid, z, { hold: "energy", value: target.energy, molarVolume: target.molarVolume }, state)) continue;
-    const sum = (moles: Float64Array): number => moles.reduce((total, amount) => total + amount, 0);
-    const [nv, nl] = [sum(state.v), sum(state.l)];
-    return assemble(fluid, state.temperatureK, state.pressurePa, [
-      { moleFraction: nv, composition: state.v.map((amount) => amount / nv), molarVolume: state.vapourVolume / nv },
-      { moleFraction: nl, composition: state.l.map((amount) => amount / nl), molarVolume: state.liquidVolume / nl },
-    ]);
+    if (solveAtVolume(fluid, z, { hold: "energy", value: target.energy, molarVolume: target.molarVolume }, state)) return assembleVolumes(fluid, state);
   }
   return undefined;
+}
+
+export function assembleVolumes(fluid: FluidModel, { temperatureK, pressurePa, v, l, vapourVolume, liquidVolume }: TwoPhaseVolumes): Equilibrium {
+  const sum = (moles: Float64Array): number => moles.reduce((total, amount) => total + amount, 0);
+  const [nv, nl] = [sum(v), sum(l)];
+  return assemble(fluid, temperatureK, pressurePa, [
+    { moleFraction: nv, composition: v.map((amount) => amount / nv), molarVolume: vapourVolume / nv },
+    { moleFraction: nl, composition: l.map((amount) => amount / nl), molarVolume: liquidVolume / nl },
+  ]);
 }
