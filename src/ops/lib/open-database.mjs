@@ -13,7 +13,7 @@ export async function openDatabase(processes, places, { say, throwAway = false }
   const { dataFolder, account } = await placeCluster(processes, places.cluster);
   const { bin, major } = choosePostgres(servers, dataFolder);
   const haveData = clusterExists(dataFolder);
-  const secrets = readSecrets(places.home, { haveData });
+  const secrets = readSecrets(places.home, { haveData, dataFolder });
   if (!haveData) await initCluster(processes, { bin, dataFolder, account, superuserPassword: secrets.superuserPassword });
   await checkCluster(processes, { bin, dataFolder, account });
   const { port, ended } = await startCluster(processes, { bin, dataFolder, account, throwAway });

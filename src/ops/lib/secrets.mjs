@@ -19,14 +19,15 @@ const names = [
 /**
  * The secrets of this installation, made once and kept in a file that only its owner can read.
  *
- * haveData  true when a database exists already: then missing secrets cannot be made anew, since its passwords hang on them
+ * haveData    true when a database exists already: then missing secrets cannot be made anew, since its passwords hang on them
+ * dataFolder  where that database is
  */
-export function readSecrets(home, { haveData }) {
+export function readSecrets(home, { haveData, dataFolder = join(home, "cluster") }) {
   const file = join(home, "secrets.json");
   const kept = existsSync(file) ? parse(file) : undefined;
   if (!kept && haveData) {
     throw new Trouble(
-      `${file} is missing, but the database that needs it exists. Restore the file, or move the database away to begin empty: mv ${shellWord(join(home, "cluster"))} ${shellWord(join(home, "cluster.old"))}`,
+      `${file} is missing, but the database that needs it exists. Restore the file, or move the database away to begin empty: mv ${shellWord(dataFolder)} ${shellWord(`${dataFolder}.old`)}`,
     );
   }
   const secrets = Object.fromEntries(names.map((name) => [name, kept?.[name] ?? randomBytes(32).toString("base64url")]));
