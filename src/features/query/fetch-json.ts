@@ -33,7 +33,8 @@ export async function fetchJson<T>(endpoint: string, { method, body, signal, kee
   throw new UnreachableError({ cause: `status ${response.status}` });
 }
 
-export const getJson = <T>(endpoint: string, signal?: AbortSignal) => fetchJson<T>(endpoint, { method: "GET", ...(signal ? { signal } : {}) });
+export const getJson = <T>(endpoint: string, signal?: AbortSignal) =>
+  fetchJson<T>(endpoint, { method: "GET", ...(signal ? { signal } : {}) });
 export const postJson = <T>(endpoint: string, body: unknown) => fetchJson<T>(endpoint, { method: "POST", body });
 export const putJson = <T>(endpoint: string, body: unknown) => fetchJson<T>(endpoint, { method: "PUT", body });
 export const deleteJson = (endpoint: string) => fetchJson<undefined>(endpoint, { method: "DELETE" });

@@ -35,5 +35,7 @@ export function wordsOf(error: unknown): string {
     const { title, detail } = error.problem;
     return detail && detail !== title ? `${title} ${detail}` : title;
   }
-  return error instanceof UnreachableError ? error.message : "Something went wrong in this page. Load it again; nothing was changed.";
+  return error instanceof UnreachableError
+    ? error.message
+    : "Something went wrong in this page. Load it again; nothing was changed.";
 }
