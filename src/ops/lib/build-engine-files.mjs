@@ -1,7 +1,7 @@
 import { existsSync } from "node:fs";
 import { join } from "node:path";
 import { baseEnvironment } from "./environment.mjs";
-import { home, root } from "./places.mjs";
+import { root } from "./places.mjs";
 import { lastWords } from "./scripts.mjs";
 import { underLock } from "./single-start.mjs";
 import { Trouble } from "./trouble.mjs";
@@ -15,7 +15,7 @@ const threads = { EBBMARK_ENGINE_THREAD: "server-thread", EBBMARK_PASSWORD_THREA
  * Returns  the paths of the threads by variable name
  */
 export async function buildEngineFiles(processes, places, say) {
-  return underLock(join(home, "engines.lock"), say, async () => {
+  return underLock(join(places.home, "engines.lock"), say, async () => {
     const env = { ...baseEnvironment(), EBBMARK_ENGINE_DIR: places.engines };
     const { code, output, logFile } = await processes.runToEnd(
       "build-engine",

@@ -10,13 +10,13 @@ export const home = join(root, ".ebbmark");
 
 /**
  * The folders of one installation. A test run has a home of its own below the checkout's, which is removed at its end; its logs stay.
- * Engines and builds are named by their hash, so all share them.
+ * Builds are named by their hash, so all share them.
  */
 export function placesOf(base, logs = join(base, "logs")) {
   return {
     home: base,
     cluster: join(base, "cluster"),
-    engines: join(home, "engines"),
+    engines: join(base, "engines"),
     builds: join(home, "builds"),
     mail: join(base, "mail"),
     storage: join(base, "storage"),
