@@ -13,7 +13,7 @@ export function CheckBox({ id, checked, onChange, disabled, label }: Props) {
         checked={checked}
         disabled={disabled}
         onChange={(event) => onChange(event.target.checked)}
-        className="peer col-start-1 row-start-1 h-full w-full cursor-pointer appearance-none rounded border-2 border-rule-3 bg-field checked:border-ink checked:bg-ink disabled:cursor-not-allowed"
+        className="peer col-start-1 row-start-1 h-full w-full cursor-pointer appearance-none rounded border-2 border-rule-3 bg-field checked:border-ink checked:bg-ink disabled:cursor-not-allowed forced-colors:appearance-auto"
       />
       <svg
         width="14"

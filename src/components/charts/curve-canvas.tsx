@@ -50,12 +50,12 @@ export default function CurveCanvas({ curves, summary, ground, low, readingX, on
       datasetIdKey="id"
       role="img"
       aria-label={summary}
-      onMouseMove={(event) => {
+      onPointerMove={(event) => {
         const x = chart.current?.scales.x;
         const box = event.currentTarget.getBoundingClientRect();
         onPoint(x?.getValueForPixel(event.clientX - box.left) ?? null);
       }}
-      onMouseLeave={() => onPoint(null)}
+      onPointerLeave={() => onPoint(null)}
     />
   );
 }

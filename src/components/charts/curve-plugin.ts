@@ -3,6 +3,7 @@ import { axisTitle } from "./axis-scale";
 import { drawWords, fontOf, inkOf } from "./canvas-ink";
 import { curveLooks, type Curves, type Ground } from "./curve";
 import {
+  leaderTo,
   placeLabels,
   placesAlong,
   placesAround,
@@ -133,7 +134,7 @@ function drawLabels({ drawing, context, area, ink, ground, toX, toY }: Paper): v
   const curves = drawing.series.map((series) => pixelsOf(series, toX, toY));
   const limits = drawing.limits ?? [];
 
-  const labels: (LabelToPlace & { words: string; colour: string })[] = [
+  const labels: (LabelToPlace & { words: string; colour: string; point?: Point })[] = [
     ...limits.map(({ axis, at, label }) => {
       const size = sizeOf(label);
       const places = axis === "y" ? placesAtLevel(toY(at), area, size) : placesAtPost(toX(at), area, size);
@@ -141,7 +142,8 @@ function drawLabels({ drawing, context, area, ink, ground, toX, toY }: Paper): v
     }),
     ...(drawing.marks ?? []).map((mark) => {
       const size = sizeOf(mark.label);
-      return { ...size, places: placesAround({ x: toX(mark.x), y: toY(mark.y) }, size), words: mark.label, colour: ink("--ink") };
+      const point = { x: toX(mark.x), y: toY(mark.y) };
+      return { ...size, places: placesAround(point, size), words: mark.label, colour: ink("--ink"), point };
     }),
     ...drawing.series.flatMap((series, own) => {
       if (series.label === "") return [];
@@ -157,10 +159,23 @@ function drawLabels({ drawing, context, area, ink, ground, toX, toY }: Paper): v
     levels: limits.filter(({ axis }) => axis === "y").map(({ at }) => toY(at)),
     posts: limits.filter(({ axis }) => axis === "x").map(({ at }) => toX(at)),
   });
-  labels.forEach(({ words, colour }, index) => {
+  labels.forEach(({ words, colour, point }, index) => {
     const box = boxes[index];
+    const leader = box && point && leaderTo(point, box);
+    if (leader) drawLeader(context, point, leader, colour);
     if (box) drawWords(context, words, { x: (box.left + box.right) / 2, y: (box.top + box.bottom) / 2 }, { colour, ground });
   });
+}
+
+/** From the rim of the ring to the label. */
+function drawLeader(context: CanvasRenderingContext2D, from: Point, to: Point, colour: string): void {
+  const length = Math.hypot(to.x - from.x, to.y - from.y);
+  context.strokeStyle = colour;
+  context.lineWidth = 1;
+  context.beginPath();
+  context.moveTo(from.x + ((to.x - from.x) * 6) / length, from.y + ((to.y - from.y) * 6) / length);
+  context.lineTo(to.x, to.y);
+  context.stroke();
 }
 
 function drawAxisNames({ drawing, context, area, height, ink }: Paper): void {

@@ -1,5 +1,6 @@
 import { describe, expect, it } from "vitest";
 import {
+  leaderTo,
   placeLabels,
   placesAlong,
   placesAround,
@@ -68,4 +69,17 @@ it("turns the words of a post at the edge to its left", () => {
 
 it("has nowhere to put a label without places", () => {
   expect(placeLabels([{ ...size, places: [] }], { area, curves: [], levels: [], posts: [] })).toEqual([null]);
+});
+
+describe("a label that has to stand off", () => {
+  it("is joined to its point by a line that ends at its edge", () => {
+    expect(leaderTo({ x: 0, y: 0 }, { left: 30, right: 90, top: -50, bottom: -34 })).toEqual({ x: 30, y: -34 });
+  });
+  it("needs no line close by", () => {
+    expect(leaderTo({ x: 0, y: 0 }, { left: -30, right: 30, top: -26, bottom: -9 })).toBeNull();
+  });
+  it("prefers to stay close: an empty chart puts it right above its point", () => {
+    const box = place(placesAround({ x: 150, y: 100 }, size), {})!;
+    expect([(box.left + box.right) / 2, box.bottom]).toEqual([150, 91]);
+  });
 });

@@ -4,6 +4,8 @@
  */
 
 export type Point = { x: number; y: number };
+/** A place to choose from. `price` is what it costs by itself: standing far from what is named. */
+export type Place = Point & { price?: number };
 export type Box = { left: number; top: number; right: number; bottom: number };
 
 /**
@@ -12,7 +14,7 @@ export type Box = { left: number; top: number; right: number; bottom: number };
  * places   centres of the box, best first
  * own      index of the curve it names: near that one is fine, near another one misleads
  */
-export type LabelToPlace = { width: number; height: number; places: readonly Point[]; own?: number };
+export type LabelToPlace = { width: number; height: number; places: readonly Place[]; own?: number };
 
 /**
  * Obstacles in pixels.
@@ -22,7 +24,7 @@ export type LabelToPlace = { width: number; height: number; places: readonly Poi
  */
 export type Obstacles = { area: Box; curves: readonly (readonly Point[])[]; levels: readonly number[]; posts: readonly number[] };
 
-const cost = { outside: 1000, label: 400, limit: 120, curve: 30, mistaken: 8, later: 1 };
+const cost = { outside: 1000, label: 400, limit: 120, curve: 14, mistaken: 8, later: 1 };
 const breath = 2;
 /** A curve this near could be taken for the one that is named. */
 const mistakable = 14;
@@ -33,9 +35,9 @@ export function placeLabels(labels: readonly LabelToPlace[], obstacles: Obstacle
   return labels.map((label) => {
     let best: Box | null = null;
     let least = Infinity;
-    label.places.forEach((centre, order) => {
-      const box = boxAround(centre, label);
-      const price = priceOf(box, label, obstacles, taken) + order * cost.later;
+    label.places.forEach((place, order) => {
+      const box = boxAround(place, label);
+      const price = priceOf(box, label, obstacles, taken) + order * cost.later + (place.price ?? 0);
       if (price < least) {
         least = price;
         best = box;
@@ -89,20 +91,29 @@ export function placesAlong(points: readonly Point[], size: { width: number; hei
   });
 }
 
-/** Places around a marked point: above, below, beside, and at the corners. */
-export function placesAround({ x, y }: Point, { width, height }: { width: number; height: number }): Point[] {
-  const up = height / 2 + 9;
-  const aside = width / 2 + 10;
-  return [
-    { x, y: y - up },
-    { x: x + aside, y: y - up },
-    { x: x - aside, y: y - up },
-    { x: x + aside, y },
-    { x, y: y + up },
-    { x: x + aside, y: y + up },
-    { x: x - aside, y: y + up },
-    { x: x - aside, y },
-  ];
+/** Places around a marked point: above, at the upper corners, beside, below, and then the same a little farther off. */
+export function placesAround({ x, y }: Point, { width, height }: { width: number; height: number }): Place[] {
+  return [0, 14, 30].flatMap((farther) => {
+    const up = height / 2 + 9 + farther;
+    const aside = width / 2 + 10 + farther;
+    const price = farther * 3;
+    return [
+      { x, y: y - up, price },
+      { x: x + aside, y: y - up, price },
+      { x: x - aside, y: y - up, price },
+      { x: x + aside, y, price },
+      { x, y: y + up, price },
+      { x: x + aside, y: y + up, price },
+      { x: x - aside, y: y + up, price },
+      { x: x - aside, y, price },
+    ];
+  });
+}
+
+/** Where a thin line from a point should meet a label that had to stand off; null for a label close by. */
+export function leaderTo({ x, y }: Point, box: Box): Point | null {
+  const end = { x: Math.min(Math.max(x, box.left), box.right), y: Math.min(Math.max(y, box.top), box.bottom) };
+  return Math.hypot(end.x - x, end.y - y) > 18 ? end : null;
 }
 
 /** Places for the words of a level: at its right end, in its middle, at its left end; above the line, then below. */

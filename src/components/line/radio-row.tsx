@@ -3,6 +3,7 @@
 import { useId } from "react";
 import { useLine } from "./line-context";
 import { lineValueMark } from "./next-line";
+import { radioLook } from "./radio-look";
 
 export type RadioOption = { value: string; label: string; phrase?: string };
 
@@ -38,7 +39,7 @@ export function RadioRow({ value, options, onValueChange, readOnly, label }: Pro
             {...lineValueMark}
             type="radio"
             name={name}
-            className="mt-px h-[22px] w-[22px] accent-[var(--ink)]"
+            className={radioLook}
             checked={value === option.value}
             disabled={locked && value !== option.value}
             onChange={() => onValueChange?.(option.value)}

@@ -21,15 +21,20 @@ const noteInk: Partial<Record<PartState, string>> = {
 
 /** The parts at the left of the form; on phones a row that scrolls inside itself, the current part in its middle. */
 export function PartList({ groups, label = "Parts of the screening" }: { groups: readonly PartGroup[]; label?: string }) {
+  const row = useRef<HTMLElement>(null);
   const current = useRef<HTMLAnchorElement>(null);
 
   useEffect(() => {
-    // Only the row scrolls: with everything in view, as on a desktop, this moves nothing.
-    current.current?.scrollIntoView?.({ inline: "center", block: "nearest" });
-  }, []);
+    const [list, part] = [row.current, current.current];
+    if (!list || !part) return;
+    // Only the row moves, never the page; where all of it is in view there is nowhere to scroll.
+    const offset = part.getBoundingClientRect().left - list.getBoundingClientRect().left;
+    list.scrollLeft += offset - (list.clientWidth - part.offsetWidth) / 2;
+  }, [groups]);
 
   return (
     <nav
+      ref={row}
       aria-label={label}
       className="min-w-0 border-r border-rule-2 bg-tint py-2 print:hidden phone:flex phone:overflow-x-auto phone:border-b phone:border-r-0 phone:py-0"
     >

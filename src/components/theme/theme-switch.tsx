@@ -2,6 +2,7 @@
 
 import { useState } from "react";
 import { keepInCookie } from "../cookie";
+import { radioLook } from "../line/radio-look";
 import { showTheme, themeCookie, themes, type Theme } from "./theme";
 
 const words: Record<Theme, string> = { light: "Light", dark: "Dark", system: "As the system" };
@@ -21,13 +22,7 @@ export function ThemeSwitch({ initial }: { initial: Theme }) {
       <legend className="text-label font-medium text-ink-3">Sheet</legend>
       {themes.map((option) => (
         <label key={option} className="flex min-h-[34px] cursor-pointer items-center gap-2 phone:min-h-[44px]">
-          <input
-            type="radio"
-            name="theme"
-            className="h-4 w-4 accent-[var(--ink)]"
-            checked={theme === option}
-            onChange={() => choose(option)}
-          />
+          <input type="radio" name="theme" className={radioLook} checked={theme === option} onChange={() => choose(option)} />
           {words[option]}
         </label>
       ))}

@@ -87,7 +87,7 @@ export function LimitTable({ rows, caption }: { rows: readonly LimitRow[]; capti
             <td className="numeric" data-label="In hand">
               {row.inHand ?? "–"}
               {row.note && (
-                <span className="inline-block min-w-[62px] text-right text-small text-ink-3 phone:min-w-0 phone:pl-2">
+                <span className="inline-block min-w-[74px] pl-2.5 text-right text-small text-ink-3 phone:min-w-0">
                   {row.note}
                 </span>
               )}
