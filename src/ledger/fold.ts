@@ -26,13 +26,14 @@ type Step = (fold: Fold, envelope: Envelope, body: Body) => string[];
  * countersigned, a person who was disabled, a state that could not follow. It needs nothing of the database, so it also convicts a record
  * that was rewritten and chained anew.
  *
- * An entry whose body can't be read is skipped here: what it did is not known, and later steps about the same subject may be named for it.
+ * It needs every body. `push` answers undefined for an entry whose part in the story can't be read; from there on the story is not known.
  */
 export function createFold() {
   const state: Fold = { persons: new Map(), members: new Set(), revisions: new Map(), proposals: new Map() };
-  const push = (envelope: Envelope, body: Body | undefined): string[] => {
+  const push = (envelope: Envelope, body: Body | undefined): string[] | undefined => {
     const step = Object.hasOwn(steps, envelope.kind) ? steps[envelope.kind] : undefined;
-    return step && body ? step(state, envelope, body) : [];
+    if (!step) return [];
+    return body && step(state, envelope, body);
   };
   return { state, push };
 }

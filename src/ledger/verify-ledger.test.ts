@@ -120,7 +120,13 @@ describe("a ledger nobody touched", () => {
 
   it("holds for a reader who may not see the bodies, who is told how many that were", async () => {
     const entries = copy().map((entry) => ({ ...entry, body: "withheld" as const }));
-    expect(await verifyLedger(entries, { origin })).toMatchObject({ holds: true, withheld: 8 });
+    expect(await verifyLedger(entries, { origin })).toMatchObject({ holds: true, withheld: 8, storyUpTo: 0 });
+  });
+
+  it("follows the story up to the first body that can't be read, and says so", async () => {
+    const entries = copy();
+    at(entries, 4).body = "withheld";
+    expect(await verifyLedger(entries, { origin })).toMatchObject({ holds: true, withheld: 1, storyUpTo: 3 });
   });
 });
 
@@ -229,7 +235,7 @@ describe("damage", () => {
     [
       "a body deleted",
       (entries) => void (at(entries, 7).body = "redacted"),
-      ["7: The body is gone, and no entry says that it was redacted.", "8: This revision was never signed."],
+      ["7: The body is gone, and no entry says that it was redacted."],
     ],
     ["everything deleted", () => [], ["There is no entry at all."]],
   ])("%s is found and named", async (_what, damage, expected) => {

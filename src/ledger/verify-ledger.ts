@@ -15,6 +15,8 @@ export type LedgerVerdict = {
   faults: string[];
   /** Bodies this reader could not see, so that nobody takes them for checked. */
   withheld: number;
+  /** The entry up to which the story was followed: who held which role, who decided on what. Less than `size` where a body can't be read. */
+  storyUpTo: number;
   fold: Fold;
 };
 
@@ -51,12 +53,21 @@ export function createVerification({ origin, knownHeads = [], onEntry }: VerifyO
   const fold = createFold();
   const waiting = new Map(knownHeads.map(({ seq, hash }) => [seq, hash]));
   const faults: string[] = [];
+  let storyUpTo = 0;
+  let storyKnown = true;
 
   const push = (entry: StoredEntry): EntryVerdict => {
     const check = verifyEntry(entry, point);
     point = check.next;
     if (entry.body === "withheld") withheld += 1;
-    if (check.envelope) check.faults.push(...fold.push(check.envelope, check.body));
+    if (storyKnown) {
+      const told = check.envelope && fold.push(check.envelope, check.body);
+      storyKnown = told !== undefined;
+      if (told) {
+        check.faults.push(...told);
+        storyUpTo = entry.seq;
+      }
+    }
     const known = waiting.get(entry.seq);
     if (known !== undefined) {
       waiting.delete(entry.seq);
@@ -85,6 +96,7 @@ export function createVerification({ origin, knownHeads = [], onEntry }: VerifyO
       brokenCount,
       faults: [...faults],
       withheld,
+      storyUpTo,
       fold: fold.state,
     };
   };
