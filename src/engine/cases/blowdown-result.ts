@@ -1,6 +1,6 @@
 /** The result document of a blowdown. Times from the opening of the valve; energies on the zero of `eos/fluid-model.ts`. */
 
-export type EndedBy = "pressure" | "time" | "solid-phase" | "back-pressure";
+export type EndedBy = "pressure" | "time" | "solid-phase" | "back-pressure" | "too-hot";
 export type Verdict = "within" | "near" | "beyond" | "open";
 
 export type BlowdownSummary = {

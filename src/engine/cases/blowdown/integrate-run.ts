@@ -37,6 +37,9 @@ const maxSegments = 60;
 /** The flow stops where the pressure meets the back pressure; so near it, nothing is left to leave. */
 const backPressureReached = 1e-5;
 
+/** Heat capacities are fitted to about this; a vessel has failed long before. */
+const hottestK = 1000;
+
 export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: RunOptions): Run {
   const { model } = balance;
   const { start, backPressurePa, openingTimeS } = model;
@@ -71,6 +74,7 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
         { id: "stop", stops: true, value: (time, state) => balance.at(time, state, segment.mode).contents.pressurePa / stopAt - 1 },
         phaseEvent(balance, segment.mode),
         subsonicEvent(balance, segment.mode),
+        { id: "too-hot", stops: true, value: (time, state) => 1 - balance.at(time, state, segment.mode).contents.temperatureK / hottestK },
         ...solidEvent(balance, segment.mode, model.solids),
         ...marksWanted
           .filter(({ id }) => !run.marks.has(id))
@@ -92,8 +96,8 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
       run.endedBy = stopPressurePa >= lowest || stopPressurePa === backPressurePa ? "pressure" : "back-pressure";
       break;
     }
-    if (result.stoppedBy === "solid") {
-      run.endedBy = "solid-phase";
+    if (result.stoppedBy === "solid" || result.stoppedBy === "too-hot") {
+      run.endedBy = result.stoppedBy === "solid" ? "solid-phase" : "too-hot";
       break;
     }
     if (result.stoppedBy === "phase") {

@@ -66,6 +66,9 @@ function wallTable({ wall }: VesselModel, { minimumWallTemperatureK }: BlowdownS
 }
 
 function howItEnded({ run: asked }: BlowdownCase, run: Run): Warning[] {
+  if (run.endedBy === "too-hot") {
+    return [{ code: "too-hot", message: `The fluid reached 1000 K at ${run.endTimeS.toPrecision(4)} s, where the heat capacities end. The run stops there; steel has lost its strength long before.` }];
+  }
   if (run.endedBy !== "back-pressure") return [];
   return [{ code: "back-pressure-reached", message: `The pressure met the back pressure before it reached ${asked.stopPressurePa} Pa; nothing flows from there on.` }];
 }
