@@ -155,12 +155,12 @@ describe("what a script printed", () => {
 
 describe("what stands at the end of a start", () => {
   const places = placesOf("/x");
-  const accounts = [{ role: "engineer", email: "e@demo.invalid", password: "pass words", name: "E. Person" }];
+  const accounts = [{ role: "engineer", badge: "E-1", password: "pass words", printedName: "E. Person" }];
 
   it("is the address, the accounts, and where mail and files land", () => {
     const text = welcomeLines({ port: 3001, accounts, places }).join("\n");
     expect(text).toContain("http://localhost:3001");
-    expect(text).toContain("engineer  e@demo.invalid  pass words  E. Person");
+    expect(text).toContain("E-1         pass words  engineer  E. Person");
     expect(text).toMatch(/Mail is written to.*mail\/[\s\S]*Files are kept in.*storage\//);
   });
 
