@@ -3,6 +3,7 @@ import { join } from "node:path";
 import { baseEnvironment } from "./environment.mjs";
 import { hashFiles } from "./hash-files.mjs";
 import { home, root } from "./places.mjs";
+import { lastWords } from "./scripts.mjs";
 import { underLock } from "./single-start.mjs";
 import { Trouble } from "./trouble.mjs";
 
@@ -50,7 +51,7 @@ export async function buildProduct(processes, places, say) {
         env: { ...baseEnvironment(), NODE_ENV: "production" },
       },
     );
-    if (code !== 0) throw new Trouble(`The product could not be built: ${firstError(output)} The whole output is in ${logFile}.`);
+    if (code !== 0) throw new Trouble(`The product could not be built: ${lastWords(output)} The whole output is in ${logFile}.`);
     collect(folder);
     dropOldBuilds(places.builds);
     return { server, say: "built" };
@@ -75,9 +76,4 @@ function dropOldBuilds(builds) {
     .map((name) => join(builds, name))
     .sort((a, b) => statSync(b).mtimeMs - statSync(a).mtimeMs);
   for (const folder of byAge.slice(keptBuilds)) rmSync(folder, { recursive: true, force: true });
-}
-
-function firstError(output) {
-  const lines = output.split("\n").map((line) => line.trim());
-  return (lines.find((line) => /error/i.test(line)) ?? lines.findLast(Boolean) ?? "no reason given").replace(/\.?$/, ".");
 }

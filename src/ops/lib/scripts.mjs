@@ -18,13 +18,17 @@ export async function runScript(processes, name, file, env) {
   throw new Trouble(`${name} failed: ${lastWords(output)} The whole output is in ${logFile}.`);
 }
 
-/** The last line that is a message: no stack, no bare closing brace, not Node's own version line. */
+/**
+ * The line of a tool's output that says why it failed: the first complaint of a compiler, else the last error with a name, else the last
+ * line that is neither stack nor bare brace.
+ */
 export function lastWords(output) {
   const lines = output.split("\n").map((line) => line.trim());
   const line =
+    lines.find((text) => /\bERROR: |^Type error: |^Module not found: |\berror TS\d+/.test(text)) ??
     lines.findLast((text) => /^(\w+: )?\w*Error\b/.test(text)) ??
     lines.findLast((text) => text && !/^(at |Node\.js v|[{}\])]+,?$)/.test(text));
-  return (line ?? "no reason given").replace(/[.]?$/, ".");
+  return (line ?? "no reason given").replace(/[.:]?$/, ".");
 }
 
 /**

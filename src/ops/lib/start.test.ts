@@ -143,6 +143,9 @@ describe("what a script printed", () => {
     expect(lastWords("starting\nError: The file 0001 was edited\n    at x (y.ts:1)\n\nNode.js v20.20.2\n")).toBe(
       "Error: The file 0001 was edited.",
     );
+    expect(lastWords('Error: Build failed with 1 error:\nsrc/a.ts:6:31: ERROR: Could not resolve "./b"\n  at x')).toBe(
+      'src/a.ts:6:31: ERROR: Could not resolve "./b".',
+    );
     expect(lastWords("migrate: no answer\n")).toBe("migrate: no answer.");
     expect(lastWords("")).toBe("no reason given.");
   });
