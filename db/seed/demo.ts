@@ -110,11 +110,14 @@ async function loadScreening({ tag, make, until }: (typeof demoScreenings)[numbe
   const id = await as("E-114", async (engineer) => {
     const section = (await listSections(engineer)).find((one) => one.tag === tag);
     if (!section) throw new Error(`the demo section ${tag} is missing`);
-    const present = (await listScreenings(engineer, { sectionId: section.id, limit: 200 })).rows.find((row) => row.title === title);
+    const present = (await listScreenings(engineer, { sectionId: section.id, limit: 200 })).rows.find(
+      (row) => row.title === title,
+    );
     const screeningId = present?.id ?? (await createScreening(engineer, { sectionId: section.id, title })).id;
     let view = await getScreening(engineer, screeningId);
     if (view?.state === "draft" && view.draft) {
-      const { version } = view.draft.version === 1 ? await saveDraft(engineer, screeningId, { baseVersion: 1, document }) : view.draft;
+      const { version } =
+        view.draft.version === 1 ? await saveDraft(engineer, screeningId, { baseVersion: 1, document }) : view.draft;
       await prepareScreening(engineer, screeningId, { draftVersion: version });
       view = await getScreening(engineer, screeningId);
     }

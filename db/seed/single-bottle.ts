@@ -22,5 +22,9 @@ export const singleBottle = (): DraftDocument =>
       ["A5.02", "3", "mm", demoSheet("PID 5201 rev C, RO-5207")],
       ["A6.08", "60", "W/(m²·K)", demoAssumption("free convection in a high-pressure gas, order of magnitude")],
     ],
-    { rows: [{ id: "nitrogen", typed: "100", molePercent: null }], normalised: false, source: demoSheet("certificate of the filling station") },
+    {
+      rows: [{ id: "nitrogen", typed: "100", molePercent: null }],
+      normalised: false,
+      source: demoSheet("certificate of the filling station"),
+    },
   );

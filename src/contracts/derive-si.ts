@@ -26,7 +26,11 @@ export function deriveSi(draft: DraftDocument, barometricPressurePa: number): Dr
  * SI value of one line as it stands; null for texts, choices and what is no number in a unit of the line. A line nobody typed in keeps the
  * value the registry gave it; once emptied by hand (`si` null) it stays empty.
  */
-export function siOf(line: Line, { typed, unit, si }: Pick<LineValue, "typed" | "unit" | "si">, barometricPressurePa: number): number | null {
+export function siOf(
+  line: Line,
+  { typed, unit, si }: Pick<LineValue, "typed" | "unit" | "si">,
+  barometricPressurePa: number,
+): number | null {
   if (line.kind !== "quantity") return null;
   if (typed.trim() === "") return line.initial && si === line.initial.si ? line.initial.si : null;
   const inUse = unit !== null && unitSymbols(line.quantity).includes(unit) ? unit : line.shown.SI;

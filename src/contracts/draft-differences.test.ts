@@ -27,7 +27,9 @@ describe("draftDifferences", () => {
   });
 
   it("sees a changed unit, a changed source and an emptied line", () => {
-    const before = draft((made) => (made.lines["2.09"] = { typed: "200", unit: "bar(g)", si: 1, source: { kind: "sheet", note: "a" } }));
+    const before = draft(
+      (made) => (made.lines["2.09"] = { typed: "200", unit: "bar(g)", si: 1, source: { kind: "sheet", note: "a" } }),
+    );
     const with_ = (value: DraftDocument["lines"][string]) => draft((made) => (made.lines["2.09"] = value));
     for (const value of [
       { typed: "200", unit: "psig", si: 1, source: { kind: "sheet", note: "a" } },

@@ -13,7 +13,8 @@ export const pages = {
   screenings: "/screenings",
   newScreening: (sectionId?: string) => (sectionId ? `/screenings/new?section=${sectionId}` : "/screenings/new"),
   screening: (screeningId: string, rev?: number) => `/screenings/${screeningId}${rev ? `?rev=${rev}` : ""}`,
-  part: (screeningId: string, part: PartSlug, line?: string) => `/screenings/${screeningId}/form/${part}${line ? `#line-${line}` : ""}`,
+  part: (screeningId: string, part: PartSlug, line?: string) =>
+    `/screenings/${screeningId}/form/${part}${line ? `#line-${line}` : ""}`,
   sign: (screeningId: string) => `/screenings/${screeningId}/sign`,
   decide: (screeningId: string) => `/screenings/${screeningId}/decide`,
   log: "/log",

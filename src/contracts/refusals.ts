@@ -21,7 +21,7 @@ export const refusals = {
   "ceremony-expired": { status: 410, title: "The signing page was open too long. Open it again." },
   "repeat-differs": { status: 409, title: "This act was already sent once with other content." },
   "already-exists": { status: 409, title: "There is one with this name already." },
-  "busy": { status: 503, title: "All calculation threads are busy. Try again in a moment." },
+  busy: { status: 503, title: "All calculation threads are busy. Try again in a moment." },
   "record-unavailable": { status: 503, title: "The record can't be written at the moment. Nothing was lost; try again." },
 } as const;
 

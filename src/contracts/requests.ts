@@ -21,7 +21,10 @@ export const badgeSchema = z
 
 export const signInSchema = z.strictObject({ badge: badgeSchema, password });
 export const changePasswordSchema = z.strictObject({ current: password, next: newPassword });
-export const preferencesSchema = z.strictObject({ units: z.enum(["SI", "US"]).optional(), theme: z.enum(["light", "dark", "system"]).optional() });
+export const preferencesSchema = z.strictObject({
+  units: z.enum(["SI", "US"]).optional(),
+  theme: z.enum(["light", "dark", "system"]).optional(),
+});
 
 export const invitePersonSchema = z.strictObject({
   badge: badgeSchema,
@@ -41,20 +44,38 @@ export const changePersonSchema = z.discriminatedUnion("act", [
 ]);
 
 export const createFacilitySchema = z.strictObject({
-  code: z.string().trim().toUpperCase().regex(/^[A-Z0-9]{2,8}$/, "2 to 8 letters or digits"),
+  code: z
+    .string()
+    .trim()
+    .toUpperCase()
+    .regex(/^[A-Z0-9]{2,8}$/, "2 to 8 letters or digits"),
   name: text(80),
   barometricPressurePa: z.number().min(50000).max(110000),
   policy: limitPolicySchema,
 });
 export const changeMembersSchema = z.strictObject({ act: z.enum(["add", "remove"]), personId: id });
-export const createSectionSchema = z.strictObject({ facilityId: id, tag: text(20), name: text(80), description: z.string().trim().max(600) });
+export const createSectionSchema = z.strictObject({
+  facilityId: id,
+  tag: text(20),
+  name: text(80),
+  description: z.string().trim().max(600),
+});
 
 export const createScreeningSchema = z.strictObject({ sectionId: id, title: text(120) });
 export const saveDraftSchema = z.strictObject({ baseVersion: z.int().min(1), document: draftDocumentSchema });
 export const computeSchema = z.strictObject({ draftVersion: z.int().min(1) });
 
-export const openCeremonySchema = z.strictObject({ act: z.enum(["sign", "countersign", "return", "withdraw"]), rev: z.int().min(1) });
-const signature = { rev: z.int().min(1), nonce: z.string().min(16).max(80), idempotencyKey, shownSha256: sha256, password } as const;
+export const openCeremonySchema = z.strictObject({
+  act: z.enum(["sign", "countersign", "return", "withdraw"]),
+  rev: z.int().min(1),
+});
+const signature = {
+  rev: z.int().min(1),
+  nonce: z.string().min(16).max(80),
+  idempotencyKey,
+  shownSha256: sha256,
+  password,
+} as const;
 /** `acknowledged`: the ids of every caution that stands with the record, ticked one by one. */
 export const signSchema = z.strictObject({ ...signature, acknowledged: z.array(z.string().max(12)).max(40) });
 export const countersignSchema = z.strictObject({
@@ -63,7 +84,10 @@ export const countersignSchema = z.strictObject({
   conditions: z.array(text(600)).max(20),
 });
 export const remarkSchema = z.strictObject({ line: z.string().max(12), text: text(1200) });
-export const returnSchema = z.strictObject({ ...signature, remarks: z.array(remarkSchema).min(1, "a return needs at least one remark").max(40) });
+export const returnSchema = z.strictObject({
+  ...signature,
+  remarks: z.array(remarkSchema).min(1, "a return needs at least one remark").max(40),
+});
 export const withdrawSchema = z.strictObject({ ...signature, reason: text(1200) });
 export const newRevisionSchema = z.strictObject({ fromRev: z.int().min(1), reason: text(600) });
 

@@ -2,7 +2,11 @@ import { describe, expect, it } from "vitest";
 import type { AssessedLimit, BlowdownSummary } from "@/engine/cases/blowdown-result";
 import { limitSentence, runSentence, worstVerdict } from "./verdict-sentence";
 
-const wall = (value: number | undefined, verdict: AssessedLimit["verdict"], limit: number | undefined = 227.15): AssessedLimit => ({
+const wall = (
+  value: number | undefined,
+  verdict: AssessedLimit["verdict"],
+  limit: number | undefined = 227.15,
+): AssessedLimit => ({
   id: "minimum-wall-temperature",
   title: "Coldest wall",
   value,
@@ -52,7 +56,9 @@ describe("limitSentence", () => {
   });
 
   it("says that a wall without a rated temperature is not judged", () => {
-    expect(limitSentence({ ...wall(250, "open"), limit: undefined })).toBe("No minimum design metal temperature is entered, so the wall is not judged.");
+    expect(limitSentence({ ...wall(250, "open"), limit: undefined })).toBe(
+      "No minimum design metal temperature is entered, so the wall is not judged.",
+    );
   });
 
   it("names the margin where there is one", () => {
@@ -82,7 +88,9 @@ describe("runSentence", () => {
     expect(run("beyond", [cut])).toBe("The pressure does not reach its target while it is computed.");
   });
   it("says that the steel is not judged where no wall is in the balance", () => {
-    expect(run("open", [{ ...wall(undefined, "open"), governs: false }])).toBe("No wall is in the balance, so the steel is not judged.");
+    expect(run("open", [{ ...wall(undefined, "open"), governs: false }])).toBe(
+      "No wall is in the balance, so the steel is not judged.",
+    );
   });
   it("says so where there is no limit at all", () => expect(run("open", [])).toBe("No limit is set, so nothing is judged."));
 });

@@ -55,7 +55,14 @@ export function limitSentence({ id, value, limit, unit, sense, verdict }: Judged
   if (value === undefined) return wording.none;
   if (limit === undefined) return wording.open;
   const inHand = sense === "at-most" ? limit - value : value - limit;
-  const template = inHand === 0 ? wording.at : verdict === "open" ? wording.open : inHand < 0 ? wording.beyond : wording[verdict === "near" ? "near" : "within"];
+  const template =
+    inHand === 0
+      ? wording.at
+      : verdict === "open"
+        ? wording.open
+        : inHand < 0
+          ? wording.beyond
+          : wording[verdict === "near" ? "near" : "within"];
   return template
     .replace("{d}", distance(Math.abs(inHand), unit, limit))
     .replace("{margin}", marginK > 0 ? ` plus the margin of ${figure(marginK, 1)}\u00a0K` : "");
@@ -80,9 +87,14 @@ function figure(size: number, decimals: number): string {
 /**
  * The sentence of a whole run: of the limit that governs; of the required limit that is missing, while nothing is past its limit.
  */
-export function runSentence({ verdict, limits, summary }: Pick<BlowdownResult, "verdict" | "limits" | "summary">, marginK = 0): string {
+export function runSentence(
+  { verdict, limits, summary }: Pick<BlowdownResult, "verdict" | "limits" | "summary">,
+  marginK = 0,
+): string {
   const governing = limits.find(({ governs }) => governs);
-  const missing = limits.find(({ id, verdict: one }) => one === "open" && id === "minimum-wall-temperature") ?? limits.find((one) => one.verdict === "open");
+  const missing =
+    limits.find(({ id, verdict: one }) => one === "open" && id === "minimum-wall-temperature") ??
+    limits.find((one) => one.verdict === "open");
   const told = verdict === "open" ? (missing ?? governing) : (governing ?? missing);
   if (!told) return "No limit is set, so nothing is judged.";
   // Where the target was not reached the engine gives the end of the run for its time, so that the line can be judged; it is no arrival.

@@ -33,7 +33,13 @@ export type FacilityView = {
   members: PersonView[];
 };
 
-export type SectionView = { id: string; tag: string; name: string; description: string; facility: { id: string; code: string; name: string } };
+export type SectionView = {
+  id: string;
+  tag: string;
+  name: string;
+  description: string;
+  facility: { id: string; code: string; name: string };
+};
 export type SectionDetailView = SectionView & { screenings: ScreeningRow[] };
 
 export const revisionStates = ["draft", "computed", "signed", "countersigned", "returned", "superseded", "withdrawn"] as const;
@@ -110,9 +116,20 @@ export type ScreeningView = ScreeningRow & {
   whyNot: string | null;
 };
 
-export type DeskView = { waits: (ScreeningRow & { why: string })[]; yours: ScreeningRow[]; log: { size: number; headHash: string | null; lastAt: string | null } };
+export type DeskView = {
+  waits: (ScreeningRow & { why: string })[];
+  yours: ScreeningRow[];
+  log: { size: number; headHash: string | null; lastAt: string | null };
+};
 
-export type CeremonyView = { nonce: string; idempotencyKey: string; expiresAt: string; shownSha256: string; meaning: string; method: string };
+export type CeremonyView = {
+  nonce: string;
+  idempotencyKey: string;
+  expiresAt: string;
+  shownSha256: string;
+  meaning: string;
+  method: string;
+};
 
 export type ReceiptView = { seq: number; at: string; hash: string; contentSha256: string };
 

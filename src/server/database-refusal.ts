@@ -2,7 +2,9 @@ import "server-only";
 import { Refusal } from "./refusal";
 
 /** The PostgreSQL error inside whatever the query builder wrapped it in. */
-export function databaseErrorOf(error: unknown): { code: string; constraint?: string; message: string; detail?: string } | undefined {
+export function databaseErrorOf(
+  error: unknown,
+): { code: string; constraint?: string; message: string; detail?: string } | undefined {
   for (let at: unknown = error, depth = 0; at instanceof Error && depth < 5; at = at.cause, depth++) {
     const { code, constraint, message, detail } = at as Error & { code?: unknown; constraint?: string; detail?: string };
     if (typeof code === "string") return { code, constraint, message, detail };

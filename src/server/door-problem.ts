@@ -30,7 +30,10 @@ export function problemFor(refusal: Refusal | undefined, requestId: string): Pro
 /** `remarks[0].text`, and for a key that does not belong: the place it stands in. */
 export function problemsOf(error: z.ZodError): { path: string; message: string }[] {
   return error.issues.map(({ path, message }) => ({
-    path: path.reduce<string>((at, key) => (typeof key === "number" ? `${at}[${key}]` : at ? `${at}.${String(key)}` : String(key)), ""),
+    path: path.reduce<string>(
+      (at, key) => (typeof key === "number" ? `${at}[${key}]` : at ? `${at}.${String(key)}` : String(key)),
+      "",
+    ),
     message,
   }));
 }

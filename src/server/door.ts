@@ -79,7 +79,14 @@ function handler(acts: Handler["acts"], serve: (request: Request, params: Record
     response.headers.set("x-request-id", requestId);
     response.headers.set("cache-control", "no-store");
     logLine().info(
-      { requestId, method: request.method, path: new URL(request.url).pathname, status: response.status, person: who, ms: Math.round(performance.now() - started) },
+      {
+        requestId,
+        method: request.method,
+        path: new URL(request.url).pathname,
+        status: response.status,
+        person: who,
+        ms: Math.round(performance.now() - started),
+      },
       "request",
     );
     return response;
@@ -91,10 +98,15 @@ function handler(acts: Handler["acts"], serve: (request: Request, params: Record
 function checkOrigin(request: Request): void {
   if (request.method === "GET" || request.method === "HEAD") return;
   const site = request.headers.get("sec-fetch-site");
-  if (request.headers.get("origin") !== env().origin || (site !== null && site !== "same-origin")) throw new Refusal("wrong-origin");
+  if (request.headers.get("origin") !== env().origin || (site !== null && site !== "same-origin"))
+    throw new Refusal("wrong-origin");
 }
 
-async function read<Body, Query>(route: Shapes<Body, Query>, request: Request, params: Record<string, string>): Promise<Asked<Body, Query>> {
+async function read<Body, Query>(
+  route: Shapes<Body, Query>,
+  request: Request,
+  params: Record<string, string>,
+): Promise<Asked<Body, Query>> {
   for (const [name, value] of Object.entries(params)) {
     if (!/^[\w-]{1,80}$/.test(value)) throw new Refusal("not-found", { detail: `There is no such ${name}.` });
   }

@@ -26,7 +26,14 @@ const refusal = (source: Record<string, string | undefined>): string => {
 describe("parseEnv", () => {
   it("reads a whole environment and fills the defaults", () => {
     const env = parseEnv(whole);
-    expect(env).toMatchObject({ origin: "http://localhost:3000", secure: false, bcryptCost: 12, demo: false, production: false, logLevel: "info" });
+    expect(env).toMatchObject({
+      origin: "http://localhost:3000",
+      secure: false,
+      bcryptCost: 12,
+      demo: false,
+      production: false,
+      logLevel: "info",
+    });
     expect(parseEnv({ ...whole, EBBMARK_ORIGIN: "https://ebb.example", BCRYPT_COST: "4", EBBMARK_DEMO: "1" })).toMatchObject({
       secure: true,
       bcryptCost: 4,
@@ -36,7 +43,8 @@ describe("parseEnv", () => {
 
   it("names every missing variable at once", () => {
     const message = refusal({ ...whole, SESSION_SECRET: undefined, DATABASE_URL_SIGN: undefined, EBBMARK_ENGINE_DIR: "" });
-    for (const name of ["SESSION_SECRET", "DATABASE_URL_SIGN", "EBBMARK_ENGINE_DIR"]) expect(message).toContain(`${name} is not set`);
+    for (const name of ["SESSION_SECRET", "DATABASE_URL_SIGN", "EBBMARK_ENGINE_DIR"])
+      expect(message).toContain(`${name} is not set`);
     expect(message).not.toContain("PASSWORD_PEPPER");
   });
 
@@ -53,6 +61,8 @@ describe("parseEnv", () => {
   });
 
   it("keeps values out of the message", () => {
-    expect(refusal({ ...whole, SESSION_SECRET: "tell-nobody", DATABASE_URL_READ: "http://u:hidden@x" })).not.toMatch(/tell-nobody|hidden/);
+    expect(refusal({ ...whole, SESSION_SECRET: "tell-nobody", DATABASE_URL_READ: "http://u:hidden@x" })).not.toMatch(
+      /tell-nobody|hidden/,
+    );
   });
 });

@@ -17,12 +17,19 @@ const schema = z.object({
   DATABASE_URL_SIGN: postgres,
   SESSION_SECRET: z.string().min(32, "is shorter than 32 characters; make a random one"),
   PASSWORD_PEPPER: z.string().min(32, "is shorter than 32 characters; make a random one"),
-  BCRYPT_COST: z.coerce.number({ error: "is not a number" }).int("is not whole").min(4, "is below 4").max(15, "is above 15").default(12),
+  BCRYPT_COST: z.coerce
+    .number({ error: "is not a number" })
+    .int("is not whole")
+    .min(4, "is below 4")
+    .max(15, "is above 15")
+    .default(12),
   EBBMARK_ENGINE_DIR: filled,
   EBBMARK_ENGINE_THREAD: filled,
   EBBMARK_PASSWORD_THREAD: filled,
   EBBMARK_DEMO: z.enum(["0", "1"], { error: "is neither 0 nor 1" }).default("0"),
-  LOG_LEVEL: z.enum(["trace", "debug", "info", "warn", "error", "fatal", "silent"], { error: "is no level of the log" }).default("info"),
+  LOG_LEVEL: z
+    .enum(["trace", "debug", "info", "warn", "error", "fatal", "silent"], { error: "is no level of the log" })
+    .default("info"),
 });
 
 export type Env = {

@@ -11,7 +11,11 @@ import type { Viewer } from "./auth/viewer";
  * Drafts are closed to auditors by those rules, yet lists of signed records need the summary kept with the frozen draft. Such reads pass
  * `beyondDrafts` and limit themselves to signed revisions in their `where`.
  */
-export function reading<T>(viewer: Viewer, work: (transaction: Transaction) => Promise<T>, options: { beyondDrafts?: true } = {}): Promise<T> {
+export function reading<T>(
+  viewer: Viewer,
+  work: (transaction: Transaction) => Promise<T>,
+  options: { beyondDrafts?: true } = {},
+): Promise<T> {
   return asPerson(readDatabase(), options.beyondDrafts ? "system" : viewer.id, work);
 }
 

@@ -2,7 +2,10 @@
 import { parentPort } from "node:worker_threads";
 import { compareSync, hashSync } from "bcryptjs";
 
-export type PasswordJob = { id: number; job: { act: "hash"; input: string; cost: number } | { act: "compare"; input: string; hash: string } };
+export type PasswordJob = {
+  id: number;
+  job: { act: "hash"; input: string; cost: number } | { act: "compare"; input: string; hash: string };
+};
 export type PasswordAnswer = { id: number; done: string | boolean };
 
 parentPort?.on("message", ({ id, job }: PasswordJob) => {

@@ -14,7 +14,11 @@ export async function getAccount(viewer: Viewer): Promise<AccountView> {
   const [facilities, sessions] = await Promise.all([
     ids.length === 0
       ? []
-      : readDatabase().select({ id: facility.id, name: facility.name }).from(facility).where(inArray(facility.id, ids)).orderBy(asc(facility.name)),
+      : readDatabase()
+          .select({ id: facility.id, name: facility.name })
+          .from(facility)
+          .where(inArray(facility.id, ids))
+          .orderBy(asc(facility.name)),
     listSessions(viewer.id),
   ]);
   return {

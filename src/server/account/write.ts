@@ -17,7 +17,9 @@ export async function changePassword(viewer: Viewer, { current, next }: ChangePa
   checkNewPassword(next, viewer, "next");
   await provePassword(viewer, current, "sign-in-failed");
   if (current.normalize("NFKC") === next.normalize("NFKC")) {
-    throw new Refusal("invalid-request", { problems: [{ path: "next", message: "This is the password in use. Choose another." }] });
+    throw new Refusal("invalid-request", {
+      problems: [{ path: "next", message: "This is the password in use. Choose another." }],
+    });
   }
   const passwordHash = await hashPassword(next);
   await writeDatabase()

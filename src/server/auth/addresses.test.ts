@@ -12,7 +12,11 @@ const files = (name: RegExp): string[] =>
 
 /** Address of a file below src/app; folders in round brackets group files and are no part of it. */
 const addressOf = (file: string): string =>
-  `/${relative(app, file).split(sep).slice(0, -1).filter((part) => !part.startsWith("(")).join("/")}`;
+  `/${relative(app, file)
+    .split(sep)
+    .slice(0, -1)
+    .filter((part) => !part.startsWith("("))
+    .join("/")}`;
 
 const methods = ["GET", "HEAD", "POST", "PUT", "PATCH", "DELETE", "OPTIONS"];
 

@@ -25,7 +25,13 @@ export const apiAddresses: Record<string, Partial<Record<Method, readonly (Act |
   "/api/v1/screenings/[screeningId]/draft": { GET: ["draft.read"], PUT: ["draft.edit"] },
   "/api/v1/screenings/[screeningId]/compute": { POST: ["draft.compute"] },
   "/api/v1/screenings/[screeningId]/ceremony": {
-    POST: ["screening.sign", "screening.countersign", "screening.return", "screening.withdraw-signed", "screening.withdraw-countersigned"],
+    POST: [
+      "screening.sign",
+      "screening.countersign",
+      "screening.return",
+      "screening.withdraw-signed",
+      "screening.withdraw-countersigned",
+    ],
   },
   "/api/v1/screenings/[screeningId]/sign": { POST: ["screening.sign"] },
   "/api/v1/screenings/[screeningId]/countersign": { POST: ["screening.countersign"] },

@@ -47,7 +47,15 @@ const there = "44444444-4444-4444-8444-444444444444";
 
 /** The symbol that makes a `Viewer` is private to its file; a test stands outside of it. */
 const viewer = (role: Role | "system", active = true): Viewer =>
-  ({ id: me, badge: "E-114", role, active, facilityIds: new Set([here]), mustChangePassword: false, sessionId: null }) as unknown as Viewer;
+  ({
+    id: me,
+    badge: "E-114",
+    role,
+    active,
+    facilityIds: new Set([here]),
+    mustChangePassword: false,
+    sessionId: null,
+  }) as unknown as Viewer;
 
 const refusalOf = (act: Act, role: Role, matter: Matter, active = true): string => {
   try {
@@ -129,7 +137,8 @@ describe("authorise", () => {
   });
 
   it("refuses everything to a disabled person", () => {
-    for (const act of acts) for (const role of roles) expect(refusalOf(act, role, { facilityId: here, personId: me }, false)).toBe("account-disabled");
+    for (const act of acts)
+      for (const role of roles) expect(refusalOf(act, role, { facilityId: here, personId: me }, false)).toBe("account-disabled");
   });
 
   it("lets a job do only what is listed for jobs", () => {

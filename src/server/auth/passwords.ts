@@ -57,7 +57,8 @@ export function checkNewPassword(password: string, who: { badge: string; printed
   const bare = text.toLowerCase().replace(/[^\p{L}\p{N}]/gu, "");
   const own = [who.badge, who.printedName].map((word) => word.toLowerCase().replace(/[^\p{L}\p{N}]/gu, ""));
   const rest = [...contextWords, ...own].reduce((left, word) => left.replaceAll(word, ""), bare).replace(/\d+$/, "");
-  if (rest.length < 4) refuse("This is made of your badge, your name or a word that is guessed first. Use a few unrelated words.");
+  if (rest.length < 4)
+    refuse("This is made of your badge, your name or a word that is guessed first. Use a few unrelated words.");
 }
 
 async function send<T>(job: unknown): Promise<T> {
@@ -65,7 +66,10 @@ async function send<T>(job: unknown): Promise<T> {
     return await pool().run<T>(job);
   } catch (error) {
     if (error instanceof PoolError && error.trouble === "queue-full") {
-      throw new Refusal("busy", { detail: "Too many people sign in at this moment. Try again in a few seconds.", retryAfterS: 5 });
+      throw new Refusal("busy", {
+        detail: "Too many people sign in at this moment. Try again in a few seconds.",
+        retryAfterS: 5,
+      });
     }
     throw error;
   }

@@ -16,17 +16,33 @@ export async function listDemoAccounts(): Promise<DemoAccountView[]> {
   if (!env().demo) return [];
   const read = readDatabase();
   const [loaded, people] = await Promise.all([
-    read.select({ id: facility.id }).from(facility).where(and(eq(facility.code, demoFacilityCode), eq(facility.demo, true))),
+    read
+      .select({ id: facility.id })
+      .from(facility)
+      .where(and(eq(facility.code, demoFacilityCode), eq(facility.demo, true))),
     read
       .select({ id: person.id, badge: person.badge, printedName: person.printedName, role: person.role, active: person.active })
       .from(person)
-      .where(inArray(person.badge, demoPeople.map(({ badge }) => badge))),
+      .where(
+        inArray(
+          person.badge,
+          demoPeople.map(({ badge }) => badge),
+        ),
+      ),
   ]);
   if (loaded.length === 0 || people.length === 0) return [];
   const changed = await read
     .select({ personId: securityEvent.personId, by: securityEvent.details })
     .from(securityEvent)
-    .where(and(inArray(securityEvent.personId, people.map(({ id }) => id)), inArray(securityEvent.kind, ["password-changed", "password-set"])));
+    .where(
+      and(
+        inArray(
+          securityEvent.personId,
+          people.map(({ id }) => id),
+        ),
+        inArray(securityEvent.kind, ["password-changed", "password-set"]),
+      ),
+    );
   return demoPeople.flatMap(({ badge, password }) => {
     const found = people.find((one) => one.badge === badge);
     if (!found?.active) return [];

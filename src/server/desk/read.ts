@@ -45,7 +45,9 @@ async function approverDesk(viewer: Viewer): Promise<Pick<DeskView, "waits" | "y
   const decides = ({ facility, contributors, author }: FoundRow) =>
     mayDo(viewer, "screening.countersign", { facilityId: facility.id, contributors, authorId: author.id });
   return {
-    waits: signed.filter(decides).map((row) => ({ ...toRow(row), why: `Signed by ${row.author.badge}; waits for your countersign.` })),
+    waits: signed
+      .filter(decides)
+      .map((row) => ({ ...toRow(row), why: `Signed by ${row.author.badge}; waits for your countersign.` })),
     yours: (await rowsWhere(viewer, eq(revision.decidedBy, viewer.id))).map(toRow),
   };
 }
@@ -55,7 +57,9 @@ function rowsWhere(viewer: Viewer, where: SQL | undefined): Promise<FoundRow[]> 
   return reading(
     viewer,
     (transaction) =>
-      selectRows(transaction, scope.which, and(scope.where, where)).orderBy(desc(draft.updatedAt), desc(screening.number)).limit(mostRows),
+      selectRows(transaction, scope.which, and(scope.where, where))
+        .orderBy(desc(draft.updatedAt), desc(screening.number))
+        .limit(mostRows),
     scope.which === "signed" ? { beyondDrafts: true } : {},
   );
 }

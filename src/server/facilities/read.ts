@@ -32,7 +32,14 @@ async function load(transaction: Transaction, which: SQL | undefined): Promise<F
     .where(inArray(section.facilityId, ids))
     .groupBy(section.facilityId);
   const members = await transaction
-    .select({ facilityId: member.facilityId, id: person.id, badge: person.badge, printedName: person.printedName, role: person.role, active: person.active })
+    .select({
+      facilityId: member.facilityId,
+      id: person.id,
+      badge: person.badge,
+      printedName: person.printedName,
+      role: person.role,
+      active: person.active,
+    })
     .from(member)
     .innerJoin(person, eq(person.id, member.personId))
     .where(inArray(member.facilityId, ids))

@@ -16,14 +16,20 @@ import { Refusal } from "@/server/refusal";
 import { getFacility } from "./read";
 
 /** Adds a facility with its first limit policy, which becomes an entry. Nobody belongs to it yet. */
-export async function createFacility(viewer: Viewer, input: CreateFacility, options: { demo?: true } = {}): Promise<FacilityView> {
+export async function createFacility(
+  viewer: Viewer,
+  input: CreateFacility,
+  options: { demo?: true } = {},
+): Promise<FacilityView> {
   authorise(viewer, "facility.create");
   const [made] = await writing(viewer, (transaction) =>
     transaction
       .insert(facility)
       .values({ ...input, demo: options.demo ?? false, createdBy: viewer.id })
       .returning({ id: facility.id }),
-  ).catch(alreadyExists("facility_code_unique", "code", `There is a facility with code ${input.code} already. Choose another code.`));
+  ).catch(
+    alreadyExists("facility_code_unique", "code", `There is a facility with code ${input.code} already. Choose another code.`),
+  );
   if (!made) throw new Error("the facility was not stored");
   await recordEvent(signDatabase(), {
     actor: viewer.id,

@@ -8,7 +8,9 @@ export type Health = { status: "ok" | "starting" | "failing"; database: boolean;
 /** Whether the process can do its work: the database answers, and the record has been founded by the migrations. */
 export async function readHealth(): Promise<Health> {
   try {
-    const { rows } = await readDatabase().execute<{ migrated: boolean }>(sql`select to_regclass('ledger.head') is not null as migrated`);
+    const { rows } = await readDatabase().execute<{ migrated: boolean }>(
+      sql`select to_regclass('ledger.head') is not null as migrated`,
+    );
     const migrated = rows[0]?.migrated === true;
     return { status: migrated ? "ok" : "starting", database: true, migrated };
   } catch (error) {

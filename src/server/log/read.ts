@@ -35,7 +35,10 @@ export async function getEntry(viewer: Viewer, seq: number): Promise<EntryView |
  * A run of entries for checking the chain in the browser. Every envelope, because the chain needs each; bodies only where the viewer may read
  * them.
  */
-export async function listVerification(viewer: Viewer, { from, limit }: { from: number; limit: number }): Promise<VerificationView> {
+export async function listVerification(
+  viewer: Viewer,
+  { from, limit }: { from: number; limit: number },
+): Promise<VerificationView> {
   authorise(viewer, "log.verify");
   const { origin, size, hash } = await getHead(readDatabase());
   const rows = await listForVerification(readDatabase(), viewer, from, limit);

@@ -36,7 +36,9 @@ export async function listPeople(viewer: Viewer): Promise<PersonDetailView[]> {
       printedName,
       role,
       active,
-      facilities: memberships.filter(({ personId }) => personId === id).map(({ id: facilityId, name }) => ({ id: facilityId, name })),
+      facilities: memberships
+        .filter(({ personId }) => personId === id)
+        .map(({ id: facilityId, name }) => ({ id: facilityId, name })),
       mustChangePassword: credentials.find(({ personId }) => personId === id)?.mustChange ?? false,
       lastSignIn: signIns.find(({ personId }) => personId === id)?.at?.toISOString() ?? null,
       proposedRole: proposed ? { role: proposed.role, mine: proposed.proposedBy === viewer.id } : null,

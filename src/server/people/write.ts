@@ -119,7 +119,13 @@ async function confirmRole(viewer: Viewer, target: Target, role: Role): Promise<
     subject: subjectOf.person(target.id),
     idempotencyKey: randomUUID(),
     kind: "role_confirmed",
-    body: { badge: target.badge, from: target.role, role, proposed: proposal.seq, twoPersonRule: await twoPersonRule(readDatabase()) },
+    body: {
+      badge: target.badge,
+      from: target.role,
+      role,
+      proposed: proposal.seq,
+      twoPersonRule: await twoPersonRule(readDatabase()),
+    },
   });
 }
 

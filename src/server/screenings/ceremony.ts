@@ -27,7 +27,14 @@ export async function openSigningPage(viewer: Viewer, screeningId: string, { act
   const found = await reading(viewer, (transaction) => requireMatter(transaction, screeningId));
   authoriseSigning(viewer, found, act, rev);
   const shownSha256 = shownContent(found, act, rev);
-  const opened = await openCeremony(writeDatabase(), { personId: viewer.id, sessionIdSha256: viewer.sessionId, screeningId, rev, act, shownSha256 });
+  const opened = await openCeremony(writeDatabase(), {
+    personId: viewer.id,
+    sessionIdSha256: viewer.sessionId,
+    screeningId,
+    rev,
+    act,
+    shownSha256,
+  });
   return {
     nonce: opened.nonce,
     idempotencyKey: opened.idempotencyKey,
@@ -40,9 +47,16 @@ export async function openSigningPage(viewer: Viewer, screeningId: string, { act
 
 /** Authorises a signing act on one revision. A withdrawal is one of two acts, by what the revision is now. */
 export function authoriseSigning(viewer: Viewer, found: Found, act: CeremonyAct, rev: number): void {
+  // First whether it is there at all for this person, so that no refusal below tells a stranger that it is.
+  authorise(viewer, "screening.read", matterOf(found));
   const state = found.signed.find((one) => one.rev === rev)?.state;
   const withdrawal: Act = state === "countersigned" ? "screening.withdraw-countersigned" : "screening.withdraw-signed";
-  const acts = { sign: "screening.sign", countersign: "screening.countersign", return: "screening.return", withdraw: withdrawal } as const;
+  const acts = {
+    sign: "screening.sign",
+    countersign: "screening.countersign",
+    return: "screening.return",
+    withdraw: withdrawal,
+  } as const;
   authorise(viewer, acts[act], matterOf(found, rev));
 }
 
@@ -57,7 +71,8 @@ function shownContent(found: Found, act: CeremonyAct, rev: number): string {
     return draft.preparedSha256;
   }
   if (!signed) throw new Refusal("wrong-state", { detail: "This revision is not signed." });
-  if (act !== "withdraw" && signed.state !== "signed") throw new Refusal("already-decided", { detail: `This revision is ${signed.state}.` });
+  if (act !== "withdraw" && signed.state !== "signed")
+    throw new Refusal("already-decided", { detail: `This revision is ${signed.state}.` });
   if (act === "withdraw" && signed.state !== "signed" && signed.state !== "countersigned") {
     throw new Refusal("wrong-state", { detail: `This revision is ${signed.state}.` });
   }
@@ -68,12 +83,22 @@ function shownContent(found: Found, act: CeremonyAct, rev: number): string {
  * The password, given again on an open page. Whether the page can still be used is asked first, so an expired page costs no attempt; a wrong
  * password leaves the page open. A page that was used already can only bring its first receipt again, so a retry is not asked twice.
  */
-export async function proveOnPage(viewer: Viewer, { nonce, idempotencyKey, password }: { nonce: string; idempotencyKey: string; password: string }): Promise<void> {
+export async function proveOnPage(
+  viewer: Viewer,
+  { nonce, idempotencyKey, password }: { nonce: string; idempotencyKey: string; password: string },
+): Promise<void> {
   const [open] = await writeDatabase()
-    .select({ personId: ceremony.personId, sessionId: ceremony.sessionId, key: ceremony.idempotencyKey, expiresAt: ceremony.expiresAt, usedAt: ceremony.usedAt })
+    .select({
+      personId: ceremony.personId,
+      sessionId: ceremony.sessionId,
+      key: ceremony.idempotencyKey,
+      expiresAt: ceremony.expiresAt,
+      usedAt: ceremony.usedAt,
+    })
     .from(ceremony)
     .where(eq(ceremony.nonce, nonce));
-  if (!open || open.personId !== viewer.id || open.sessionId !== viewer.sessionId || open.key !== idempotencyKey) throw new Refusal("ceremony-expired");
+  if (!open || open.personId !== viewer.id || open.sessionId !== viewer.sessionId || open.key !== idempotencyKey)
+    throw new Refusal("ceremony-expired");
   if (open.usedAt) return;
   if (open.expiresAt <= new Date()) throw new Refusal("ceremony-expired");
   await provePassword(viewer, password, "signature-password-failed");

@@ -36,7 +36,10 @@ export async function saveDraft(viewer: Viewer, screeningId: string, { baseVersi
 
     const title = kept.lines["1.10"]?.typed.trim();
     if (title && title !== found.screening.title) {
-      await transaction.update(screening).set({ title: title.slice(0, 120) }).where(eq(screening.id, screeningId));
+      await transaction
+        .update(screening)
+        .set({ title: title.slice(0, 120) })
+        .where(eq(screening.id, screeningId));
     }
     return null;
   });

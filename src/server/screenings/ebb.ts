@@ -9,7 +9,10 @@ const points = 40;
  * The pressure curve of a run as a thumbnail: x over twice the time allowed (over the run where none is set), y over the start pressure, at
  * even steps; the post where the target is due.
  */
-export function ebbOf({ limits, start }: Pick<BlowdownCase, "limits" | "start">, { series, verdict }: Pick<BlowdownResult, "series" | "verdict">): Ebb {
+export function ebbOf(
+  { limits, start }: Pick<BlowdownCase, "limits" | "start">,
+  { series, verdict }: Pick<BlowdownResult, "series" | "verdict">,
+): Ebb {
   const { timeS, pressurePa } = series;
   const endS = timeS.at(-1) ?? 0;
   const allowedS = limits?.targetTimeS;

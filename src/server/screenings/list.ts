@@ -29,7 +29,11 @@ export async function listScreenings(viewer: Viewer, filter: Partial<ScreeningFi
       const all = selectRows(transaction, scope.which, matching).as("matching");
       const [counted] = await transaction.select({ total: count() }).from(all);
       const rows = found.slice(0, limit);
-      return { rows: rows.map(toRow), total: counted?.total ?? 0, next: found.length > limit ? (rows.at(-1)?.number ?? null) : null };
+      return {
+        rows: rows.map(toRow),
+        total: counted?.total ?? 0,
+        next: found.length > limit ? (rows.at(-1)?.number ?? null) : null,
+      };
     },
     scope.which === "signed" ? { beyondDrafts: true } : {},
   );

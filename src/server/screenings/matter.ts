@@ -20,8 +20,17 @@ export async function findMatter(transaction: Transaction, screeningId: string) 
     .innerJoin(facility, eq(facility.id, section.facilityId))
     .where(eq(screening.id, screeningId));
   if (!place) return null;
-  const [newestDraft] = await transaction.select().from(draft).where(eq(draft.screeningId, screeningId)).orderBy(desc(draft.rev)).limit(1);
-  const signed = await transaction.select().from(revision).where(eq(revision.screeningId, screeningId)).orderBy(desc(revision.rev));
+  const [newestDraft] = await transaction
+    .select()
+    .from(draft)
+    .where(eq(draft.screeningId, screeningId))
+    .orderBy(desc(draft.rev))
+    .limit(1);
+  const signed = await transaction
+    .select()
+    .from(revision)
+    .where(eq(revision.screeningId, screeningId))
+    .orderBy(desc(revision.rev));
   return { ...place, newestDraft, signed };
 }
 

@@ -30,7 +30,11 @@ const json = "application/json";
  * Throws   Refusal "draft-changed" when the draft is not the version asked for, "invalid-request" with the lines that stand in the way,
  *          "cannot-compute" with the engine's reason, "busy"
  */
-export async function prepareScreening(viewer: Viewer, screeningId: string, { draftVersion }: { draftVersion: number }): Promise<PreparedView> {
+export async function prepareScreening(
+  viewer: Viewer,
+  screeningId: string,
+  { draftVersion }: { draftVersion: number },
+): Promise<PreparedView> {
   const { found, before } = await reading(viewer, async (transaction) => {
     const matter = await requireMatter(transaction, screeningId);
     authorise(viewer, "draft.compute", matterOf(matter));
@@ -50,7 +54,12 @@ export async function prepareScreening(viewer: Viewer, screeningId: string, { dr
   const kept = await writing(viewer, (transaction) =>
     transaction
       .update(draft)
-      .set({ prepared: summaryOf(content, runs), preparedSha256: contentSha256, preparedVersion: draftVersion, preparedAt: sql`now()` })
+      .set({
+        prepared: summaryOf(content, runs),
+        preparedSha256: contentSha256,
+        preparedVersion: draftVersion,
+        preparedAt: sql`now()`,
+      })
       .where(and(eq(draft.screeningId, screeningId), eq(draft.rev, open.rev), eq(draft.version, draftVersion)))
       .returning({ rev: draft.rev }),
   );
@@ -100,7 +109,8 @@ async function runAndStore(letter: string, document: BlowdownCase): Promise<Stor
     await putContent(writeDatabase(), json, computed.resultText),
     await putContent(writeDatabase(), json, computed.confirmationText),
   ];
-  if (caseSha256 !== computed.caseSha256) throw new Error(`the stored case hashes to ${caseSha256}, the engine says ${computed.caseSha256}`);
+  if (caseSha256 !== computed.caseSha256)
+    throw new Error(`the stored case hashes to ${caseSha256}, the engine says ${computed.caseSha256}`);
   return { letter, marginK: document.limits?.minimumMetalMarginK ?? 0, computed, caseSha256, resultSha256, confirmationSha256 };
 }
 
@@ -112,7 +122,12 @@ function summaryOf(content: RecordContent, runs: readonly StoredRun[]): Prepared
     verdict: content.verdict,
     sentence: content.sentence,
     ebb: shown ? ebbOf(JSON.parse(shown.computed.caseText) as BlowdownCase, shown.computed.result) : null,
-    runs: runs.map(({ letter, caseSha256, resultSha256, confirmationSha256 }) => ({ letter, caseSha256, resultSha256, confirmationSha256 })),
+    runs: runs.map(({ letter, caseSha256, resultSha256, confirmationSha256 }) => ({
+      letter,
+      caseSha256,
+      resultSha256,
+      confirmationSha256,
+    })),
   };
 }
 

@@ -37,7 +37,10 @@ export async function getScreening(viewer: Viewer, screeningId: string, rev?: nu
       if (!shown) return null;
 
       const [row] = await selectRows(transaction, signedOnly ? "signed" : "any", eq(screening.id, screeningId));
-      const [kept] = await transaction.select().from(draft).where(and(eq(draft.screeningId, screeningId), eq(draft.rev, shown.rev)));
+      const [kept] = await transaction
+        .select()
+        .from(draft)
+        .where(and(eq(draft.screeningId, screeningId), eq(draft.rev, shown.rev)));
       if (!row || !kept) return null;
       const signed = found.signed.find((one) => one.rev === shown.rev);
       const base = toRow({ ...row, rev: shown.rev, state: shown.state, prepared: kept.prepared });
@@ -67,7 +70,11 @@ export async function getDraft(viewer: Viewer, screeningId: string): Promise<Dra
   });
 }
 
-async function listRevisions(transaction: Transaction, screeningId: string, signedOnly: boolean): Promise<ScreeningView["revisions"]> {
+async function listRevisions(
+  transaction: Transaction,
+  screeningId: string,
+  signedOnly: boolean,
+): Promise<ScreeningView["revisions"]> {
   const rows = await transaction
     .select({ rev: draft.rev, state: stateOf, updatedAt: draft.updatedAt, signedSeq: revision.signedSeq })
     .from(draft)
@@ -93,7 +100,11 @@ async function draftView(transaction: Transaction, viewer: Viewer, found: Found,
   };
 }
 
-async function preparedView(transaction: Transaction, kept: DraftRow, signedSha256: string | undefined): Promise<PreparedView | null> {
+async function preparedView(
+  transaction: Transaction,
+  kept: DraftRow,
+  signedSha256: string | undefined,
+): Promise<PreparedView | null> {
   const contentSha256 = signedSha256 ?? kept.preparedSha256;
   if (!contentSha256 || !kept.preparedAt || kept.preparedVersion === null) return null;
   const content = await storedRecord(transaction, contentSha256);

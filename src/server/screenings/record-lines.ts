@@ -52,7 +52,17 @@ function quantity(key: LineKey, line: QuantityLine, value: LineValue | undefined
   if (given === undefined) return [];
   const unit = line.shown.SI;
   const source: Source = { kind: "sheet", note: `limit policy ${site.policy.name} rev ${site.policy.rev}` };
-  return [{ line: key, label: line.label, typed: figure(line, given, unit, site), unit, si: given, siUnit: units[line.quantity].si, source }];
+  return [
+    {
+      line: key,
+      label: line.label,
+      typed: figure(line, given, unit, site),
+      unit,
+      si: given,
+      siUnit: units[line.quantity].si,
+      source,
+    },
+  ];
 }
 
 /** What the policy gives for a line of part 7 that is left empty; the same as the case is assembled with. */
@@ -74,7 +84,12 @@ function fromPolicy({ no }: QuantityLine, { policy, barometricPressurePa }: Site
 }
 
 /** Twelve significant digits show every typed figure as it was and hide the last bits of the arithmetic. */
-function figure({ quantity: id }: Pick<QuantityLine, "quantity">, si: number, unit: string, { barometricPressurePa }: Pick<SiteFacts, "barometricPressurePa">): string {
+function figure(
+  { quantity: id }: Pick<QuantityLine, "quantity">,
+  si: number,
+  unit: string,
+  { barometricPressurePa }: Pick<SiteFacts, "barometricPressurePa">,
+): string {
   return String(Number(fromSi(id, si, unit, barometricPressurePa).toPrecision(12)));
 }
 
@@ -84,5 +99,15 @@ function derived(draft: DraftDocument, key: LineKey, line: Line & { kind: "deriv
   if (si === undefined) return [];
   const unit = line.shown.SI;
   const typed = String(Number(si.toPrecision(6)));
-  return [{ line: key, label: line.label, typed, unit, si, siUnit: units[line.quantity].si, source: { kind: "derived", note: "from the dimensions" } }];
+  return [
+    {
+      line: key,
+      label: line.label,
+      typed,
+      unit,
+      si,
+      siUnit: units[line.quantity].si,
+      source: { kind: "derived", note: "from the dimensions" },
+    },
+  ];
 }

@@ -14,7 +14,14 @@ import type { Found } from "./matter";
 import { recordLines } from "./record-lines";
 
 /** One case, computed and stored. */
-export type StoredRun = { letter: string; marginK: number; computed: ComputedTwice; caseSha256: string; resultSha256: string; confirmationSha256: string };
+export type StoredRun = {
+  letter: string;
+  marginK: number;
+  computed: ComputedTwice;
+  caseSha256: string;
+  resultSha256: string;
+  confirmationSha256: string;
+};
 
 type Draft = NonNullable<Found["newestDraft"]>;
 
@@ -24,7 +31,12 @@ type Draft = NonNullable<Found["newestDraft"]>;
  *
  * before   content of the revision this one replaces, for what changed since
  */
-export function composeRecord(found: Found, draft: Draft, runs: readonly StoredRun[], before: RecordContent | null): RecordContent {
+export function composeRecord(
+  found: Found,
+  draft: Draft,
+  runs: readonly StoredRun[],
+  before: RecordContent | null,
+): RecordContent {
   const { screening, section, facility } = found;
   const site: SiteFacts = facility;
   const lines = recordLines(draft.document, site);
@@ -92,7 +104,12 @@ function recordCase({ letter, marginK, computed, ...hashes }: StoredRun, draft: 
 
 function compositionRows(draft: DraftDocument): RecordContent["composition"] {
   const typed = new Map(draft.composition.rows.map((row) => [row.id, row.typed]));
-  return moleFractions(draft).map(({ id, moleFraction }) => ({ id, name: findLibraryRow(id)?.name ?? id, typed: typed.get(id) ?? "", moleFraction }));
+  return moleFractions(draft).map(({ id, moleFraction }) => ({
+    id,
+    name: findLibraryRow(id)?.name ?? id,
+    typed: typed.get(id) ?? "",
+    moleFraction,
+  }));
 }
 
 /** The cautions of every case, each once, and C6 where lines rest on assumption; C1 to C7 first. */
@@ -116,7 +133,8 @@ function changedSince(before: RecordContent, after: RecordContent): RecordConten
   const words = ({ typed, unit, source }: RecordContent["lines"][number]) =>
     `${typed}${unit && unit !== "–" ? ` ${unit}` : ""}${source ? `, ${source.kind}: ${source.note}` : ""}`;
   const mixture = ({ composition, compositionSource }: RecordContent) =>
-    composition.map(({ id, typed }) => `${id} ${typed}`).join(", ") + (compositionSource ? `, ${compositionSource.kind}: ${compositionSource.note}` : "");
+    composition.map(({ id, typed }) => `${id} ${typed}`).join(", ") +
+    (compositionSource ? `, ${compositionSource.kind}: ${compositionSource.note}` : "");
   const was = new Map(before.lines.map((line) => [line.line, words(line)]));
   const is = new Map(after.lines.map((line) => [line.line, words(line)]));
   was.set("3.01", mixture(before));

@@ -53,7 +53,19 @@ export function selectRows(transaction: Transaction, which: "any" | "signed", wh
 
 export type FoundRow = Awaited<ReturnType<typeof selectRows>>[number];
 
-export function toRow({ id, number, title, rev, state, prepared, updatedAt, entryAt, section, facility, author }: FoundRow): ScreeningRow {
+export function toRow({
+  id,
+  number,
+  title,
+  rev,
+  state,
+  prepared,
+  updatedAt,
+  entryAt,
+  section,
+  facility,
+  author,
+}: FoundRow): ScreeningRow {
   return {
     id,
     record: recordName(number),

@@ -34,15 +34,21 @@ export async function countersignScreening(viewer: Viewer, screeningId: string, 
 /** Gives a signed revision back with remarks, each tied to a line. */
 export async function returnScreening(viewer: Viewer, screeningId: string, request: Return): Promise<ReceiptView> {
   const wrong = request.remarks.flatMap(({ line }, at) =>
-    parseLineKey(line) ? [] : [{ path: `remarks[${at}].line`, message: `There is no line ${line}. Cite a line such as 4.03 or A5.02.` }],
+    parseLineKey(line)
+      ? []
+      : [{ path: `remarks[${at}].line`, message: `There is no line ${line}. Cite a line such as 4.03 or A5.02.` }],
   );
   if (wrong.length > 0) throw new Refusal("invalid-request", { problems: wrong });
-  return act(viewer, screeningId, "return", request, (common) => returnRevision(databases(), { ...common, remarks: request.remarks }));
+  return act(viewer, screeningId, "return", request, (common) =>
+    returnRevision(databases(), { ...common, remarks: request.remarks }),
+  );
 }
 
 /** Takes a revision back: its author while nobody has decided, an approver once it is countersigned. */
 export async function withdrawScreening(viewer: Viewer, screeningId: string, request: Withdraw): Promise<ReceiptView> {
-  return act(viewer, screeningId, "withdraw", request, (common) => withdrawRevision(databases(), { ...common, reason: request.reason }));
+  return act(viewer, screeningId, "withdraw", request, (common) =>
+    withdrawRevision(databases(), { ...common, reason: request.reason }),
+  );
 }
 
 /**
@@ -54,7 +60,14 @@ async function act(
   screeningId: string,
   name: CeremonyAct,
   { rev, nonce, idempotencyKey, shownSha256, password }: Common,
-  file: (common: { personId: string; screeningId: string; rev: number; nonce: string; idempotencyKey: string; shownSha256: string }) => Promise<Receipt>,
+  file: (common: {
+    personId: string;
+    screeningId: string;
+    rev: number;
+    nonce: string;
+    idempotencyKey: string;
+    shownSha256: string;
+  }) => Promise<Receipt>,
 ): Promise<ReceiptView> {
   const found = await reading(viewer, (transaction) => requireMatter(transaction, screeningId));
   authoriseSigning(viewer, found, name, rev);
@@ -69,6 +82,9 @@ async function refuseBlockers(viewer: Viewer, contentSha256: string): Promise<vo
   });
   const problems = blockersOf(record);
   if (problems.length > 0) {
-    throw new Refusal("invalid-request", { detail: "These values have no source. Say where each comes from, then compute again.", problems });
+    throw new Refusal("invalid-request", {
+      detail: "These values have no source. Say where each comes from, then compute again.",
+      problems,
+    });
   }
 }

@@ -12,7 +12,10 @@ import { getSection } from "./read";
 export async function createSection(viewer: Viewer, { facilityId, tag, name, description }: CreateSection): Promise<SectionView> {
   authorise(viewer, "section.create", { facilityId });
   const [made] = await writing(viewer, (transaction) =>
-    transaction.insert(section).values({ facilityId, tag, name, description, createdBy: viewer.id }).returning({ id: section.id }),
+    transaction
+      .insert(section)
+      .values({ facilityId, tag, name, description, createdBy: viewer.id })
+      .returning({ id: section.id }),
   ).catch(alreadyExists("section_tag_in_facility", "tag", `Section ${tag} is there already. Open it, or choose another tag.`));
   const view = made && (await getSection(viewer, made.id));
   if (!view) throw new Error("the section that was just made can't be read");

@@ -15,6 +15,10 @@ export type SecurityEventKind =
   | "signature-password-failed";
 
 /** Adds a line to the security log. `details` never hold a secret. */
-export async function noteSecurityEvent(kind: SecurityEventKind, personId: string | null, details: Record<string, string | number> = {}): Promise<void> {
+export async function noteSecurityEvent(
+  kind: SecurityEventKind,
+  personId: string | null,
+  details: Record<string, string | number> = {},
+): Promise<void> {
   await writeDatabase().insert(securityEvent).values({ kind, personId, details });
 }

@@ -55,7 +55,10 @@ export async function signOut(viewer: Viewer): Promise<void> {
 export const attemptKey = (badge: string): string => `badge:${badge}`;
 
 export async function passwordHashOf(personId: string): Promise<string | undefined> {
-  const [row] = await writeDatabase().select({ hash: credential.passwordHash }).from(credential).where(eq(credential.personId, personId));
+  const [row] = await writeDatabase()
+    .select({ hash: credential.passwordHash })
+    .from(credential)
+    .where(eq(credential.personId, personId));
   return row?.hash;
 }
 
@@ -64,7 +67,11 @@ export async function passwordHashOf(personId: string): Promise<string | undefin
  *
  * Throws   Refusal "wrong-credentials" or "account-locked"; counted like a failed sign-in
  */
-export async function provePassword(viewer: Viewer, password: string, failure: "signature-password-failed" | "sign-in-failed"): Promise<void> {
+export async function provePassword(
+  viewer: Viewer,
+  password: string,
+  failure: "signature-password-failed" | "sign-in-failed",
+): Promise<void> {
   const key = attemptKey(viewer.badge);
   await takeAttempt(key);
   if (!(await passwordHolds(password, await passwordHashOf(viewer.id)))) {

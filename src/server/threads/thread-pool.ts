@@ -40,7 +40,7 @@ export class PoolError extends Error {
 }
 
 type Waiting = { job: unknown; settle: (answer: unknown) => void; fail: (error: Error) => void };
-type Seat = { worker: Worker; busy: { id: number; waiting: Waiting; timer: NodeJS.Timeout } | null };
+type Seat = { worker: Worker; online: boolean; busy: { id: number; waiting: Waiting; timer: NodeJS.Timeout | undefined } | null };
 
 /**
  * A few worker threads and one queue. Threads start when first needed and stay; one that dies or runs over its budget is ended, its job
@@ -83,21 +83,32 @@ export class ThreadPool {
       if (!seat) return;
       const waiting = this.queue.shift() as Waiting;
       const id = this.nextId++;
-      const timer = setTimeout(
-        () => this.drop(seat, "out-of-time", `The thread ran longer than ${this.settings.budgetMs / 1000} s.`),
-        this.settings.budgetMs,
-      );
-      seat.busy = { id, waiting, timer };
+      seat.busy = { id, waiting, timer: undefined };
+      if (seat.online) this.startClock(seat);
       seat.worker.ref();
       seat.worker.postMessage(this.protocol.ask(id, waiting.job));
     }
+  }
+
+  /** The budget is the job's: a machine that is slow to start a thread does not use it up. */
+  private startClock(seat: Seat): void {
+    const { budgetMs } = this.settings;
+    if (seat.busy)
+      seat.busy.timer = setTimeout(
+        () => this.drop(seat, "out-of-time", `The thread ran longer than ${budgetMs / 1000} s.`),
+        budgetMs,
+      );
   }
 
   private newSeat(): Seat | undefined {
     if (this.seats.length >= this.settings.size) return undefined;
     const { file, workerData, resourceLimits } = this.settings;
     const worker = new Worker(file, { workerData, ...(resourceLimits ? { resourceLimits } : {}) });
-    const seat: Seat = { worker, busy: null };
+    const seat: Seat = { worker, online: false, busy: null };
+    worker.on("online", () => {
+      seat.online = true;
+      this.startClock(seat);
+    });
     worker.on("message", (message: unknown) => {
       const answer = this.protocol.read(message);
       if (!seat.busy || answer?.id !== seat.busy.id) return;

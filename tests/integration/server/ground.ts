@@ -47,7 +47,10 @@ type Call = {
 };
 
 /** Calls a route handler as a browser on our own page would. Headers given here replace those. */
-export async function call(handler: Handler, { method, body, cookie, params = {}, query = "", headers = {} }: Call = {}): Promise<Called> {
+export async function call(
+  handler: Handler,
+  { method, body, cookie, params = {}, query = "", headers = {} }: Call = {},
+): Promise<Called> {
   const sent = new Headers({ origin: value("EBBMARK_ORIGIN"), "sec-fetch-site": "same-origin", "user-agent": "test browser" });
   if (body !== undefined) sent.set("content-type", "application/json");
   if (cookie) sent.set("cookie", cookie);
@@ -63,7 +66,12 @@ export async function call(handler: Handler, { method, body, cookie, params = {}
   const response = await handler(request, { params: Promise.resolve(params) });
   const text = await response.text();
   const set = response.headers.getSetCookie().find((one) => one.startsWith("eb="));
-  return { status: response.status, body: text === "" ? undefined : (JSON.parse(text) as unknown), headers: response.headers, cookie: set?.split(";")[0] };
+  return {
+    status: response.status,
+    body: text === "" ? undefined : (JSON.parse(text) as unknown),
+    headers: response.headers,
+    cookie: set?.split(";")[0],
+  };
 }
 
 /** The answer's body, after making sure that the request was not refused. */

@@ -11,14 +11,37 @@ import * as withdraw from "@/app/api/v1/screenings/[screeningId]/withdraw/route"
 import * as log from "@/app/api/v1/log/route";
 import * as entry from "@/app/api/v1/log/[seq]/route";
 import * as verification from "@/app/api/v1/log/verification/route";
-import type { CeremonyView, DraftView, EntryRow, EntryView, Page, PreparedView, ReceiptView, ScreeningView, VerificationView } from "@/contracts/views";
+import type {
+  CeremonyView,
+  DraftView,
+  EntryRow,
+  EntryView,
+  Page,
+  PreparedView,
+  ReceiptView,
+  ScreeningView,
+  VerificationView,
+} from "@/contracts/views";
 import type { DraftDocument } from "@/contracts/draft";
 import { createVerification } from "@/ledger/verify-ledger";
 import { contentHash } from "@/ledger/body";
 import { canonicalJson } from "@/ledger/canonical-json";
 import type { Handler } from "@/server/door";
 import { nitrogenBottleBank } from "@db/seed/nitrogen-bottle-bank";
-import { call, type Called, closeGround, codeOf, firstAdministrator, got, join, makeFacility, makeScreening, makeSection, openGround, passwordOf } from "./ground";
+import {
+  call,
+  type Called,
+  closeGround,
+  codeOf,
+  firstAdministrator,
+  got,
+  join,
+  makeFacility,
+  makeScreening,
+  makeSection,
+  openGround,
+  passwordOf,
+} from "./ground";
 
 type Person = { cookie: string; id: string };
 let administrator: string;
@@ -42,23 +65,39 @@ beforeAll(async () => {
 afterAll(closeGround);
 
 const at = (screeningId: string) => ({ params: { screeningId } });
-const read = async (who: Person, id: string, query = ""): Promise<ScreeningView> => got(await call(screening.GET, { cookie: who.cookie, query, ...at(id) }));
-const readDraft = async (who: Person, id: string): Promise<DraftView> => got(await call(draft.GET, { cookie: who.cookie, ...at(id) }));
+const read = async (who: Person, id: string, query = ""): Promise<ScreeningView> =>
+  got(await call(screening.GET, { cookie: who.cookie, query, ...at(id) }));
+const readDraft = async (who: Person, id: string): Promise<DraftView> =>
+  got(await call(draft.GET, { cookie: who.cookie, ...at(id) }));
 const save = (who: Person, id: string, baseVersion: number, document: DraftDocument): Promise<Called> =>
   call(draft.PUT, { method: "PUT", cookie: who.cookie, body: { baseVersion, document }, ...at(id) });
-const run = (who: Person, id: string, draftVersion: number): Promise<Called> => call(compute.POST, { cookie: who.cookie, body: { draftVersion }, ...at(id) });
-const open = (who: Person, id: string, act: string, rev = 1): Promise<Called> => call(ceremony.POST, { cookie: who.cookie, body: { act, rev }, ...at(id) });
+const run = (who: Person, id: string, draftVersion: number): Promise<Called> =>
+  call(compute.POST, { cookie: who.cookie, body: { draftVersion }, ...at(id) });
+const open = (who: Person, id: string, act: string, rev = 1): Promise<Called> =>
+  call(ceremony.POST, { cookie: who.cookie, body: { act, rev }, ...at(id) });
 
-const handlers: Record<string, Handler> = { sign: sign.POST, countersign: countersign.POST, return: giveBack.POST, withdraw: withdraw.POST };
+const handlers: Record<string, Handler> = {
+  sign: sign.POST,
+  countersign: countersign.POST,
+  return: giveBack.POST,
+  withdraw: withdraw.POST,
+};
 
 /** A whole act: open page, then the request; `change` spoils or completes the body. */
-async function act(who: Person, badge: string, id: string, name: string, { rev = 1, change = {} }: { rev?: number; change?: object } = {}): Promise<Called> {
+async function act(
+  who: Person,
+  badge: string,
+  id: string,
+  name: string,
+  { rev = 1, change = {} }: { rev?: number; change?: object } = {},
+): Promise<Called> {
   const opened = await open(who, id, name, rev);
   if (opened.status >= 400) return opened;
   return send(who, id, name, await bodyFor(who, badge, id, name, rev, got<CeremonyView>(opened), change));
 }
 
-const send = (who: Person, id: string, name: string, body: object): Promise<Called> => call(handlers[name] as Handler, { cookie: who.cookie, body, ...at(id) });
+const send = (who: Person, id: string, name: string, body: object): Promise<Called> =>
+  call(handlers[name] as Handler, { cookie: who.cookie, body, ...at(id) });
 
 async function bodyFor(who: Person, badge: string, id: string, name: string, rev: number, page: CeremonyView, change: object) {
   const cautions = (await read(who, id, `?rev=${rev}`)).prepared?.content.cautions.map((one) => one.id) ?? [];
@@ -112,9 +151,18 @@ describe("a draft", () => {
     const { id } = await makeScreening(engineer.cookie, sectionId);
     const document = nitrogenBottleBank();
     document.lines["2.09"] = { typed: "about 200", unit: "bar(g)", si: null, source: null };
-    expect(got<DraftView>(await save(engineer, id, 1, document)).document.lines["2.09"]).toMatchObject({ typed: "about 200", si: null });
-    const wrong = await save(engineer, id, 2, { ...document, lines: { "9.99": { typed: "", unit: null, si: null, source: null } } });
-    expect([wrong.status, (wrong.body as { problems: { path: string }[] }).problems[0]?.path]).toEqual([422, "document.lines.9.99"]);
+    expect(got<DraftView>(await save(engineer, id, 1, document)).document.lines["2.09"]).toMatchObject({
+      typed: "about 200",
+      si: null,
+    });
+    const wrong = await save(engineer, id, 2, {
+      ...document,
+      lines: { "9.99": { typed: "", unit: null, si: null, source: null } },
+    });
+    expect([wrong.status, (wrong.body as { problems: { path: string }[] }).problems[0]?.path]).toEqual([
+      422,
+      "document.lines.9.99",
+    ]);
   });
 });
 
@@ -144,8 +192,15 @@ describe("computing in full", () => {
     expect(contentHash(canonicalJson(content))).toBe(prepared?.contentSha256);
     expect(content.cautions.map(({ id: caution }) => caution)).toEqual(expect.arrayContaining(["C1", "C2", "C6"]));
     expect(content.assumed).toContain("A6.08");
-    expect(content.lines.find(({ line }) => line === "A7.01")).toMatchObject({ typed: "15", unit: "min", si: 900, source: { note: "limit policy LP-1 rev 1" } });
-    expect(content.cases[0]?.confirmation.find(({ id: figure }) => figure === "minimumWallTemperatureK")?.change).toBeLessThan(0.01);
+    expect(content.lines.find(({ line }) => line === "A7.01")).toMatchObject({
+      typed: "15",
+      unit: "min",
+      si: 900,
+      source: { note: "limit policy LP-1 rev 1" },
+    });
+    expect(content.cases[0]?.confirmation.find(({ id: figure }) => figure === "minimumWallTemperatureK")?.change).toBeLessThan(
+      0.01,
+    );
     const [first] = (prepared as PreparedView).runs;
     expect(first?.result.caseSha256).toBe(content.cases[0]?.caseSha256);
     expect(contentHash(canonicalJson(JSON.parse(JSON.stringify(first?.document))))).toBe(content.cases[0]?.caseSha256);
@@ -213,8 +268,13 @@ describe("signing", () => {
     const receipt = got<ReceiptView>(first as Called);
     const later = await Promise.all(Array.from({ length: 10 }, () => send(engineer, id, "sign", body)));
     expect([...together, ...later].map((answer) => got<ReceiptView>(answer))).toEqual(Array<ReceiptView>(13).fill(receipt));
-    expect(codeOf(await send(engineer, id, "sign", { ...body, idempotencyKey: `${body.idempotencyKey.slice(0, -1)}_` }))).toBe("ceremony-expired");
-    expect(got<Page<EntryRow>>(await call(log.GET, { cookie: auditor.cookie, query: `?record=${(await read(engineer, id)).record}` })).total).toBe(1);
+    expect(codeOf(await send(engineer, id, "sign", { ...body, idempotencyKey: `${body.idempotencyKey.slice(0, -1)}_` }))).toBe(
+      "ceremony-expired",
+    );
+    expect(
+      got<Page<EntryRow>>(await call(log.GET, { cookie: auditor.cookie, query: `?record=${(await read(engineer, id)).record}` }))
+        .total,
+    ).toBe(1);
   });
 
   it("names what was shown: a run made after the page was opened is other content", async () => {
@@ -248,7 +308,11 @@ describe("the whole life of a screening", () => {
   it("goes from draft to returned, to revision 2, to countersigned, and the log shows and proves it", async () => {
     const id = await computed();
     got(await act(engineer, "E-114", id, "sign"));
-    expect(await read(engineer, id)).toMatchObject({ state: "signed", may: { edit: false, sign: false, withdraw: true }, draft: { editable: false } });
+    expect(await read(engineer, id)).toMatchObject({
+      state: "signed",
+      may: { edit: false, sign: false, withdraw: true },
+      draft: { editable: false },
+    });
     expect(codeOf(await save(engineer, id, 2, nitrogenBottleBank()))).toBe("wrong-state");
 
     // Nobody decides on their own work: not the author by her role, and not by another road.
@@ -263,25 +327,49 @@ describe("the whole life of a screening", () => {
     expect(await read(engineer, id)).toMatchObject({ state: "returned", may: { revise: true, edit: false } });
     expect(codeOf(await act(approver, "A-027", id, "countersign"))).toBe("already-decided");
 
-    const next = got<{ rev: number }>(await call(revisions.POST, { cookie: engineer.cookie, body: { fromRev: 1, reason: "Film coefficient explained." }, ...at(id) }));
+    const next = got<{ rev: number }>(
+      await call(revisions.POST, {
+        cookie: engineer.cookie,
+        body: { fromRev: 1, reason: "Film coefficient explained." },
+        ...at(id),
+      }),
+    );
     expect(next.rev).toBe(2);
-    expect(codeOf(await call(revisions.POST, { cookie: engineer.cookie, body: { fromRev: 1, reason: "Again." }, ...at(id) }))).toBe("wrong-state");
+    expect(
+      codeOf(await call(revisions.POST, { cookie: engineer.cookie, body: { fromRev: 1, reason: "Again." }, ...at(id) })),
+    ).toBe("wrong-state");
     const second = await readDraft(engineer, id);
     expect(second).toMatchObject({ rev: 2, version: 1, editable: true, answers: [{ line: "A6.08", by: "A-027" }] });
 
     const document = second.document;
-    document.lines["A6.08"] = { typed: "45", unit: "W/(m²·K)", si: null, source: { kind: "derived", note: "free convection, sheet FC-1" } };
+    document.lines["A6.08"] = {
+      typed: "45",
+      unit: "W/(m²·K)",
+      si: null,
+      source: { kind: "derived", note: "free convection, sheet FC-1" },
+    };
     got(await save(engineer, id, 1, document));
     const prepared = got<PreparedView>(await run(engineer, id, 2));
     expect(prepared.content).toMatchObject({ rev: 2, reason: "Film coefficient explained." });
     expect(prepared.content.changedSince.map(({ line }) => line)).toEqual(["A6.08"]);
     got(await act(engineer, "E-114", id, "sign", { rev: 2 }));
     const countersigned = got<ReceiptView>(
-      await act(approver, "A-027", id, "countersign", { rev: 2, change: { conditions: ["Repeat when the bottles are replaced."] } }),
+      await act(approver, "A-027", id, "countersign", {
+        rev: 2,
+        change: { conditions: ["Repeat when the bottles are replaced."] },
+      }),
     );
 
     const final = await read(auditor, id);
-    expect(final).toMatchObject({ rev: 2, state: "countersigned", draft: null, revisions: [{ rev: 2, state: "countersigned" }, { rev: 1, state: "superseded" }] });
+    expect(final).toMatchObject({
+      rev: 2,
+      state: "countersigned",
+      draft: null,
+      revisions: [
+        { rev: 2, state: "countersigned" },
+        { rev: 1, state: "superseded" },
+      ],
+    });
     expect(final.signatures.map(({ act: name, badge }) => `${name} ${badge}`)).toEqual(["signed E-114", "countersigned A-027"]);
     expect(final.signatures[1]).toMatchObject({ conditions: ["Repeat when the bottles are replaced."], seq: countersigned.seq });
     expect((await read(auditor, id, "?rev=1")).signatures.map(({ act: name }) => name)).toEqual(["signed", "returned"]);
@@ -296,7 +384,9 @@ describe("the whole life of a screening", () => {
     ]);
     const shown = got<EntryView>(await call(entry.GET, { cookie: auditor.cookie, params: { seq: String(countersigned.seq) } }));
     expect(shown.hash).toBe(countersigned.hash);
-    expect(shown.facts).toEqual(expect.arrayContaining([{ label: "Condition 1", value: "Repeat when the bottles are replaced." }]));
+    expect(shown.facts).toEqual(
+      expect.arrayContaining([{ label: "Condition 1", value: "Repeat when the bottles are replaced." }]),
+    );
     await verified(auditor.cookie, 0);
   });
 
@@ -318,17 +408,30 @@ describe("the whole life of a screening", () => {
   it("keeps a hand in the work apart from the decision, whatever role the person has later", async () => {
     const person = await import("@/app/api/v1/people/[personId]/route");
     const signInRoute = await import("./ground");
-    const { cookie, id: personId } = await join(administrator, { badge: "E-116", role: "engineer", facilityIds: [(await read(engineer, await computed())).facility.id] });
+    const { cookie, id: personId } = await join(administrator, {
+      badge: "E-116",
+      role: "engineer",
+      facilityIds: [(await read(engineer, await computed())).facility.id],
+    });
     const helper = { cookie, id: personId };
     const { id } = await makeScreening(engineer.cookie, sectionId);
     got(await save(helper, id, 1, nitrogenBottleBank()));
     got(await save(engineer, id, 2, nitrogenBottleBank()));
     got(await run(engineer, id, 3));
     got(await act(engineer, "E-114", id, "sign"));
-    got(await call(person.POST, { cookie: administrator, params: { personId }, body: { act: "change-role", role: "approver", reason: "Promoted." } }));
+    got(
+      await call(person.POST, {
+        cookie: administrator,
+        params: { personId },
+        body: { act: "change-role", role: "approver", reason: "Promoted." },
+      }),
+    );
     const promoted = { cookie: await signInRoute.signIn("E-116"), id: personId };
     expect(codeOf(await open(promoted, id, "countersign"))).toBe("own-work");
-    expect(await read(promoted, id)).toMatchObject({ may: { decide: false }, whyNot: expect.stringContaining("had a hand") as string });
+    expect(await read(promoted, id)).toMatchObject({
+      may: { decide: false },
+      whyNot: expect.stringContaining("had a hand") as string,
+    });
   });
 });
 
@@ -341,5 +444,10 @@ async function verified(cookie: string, withheld: number): Promise<void> {
     rows = got<VerificationView>(await call(verification.GET, { cookie, query: `?from=${(rows.at(-1)?.seq ?? 0) + 1}` })).rows;
   }
   const verdict = check.finish();
-  expect({ holds: verdict.holds, broken: verdict.broken, faults: verdict.faults, withheld: verdict.withheld }).toEqual({ holds: true, broken: [], faults: [], withheld });
+  expect({ holds: verdict.holds, broken: verdict.broken, faults: verdict.faults, withheld: verdict.withheld }).toEqual({
+    holds: true,
+    broken: [],
+    faults: [],
+    withheld,
+  });
 }

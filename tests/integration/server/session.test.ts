@@ -27,7 +27,10 @@ describe("signing in", () => {
     const answer = await call(session.POST, { body: { badge: "d-001 ", password: passwordOf("D-001") } });
     expect(answer.status).toBe(200);
     expect(answer.headers.getSetCookie()[0]).toMatch(/^eb=.+; Max-Age=43200; Path=\/; HttpOnly; SameSite=Lax$/);
-    expect(got<ViewerView>(await call(session.GET, { cookie: answer.cookie }))).toMatchObject({ badge: "D-001", role: "administrator" });
+    expect(got<ViewerView>(await call(session.GET, { cookie: answer.cookie }))).toMatchObject({
+      badge: "D-001",
+      role: "administrator",
+    });
   });
 
   it("gives an unknown badge and a wrong password the same words", async () => {
@@ -64,7 +67,8 @@ describe("signing in", () => {
 
   it("lets an unknown badge wait just the same", async () => {
     const tries = [];
-    for (let n = 0; n < 6; n++) tries.push(codeOf(await call(session.POST, { body: { badge: "E-998", password: "a wrong password" } })));
+    for (let n = 0; n < 6; n++)
+      tries.push(codeOf(await call(session.POST, { body: { badge: "E-998", password: "a wrong password" } })));
     expect(tries).toEqual([...Array<string>(5).fill("wrong-credentials"), "account-locked"]);
   });
 });
@@ -84,8 +88,13 @@ describe("a first password", () => {
     expect(codeOf(await call(list.GET, { cookie }))).toBe("must-change-password");
 
     const short = await call(password.POST, { cookie, body: { current: first, next: "short" } });
-    expect([short.status, (short.body as { problems: object[] }).problems]).toEqual([422, [expect.objectContaining({ path: "next" })]]);
-    expect(codeOf(await call(password.POST, { cookie, body: { current: "not the first one", next: passwordOf("A-301") } }))).toBe("wrong-credentials");
+    expect([short.status, (short.body as { problems: object[] }).problems]).toEqual([
+      422,
+      [expect.objectContaining({ path: "next" })],
+    ]);
+    expect(codeOf(await call(password.POST, { cookie, body: { current: "not the first one", next: passwordOf("A-301") } }))).toBe(
+      "wrong-credentials",
+    );
     expect(codeOf(await call(password.POST, { cookie, body: { current: first, next: first } }))).toBe("invalid-request");
 
     got(await call(password.POST, { cookie, body: { current: first, next: passwordOf("A-301") } }));
@@ -124,7 +133,11 @@ describe("sessions", () => {
     if (!viewer) throw new Error("no session");
     const account = await getAccount(viewer);
     const target = account.sessions.find(({ current }) => !current);
-    const stranger = await call(sessions.DELETE, { method: "DELETE", cookie: administrator, params: { sessionId: target?.id ?? "" } });
+    const stranger = await call(sessions.DELETE, {
+      method: "DELETE",
+      cookie: administrator,
+      params: { sessionId: target?.id ?? "" },
+    });
     expect(stranger.status).toBe(404);
     got(await call(sessions.DELETE, { method: "DELETE", cookie, params: { sessionId: target?.id ?? "" } }));
     expect((await call(session.GET, { cookie: other })).status).toBe(401);
@@ -134,7 +147,9 @@ describe("sessions", () => {
   it("end when nobody used them for half an hour, and after twelve hours whatever happens", async () => {
     const { sql } = await import("drizzle-orm");
     const { cookie: idle, id } = await join(administrator, { badge: "E-404", role: "engineer", facilityIds: [] });
-    await writeDatabase().execute(sql`update app.session set last_seen_at = now() - interval '31 minutes' where person_id = ${id}`);
+    await writeDatabase().execute(
+      sql`update app.session set last_seen_at = now() - interval '31 minutes' where person_id = ${id}`,
+    );
     expect((await call(session.GET, { cookie: idle })).status).toBe(401);
     const old = await signIn("E-404");
     await writeDatabase().execute(sql`update app.session set expires_at = now() where person_id = ${id}`);
@@ -160,8 +175,12 @@ describe("a disabled person", () => {
     const change = (act: "disable" | "re-enable") =>
       call(person.POST, { cookie: administrator, params: { personId: id }, body: { act, reason: "Leave of absence." } });
     expect(got<PersonDetailView>(await change("disable")).active).toBe(false);
-    expect(codeOf(await call(session.POST, { body: { badge: "E-501", password: passwordOf("E-501") } }))).toBe("account-disabled");
-    expect(codeOf(await call(session.POST, { body: { badge: "E-501", password: "a wrong password" } }))).toBe("wrong-credentials");
+    expect(codeOf(await call(session.POST, { body: { badge: "E-501", password: passwordOf("E-501") } }))).toBe(
+      "account-disabled",
+    );
+    expect(codeOf(await call(session.POST, { body: { badge: "E-501", password: "a wrong password" } }))).toBe(
+      "wrong-credentials",
+    );
     expect(codeOf(await change("disable"))).toBe("wrong-state");
     expect(got<PersonDetailView>(await change("re-enable")).active).toBe(true);
     await signIn("E-501");
@@ -187,7 +206,8 @@ describe("a change of role", () => {
     const { cookie: second } = await join(administrator, { badge: "D-002", role: "administrator", facilityIds: [] });
     const proposed = got<PersonDetailView>(await to(administrator, "auditor"));
     expect(proposed).toMatchObject({ role: "approver", proposedRole: { role: "auditor", mine: true } });
-    const confirm = (cookie: string) => call(person.POST, { cookie, params: { personId: id }, body: { act: "confirm-role", role: "auditor" } });
+    const confirm = (cookie: string) =>
+      call(person.POST, { cookie, params: { personId: id }, body: { act: "confirm-role", role: "auditor" } });
     expect(codeOf(await confirm(administrator))).toBe("own-work");
     expect(got<PersonDetailView>(await confirm(second)).role).toBe("auditor");
     expect(codeOf(await confirm(second))).toBe("wrong-state");

@@ -5,4 +5,9 @@ import { createFacility } from "@/server/facilities/write";
 
 export const GET = defineRoute({ act: "facility.list", work: (viewer) => listFacilities(viewer) });
 
-export const POST = defineRoute({ act: "facility.create", body: createFacilitySchema, status: 201, work: (viewer, { body }) => createFacility(viewer, body) });
+export const POST = defineRoute({
+  act: "facility.create",
+  body: createFacilitySchema,
+  status: 201,
+  work: (viewer, { body }) => createFacility(viewer, body),
+});

@@ -5,4 +5,9 @@ import { invitePerson } from "@/server/people/write";
 
 export const GET = defineRoute({ act: "person.list", work: (viewer) => listPeople(viewer) });
 
-export const POST = defineRoute({ act: "person.enrol", body: invitePersonSchema, status: 201, work: (viewer, { body }) => invitePerson(viewer, body) });
+export const POST = defineRoute({
+  act: "person.enrol",
+  body: invitePersonSchema,
+  status: 201,
+  work: (viewer, { body }) => invitePerson(viewer, body),
+});

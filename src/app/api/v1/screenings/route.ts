@@ -3,7 +3,11 @@ import { defineRoute } from "@/server/door";
 import { createScreening } from "@/server/screenings/create";
 import { listScreenings } from "@/server/screenings/list";
 
-export const GET = defineRoute({ act: "screening.list", query: screeningFilterSchema, work: (viewer, { query }) => listScreenings(viewer, query) });
+export const GET = defineRoute({
+  act: "screening.list",
+  query: screeningFilterSchema,
+  work: (viewer, { query }) => listScreenings(viewer, query),
+});
 
 export const POST = defineRoute({
   act: "screening.create",

@@ -5,4 +5,9 @@ import { createSection } from "@/server/sections/write";
 
 export const GET = defineRoute({ act: "section.list", work: (viewer) => listSections(viewer) });
 
-export const POST = defineRoute({ act: "section.create", body: createSectionSchema, status: 201, work: (viewer, { body }) => createSection(viewer, body) });
+export const POST = defineRoute({
+  act: "section.create",
+  body: createSectionSchema,
+  status: 201,
+  work: (viewer, { body }) => createSection(viewer, body),
+});

@@ -5,7 +5,11 @@ import { defineOpenRoute, defineRoute } from "@/server/door";
 import { Answer } from "@/server/door-answer";
 import { signIn, signOut } from "@/server/session/write";
 
-export const GET = defineRoute({ act: "session.read", evenIfPasswordMustChange: true, work: async (viewer) => viewerView(viewer) });
+export const GET = defineRoute({
+  act: "session.read",
+  evenIfPasswordMustChange: true,
+  work: async (viewer) => viewerView(viewer),
+});
 
 export const POST = defineOpenRoute({
   act: "session.open",

@@ -2,4 +2,7 @@ import { defineRoute } from "@/server/door";
 import { orNotFound } from "@/server/refusal";
 import { getSection } from "@/server/sections/read";
 
-export const GET = defineRoute({ act: "section.read", work: async (viewer, { params }) => orNotFound(await getSection(viewer, params.sectionId ?? "")) });
+export const GET = defineRoute({
+  act: "section.read",
+  work: async (viewer, { params }) => orNotFound(await getSection(viewer, params.sectionId ?? "")),
+});

@@ -4,7 +4,10 @@ import { orNotFound } from "@/server/refusal";
 import { saveDraft } from "@/server/screenings/draft";
 import { getDraft } from "@/server/screenings/read";
 
-export const GET = defineRoute({ act: "draft.read", work: async (viewer, { params }) => orNotFound(await getDraft(viewer, params.screeningId ?? "")) });
+export const GET = defineRoute({
+  act: "draft.read",
+  work: async (viewer, { params }) => orNotFound(await getDraft(viewer, params.screeningId ?? "")),
+});
 
 export const PUT = defineRoute({
   act: "draft.edit",
