@@ -212,6 +212,14 @@ export interface ResidualModel {
   volumeAtPressure(T: number, p: number, root: Root): number;
   /** Volumes at or below this are impossible (the co-volume of a cubic; the density bound of a reference equation). */
   minimumVolume(): number;
+  /** Saturated volumes of one mole of a pure fluid, where the equation has a faster way to them than the general one. */
+  saturation?(T: number): SaturationVolumes | undefined;
+}
+
+export interface SaturationVolumes {
+  pressurePa: number;
+  vapourVolume: number;
+  liquidVolume: number;
 }
 
 /** Pure-component ideal-gas functions of temperature: cp0_i, h0_i (zero at 298.15 K), s0_i at 100000 Pa (zero at 298.15 K). */

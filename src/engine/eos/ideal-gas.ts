@@ -17,9 +17,11 @@ export function createIdealGasModel(heatCapacities: readonly HeatCapacity[], R =
   const thetas: number[] = [];
   const constants = new Float64Array(count); // c0 or a0: the ln T coefficient
   const polynomials: (Float64Array | undefined)[] = [];
+  const powers: (readonly { k: number; q: number }[] | undefined)[] = [];
   heatCapacities.forEach((heatCapacity, i) => {
     if (heatCapacity.form === "planck-einstein") {
       constants[i] = heatCapacity.c0;
+      powers[i] = heatCapacity.powers?.length ? heatCapacity.powers : undefined;
       for (const { n, thetaK } of heatCapacity.terms) {
         weights.push(n);
         thetas.push(thetaK);
@@ -60,6 +62,12 @@ export function createIdealGasModel(heatCapacities: readonly HeatCapacity[], R =
           cp += n[k]! * x * x * occupied * (1 + occupied);
           h += n[k]! * theta[k]! * occupied;
           s += n[k]! * (x * occupied - Math.log1p(-decay));
+        }
+        for (const { k, q } of powers[i] ?? []) {
+          const term = k * T ** q;
+          cp += term;
+          h += (term * T) / (q + 1);
+          s += term / q;
         }
       }
       heatCapacity[i] = R * cp;

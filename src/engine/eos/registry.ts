@@ -3,6 +3,7 @@ import type { Substance } from "../substances/substance";
 import { buildCubic } from "./cubic/build-cubic";
 import { cubicEquations, type CubicEquationId } from "./cubic/cubic-equations";
 import type { FluidModel } from "./fluid-model";
+import { buildReference } from "./reference/build-reference";
 
 /** What an equation's own file offers; one line below makes it known to the form, the schema, the tests and the spread. */
 export interface EquationEntry {
@@ -25,4 +26,10 @@ export const equations: Partial<Record<EquationId, EquationEntry>> = {
   "soave-redlich-kwong": cubicEntry("soave-redlich-kwong"),
   "peng-robinson-1976": cubicEntry("peng-robinson-1976"),
   "peng-robinson-1978": cubicEntry("peng-robinson-1978"),
+  reference: {
+    id: "reference",
+    title: "Reference equation of the pure fluid",
+    source: "one publication a fluid, named in the result",
+    build: buildReference,
+  },
 };

@@ -41,6 +41,8 @@ export function saturationAtTemperature(model: FluidModel, T: number, z: ArrayLi
     });
   }
   residual.setComposition(z);
+  const direct = residual.saturation?.(T);
+  if (direct) return { temperatureK: T, ...direct };
   const criticalVolume = residual.volumeAtPressure(Tc, pc, "stable");
   const F = createResidualDerivatives(z.length);
   const lnPhi = (v: number, p: number) => {
