@@ -11,7 +11,7 @@ import type { Equilibrium } from "../../flash/equilibrium";
 import { flashUV } from "../../flash/flash-uv";
 import { solveAtVolume } from "../../flash/two-phase-volume";
 import { createTwoPhaseVolumes, seedFrom } from "../../flash/volume-seed";
-import { assembleVolumes, incipientSplit } from "./incipient-split";
+import { assembleVolumes, incipientSplit } from "../../flow/incipient-split";
 import { isStableAlone } from "./phase-check";
 
 export type PhaseMode = "one-phase" | "two-phase";
@@ -127,7 +127,7 @@ export class ContentsFinder {
 
   private traceOf(alone: Contents, u: number, v: number): Equilibrium | undefined {
     const test = this.fluid.stability(alone.temperatureK, alone.pressurePa, this.z);
-    return test.stable ? undefined : incipientSplit(this.fluid, alone, test, { energy: u, molarVolume: v });
+    return test.stable ? undefined : incipientSplit(this.fluid, alone, test, { hold: "energy", value: u, molarVolume: v });
   }
 
   private thorough(total: number, u: number, v: number): Equilibrium | undefined {

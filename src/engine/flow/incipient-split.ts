@@ -1,20 +1,20 @@
 /**
- * Two phases of given energy and volume when one of them is a first drop or a last bubble, too small for the general flash to find.
+ * Two phases of given energy (or entropy) and volume when one of them is a first drop or a last bubble, too small for the general flash to find.
  *
  * The seed is the homogeneous state with a trace of the phase that the stability test proposes.
  * Returns  the equilibrium, or undefined where no trace grows into one
  */
-import type { FluidModel, Stability } from "../../eos/fluid-model";
-import { assemble } from "../../flash/assemble";
-import type { Equilibrium } from "../../flash/equilibrium";
-import { solveAtVolume, type TwoPhaseVolumes } from "../../flash/two-phase-volume";
-import { createTwoPhaseVolumes } from "../../flash/volume-seed";
+import type { FluidModel, Stability } from "../eos/fluid-model";
+import { assemble } from "../flash/assemble";
+import type { Equilibrium } from "../flash/equilibrium";
+import { solveAtVolume, type TwoPhaseVolumes, type VolumeTarget } from "../flash/two-phase-volume";
+import { createTwoPhaseVolumes } from "../flash/volume-seed";
 
 type Homogeneous = { temperatureK: number; pressurePa: number; composition: Float64Array };
 
 const traces = [1e-6, 1e-4, 1e-2, 1e-8];
 
-export function incipientSplit(fluid: FluidModel, { temperatureK, pressurePa, composition: z }: Homogeneous, test: Stability, target: { energy: number; molarVolume: number }): Equilibrium | undefined {
+export function incipientSplit(fluid: FluidModel, { temperatureK, pressurePa, composition: z }: Homogeneous, test: Stability, target: VolumeTarget): Equilibrium | undefined {
   const traceIsVapour = test.trialIsVapour;
   fluid.residual.setComposition(test.trialComposition);
   const traceVolume = fluid.residual.volumeAtPressure(temperatureK, pressurePa, traceIsVapour ? "vapour" : "liquid");
@@ -33,7 +33,7 @@ export function incipientSplit(fluid: FluidModel, { temperatureK, pressurePa, co
     state.vapourVolume = traceIsVapour ? smallVolume : target.molarVolume - smallVolume;
     state.liquidVolume = target.molarVolume - state.vapourVolume;
     if (!fits || !(state.vapourVolume > 0 && state.liquidVolume > 0)) continue;
-    if (solveAtVolume(fluid, z, { hold: "energy", value: target.energy, molarVolume: target.molarVolume }, state)) return assembleVolumes(fluid, state);
+    if (solveAtVolume(fluid, z, target, state)) return assembleVolumes(fluid, state);
   }
   return undefined;
 }
