@@ -7,6 +7,8 @@ import { Notice } from "@/components/caution/notice";
 import { Dialog } from "@/components/dialog/dialog";
 import { ChoiceField } from "@/components/line/choice-field";
 import { Line } from "@/components/line/line";
+import { LineJump } from "@/components/line/line-jump";
+import { focusLine } from "@/components/line/next-line";
 import { RadioRow } from "@/components/line/radio-row";
 import { SourceButton, SourceKeys, SourceNote } from "@/components/line/source-note";
 import { TextField } from "@/components/line/text-field";
@@ -27,24 +29,24 @@ export function SpecimenFields() {
   const [asking, setAsking] = useState(false);
 
   return (
-    <section className="mt-9 grid grid-cols-[188px_minmax(0,1fr)] border-y border-rule-2 phone:block">
+    <section className="mt-9 grid grid-cols-[188px_minmax(0,1fr)] border-y border-rule-2 phone:block print:block">
       <PartList
         groups={[
           {
             head: "For all cases",
             parts: [
-              { no: 1, name: "Scope", href: "#1", note: "9 of 9 settled", state: "settled" },
-              { no: 2, name: "Inventory", href: "#2", note: "11 of 11 settled", state: "settled" },
-              { no: 3, name: "Fluid", href: "#3", note: "3 of 6 settled", state: "started" },
-              { no: 4, name: "Steel", href: "#4", note: "6 of 7 settled", state: "started", current: true },
+              { no: 1, name: "Scope", href: "#line-4.01", note: "9 of 9 settled", state: "settled" },
+              { no: 2, name: "Inventory", href: "#line-4.02", note: "11 of 11 settled", state: "settled" },
+              { no: 3, name: "Fluid", href: "#line-4.03", note: "3 of 6 settled", state: "started" },
+              { no: 4, name: "Steel", href: "#line-4.04", note: "6 of 7 settled", state: "started", current: true },
             ],
           },
           {
             head: "For case A",
             parts: [
-              { no: 5, name: "Release path", href: "#5", note: "1 line to fix", state: "to-fix" },
-              { no: 6, name: "Heat", href: "#6", note: "not begun", state: "untouched" },
-              { no: 7, name: "Limits", href: "#7", note: "1 without source", state: "without-source" },
+              { no: 5, name: "Release path", href: "#line-5.04", note: "1 line to fix", state: "to-fix" },
+              { no: 6, name: "Heat", href: "#line-4.08", note: "not begun", state: "untouched" },
+              { no: 7, name: "Limits", href: "#line-4.09", note: "1 without source", state: "without-source" },
             ],
           },
         ]}
@@ -143,6 +145,7 @@ export function SpecimenFields() {
         >
           <UnitField value="8.5" unit="°C" />
         </Line>
+        <LineJump onJump={focusLine} />
         <ButtonRow>
           <Button>3 Fluid</Button>
           <Button kind="main" onClick={() => setAsking(true)}>

@@ -2,7 +2,7 @@
 export type ButtonKind = "main" | "plain" | "quiet" | "danger";
 
 const common =
-  "inline-flex min-h-[42px] items-center justify-center gap-2 whitespace-nowrap rounded border-1.5 text-body font-semibold leading-none phone:min-h-[46px] " +
+  "inline-flex min-h-[42px] items-center justify-center gap-2 whitespace-nowrap rounded border-1.5 text-body font-semibold leading-none phone:min-h-[46px] print:hidden " +
   "disabled:cursor-not-allowed disabled:text-ink-3 aria-disabled:cursor-not-allowed aria-disabled:text-ink-3 " +
   "disabled:no-underline aria-disabled:no-underline";
 

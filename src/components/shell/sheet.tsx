@@ -78,7 +78,7 @@ export function FormSheet({
     <Sheet>
       {titleBlock}
       <div
-        className={`grid grid-cols-[150px_minmax(0,1fr)] phone:flex phone:flex-col ${
+        className={`grid grid-cols-[150px_minmax(0,1fr)] phone:flex phone:flex-col print:block ${
           forerun ? "wide:grid-cols-[188px_minmax(0,1fr)_372px]" : "wide:grid-cols-[188px_minmax(0,1fr)]"
         }`}
       >
