@@ -1,0 +1,18 @@
+import type { Metadata } from "next";
+import { notFound } from "next/navigation";
+import { ScreeningSheet } from "@/features/screening/results/screening-sheet";
+import { requireViewer } from "@/server/auth/viewer";
+import { getScreening } from "@/server/screenings/read";
+import { revisionAsked } from "./revision-asked";
+
+export const metadata: Metadata = { title: "Screening" };
+
+type Props = { params: Promise<{ screeningId: string }>; searchParams: Promise<{ rev?: string | string[] }> };
+
+export default async function ScreeningPage({ params, searchParams }: Props) {
+  const viewer = await requireViewer();
+  const [{ screeningId }, { rev }] = await Promise.all([params, searchParams]);
+  const screening = await getScreening(viewer, screeningId, revisionAsked(rev));
+  if (!screening) notFound();
+  return <ScreeningSheet screening={screening} />;
+}

@@ -1,0 +1,36 @@
+import type { ReactNode } from "react";
+import { ButtonLink } from "@/components/button/button-link";
+import { ButtonRow } from "@/components/shell/page-head";
+import { pages } from "@/contracts/paths";
+import type { ScreeningView } from "@/contracts/views";
+import { ComputeButton } from "./compute-button";
+import { DataButton } from "./data-button";
+import { NewRevisionButton } from "./new-revision-button";
+
+/**
+ * What this person may do with the revision now.
+ *
+ * more   acts that belong elsewhere: withdrawing takes a signature
+ */
+export function SheetActions({ screening, more }: { screening: ScreeningView; more?: ReactNode }) {
+  const { id, rev, state, may, draft, prepared } = screening;
+  return (
+    <ButtonRow>
+      {may.sign && (
+        <ButtonLink kind="main" href={pages.sign(id)}>
+          Review and sign
+        </ButtonLink>
+      )}
+      {may.decide && (
+        <ButtonLink kind="main" href={pages.decide(id)}>
+          Decide
+        </ButtonLink>
+      )}
+      {may.revise && <NewRevisionButton screeningId={id} rev={rev} returned={state === "returned"} />}
+      {draft && may.edit && <ButtonLink href={pages.part(id, "scope")}>Back to the lines</ButtonLink>}
+      {draft && may.compute && prepared && !prepared.stale && <ComputeButton draft={draft}>Compute again</ComputeButton>}
+      {prepared && <DataButton prepared={prepared} />}
+      {more}
+    </ButtonRow>
+  );
+}

@@ -1,0 +1,54 @@
+"use client";
+
+import { Power, useShown } from "@/components/quantity/quantity";
+import { Cell, Row, Table } from "@/components/table/table";
+import type { CaseRunView } from "@/contracts/views";
+
+/** start + heat − vented − end = left over, which is what the integration did not account for. */
+export function WholeRun({ run }: { run: CaseRunView }) {
+  const shown = useShown();
+  const { wholeRun } = run.result.energyAccount;
+  const { energyClosure, massClosure, ventedMassKg } = run.result.summary;
+  const energy = (si: number, signed = true) => shown("energy", si, { signed, neverZero: true }).text;
+  return (
+    <section>
+      <h2 className="mb-1">Energy over the whole run</h2>
+      <Table caption="Energy over the whole run" stack={false}>
+        <tbody>
+          <Row>
+            <Cell head>Internal energy at start</Cell>
+            <Cell numeric>{energy(wholeRun.startJ, false)}</Cell>
+          </Row>
+          <Row>
+            <Cell head>Heat taken from the wall</Cell>
+            <Cell numeric>{energy(wholeRun.heatFromWallJ)}</Cell>
+          </Row>
+          <Row>
+            <Cell head>Heat from outside</Cell>
+            <Cell numeric>{energy(wholeRun.heatFromOutsideJ)}</Cell>
+          </Row>
+          <Row>
+            <Cell head>Less enthalpy of the {shown("mass", ventedMassKg).text} vented</Cell>
+            <Cell numeric>{energy(-wholeRun.ventedJ)}</Cell>
+          </Row>
+          <Row>
+            <Cell head>Internal energy at end</Cell>
+            <Cell numeric>{energy(wholeRun.endJ, false)}</Cell>
+          </Row>
+          <Row total>
+            <Cell head>Left over</Cell>
+            <Cell numeric>
+              {energy(wholeRun.leftOverJ)}, <Share value={energyClosure} />
+            </Cell>
+          </Row>
+        </tbody>
+      </Table>
+      <p className="pt-1.5 text-label text-ink-3">
+        The share is of all energy that moved. Mass closes to <Share value={massClosure} />. Reference: ideal gas at 25 °C, so
+        dense cold gas stands below zero.
+      </p>
+    </section>
+  );
+}
+
+const Share = ({ value }: { value: number }) => (value === 0 ? <>0</> : <Power value={value} figures={1} />);
