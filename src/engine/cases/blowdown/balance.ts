@@ -10,6 +10,8 @@
  * Scales   amounts by n0, every energy by n0 R T0
  */
 import { EngineError } from "../../errors";
+import { assemble } from "../../flash/assemble";
+import { equilibriumNozzle } from "../../flow/equilibrium-nozzle";
 import { frozenNozzle, type NozzleFlow } from "../../flow/frozen-nozzle";
 import { ContentsFinder, type Contents, type Effort, type PhaseMode } from "./contents";
 import type { VesselModel } from "./vessel-model";
@@ -32,7 +34,8 @@ export class Balance {
   private readonly count: number;
   private readonly finder: ContentsFinder;
   private readonly moles: Float64Array;
-  private refusedInARow = 0;
+  /** A segment starts with the long search allowed: its first state has no neighbour to start from. */
+  private refusedInARow = quickRefusals;
   private last: { y: readonly number[]; mode: PhaseMode; t: number; instant: Instant } | undefined;
 
   constructor(readonly model: VesselModel) {
@@ -43,6 +46,10 @@ export class Balance {
     this.energyScaleJ = start.totalMolesMol * fluid.gasConstantJPerMolK * start.temperatureK;
     this.finder = new ContentsFinder(fluid, vessel.volumeM3, start.temperatureK);
     this.moles = new Float64Array(this.count);
+  }
+
+  beginSegment(): void {
+    this.refusedInARow = quickRefusals;
   }
 
   startState(): number[] {
@@ -66,10 +73,10 @@ export class Balance {
   at(t: number, y: readonly number[], mode: PhaseMode, effort: Effort = "thorough"): Instant {
     const { last } = this;
     if (last && last.y === y && last.mode === mode && last.t === t) return last.instant;
-    const { fluid, wall, effectiveAreaM2, openingTimeS, backPressurePa } = this.model;
+    const { wall, effectiveAreaM2, openingTimeS } = this.model;
     const contents = this.finder.find(mode, this.molesOf(y), this.internalEnergyJ(y), effort);
     const opening = openingTimeS > 0 ? Math.min(t / openingTimeS, 1) : 1;
-    const flow = frozenNozzle(fluid, contents.outlet, contents.outletComposition, backPressurePa);
+    const flow = this.nozzle(contents);
     const instant: Instant = {
       contents,
       flow,
@@ -78,6 +85,13 @@ export class Balance {
     };
     this.last = { y, mode, t, instant };
     return instant;
+  }
+
+  private nozzle({ outlet, outletComposition: z }: Contents): NozzleFlow {
+    const { fluid, flowModel, backPressurePa } = this.model;
+    if (flowModel === "frozen") return frozenNozzle(fluid, outlet, z, backPressurePa);
+    const atRest = assemble(fluid, outlet.temperatureK, outlet.pressurePa, [{ moleFraction: 1, composition: z, molarVolume: outlet.molarVolumeM3PerMol }]);
+    return equilibriumNozzle(fluid, atRest, z, backPressurePa);
   }
 
   /** dy/dt, or undefined for a trial state that no fluid can be in. */

@@ -9,6 +9,7 @@ import { createPhaseState, type FluidModel, type PhaseState } from "../../eos/fl
 import { EngineError } from "../../errors";
 import type { Equilibrium } from "../../flash/equilibrium";
 import { flashUV } from "../../flash/flash-uv";
+import { onlyComponent } from "../../flash/saturation-pure";
 import { solveAtVolume } from "../../flash/two-phase-volume";
 import { createTwoPhaseVolumes, seedFrom } from "../../flash/volume-seed";
 import { assembleVolumes, incipientSplit } from "../../flow/incipient-split";
@@ -113,6 +114,8 @@ export class ContentsFinder {
 
   /** The equilibrium, or undefined where the fluid is one phase, or so near its phase boundary that it counts as one. */
   private split(total: number, u: number, v: number, effort: Effort): Equilibrium | undefined {
+    // A pure fluid's search is short, and its stability shows only in the dome.
+    if (onlyComponent(this.z) >= 0) return this.thorough(total, u, v);
     try {
       const alone = this.homogeneous(total, u, v);
       if (isStableAlone(this.fluid, alone)) return undefined;

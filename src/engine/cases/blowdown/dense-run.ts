@@ -16,6 +16,8 @@ export class DenseRun {
   readonly steps: KeptStep[] = [];
 
   keep({ t0, y0, t1, y1, at }: AcceptedStep): void {
+    // An event at the very start of a segment leaves a step without length.
+    if (!(t1 > t0)) return;
     const values = nodes.map((s, j) => (j === 0 ? [...y0] : j === points - 1 ? y1 : at(t0 + s * (t1 - t0))));
     this.steps.push({ t0, t1, values });
   }

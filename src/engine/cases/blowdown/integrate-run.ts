@@ -60,6 +60,7 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
     }
     const segment: Segment = { mode, dense: new DenseRun() };
     run.segments.push(segment);
+    balance.beginSegment();
     const until = t < openingTimeS && openingTimeS < stopTimeS ? openingTimeS : stopTimeS;
     const result = integrate({
       derivative: (time, state) => balance.derivative(time, state, segment.mode),
@@ -143,7 +144,8 @@ function subsonicEvent(balance: Balance, mode: PhaseMode): IntegrationEvent {
     stops: true,
     value: (time, state) => {
       const { flow } = balance.at(time, state, mode);
-      return flow.choked ? flow.throatPressurePa / backPressurePa - 1 : -1;
+      // The throat's place is known to about 1e-7 of its pressure; nearer than ten times that the flow counts as subsonic.
+      return flow.choked ? flow.throatPressurePa / backPressurePa - 1 - 1e-6 : -1;
     },
   };
 }

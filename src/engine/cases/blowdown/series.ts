@@ -18,9 +18,11 @@ export function sampleRows(balance: Balance, run: Run, coarseness: Coarseness): 
   for (const segment of run.segments) {
     for (const [i, step] of segment.dense.steps.entries()) {
       const take = (t: number): Row => ({ ...sampleAt(balance, segment, step, t), segment, step });
-      const first = i === 0 ? take(step.t0) : rows.at(-1);
-      if (!first) continue;
-      if (i === 0) rows.push(first);
+      const before = rows.at(-1);
+      // Only a phase change gives its time twice; a restart for another reason joins smoothly.
+      const joins = before && (i > 0 || before.segment.mode === segment.mode);
+      const first = joins ? before : take(step.t0);
+      if (!joins) rows.push(first);
       const last = take(step.t1);
       const gap = (a: Sample, b: Sample): number => gapOf(a, b, balance.massScaleKg, run.endTimeS) / coarseness;
       fill(first, last, { take, gap, push: (row) => rows.push(row) });
