@@ -3,6 +3,8 @@ const config = {
   output: "standalone",
   poweredByHeader: false,
   reactStrictMode: true,
+  // Without this a redirect of the proxy to another host name is made relative, and 127.0.0.1 would send to itself for ever.
+  skipProxyUrlNormalize: true,
   outputFileTracingRoot: import.meta.dirname,
   turbopack: { root: import.meta.dirname },
   serverExternalPackages: ["pg", "pg-boss", "pdfkit", "pino"],

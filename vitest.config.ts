@@ -2,15 +2,21 @@ import { defineConfig } from "vitest/config";
 
 // Three groups: `unit` needs nothing, `dom` draws components in jsdom, `integration` needs the throw-away cluster
 // whose addresses the test command puts into the environment.
-export default defineConfig({
-  resolve: { tsconfigPaths: true, conditions: ["react-server"] },
+// `server-only` opens for the react-server condition alone; React's own client library closes for it, so `dom` goes without.
+const onTheServer = {
+  resolve: { conditions: ["react-server"] },
   ssr: { resolve: { conditions: ["react-server", "node", "import", "default"] } },
+};
+
+export default defineConfig({
+  resolve: { tsconfigPaths: true },
   oxc: { jsx: { runtime: "automatic" } },
   test: {
     passWithNoTests: false,
     projects: [
       {
         extends: true,
+        ...onTheServer,
         test: {
           name: "unit",
           environment: "node",
@@ -20,7 +26,6 @@ export default defineConfig({
       },
       {
         extends: true,
-        resolve: { conditions: ["browser", "module", "import", "default"] },
         test: {
           name: "dom",
           environment: "jsdom",
@@ -31,6 +36,7 @@ export default defineConfig({
       },
       {
         extends: true,
+        ...onTheServer,
         test: {
           name: "integration",
           environment: "node",

@@ -1,0 +1,92 @@
+"use client";
+
+import { useEffect, useRef, useState } from "react";
+import type { BlowdownCase } from "@/engine/cases/blowdown-case";
+import type { BlowdownResult } from "@/engine/cases/blowdown-result";
+import type { PreviewAnswer, PreviewRequest } from "@/workers/browser";
+
+/** A pause short enough that curves follow the typing, long enough that a word is finished. */
+const restMs = 120;
+/** A run that takes longer is given up, so that one case can't hold the form. */
+const patienceMs = 10_000;
+
+export type ForerunState = {
+  /** The newest answer; kept, greyed, while the lines can't be computed. */
+  result: BlowdownResult | null;
+  /** The answer before the last edit, for the ghost. */
+  before: BlowdownResult | null;
+  running: boolean;
+  /** Why there is no answer for the lines as they stand. */
+  problem: string | null;
+  seconds: number | null;
+};
+
+const nothing: ForerunState = { result: null, before: null, running: false, problem: null, seconds: null };
+
+/** Runs the case in the browser's own worker after every change: latest wins, nothing is stored. */
+export function useForerun(document: BlowdownCase | undefined): ForerunState {
+  const [state, setState] = useState(nothing);
+  const worker = useRef<Worker>(undefined);
+  const newest = useRef(0);
+  const text = document ? JSON.stringify(document) : undefined;
+
+  useEffect(() => () => worker.current?.terminate(), []);
+
+  useEffect(() => {
+    const id = (newest.current += 1);
+    if (text === undefined) {
+      // The answer on show no longer belongs to the lines: said at once, without waiting for a run.
+      // eslint-disable-next-line react-hooks/set-state-in-effect
+      setState((before) => (before.running || before.problem ? { ...before, running: false, problem: null } : before));
+      return;
+    }
+    let patience: ReturnType<typeof setTimeout>;
+    const giveUp = (problem: string) => {
+      worker.current?.terminate();
+      worker.current = undefined;
+      setState((before) => ({ ...before, running: false, problem }));
+    };
+    const rest = setTimeout(() => {
+      const started = performance.now();
+      worker.current ??= new Worker(new URL("../../../workers/browser.ts", import.meta.url), { type: "module" });
+      worker.current.onerror = () =>
+        giveUp("The preview could not be started in this browser. Compute in full works without it.");
+      worker.current.onmessage = ({ data }: MessageEvent<PreviewAnswer>) => {
+        if (data.id !== newest.current || data.type === "progress" || data.type === "replaced") return;
+        clearTimeout(patience);
+        const seconds = (performance.now() - started) / 1000;
+        setState((before) => answered(before, data, seconds));
+      };
+      setState((before) => ({ ...before, running: true }));
+      patience = setTimeout(() => giveUp("The preview takes too long for this case. Compute in full to see it."), patienceMs);
+      worker.current.postMessage({ id, document: JSON.parse(text), coarse: true } satisfies PreviewRequest);
+    }, restMs);
+    return () => {
+      clearTimeout(rest);
+      clearTimeout(patience);
+    };
+  }, [text]);
+
+  return state;
+}
+
+function answered(before: ForerunState, answer: PreviewAnswer, seconds: number): ForerunState {
+  if (answer.type === "result" && answer.result.kind === "blowdown") {
+    return { result: answer.result, before: before.result, running: false, problem: null, seconds };
+  }
+  if (answer.type === "refused") {
+    const { error } = answer;
+    return {
+      ...before,
+      running: false,
+      problem: error.problems.map(({ message }) => message).join(" ") || "The case can't be computed.",
+      seconds,
+    };
+  }
+  return {
+    ...before,
+    running: false,
+    problem: answer.type === "failed" ? answer.message : "The preview gave no answer.",
+    seconds,
+  };
+}

@@ -1,0 +1,43 @@
+"use client";
+
+import { createContext, useContext } from "react";
+import type { DraftDocument, LineValue } from "@/contracts/draft";
+import type { CaseFromDraft, SiteFacts } from "@/contracts/draft-to-case";
+import type { LineKey, QuantityLine } from "@/contracts/lines/line";
+import type { DraftView } from "@/contracts/views";
+import type { LineErrors } from "./line-schema";
+import type { Keeper } from "./use-keeper";
+
+/** What a form page needs of the screening it belongs to. */
+export type FormSubject = {
+  screeningId: string;
+  record: string;
+  section: { id: string; tag: string; name: string };
+  facility: { id: string; name: string; demo: boolean };
+  author: string;
+  site: SiteFacts;
+};
+
+/** The draft in hand: read and changed by the lines, kept by the keeper, run by the Forerun. */
+export type DraftInHand = {
+  subject: FormSubject;
+  start: DraftView;
+  draft: DraftDocument;
+  editable: boolean;
+  errors: LineErrors;
+  /** The case of the draft as it stands, or what is in its way. */
+  made: CaseFromDraft;
+  keeper: Keeper;
+  setLine: (key: LineKey, change: Partial<LineValue>) => void;
+  setComposition: (change: Partial<DraftDocument["composition"]>) => void;
+  unitOf: (key: LineKey, line: QuantityLine) => string;
+  chooseUnit: (key: LineKey, unit: string) => void;
+};
+
+export const DraftContext = createContext<DraftInHand | null>(null);
+
+export function useDraft(): DraftInHand {
+  const draft = useContext(DraftContext);
+  if (!draft) throw new Error("a line of the form stands outside its draft");
+  return draft;
+}

@@ -1,0 +1,65 @@
+/**
+ * Two saves of one draft brought together, line by line. What only one side changed is taken from that side; what both changed
+ * differently is a conflict, and the person chooses.
+ */
+import type { DraftDocument } from "@/contracts/draft";
+import { compositionKey } from "@/contracts/draft-differences";
+import type { LineKey } from "@/contracts/lines/line";
+
+export type Choice = "mine" | "theirs";
+export type Merge = {
+  /** Every line settled but the conflicts, which hold mine for now. */
+  merged: DraftDocument;
+  conflicts: LineKey[];
+  /** Lines taken over from the other save. */
+  taken: LineKey[];
+};
+
+const same = (a: unknown, b: unknown): boolean => JSON.stringify(a) === JSON.stringify(b);
+
+/**
+ * base     the draft as last known to both
+ * mine     as it stands in this tab
+ * theirs   as it was saved meanwhile
+ */
+export function mergeDrafts(base: DraftDocument, mine: DraftDocument, theirs: DraftDocument): Merge {
+  const lines: DraftDocument["lines"] = {};
+  const conflicts: LineKey[] = [];
+  const taken: LineKey[] = [];
+
+  for (const key of new Set([...Object.keys(base.lines), ...Object.keys(mine.lines), ...Object.keys(theirs.lines)])) {
+    const side = settle(key, base.lines[key], mine.lines[key], theirs.lines[key]);
+    const value = side === "theirs" ? theirs.lines[key] : mine.lines[key];
+    if (value) lines[key] = value;
+  }
+  const compositionSide = settle(compositionKey, base.composition, mine.composition, theirs.composition);
+  return {
+    merged: { ...mine, lines, composition: compositionSide === "theirs" ? theirs.composition : mine.composition },
+    conflicts,
+    taken,
+  };
+
+  function settle(key: LineKey, before: unknown, ours: unknown, other: unknown): Choice {
+    if (same(ours, other) || same(other, before)) return "mine";
+    if (same(ours, before)) {
+      taken.push(key);
+      return "theirs";
+    }
+    conflicts.push(key);
+    return "mine";
+  }
+}
+
+/** The merged draft with the choices made at the conflicts. */
+export function applyChoices(merge: Merge, theirs: DraftDocument, choices: Record<LineKey, Choice>): DraftDocument {
+  const lines = { ...merge.merged.lines };
+  let { composition } = merge.merged;
+  for (const key of merge.conflicts) {
+    if (choices[key] !== "theirs") continue;
+    const value = theirs.lines[key];
+    if (key === compositionKey) composition = theirs.composition;
+    else if (value) lines[key] = value;
+    else delete lines[key];
+  }
+  return { ...merge.merged, lines, composition };
+}
