@@ -54,7 +54,9 @@ async function readStandardInput() {
 
 /** A reader that closes early (`| head`) is no fault of the calculation. */
 function print(text) {
-  return new Promise((resolve, reject) => process.stdout.write(text, (error) => (error && error.code !== "EPIPE" ? reject(error) : resolve())));
+  return new Promise((resolve, reject) =>
+    process.stdout.write(text, (error) => (error && error.code !== "EPIPE" ? reject(error) : resolve())),
+  );
 }
 
 process.stdout.on("error", (error) => {

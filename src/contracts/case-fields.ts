@@ -33,7 +33,10 @@ export function describe(input: unknown): string {
 const inRange =
   ({ min, max, above, below }: NumberRange) =>
   (value: number): boolean =>
-    !(min !== undefined && value < min) && !(max !== undefined && value > max) && !(above !== undefined && value <= above) && !(below !== undefined && value >= below);
+    !(min !== undefined && value < min) &&
+    !(max !== undefined && value > max) &&
+    !(above !== undefined && value <= above) &&
+    !(below !== undefined && value >= below);
 
 function rangeWords({ unit, min, max, above, below }: NumberRange): string {
   const low = min !== undefined ? `from ${min}` : above !== undefined ? `above ${above}` : undefined;

@@ -78,8 +78,24 @@ describe("parseCase", () => {
     ["fluid.interaction", "some", "fluid.interaction", /"library", "none" or a list/],
     ["fluid.components", [], "fluid.components", /no component/],
     ["fluid.components", [{ id: "methane", moleFraction: 0.9 }], "fluid.components", /sum to 0.9/],
-    ["fluid.components", [{ id: "methane", moleFraction: 0.5 }, { id: "ethane", moleFraction: "half" }], "fluid.components[1].moleFraction", /"half"/],
-    ["fluid.components", [{ id: "methane", moleFraction: 0.5 }, { id: "methane", moleFraction: 0.5 }], "fluid.components[1].id", /stands twice/],
+    [
+      "fluid.components",
+      [
+        { id: "methane", moleFraction: 0.5 },
+        { id: "ethane", moleFraction: "half" },
+      ],
+      "fluid.components[1].moleFraction",
+      /"half"/,
+    ],
+    [
+      "fluid.components",
+      [
+        { id: "methane", moleFraction: 0.5 },
+        { id: "methane", moleFraction: 0.5 },
+      ],
+      "fluid.components[1].id",
+      /stands twice/,
+    ],
     ["kind", "relief", "kind", /"path", "flash", "nozzle", "blowdown"/],
     ["format", "ebbmark-case/2", "format", /ebbmark-case\/1/],
     ["limits", { targetPressure: 1 }, "limits.targetPressure", /not a key/],
@@ -107,14 +123,22 @@ describe("parseCase", () => {
           {
             id: "my-gas",
             moleFraction: 1,
-            custom: { molarMassKgPerMol: 0.028, criticalTemperatureK: 126, criticalPressurePa: 3.4e6, acentricFactor: -0.2, idealGasHeatCapacityOverR: { polynomial, rangeK: [50, 1000] } },
+            custom: {
+              molarMassKgPerMol: 0.028,
+              criticalTemperatureK: 126,
+              criticalPressurePa: 3.4e6,
+              acentricFactor: -0.2,
+              idealGasHeatCapacityOverR: { polynomial, rangeK: [50, 1000] },
+            },
           },
         ]),
       );
     expect(withCoefficients([3.5])).toEqual([]);
     expect(withCoefficients(new Array<number>(8).fill(0))).toEqual([]);
     for (const wrong of [[], new Array<number>(9).fill(0)]) {
-      expect(withCoefficients(wrong)[0]).toMatchObject({ path: "fluid.components[0].custom.idealGasHeatCapacityOverR.polynomial" });
+      expect(withCoefficients(wrong)[0]).toMatchObject({
+        path: "fluid.components[0].custom.idealGasHeatCapacityOverR.polynomial",
+      });
     }
   });
 
@@ -139,15 +163,23 @@ describe("parseCase", () => {
   });
 
   it("never throws on any value", () => {
-    fc.assert(fc.property(fc.anything(), (value) => void parseCase(value)), { numRuns: 500 });
-    fc.assert(fc.property(fc.jsonValue(), (value) => void parseCase({ ...blowdown(), fluid: value, heat: value, start: value })), { numRuns: 300 });
+    fc.assert(
+      fc.property(fc.anything(), (value) => void parseCase(value)),
+      { numRuns: 500 },
+    );
+    fc.assert(
+      fc.property(fc.jsonValue(), (value) => void parseCase({ ...blowdown(), fluid: value, heat: value, start: value })),
+      { numRuns: 300 },
+    );
   });
 });
 
 describe("parseCaseText", () => {
   it("refuses text that is not JSON, and says where it breaks", () => {
     const parsed = parseCaseText("{ not json");
-    expect(parsed.ok ? [] : parsed.problems).toMatchObject([{ path: "", message: expect.stringMatching(/not valid JSON/) as string }]);
+    expect(parsed.ok ? [] : parsed.problems).toMatchObject([
+      { path: "", message: expect.stringMatching(/not valid JSON/) as string },
+    ]);
   });
 
   it.each([

@@ -21,8 +21,13 @@ const custom = z.strictObject({
   criticalPressurePa: quantity({ unit: "Pa", above: 0, max: 1e9 }),
   acentricFactor: quantity({ unit: "", min: -1, max: 3 }),
   idealGasHeatCapacityOverR: z.strictObject({
-    polynomial: z.array(quantity({ unit: "" })).min(1, "Give 1 to 8 coefficients a0, a1, …").max(8, "Give 1 to 8 coefficients a0, a1, …"),
-    rangeK: z.tuple([temperature, temperature]).refine(([low, high]) => low < high, { error: "The range must rise: give the lower temperature first." }),
+    polynomial: z
+      .array(quantity({ unit: "" }))
+      .min(1, "Give 1 to 8 coefficients a0, a1, …")
+      .max(8, "Give 1 to 8 coefficients a0, a1, …"),
+    rangeK: z
+      .tuple([temperature, temperature])
+      .refine(([low, high]) => low < high, { error: "The range must rise: give the lower temperature first." }),
   }),
 });
 
@@ -32,11 +37,22 @@ const pseudo = z.strictObject({
 });
 
 const component = z
-  .strictObject({ id: text(60).refine((id) => id.length > 0, { error: "This is empty. Give the component's id." }), moleFraction: fraction, pseudo: pseudo.optional(), custom: custom.optional() })
-  .refine((one) => !(one.pseudo && one.custom), { error: "A component is either a pseudo-component or has its own constants. Keep one of the two.", path: ["custom"] });
+  .strictObject({
+    id: text(60).refine((id) => id.length > 0, { error: "This is empty. Give the component's id." }),
+    moleFraction: fraction,
+    pseudo: pseudo.optional(),
+    custom: custom.optional(),
+  })
+  .refine((one) => !(one.pseudo && one.custom), {
+    error: "A component is either a pseudo-component or has its own constants. Keep one of the two.",
+    path: ["custom"],
+  });
 
 const interaction = z.union(
-  [z.enum(["library", "none"]), z.array(z.strictObject({ pair: z.tuple([text(60), text(60)]), kij: quantity({ unit: "", above: -1, below: 1 }) }))],
+  [
+    z.enum(["library", "none"]),
+    z.array(z.strictObject({ pair: z.tuple([text(60), text(60)]), kij: quantity({ unit: "", above: -1, below: 1 }) })),
+  ],
   { error: 'Use "library", "none" or a list of { "pair": [id, id], "kij": number } with kij between -1 and 1.' },
 );
 
@@ -47,9 +63,15 @@ const fluid = z.strictObject({
     .max(50, "There are more than 50 components. Lump the smallest.")
     .superRefine((components, context) => {
       const sum = components.reduce((total, one) => total + one.moleFraction, 0);
-      if (!(Math.abs(sum - 1) <= 1e-6)) context.addIssue({ code: "custom", message: `The mole fractions sum to ${sum}. Make them sum to 1 within 1e-6.` });
+      if (!(Math.abs(sum - 1) <= 1e-6))
+        context.addIssue({ code: "custom", message: `The mole fractions sum to ${sum}. Make them sum to 1 within 1e-6.` });
       components.forEach(({ id }, i) => {
-        if (components.findIndex((other) => other.id === id) < i) context.addIssue({ code: "custom", path: [i, "id"], message: `"${id}" stands twice. Add the two fractions and keep one.` });
+        if (components.findIndex((other) => other.id === id) < i)
+          context.addIssue({
+            code: "custom",
+            path: [i, "id"],
+            message: `"${id}" stands twice. Add the two fractions and keep one.`,
+          });
       });
     }),
   equation: choice(equationIds),
@@ -127,12 +149,19 @@ const wall = z.strictObject({
   designPressurePa: pressure.optional(),
   minimumDesignMetalTemperatureK: temperature.optional(),
   insulation: z
-    .strictObject({ thicknessM: quantity({ unit: "m", above: 0, max: 5 }), conductivityWPerMK: quantity({ unit: "W/(m K)", above: 0, max: 1e3 }) })
+    .strictObject({
+      thicknessM: quantity({ unit: "m", above: 0, max: 5 }),
+      conductivityWPerMK: quantity({ unit: "W/(m K)", above: 0, max: 1e3 }),
+    })
     .optional(),
 });
 
 const start = z
-  .strictObject({ pressurePa: pressure.optional(), temperatureK: temperature.optional(), liquidVolumeFraction: fraction.optional() })
+  .strictObject({
+    pressurePa: pressure.optional(),
+    temperatureK: temperature.optional(),
+    liquidVolumeFraction: fraction.optional(),
+  })
   .refine((given) => Object.values(given).filter((value) => value !== undefined).length === 2, {
     error: "Give exactly two of pressurePa, temperatureK and liquidVolumeFraction.",
   })
@@ -148,9 +177,25 @@ const dischargeCoefficient = quantity({ unit: "", above: 0, max: 1 });
 const release = z.discriminatedUnion(
   "path",
   [
-    z.strictObject({ path: z.literal("orifice"), diameterM: quantity({ unit: "m", above: 0, max: 10 }), dischargeCoefficient, ...outlet }),
-    z.strictObject({ path: z.literal("valve"), cv: quantity({ unit: "", above: 0, max: 1e6 }), xt: quantity({ unit: "", above: 0, max: 1 }), ...outlet }),
-    z.strictObject({ path: z.literal("sized"), targetPressurePa: pressure, targetTimeS: quantity({ unit: "s", above: 0, max: 1e7 }), dischargeCoefficient, ...outlet }),
+    z.strictObject({
+      path: z.literal("orifice"),
+      diameterM: quantity({ unit: "m", above: 0, max: 10 }),
+      dischargeCoefficient,
+      ...outlet,
+    }),
+    z.strictObject({
+      path: z.literal("valve"),
+      cv: quantity({ unit: "", above: 0, max: 1e6 }),
+      xt: quantity({ unit: "", above: 0, max: 1 }),
+      ...outlet,
+    }),
+    z.strictObject({
+      path: z.literal("sized"),
+      targetPressurePa: pressure,
+      targetTimeS: quantity({ unit: "s", above: 0, max: 1e7 }),
+      dischargeCoefficient,
+      ...outlet,
+    }),
   ],
   { error: 'Use one of "orifice", "valve", "sized".' },
 );
@@ -159,19 +204,31 @@ const coefficient = quantity({ unit: "W/(m² K)", min: 0, max: 1e6 });
 const none = z.strictObject({ model: z.literal("none") });
 const inside = z.discriminatedUnion(
   "model",
-  [none, z.strictObject({ model: z.literal("constant"), coefficientWPerM2K: coefficient }), z.strictObject({ model: z.literal("correlations") })],
+  [
+    none,
+    z.strictObject({ model: z.literal("constant"), coefficientWPerM2K: coefficient }),
+    z.strictObject({ model: z.literal("correlations") }),
+  ],
   { error: 'Use one of "none", "constant", "correlations".' },
 );
-const wallModel = z.discriminatedUnion("model", [none, z.strictObject({ model: z.literal("lumped") }), z.strictObject({ model: z.literal("conduction") })], {
-  error: 'Use one of "none", "lumped", "conduction".',
-});
+const wallModel = z.discriminatedUnion(
+  "model",
+  [none, z.strictObject({ model: z.literal("lumped") }), z.strictObject({ model: z.literal("conduction") })],
+  {
+    error: 'Use one of "none", "lumped", "conduction".',
+  },
+);
 const outside = z.discriminatedUnion(
   "model",
   [
     z.strictObject({ model: z.literal("adiabatic") }),
     z.strictObject({ model: z.literal("constant-heat"), heatW: quantity({ unit: "W", min: -1e10, max: 1e10 }) }),
     z.strictObject({ model: z.literal("ambient"), temperatureK: temperature, coefficientWPerM2K: coefficient }),
-    z.strictObject({ model: z.literal("pool-fire"), drainage: choice(["adequate", "inadequate"]), environmentFactor: quantity({ unit: "", above: 0, max: 1 }) }),
+    z.strictObject({
+      model: z.literal("pool-fire"),
+      drainage: choice(["adequate", "inadequate"]),
+      environmentFactor: quantity({ unit: "", above: 0, max: 1 }),
+    }),
     z.strictObject({
       model: z.literal("surface-fire"),
       basis: choice(["open-pool", "confined-pool", "jet"]),
@@ -200,7 +257,11 @@ export const blowdownCaseSchema = z
     start,
     release,
     heat: z
-      .strictObject({ inside: inside.default({ model: "none" }), wall: wallModel.default({ model: "none" }), outside: outside.default({ model: "adiabatic" }) })
+      .strictObject({
+        inside: inside.default({ model: "none" }),
+        wall: wallModel.default({ model: "none" }),
+        outside: outside.default({ model: "adiabatic" }),
+      })
       .default({ inside: { model: "none" }, wall: { model: "none" }, outside: { model: "adiabatic" } }),
     run: z.strictObject({
       stopTimeS: quantity({ unit: "s", above: 0, max: 1e8 }),
@@ -213,26 +274,58 @@ export const blowdownCaseSchema = z
     for (const { path, message } of blowdownContradictions(document)) context.addIssue({ code: "custom", path, message });
   });
 
-export const caseFileSchema = z.discriminatedUnion("kind", [pathCaseSchema, flashCaseSchema, nozzleCaseSchema, blowdownCaseSchema], {
-  error: ({ input }) => (isObject(input) ? 'Use one of "path", "flash", "nozzle", "blowdown".' : "Give one case document, a JSON object."),
-});
+export const caseFileSchema = z.discriminatedUnion(
+  "kind",
+  [pathCaseSchema, flashCaseSchema, nozzleCaseSchema, blowdownCaseSchema],
+  {
+    error: ({ input }) =>
+      isObject(input) ? 'Use one of "path", "flash", "nozzle", "blowdown".' : "Give one case document, a JSON object.",
+  },
+);
 
 export type CaseFile = z.output<typeof caseFileSchema>;
 
 /** What no single field can know. Paths into the document, in order. */
-function blowdownContradictions({ vessel, start: from, release: out, heat, run }: BlowdownCase): { path: string[]; message: string }[] {
+function blowdownContradictions({
+  vessel,
+  start: from,
+  release: out,
+  heat,
+  run,
+}: BlowdownCase): { path: string[]; message: string }[] {
   const found: { path: string[]; message: string }[] = [];
   const walled = heat.wall.model !== "none";
   const bare = vessel.geometry.shape === "volume" && vessel.geometry.innerAreaM2 === undefined;
-  const needsArea = (walled && (heat.inside.model !== "none" || vessel.wall?.massKg === undefined)) || heat.outside.model === "ambient" || heat.outside.model === "surface-fire";
-  if (walled && !vessel.wall) found.push({ path: ["vessel", "wall"], message: `This is missing. A wall that is "${heat.wall.model}" needs its steel and thickness.` });
-  if (!walled && heat.inside.model !== "none") found.push({ path: ["heat", "inside", "model"], message: 'There is no wall for the film to touch. Set heat.wall, or the inside to "none".' });
-  if (bare && needsArea) found.push({ path: ["vessel", "geometry", "innerAreaM2"], message: "This is missing. Heat passes through the inside of the vessel, so give its area in m²." });
+  const needsArea =
+    (walled && (heat.inside.model !== "none" || vessel.wall?.massKg === undefined)) ||
+    heat.outside.model === "ambient" ||
+    heat.outside.model === "surface-fire";
+  if (walled && !vessel.wall)
+    found.push({
+      path: ["vessel", "wall"],
+      message: `This is missing. A wall that is "${heat.wall.model}" needs its steel and thickness.`,
+    });
+  if (!walled && heat.inside.model !== "none")
+    found.push({
+      path: ["heat", "inside", "model"],
+      message: 'There is no wall for the film to touch. Set heat.wall, or the inside to "none".',
+    });
+  if (bare && needsArea)
+    found.push({
+      path: ["vessel", "geometry", "innerAreaM2"],
+      message: "This is missing. Heat passes through the inside of the vessel, so give its area in m².",
+    });
   if ("pressurePa" in from && out.backPressurePa >= from.pressurePa) {
-    found.push({ path: ["release", "backPressurePa"], message: `The back pressure must be below the pressure at start, ${from.pressurePa} Pa, or nothing leaves.` });
+    found.push({
+      path: ["release", "backPressurePa"],
+      message: `The back pressure must be below the pressure at start, ${from.pressurePa} Pa, or nothing leaves.`,
+    });
   }
   if ("pressurePa" in from && run.stopPressurePa >= from.pressurePa) {
-    found.push({ path: ["run", "stopPressurePa"], message: `The run must end below the pressure at start, ${from.pressurePa} Pa.` });
+    found.push({
+      path: ["run", "stopPressurePa"],
+      message: `The run must end below the pressure at start, ${from.pressurePa} Pa.`,
+    });
   }
   return found;
 }
@@ -255,17 +348,26 @@ export function parseCaseText(jsonText: string): ParsedCase {
 function problemsOfIssue(issue: z.core.$ZodIssue): CaseProblem[] {
   const path = pathText(issue.path);
   if (issue.code === "unrecognized_keys") {
-    return issue.keys.map((key) => ({ path: pathText([...issue.path, key]), message: `"${key}" is not a key of the case format here. Check its spelling, or remove it.` }));
+    return issue.keys.map((key) => ({
+      path: pathText([...issue.path, key]),
+      message: `"${key}" is not a key of the case format here. Check its spelling, or remove it.`,
+    }));
   }
   if (issue.code === "invalid_type" && issue.message.startsWith("Invalid input")) {
-    return [{ path, message: `${describe(issue.input)} Give ${issue.expected === "object" ? "an object" : `a ${issue.expected}`}.` }];
+    return [
+      { path, message: `${describe(issue.input)} Give ${issue.expected === "object" ? "an object" : `a ${issue.expected}`}.` },
+    ];
   }
   return [{ path, message: issue.message }];
 }
 
 /** `fluid.components[1].moleFraction` */
 function pathText(path: readonly PropertyKey[]): string {
-  return path.reduce<string>((before, part) => (typeof part === "number" ? `${before}[${part}]` : before === "" ? String(part) : `${before}.${String(part)}`), "");
+  return path.reduce<string>(
+    (before, part) =>
+      typeof part === "number" ? `${before}[${part}]` : before === "" ? String(part) : `${before}.${String(part)}`,
+    "",
+  );
 }
 
 const isObject = (value: unknown): boolean => typeof value === "object" && value !== null && !Array.isArray(value);

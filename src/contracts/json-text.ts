@@ -13,7 +13,9 @@ export function readJsonText(text: string): JsonText {
     return { ok: false, path: "", message: `This is not valid JSON: ${why}. Correct the text and try again.` };
   }
   const twice = duplicateKey(text);
-  return twice === undefined ? { ok: true, value } : { ok: false, path: twice, message: `The key stands twice. Keep one of the two, so that nobody has to guess which counts.` };
+  return twice === undefined
+    ? { ok: true, value }
+    : { ok: false, path: twice, message: `The key stands twice. Keep one of the two, so that nobody has to guess which counts.` };
 }
 
 /** Path of the first key that an object holds twice. The text must already be known to be valid JSON. */

@@ -48,16 +48,21 @@ export const assumedLinesCaution = (lines: number): Caution => ({
   words: `${lines === 1 ? "1 line rests" : `${lines} lines rest`} on assumption. They are listed in the margin and on page 1 of the record.`,
 });
 
-export const outsideDataCaution: Caution = { id: "C7", words: "Property data were used outside the range on their source. The line is marked." };
+export const outsideDataCaution: Caution = {
+  id: "C7",
+  words: "Property data were used outside the range on their source. The line is marked.",
+};
 
 export const equationCaution: Caution = {
   id: "M-equation",
-  words: "Energies come from a cubic equation of state. Its liquid densities and its near-critical values are approximate; see the accuracy line.",
+  words:
+    "Energies come from a cubic equation of state. Its liquid densities and its near-critical values are approximate; see the accuracy line.",
 };
 
 export const filmCaution: Caution = {
   id: "M-film",
-  words: "Temperatures after the first third of the blowdown depend mainly on the inside film coefficient, which is known to about plus or minus 50 %.",
+  words:
+    "Temperatures after the first third of the blowdown depend mainly on the inside film coefficient, which is known to about plus or minus 50 %.",
 };
 
 export const steelCaution: Caution = {

@@ -62,7 +62,8 @@ describe("readQuantity", () => {
 
   it("finds every unit of the table by its own symbol and never by another quantity's", () => {
     for (const quantity of Object.keys(units) as QuantityId[]) {
-      for (const symbol of unitSymbols(quantity)) expect(read(`7 ${symbol}`, quantity, symbol)).toMatchObject({ ok: true, unit: symbol });
+      for (const symbol of unitSymbols(quantity))
+        expect(read(`7 ${symbol}`, quantity, symbol)).toMatchObject({ ok: true, unit: symbol });
     }
     expect(read("7 kg", "length", "m").ok).toBe(false);
   });

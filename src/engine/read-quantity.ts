@@ -23,7 +23,10 @@ const plain = /^[+-]?(?:\d+\.?\d*|\.\d+)(?:e[+-]?\d+)?$/i;
 
 /** Parses `typed`. Never throws on what a person can type: a refusal is a sentence that says what is wrong and what to do. */
 export function readQuantity(typed: string, options: ReadOptions): ReadQuantity {
-  const text = typed.replace(/[\u2212\u2012\u2013\ufe63\uff0d](?=\s*[\d.])/g, "-").replace(anySpace, " ").trim();
+  const text = typed
+    .replace(/[\u2212\u2012\u2013\ufe63\uff0d](?=\s*[\d.])/g, "-")
+    .replace(anySpace, " ")
+    .trim();
   if (text === "") return refuse("Nothing is entered. Type a number.");
 
   const match = numberThenUnit.exec(text.replace(/^([+-]) /, "$1"));

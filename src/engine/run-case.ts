@@ -37,7 +37,10 @@ export function runCase(document: EngineCase, context: RunContext): EngineResult
 }
 
 /** A blowdown and the same again at a tenfold tighter tolerance, with the change in the governing figures. */
-export function runConfirmed(document: BlowdownCase, context: RunContext): { result: BlowdownResult; confirmation: Confirmation } {
+export function runConfirmed(
+  document: BlowdownCase,
+  context: RunContext,
+): { result: BlowdownResult; confirmation: Confirmation } {
   const half = (from: number) => (part: number) => context.onProgress?.(from + part / 2);
   const result = stamp(() => runBlowdown(document, { ...context, onProgress: half(0) }), context);
   const relativeTolerance = result.numerics.relativeTolerance / 10;

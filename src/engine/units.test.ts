@@ -53,11 +53,15 @@ describe("the unit table", () => {
   });
 
   it("comes back to the number it started from in every unit", () => {
-    const every = (Object.keys(units) as QuantityId[]).flatMap((quantity) => unitSymbols(quantity).map((symbol) => ({ quantity, symbol })));
+    const every = (Object.keys(units) as QuantityId[]).flatMap((quantity) =>
+      unitSymbols(quantity).map((symbol) => ({ quantity, symbol })),
+    );
     fc.assert(
       fc.property(fc.constantFrom(...every), fc.double({ min: -1e6, max: 1e6, noNaN: true }), ({ quantity, symbol }, value) => {
         const back = fromSi(quantity, toSi(quantity, value, symbol, 95000), symbol, 95000);
-        expect(Math.abs(back - value)).toBeLessThanOrEqual(1e-9 * Math.max(1, Math.abs(value)) + 1e-9 / unitOf(quantity, symbol).factor);
+        expect(Math.abs(back - value)).toBeLessThanOrEqual(
+          1e-9 * Math.max(1, Math.abs(value)) + 1e-9 / unitOf(quantity, symbol).factor,
+        );
       }),
     );
   });

@@ -102,7 +102,11 @@ export const units = {
   mass: {
     si: "kg",
     title: "mass",
-    shown: { kg: { factor: 1 }, t: { factor: 1e3, aliases: ["tonne", "tonnes"] }, lb: { factor: pound, aliases: ["lbs", "lbm"] } },
+    shown: {
+      kg: { factor: 1 },
+      t: { factor: 1e3, aliases: ["tonne", "tonnes"] },
+      lb: { factor: pound, aliases: ["lbs", "lbm"] },
+    },
   },
   massRate: {
     si: "kg/s",
@@ -256,7 +260,8 @@ export const unitSymbols = (quantity: QuantityId): string[] => Object.keys(units
 export function unitOf(quantity: QuantityId, symbol: string): Unit {
   const shown: Record<string, Unit> = units[quantity].shown;
   const unit = Object.hasOwn(shown, symbol) ? shown[symbol] : undefined;
-  if (!unit) throw new RangeError(`${symbol} is no unit of ${units[quantity].title}; known are ${unitSymbols(quantity).join(", ")}`);
+  if (!unit)
+    throw new RangeError(`${symbol} is no unit of ${units[quantity].title}; known are ${unitSymbols(quantity).join(", ")}`);
   return unit;
 }
 

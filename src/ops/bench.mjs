@@ -8,7 +8,16 @@ import { root } from "./build-engine.mjs";
 const folder = join(root, ".ebbmark", "bench");
 const outfile = join(folder, "measure.mjs");
 await mkdir(folder, { recursive: true });
-await build({ absWorkingDir: root, entryPoints: ["tests/bench/measure.ts"], outfile, bundle: true, format: "esm", platform: "node", target: "node20", logLevel: "error" });
+await build({
+  absWorkingDir: root,
+  entryPoints: ["tests/bench/measure.ts"],
+  outfile,
+  bundle: true,
+  format: "esm",
+  platform: "node",
+  target: "node20",
+  logLevel: "error",
+});
 const child = spawn(process.execPath, [outfile, ...process.argv.slice(2)], { stdio: "inherit" });
 child.on("exit", (code, signal) => {
   process.exitCode = code ?? (signal ? 1 : 0);

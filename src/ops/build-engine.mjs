@@ -30,7 +30,10 @@ export async function buildEngine(folder = enginesFolder()) {
   const engineVersion = `${version}+${sha256.slice(0, 16)}`;
   await mkdir(folder, { recursive: true });
   await replaceFile(join(folder, `${sha256}.mjs`), bytes);
-  await replaceFile(join(folder, "current.json"), `${JSON.stringify({ file: `${sha256}.mjs`, sha256, engineVersion, sources }, null, 1)}\n`);
+  await replaceFile(
+    join(folder, "current.json"),
+    `${JSON.stringify({ file: `${sha256}.mjs`, sha256, engineVersion, sources }, null, 1)}\n`,
+  );
   return { file: join(folder, `${sha256}.mjs`), engineVersion };
 }
 

@@ -9,7 +9,11 @@
 import { runDocument, type ErrorDocument } from "./engine-entry";
 import type { EngineResult } from "@/engine/run-case";
 
-export type PreviewRequest = { id: number; document: unknown; /** A loose tolerance and a thinner series; the default. */ coarse?: boolean };
+export type PreviewRequest = {
+  id: number;
+  document: unknown;
+  /** A loose tolerance and a thinner series; the default. */ coarse?: boolean;
+};
 export type PreviewAnswer =
   | { type: "progress"; id: number; part: number }
   | { type: "result"; id: number; result: EngineResult }
@@ -33,7 +37,12 @@ function runWaiting(): void {
   if (!request) return;
   const { id, document, coarse = true } = request;
   try {
-    const outcome = runDocument(document, { engineVersion: "preview", coarse, now: () => performance.now(), onProgress: everyFiftyMs((part) => say({ type: "progress", id, part })) });
+    const outcome = runDocument(document, {
+      engineVersion: "preview",
+      coarse,
+      now: () => performance.now(),
+      onProgress: everyFiftyMs((part) => say({ type: "progress", id, part })),
+    });
     say(outcome.status === 0 ? { type: "result", id, result: outcome.result } : { type: "refused", id, error: outcome.error });
   } catch (error) {
     say({ type: "failed", id, message: error instanceof Error ? error.message : String(error) });

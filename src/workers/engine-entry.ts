@@ -49,11 +49,20 @@ export function runDocumentTwice(document: unknown, context: EntryContext): Comp
   const parsed = parseCase(document);
   if (!parsed.ok) return invalid(parsed.problems);
   const { document: complete } = parsed;
-  if (complete.kind !== "blowdown") return invalid([{ path: "kind", message: "Only a blowdown is run twice. Run this kind once." }]);
+  if (complete.kind !== "blowdown")
+    return invalid([{ path: "kind", message: "Only a blowdown is run twice. Run this kind once." }]);
   const hashed = canonicalCase(complete);
   return refusing(() => {
     const { result, confirmation } = runConfirmed(complete, { ...context, caseSha256: hashed.caseSha256 });
-    return { status: 0, document: complete, ...hashed, result, resultText: hashable(result), confirmation, confirmationText: canonicalText({ ...confirmation, result: withoutClock(confirmation.result) }) };
+    return {
+      status: 0,
+      document: complete,
+      ...hashed,
+      result,
+      resultText: hashable(result),
+      confirmation,
+      confirmationText: canonicalText({ ...confirmation, result: withoutClock(confirmation.result) }),
+    };
   });
 }
 
@@ -74,7 +83,10 @@ function run(parsed: ParsedCase, context: EntryContext): Outcome {
   });
 }
 
-const invalid = (problems: CaseProblem[]) => ({ status: 2 as const, error: { format: "ebbmark-error/1" as const, code: "invalid-case", problems } });
+const invalid = (problems: CaseProblem[]) => ({
+  status: 2 as const,
+  error: { format: "ebbmark-error/1" as const, code: "invalid-case", problems },
+});
 
 /** A refusal of the engine becomes an error document; any other error is a fault of ours and goes on up. */
 function refusing<T extends Computed>(work: () => T): T | Exclude<Outcome, Computed> {
@@ -83,7 +95,10 @@ function refusing<T extends Computed>(work: () => T): T | Exclude<Outcome, Compu
   } catch (error) {
     if (!(error instanceof EngineError)) throw error;
     if (error.code === "invalid-case") return invalid([{ path: error.path ?? "", message: error.message }]);
-    return { status: 3, error: { format: "ebbmark-error/1", code: error.code, problems: [{ path: error.path ?? "", message: error.message }] } };
+    return {
+      status: 3,
+      error: { format: "ebbmark-error/1", code: error.code, problems: [{ path: error.path ?? "", message: error.message }] },
+    };
   }
 }
 

@@ -56,11 +56,18 @@ function run({ id, document, twice, timeLimitMs, cancel }: ThreadRequest): Outco
     },
   };
   const outcome = twice ? engine.runDocumentTwice(document, context) : engine.runDocument(document, context);
-  return late && outcome.status === 3 && outcome.error.code === "cancelled" ? { status: 3, error: outOfTime(timeLimitMs) } : outcome;
+  return late && outcome.status === 3 && outcome.error.code === "cancelled"
+    ? { status: 3, error: outOfTime(timeLimitMs) }
+    : outcome;
 }
 
 const outOfTime = (timeLimitMs: number): ErrorDocument => ({
   format: "ebbmark-error/1",
   code: "out-of-time",
-  problems: [{ path: "run", message: `The calculation took longer than ${Math.round(timeLimitMs / 1000)} s and was stopped. Loosen the tolerance or shorten the run.` }],
+  problems: [
+    {
+      path: "run",
+      message: `The calculation took longer than ${Math.round(timeLimitMs / 1000)} s and was stopped. Loosen the tolerance or shorten the run.`,
+    },
+  ],
 });

@@ -10,14 +10,20 @@ const page = readFileSync(new URL("../../docs/case-format.md", import.meta.url),
 const examples = [...page.matchAll(/```json\n([\s\S]*?)```/g)].map((match) => match[1] ?? "");
 
 describe("the page of the case format", () => {
-  it.each(examples.map((text) => [(JSON.parse(text) as { kind: string }).kind, text] as const))("has an example of kind %s that is computed", (kind, text) => {
-    const outcome = runText(text, { engineVersion: "test" });
-    expect(outcome.status === 0 ? outcome.result.kind : outcome.error).toBe(kind);
-    if (outcome.status === 0 && outcome.result.kind === "blowdown") expect(outcome.result.verdict).toMatch(/within|near|beyond|open/);
-  });
+  it.each(examples.map((text) => [(JSON.parse(text) as { kind: string }).kind, text] as const))(
+    "has an example of kind %s that is computed",
+    (kind, text) => {
+      const outcome = runText(text, { engineVersion: "test" });
+      expect(outcome.status === 0 ? outcome.result.kind : outcome.error).toBe(kind);
+      if (outcome.status === 0 && outcome.result.kind === "blowdown")
+        expect(outcome.result.verdict).toMatch(/within|near|beyond|open/);
+    },
+  );
 
   it("covers every kind, steel, head and equation", () => {
-    expect(new Set(examples.map((text) => (JSON.parse(text) as { kind: string }).kind))).toEqual(new Set(["flash", "path", "nozzle", "blowdown"]));
+    expect(new Set(examples.map((text) => (JSON.parse(text) as { kind: string }).kind))).toEqual(
+      new Set(["flash", "path", "nozzle", "blowdown"]),
+    );
     for (const word of [...steelIds, ...headShapes, ...equationIds]) expect(page).toContain(`\`${word}\``);
   });
 });

@@ -20,7 +20,11 @@ const good = {
   flowModel: "frozen",
 };
 const invalid = { ...good, backPressurePa: -1 };
-const impossible = { ...good, fluid: { components: [{ id: "propane", moleFraction: 1 }], equation: "peng-robinson-1976" }, stagnation: { pressurePa: 1e6, vapourMoleFraction: 0.5 } };
+const impossible = {
+  ...good,
+  fluid: { components: [{ id: "propane", moleFraction: 1 }], equation: "peng-robinson-1976" },
+  stagnation: { pressurePa: 1e6, vapourMoleFraction: 0.5 },
+};
 
 const file = (name: string, content: unknown): string => {
   const path = join(folder, name);
@@ -37,7 +41,13 @@ function ebbmark(args: string[], input = "") {
   return { status, stdout, stderr, documents: stdout.split("\n").filter(Boolean) };
 }
 
-type Printed = { format: string; code?: string; kind?: string; massFluxKgPerM2S?: number; problems?: { path: string; message: string }[] };
+type Printed = {
+  format: string;
+  code?: string;
+  kind?: string;
+  massFluxKgPerM2S?: number;
+  problems?: { path: string; message: string }[];
+};
 const read = (text: string) => JSON.parse(text) as Printed;
 
 describe("ebbmark run", () => {
@@ -60,7 +70,11 @@ describe("ebbmark run", () => {
   it("exits 2 with the path of what is wrong", () => {
     const { status, stdout } = ebbmark(["run", file("invalid.json", invalid)]);
     expect(status).toBe(2);
-    expect(read(stdout)).toMatchObject({ format: "ebbmark-error/1", code: "invalid-case", problems: [{ path: "backPressurePa" }] });
+    expect(read(stdout)).toMatchObject({
+      format: "ebbmark-error/1",
+      code: "invalid-case",
+      problems: [{ path: "backPressurePa" }],
+    });
   });
 
   it("exits 3 with a code where a valid case cannot be computed", () => {

@@ -31,5 +31,9 @@ export function threeSteps(fluid: FluidModel, from: MolarState, to: MolarState):
     const departureBack = to[key] - idealTo[key];
     return { departureOut, idealGas, departureBack, total: departureOut + idealGas + departureBack };
   };
-  return { internalEnergyJPerMol: steps("internalEnergyJPerMol"), enthalpyJPerMol: steps("enthalpyJPerMol"), entropyJPerMolK: steps("entropyJPerMolK") };
+  return {
+    internalEnergyJPerMol: steps("internalEnergyJPerMol"),
+    enthalpyJPerMol: steps("enthalpyJPerMol"),
+    entropyJPerMolK: steps("entropyJPerMolK"),
+  };
 }

@@ -25,7 +25,13 @@ export type StartSpec =
 export type FlowModel = "frozen" | "equilibrium";
 export type OutletPlace = "vapour" | "liquid" | "whole";
 
-type ReleaseCommon = { from: OutletPlace; backPressurePa: number; openingTimeS: number; flowModel: FlowModel; dischargeCoefficient: number };
+type ReleaseCommon = {
+  from: OutletPlace;
+  backPressurePa: number;
+  openingTimeS: number;
+  flowModel: FlowModel;
+  dischargeCoefficient: number;
+};
 export type OrificeRelease = ReleaseCommon & { path: "orifice"; diameterM: number };
 export type ValveRelease = Omit<ReleaseCommon, "dischargeCoefficient"> & { path: "valve"; cv: number; xt: number };
 export type SizedRelease = ReleaseCommon & { path: "sized"; targetPressurePa: number; targetTimeS: number };

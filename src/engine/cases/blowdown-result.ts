@@ -54,18 +54,19 @@ export type BlowdownSeries = {
 export type ThreeSteps = { departureOut: number; idealGas: number; departureBack: number; total: number };
 export type EnergyAccount = {
   /** From the state at the start to the coldest state of the fluid. */
-  startToColdest: { internalEnergyJPerMol: ThreeSteps; enthalpyJPerMol: ThreeSteps; entropyJPerMolK: ThreeSteps; atTimeS: number };
+  startToColdest: {
+    internalEnergyJPerMol: ThreeSteps;
+    enthalpyJPerMol: ThreeSteps;
+    entropyJPerMolK: ThreeSteps;
+    atTimeS: number;
+  };
   /** From the state at the start to the state at the end. */
   startToEnd: { internalEnergyJPerMol: ThreeSteps; enthalpyJPerMol: ThreeSteps; entropyJPerMolK: ThreeSteps; atTimeS: number };
   /** start + heatFromWall + heatFromOutside − vented − end = leftOver */
   wholeRun: { startJ: number; heatFromWallJ: number; heatFromOutsideJ: number; ventedJ: number; endJ: number; leftOverJ: number };
 };
 
-export type LimitId =
-  | "time-to-target"
-  | "minimum-wall-temperature"
-  | "minimum-outlet-temperature"
-  | "peak-vent-rate";
+export type LimitId = "time-to-target" | "minimum-wall-temperature" | "minimum-outlet-temperature" | "peak-vent-rate";
 
 export type AssessedLimit = {
   id: LimitId;

@@ -37,7 +37,9 @@ describe("equilibriumNozzle", () => {
     // Carbon dioxide at 60 bar, 300 K: condensation in the throat takes 5 to 15 % off the flux.
     const dioxide = createFluidModel({ equation: "peng-robinson-1976", components: [{ id: "carbon_dioxide", moleFraction: 1 }] });
     const wet = flashPT(dioxide, { temperatureK: 300, pressurePa: 6e6 });
-    const ratio = equilibriumNozzle(dioxide, wet, dioxide.feed, 101325).massFluxKgPerM2S / frozenNozzle(dioxide, wet.phases[0]?.state ?? missing(), dioxide.feed, 101325).massFluxKgPerM2S;
+    const ratio =
+      equilibriumNozzle(dioxide, wet, dioxide.feed, 101325).massFluxKgPerM2S /
+      frozenNozzle(dioxide, wet.phases[0]?.state ?? missing(), dioxide.feed, 101325).massFluxKgPerM2S;
     expect(ratio).toBeGreaterThan(0.85);
     expect(ratio).toBeLessThan(0.95);
   });
@@ -51,17 +53,29 @@ describe("equilibriumNozzle", () => {
   });
 
   it("is the largest flux of all pressures on the isentrope", () => {
-    const model = createFluidModel({ equation: "peng-robinson-1976", components: [{ id: "methane", moleFraction: 0.8 }, { id: "propane", moleFraction: 0.2 }] });
+    const model = createFluidModel({
+      equation: "peng-robinson-1976",
+      components: [
+        { id: "methane", moleFraction: 0.8 },
+        { id: "propane", moleFraction: 0.2 },
+      ],
+    });
     fc.assert(
-      fc.property(fc.double({ min: 5e5, max: 1.2e7, noNaN: true }), fc.double({ min: 230, max: 350, noNaN: true }), (pressurePa, temperatureK) => {
-        const stagnation = flashPT(model, { temperatureK, pressurePa });
-        const { massFluxKgPerM2S } = equilibriumNozzle(model, stagnation, model.feed, 101325);
-        for (const part of [0.9, 0.75, 0.6, 0.5, 0.4, 0.25]) {
-          const at = flashPS(model, { pressurePa: part * pressurePa, entropyJPerMolK: stagnation.entropyJPerMolK });
-          const flux = Math.sqrt(2 * model.mixtureMolarMass(model.feed) * Math.max(stagnation.enthalpyJPerMol - at.enthalpyJPerMol, 0)) / at.molarVolumeM3PerMol;
-          expect(flux).toBeLessThanOrEqual(massFluxKgPerM2S * (1 + 1e-7));
-        }
-      }),
+      fc.property(
+        fc.double({ min: 5e5, max: 1.2e7, noNaN: true }),
+        fc.double({ min: 230, max: 350, noNaN: true }),
+        (pressurePa, temperatureK) => {
+          const stagnation = flashPT(model, { temperatureK, pressurePa });
+          const { massFluxKgPerM2S } = equilibriumNozzle(model, stagnation, model.feed, 101325);
+          for (const part of [0.9, 0.75, 0.6, 0.5, 0.4, 0.25]) {
+            const at = flashPS(model, { pressurePa: part * pressurePa, entropyJPerMolK: stagnation.entropyJPerMolK });
+            const flux =
+              Math.sqrt(2 * model.mixtureMolarMass(model.feed) * Math.max(stagnation.enthalpyJPerMol - at.enthalpyJPerMol, 0)) /
+              at.molarVolumeM3PerMol;
+            expect(flux).toBeLessThanOrEqual(massFluxKgPerM2S * (1 + 1e-7));
+          }
+        },
+      ),
       { numRuns: 40 },
     );
   });

@@ -12,10 +12,11 @@
  * Returns  G [kg/(m² s)] and the throat
  * Throws   EngineError "no-convergence"
  */
-import type { FluidModel } from "../eos/fluid-model";
+import { createPhaseState, type FluidModel, type PhaseState } from "../eos/fluid-model";
+import { EngineError } from "../errors";
 import type { Equilibrium } from "../flash/equilibrium";
 import { flashPS } from "../flash/flash-ph";
-import type { NozzleFlow } from "./frozen-nozzle";
+import { frozenNozzle, type NozzleFlow } from "./frozen-nozzle";
 import { onIsentrope } from "./on-isentrope";
 import { smallestBetween } from "./smallest-between";
 
@@ -26,12 +27,24 @@ const growth = 1.45;
 /** Past a maximum the walk ends where the flux has fallen to this part of it: no second maximum higher than the first has been seen beyond. */
 const fallen = 0.6;
 
-export function equilibriumNozzle(fluid: FluidModel, stagnation: Equilibrium, z: ArrayLike<number>, backPressurePa: number): NozzleFlow {
+export function equilibriumNozzle(
+  fluid: FluidModel,
+  stagnation: Equilibrium,
+  z: ArrayLike<number>,
+  backPressurePa: number,
+): NozzleFlow {
   const { pressurePa: p0, temperatureK: T0, molarVolumeM3PerMol: v0, enthalpyJPerMol: h0, entropyJPerMolK } = stagnation;
   if (!(backPressurePa < p0)) return { massFluxKgPerM2S: 0, throatPressurePa: p0, throatTemperatureK: T0, choked: false };
+  const [only, other] = stagnation.phases;
+  if (only && (!other || other.moleFraction < 1e-12)) {
+    const frozen = frozenNozzle(fluid, only.state, z, backPressurePa);
+    if (staysOnePhase(fluid, only.state, z, frozen)) return frozen;
+  }
+
   const molarMass = fluid.mixtureMolarMass(z);
   let seed = stagnation;
-  const fluxOf = ({ enthalpyJPerMol, molarVolumeM3PerMol }: Equilibrium): number => Math.sqrt(2 * molarMass * Math.max(h0 - enthalpyJPerMol, 0)) / molarVolumeM3PerMol;
+  const fluxOf = ({ enthalpyJPerMol, molarVolumeM3PerMol }: Equilibrium): number =>
+    Math.sqrt(2 * molarMass * Math.max(h0 - enthalpyJPerMol, 0)) / molarVolumeM3PerMol;
   const at = (x: number): Point => {
     seed = onIsentrope(fluid, { entropyJPerMolK, molarVolumeM3PerMol: v0 * Math.exp(x) }, z, seed);
     return { x, flux: fluxOf(seed), pressurePa: seed.pressurePa, temperatureK: seed.temperatureK };
@@ -49,10 +62,55 @@ export function equilibriumNozzle(fluid: FluidModel, stagnation: Equilibrium, z:
   const from = walk[Math.max(best - 1, 0)]?.x ?? 0;
   const to = walk[Math.min(best + 1, walk.length - 1)]?.x ?? 0;
   const throat = at(smallestBetween((x) => -at(x).flux, from, to, 1e-7));
-  if (throat.pressurePa > backPressurePa) return { massFluxKgPerM2S: throat.flux, throatPressurePa: throat.pressurePa, throatTemperatureK: throat.temperatureK, choked: true };
+  if (throat.pressurePa > backPressurePa)
+    return {
+      massFluxKgPerM2S: throat.flux,
+      throatPressurePa: throat.pressurePa,
+      throatTemperatureK: throat.temperatureK,
+      choked: true,
+    };
 
   const behind = flashPS(fluid, { pressurePa: backPressurePa, entropyJPerMolK }, z, seed);
-  return { massFluxKgPerM2S: fluxOf(behind), throatPressurePa: backPressurePa, throatTemperatureK: behind.temperatureK, choked: false };
+  return {
+    massFluxKgPerM2S: fluxOf(behind),
+    throatPressurePa: backPressurePa,
+    throatTemperatureK: behind.temperatureK,
+    choked: false,
+  };
+}
+
+const scratch = createPhaseState();
+
+/** Is the frozen throat a stable single phase, and the half-way pressure too? Then nothing condenses and frozen flow is equilibrium flow. */
+function staysOnePhase(
+  fluid: FluidModel,
+  from: PhaseState,
+  z: ArrayLike<number>,
+  { throatPressurePa, throatTemperatureK }: NozzleFlow,
+): boolean {
+  if (!isAlone(fluid, throatTemperatureK, throatPressurePa, from.entropyJPerMolK, z)) return false;
+  const middlePa = Math.sqrt(from.pressurePa * throatPressurePa);
+  try {
+    const { temperatureK } = fluid.phaseFromEntropyPressure(
+      from.entropyJPerMolK,
+      middlePa,
+      z,
+      (from.temperatureK + throatTemperatureK) / 2,
+      "stable",
+      scratch,
+    );
+    return fluid.stability(temperatureK, middlePa, z).stable;
+  } catch (error) {
+    if (error instanceof EngineError && error.code === "no-convergence") return false;
+    throw error;
+  }
+}
+
+/** The stable root at (T, p) has the isentrope's entropy, and does not split. */
+function isAlone(fluid: FluidModel, T: number, p: number, entropyJPerMolK: number, z: ArrayLike<number>): boolean {
+  if (!(p > 0)) return false;
+  const stable = fluid.phaseAtPressure(T, p, z, "stable", scratch);
+  return Math.abs(stable.entropyJPerMolK - entropyJPerMolK) < 1e-6 * fluid.gasConstantJPerMolK && fluid.stability(T, p, z).stable;
 }
 
 /** A liquid loses its pressure in a thousandth of its volume: first steps in proportion to 1/κ, κ = −∂ln p/∂ln v at constant entropy. */

@@ -16,12 +16,19 @@ describe("frozenNozzle", () => {
     const stagnation = model.phaseAtPressure(T0, p0, model.feed);
     const rt = 8.31446261815324 * T0;
     const choked = frozenNozzle(model, stagnation, model.feed, 1e5);
-    expect(relative(choked.massFluxKgPerM2S, p0 * Math.sqrt((k * 0.0280134) / rt) * (2 / (k + 1)) ** ((k + 1) / (2 * (k - 1))))).toBeLessThan(1e-8);
+    expect(
+      relative(choked.massFluxKgPerM2S, p0 * Math.sqrt((k * 0.0280134) / rt) * (2 / (k + 1)) ** ((k + 1) / (2 * (k - 1)))),
+    ).toBeLessThan(1e-8);
     expect(relative(choked.throatPressurePa / p0, (2 / (k + 1)) ** (k / (k - 1)))).toBeLessThan(1e-8);
     expect(choked.choked).toBe(true);
     const r = 0.8;
     const slow = frozenNozzle(model, stagnation, model.feed, r * p0);
-    expect(relative(slow.massFluxKgPerM2S, p0 * Math.sqrt(((2 * 0.0280134) / rt) * (k / (k - 1)) * (r ** (2 / k) - r ** ((k + 1) / k))))).toBeLessThan(1e-8);
+    expect(
+      relative(
+        slow.massFluxKgPerM2S,
+        p0 * Math.sqrt(((2 * 0.0280134) / rt) * (k / (k - 1)) * (r ** (2 / k) - r ** ((k + 1) / k))),
+      ),
+    ).toBeLessThan(1e-8);
     expect(slow).toMatchObject({ choked: false });
     expect(relative(slow.throatPressurePa, r * p0)).toBeLessThan(1e-9);
   });
@@ -40,7 +47,10 @@ describe("frozenNozzle", () => {
             criticalTemperatureK: 126.192,
             criticalPressurePa: 3395800,
             acentricFactor: 0.0372,
-            idealGasHeatCapacityOverR: { polynomial: [3.4486, 0.85671e-3, -4.8311e-6, 11.161e-9, -9.4839e-12, 2.7745e-15], rangeK: [110, 900] },
+            idealGasHeatCapacityOverR: {
+              polynomial: [3.4486, 0.85671e-3, -4.8311e-6, 11.161e-9, -9.4839e-12, 2.7745e-15],
+              rangeK: [110, 900],
+            },
           },
         },
       ],
@@ -71,7 +81,13 @@ describe("frozenNozzle", () => {
   });
 
   it("is the largest flux along the isentrope, and never more for a higher back pressure", () => {
-    const model = createFluidModel({ equation: "peng-robinson-1976", components: [{ id: "methane", moleFraction: 0.9 }, { id: "ethane", moleFraction: 0.1 }] });
+    const model = createFluidModel({
+      equation: "peng-robinson-1976",
+      components: [
+        { id: "methane", moleFraction: 0.9 },
+        { id: "ethane", moleFraction: 0.1 },
+      ],
+    });
     fc.assert(
       fc.property(fc.double({ min: 3e5, max: 2e7, noNaN: true }), fc.double({ min: 270, max: 450, noNaN: true }), (p0, T0) => {
         const at = { ...model.phaseAtPressure(T0, p0, model.feed) };
@@ -80,7 +96,9 @@ describe("frozenNozzle", () => {
           const v = at.molarVolumeM3PerMol * Math.exp(part * 0.45);
           const state = model.phaseFromEntropyVolume(at.entropyJPerMolK, v, model.feed, T0);
           if (state.pressurePa < 101325) continue;
-          const flux = state.densityKgPerM3 * Math.sqrt((2 * Math.max(at.enthalpyJPerMol - state.enthalpyJPerMol, 0)) / model.mixtureMolarMass(model.feed));
+          const flux =
+            state.densityKgPerM3 *
+            Math.sqrt((2 * Math.max(at.enthalpyJPerMol - state.enthalpyJPerMol, 0)) / model.mixtureMolarMass(model.feed));
           expect(flux).toBeLessThanOrEqual(flow.massFluxKgPerM2S * (1 + 1e-9));
         }
         let last = Number.POSITIVE_INFINITY;

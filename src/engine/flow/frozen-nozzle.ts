@@ -20,7 +20,12 @@ export type NozzleFlow = { massFluxKgPerM2S: number; throatPressurePa: number; t
 
 const convergedInX = 1e-11;
 
-export function frozenNozzle(model: FluidModel, stagnation: PhaseState, z: ArrayLike<number>, backPressurePa: number): NozzleFlow {
+export function frozenNozzle(
+  model: FluidModel,
+  stagnation: PhaseState,
+  z: ArrayLike<number>,
+  backPressurePa: number,
+): NozzleFlow {
   const { pressurePa: p0, temperatureK: T0 } = stagnation;
   if (!(backPressurePa < p0)) return { massFluxKgPerM2S: 0, throatPressurePa: p0, throatTemperatureK: T0, choked: false };
 
@@ -58,7 +63,13 @@ class Isentrope {
 
   at(x: number): PhaseState {
     if (x === 0) return this.model.phaseAtVolume(this.T0, this.v0, this.z, this.out);
-    return this.model.phaseFromEntropyVolume(this.s0, this.v0 * Math.exp(x), this.z, this.T0 * Math.exp(-this.gruneisen * x), this.out);
+    return this.model.phaseFromEntropyVolume(
+      this.s0,
+      this.v0 * Math.exp(x),
+      this.z,
+      this.T0 * Math.exp(-this.gruneisen * x),
+      this.out,
+    );
   }
 
   /** State at x if the phase can be there: positive pressure and a real speed of sound. */
@@ -74,14 +85,24 @@ class Isentrope {
 }
 
 /** M c² [J/mol] = −v² (∂p/∂v)_s */
-function soundTerm({ temperatureK: T, molarVolumeM3PerMol: v, pressureByTemperature: pT, pressureByVolume: pv, heatCapacityVJPerMolK: cv }: PhaseState): number {
+function soundTerm({
+  temperatureK: T,
+  molarVolumeM3PerMol: v,
+  pressureByTemperature: pT,
+  pressureByVolume: pv,
+  heatCapacityVJPerMolK: cv,
+}: PhaseState): number {
   return v * v * ((T * pT * pT) / cv - pv);
 }
 
 /** First x at which the velocity reaches the speed of sound, or undefined where the phase ends before that. */
 function sonicPoint(walk: Isentrope): number | undefined {
   const k = walk.exponent;
-  if (!(k > 0)) throw new EngineError("no-convergence", "The stream before the nozzle has no real speed of sound: it is not one stable phase.");
+  if (!(k > 0))
+    throw new EngineError(
+      "no-convergence",
+      "The stream before the nozzle has no real speed of sound: it is not one stable phase.",
+    );
   const excess = (state: PhaseState): number => walk.h0 - state.enthalpyJPerMol - soundTerm(state) / 2;
 
   let low = 0;
@@ -101,7 +122,8 @@ function sonicPoint(walk: Isentrope): number | undefined {
     if (now < 0) low = x;
     else high = x;
     // d(excess)/dx = M c² − M c dc/dx; with c² ~ v^-(κ−1) nearly. A secant of two points replaces the guess.
-    const slope = before && before.x !== x ? (now - before.excess) / (x - before.x) : soundTerm(state) * (1 + Math.max(k - 1, 0) / 2);
+    const slope =
+      before && before.x !== x ? (now - before.excess) / (x - before.x) : soundTerm(state) * (1 + Math.max(k - 1, 0) / 2);
     before = { x, excess: now };
     const step = -now / slope;
     if (Math.abs(step) < convergedInX * Math.max(x, 1e-3)) return x + step;

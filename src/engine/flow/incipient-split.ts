@@ -14,7 +14,12 @@ type Homogeneous = { temperatureK: number; pressurePa: number; composition: Floa
 
 const traces = [1e-6, 1e-4, 1e-2, 1e-8];
 
-export function incipientSplit(fluid: FluidModel, { temperatureK, pressurePa, composition: z }: Homogeneous, test: Stability, target: VolumeTarget): Equilibrium | undefined {
+export function incipientSplit(
+  fluid: FluidModel,
+  { temperatureK, pressurePa, composition: z }: Homogeneous,
+  test: Stability,
+  target: VolumeTarget,
+): Equilibrium | undefined {
   const traceIsVapour = test.trialIsVapour;
   fluid.residual.setComposition(test.trialComposition);
   const traceVolume = fluid.residual.volumeAtPressure(temperatureK, pressurePa, traceIsVapour ? "vapour" : "liquid");
@@ -38,7 +43,10 @@ export function incipientSplit(fluid: FluidModel, { temperatureK, pressurePa, co
   return undefined;
 }
 
-export function assembleVolumes(fluid: FluidModel, { temperatureK, pressurePa, v, l, vapourVolume, liquidVolume }: TwoPhaseVolumes): Equilibrium {
+export function assembleVolumes(
+  fluid: FluidModel,
+  { temperatureK, pressurePa, v, l, vapourVolume, liquidVolume }: TwoPhaseVolumes,
+): Equilibrium {
   const sum = (moles: Float64Array): number => moles.reduce((total, amount) => total + amount, 0);
   const [nv, nl] = [sum(v), sum(l)];
   return assemble(fluid, temperatureK, pressurePa, [

@@ -13,7 +13,12 @@ import { incipientSplit } from "./incipient-split";
 
 const onTheBoundary = -1e-7;
 
-export function onIsentrope(fluid: FluidModel, at: { entropyJPerMolK: number; molarVolumeM3PerMol: number }, z: ArrayLike<number>, seed: Equilibrium): Equilibrium {
+export function onIsentrope(
+  fluid: FluidModel,
+  at: { entropyJPerMolK: number; molarVolumeM3PerMol: number },
+  z: ArrayLike<number>,
+  seed: Equilibrium,
+): Equilibrium {
   try {
     return flashSV(fluid, at, z, seed);
   } catch (error) {
@@ -24,9 +29,15 @@ export function onIsentrope(fluid: FluidModel, at: { entropyJPerMolK: number; mo
     const test = fluid.stability(alone.temperatureK, alone.pressurePa, z);
     const trace = test.stable
       ? undefined
-      : incipientSplit(fluid, { ...alone, composition: Float64Array.from(z) }, test, { hold: "entropy", value: entropyJPerMolK, molarVolume: molarVolumeM3PerMol });
+      : incipientSplit(fluid, { ...alone, composition: Float64Array.from(z) }, test, {
+          hold: "entropy",
+          value: entropyJPerMolK,
+          molarVolume: molarVolumeM3PerMol,
+        });
     if (trace) return trace;
     if (test.tangentPlaneDistance < onTheBoundary) throw error;
-    return assemble(fluid, alone.temperatureK, alone.pressurePa, [{ moleFraction: 1, composition: z, molarVolume: molarVolumeM3PerMol }]);
+    return assemble(fluid, alone.temperatureK, alone.pressurePa, [
+      { moleFraction: 1, composition: z, molarVolume: molarVolumeM3PerMol },
+    ]);
   }
 }

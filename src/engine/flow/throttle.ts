@@ -17,10 +17,18 @@ const scratch = createPhaseState();
 
 export function throttleTemperature(fluid: FluidModel, stream: PhaseState, z: ArrayLike<number>, pressurePa: number): number {
   if (pressurePa >= stream.pressurePa) return stream.temperatureK;
-  return asOnePhase(fluid, stream, z, pressurePa) ?? flashPH(fluid, { pressurePa, enthalpyJPerMol: stream.enthalpyJPerMol }, z).temperatureK;
+  return (
+    asOnePhase(fluid, stream, z, pressurePa) ??
+    flashPH(fluid, { pressurePa, enthalpyJPerMol: stream.enthalpyJPerMol }, z).temperatureK
+  );
 }
 
-function asOnePhase(fluid: FluidModel, { enthalpyJPerMol, temperatureK: guessK }: PhaseState, z: ArrayLike<number>, pressurePa: number): number | undefined {
+function asOnePhase(
+  fluid: FluidModel,
+  { enthalpyJPerMol, temperatureK: guessK }: PhaseState,
+  z: ArrayLike<number>,
+  pressurePa: number,
+): number | undefined {
   try {
     const { temperatureK } = fluid.phaseFromEnthalpy(enthalpyJPerMol, pressurePa, z, guessK, "stable", scratch);
     return fluid.stability(temperatureK, pressurePa, z).stable ? temperatureK : undefined;

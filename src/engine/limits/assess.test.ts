@@ -1,8 +1,24 @@
 import { describe, expect, it } from "vitest";
 import { assess, type Figure } from "./assess";
 
-const time = (value: number | undefined, limit: number | undefined): Figure => ({ id: "time-to-target", title: "t", unit: "s", sense: "at-most", value, limit, required: false });
-const wall = (value: number | undefined, limit: number | undefined): Figure => ({ id: "minimum-wall-temperature", title: "w", unit: "K", sense: "at-least", value, limit, required: true });
+const time = (value: number | undefined, limit: number | undefined): Figure => ({
+  id: "time-to-target",
+  title: "t",
+  unit: "s",
+  sense: "at-most",
+  value,
+  limit,
+  required: false,
+});
+const wall = (value: number | undefined, limit: number | undefined): Figure => ({
+  id: "minimum-wall-temperature",
+  title: "w",
+  unit: "K",
+  sense: "at-least",
+  value,
+  limit,
+  required: true,
+});
 
 const verdictOf = (figure: Figure, band = {}) => assess([figure], band).limits[0]?.verdict;
 

@@ -9,7 +9,16 @@
  */
 import type { AssessedLimit, LimitId, Verdict } from "../cases/blowdown-result";
 
-export type Figure = { id: LimitId; title: string; unit: AssessedLimit["unit"]; sense: AssessedLimit["sense"]; value?: number; limit?: number; note?: string; required: boolean };
+export type Figure = {
+  id: LimitId;
+  title: string;
+  unit: AssessedLimit["unit"];
+  sense: AssessedLimit["sense"];
+  value?: number;
+  limit?: number;
+  note?: string;
+  required: boolean;
+};
 
 export type NearBand = { bandK: number; bandFraction: number };
 
@@ -21,7 +30,10 @@ export function assess(figures: Figure[], given: Partial<NearBand>): { limits: A
     bandFraction: Math.max(given.bandFraction ?? 0, defaultNearBand.bandFraction),
   };
   const judged = figures.map((figure) => judge(figure, band));
-  const closest = judged.reduce<number>((least, { relative }) => Math.min(least, relative ?? Number.POSITIVE_INFINITY), Number.POSITIVE_INFINITY);
+  const closest = judged.reduce<number>(
+    (least, { relative }) => Math.min(least, relative ?? Number.POSITIVE_INFINITY),
+    Number.POSITIVE_INFINITY,
+  );
   const governing = judged.findIndex(({ relative }) => relative === closest);
   const limits = judged.map(({ limit }, i) => ({ ...limit, governs: i === governing }));
   return { limits, verdict: overall(figures, limits) };
@@ -31,7 +43,8 @@ function judge(figure: Figure, { bandK, bandFraction }: NearBand): { limit: Asse
   const { required: _required, ...shown } = figure;
   const { value, limit, sense, unit } = figure;
   // A target that was not reached in time is beyond its limit although it has no value.
-  if (value === undefined || limit === undefined) return { limit: { ...shown, verdict: "open", governs: false }, relative: undefined };
+  if (value === undefined || limit === undefined)
+    return { limit: { ...shown, verdict: "open", governs: false }, relative: undefined };
   const inHand = sense === "at-most" ? limit - value : value - limit;
   const near = unit === "K" ? bandK : bandFraction * Math.abs(limit);
   const verdict: Verdict = inHand <= 0 ? "beyond" : inHand < near ? "near" : "within";

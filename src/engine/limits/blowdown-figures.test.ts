@@ -5,7 +5,8 @@ import type { BlowdownCase } from "../cases/blowdown-case";
 import { runBlowdown } from "../cases/blowdown/run-blowdown";
 
 const base = plainCase(idealGas(1.4, 0.028), { pressurePa: 5e6, stopPressurePa: 2e5 });
-const run = (limits: BlowdownCase["limits"], stopTimeS = 1e6) => runBlowdown({ ...base, run: { ...base.run, stopTimeS }, limits });
+const run = (limits: BlowdownCase["limits"], stopTimeS = 1e6) =>
+  runBlowdown({ ...base, run: { ...base.run, stopTimeS }, limits });
 const line = (result: ReturnType<typeof run>, id: string) => result.limits.find((limit) => limit.id === id);
 
 describe("figures held against the limits", () => {
@@ -16,12 +17,19 @@ describe("figures held against the limits", () => {
 
   it("calls a target that was not met in the time allowed Beyond", () => {
     const result = run({ targetPressurePa: 1e6, targetTimeS: 20 }, 30);
-    expect(line(result, "time-to-target")).toMatchObject({ verdict: "beyond", value: 30, note: expect.stringMatching(/Not reached/) as string });
+    expect(line(result, "time-to-target")).toMatchObject({
+      verdict: "beyond",
+      value: 30,
+      note: expect.stringMatching(/Not reached/) as string,
+    });
     expect(result.verdict).toBe("beyond");
   });
 
   it("leaves a target Open when the run was cut short before the time allowed", () => {
-    expect(line(run({ targetPressurePa: 1e6, targetTimeS: 900 }, 5), "time-to-target")).toMatchObject({ verdict: "open", note: expect.stringMatching(/Compute for longer/) as string });
+    expect(line(run({ targetPressurePa: 1e6, targetTimeS: 900 }, 5), "time-to-target")).toMatchObject({
+      verdict: "open",
+      note: expect.stringMatching(/Compute for longer/) as string,
+    });
   });
 
   it("is Open overall without a wall, because nothing was said about the steel", () => {

@@ -7,7 +7,11 @@
  * Returns  x with a sign change of f within `tolerance` of it
  * Throws   RangeError where the ends don't bracket (NaN included)
  */
-export function bracketedRoot(f: (x: number) => number, bracket: { a: number; fa: number; b: number; fb: number }, tolerance: number): number {
+export function bracketedRoot(
+  f: (x: number) => number,
+  bracket: { a: number; fa: number; b: number; fb: number },
+  tolerance: number,
+): number {
   let { a, fa, b, fb } = bracket;
   if (fa === 0) return a;
   if (fb === 0) return b;

@@ -40,7 +40,9 @@ describe("integrate", () => {
 
   it("moves the answer less than tolerance claims when tightened tenfold", () => {
     for (const relativeTolerance of [1e-4, 1e-5, 1e-6, 1e-7]) {
-      const [loose, tight] = [relativeTolerance, relativeTolerance / 10].map((r) => integrate(decay({ relativeTolerance: r, absoluteTolerance: [r / 100] })).y[0] ?? 0);
+      const [loose, tight] = [relativeTolerance, relativeTolerance / 10].map(
+        (r) => integrate(decay({ relativeTolerance: r, absoluteTolerance: [r / 100] })).y[0] ?? 0,
+      );
       expect(Math.abs((loose ?? 0) - (tight ?? 0))).toBeLessThan(10 * relativeTolerance * Math.exp(-5) + relativeTolerance / 10);
     }
   });
@@ -80,10 +82,21 @@ describe("integrate", () => {
   });
 
   it("takes the earliest of several events in one step, whatever their order in the list", () => {
-    const at = (id: string, level: number, stops: boolean) => ({ id, stops, value: (_t: number, y: number[]) => (y[0] ?? 0) - level });
+    const at = (id: string, level: number, stops: boolean) => ({
+      id,
+      stops,
+      value: (_t: number, y: number[]) => (y[0] ?? 0) - level,
+    });
     fc.assert(
       fc.property(fc.shuffledSubarray([0.9, 0.5, 0.49, 0.3, 0.1], { minLength: 2 }), (levels) => {
-        const run = integrate(decay({ relativeTolerance: 1e-3, absoluteTolerance: [1e-3], tEnd: 50, events: levels.map((level) => at(String(level), level, true)) }));
+        const run = integrate(
+          decay({
+            relativeTolerance: 1e-3,
+            absoluteTolerance: [1e-3],
+            tEnd: 50,
+            events: levels.map((level) => at(String(level), level, true)),
+          }),
+        );
         expect(run.stoppedBy).toBe(String(Math.max(...levels)));
       }),
       { numRuns: 30 },
@@ -94,7 +107,14 @@ describe("integrate", () => {
   });
 
   it("sees a dip that starts and ends inside one step", () => {
-    const run = integrate(decay({ derivative: () => [1], y0: [0], tEnd: 10, events: [{ id: "dip", stops: true, value: (_t, y) => Math.abs((y[0] ?? 0) - 5) - 0.9 }] }));
+    const run = integrate(
+      decay({
+        derivative: () => [1],
+        y0: [0],
+        tEnd: 10,
+        events: [{ id: "dip", stops: true, value: (_t, y) => Math.abs((y[0] ?? 0) - 5) - 0.9 }],
+      }),
+    );
     expect(run.stoppedBy).toBe("dip");
     expect(run.t).toBeCloseTo(4.1, 8);
   });
@@ -150,7 +170,9 @@ describe("integrate", () => {
 
   it("stops at once when cancelled", () => {
     let calls = 0;
-    expect(codeOf(() => integrate(decay({ derivative: (_t, y) => (calls++, [-(y[0] ?? 0)]), isCancelled: () => calls >= 7 })))).toBe("cancelled");
+    expect(
+      codeOf(() => integrate(decay({ derivative: (_t, y) => (calls++, [-(y[0] ?? 0)]), isCancelled: () => calls >= 7 }))),
+    ).toBe("cancelled");
     expect(calls).toBe(7);
   });
 
@@ -161,7 +183,10 @@ describe("integrate", () => {
 
 describe("bracketedRoot", () => {
   it("finds the root of a smooth function and the place of a jump", () => {
-    expect(bracketedRoot((x) => Math.cos(x) - x, { a: 0, fa: 1, b: 1, fb: Math.cos(1) - 1 }, 1e-12)).toBeCloseTo(0.7390851332151607, 11);
+    expect(bracketedRoot((x) => Math.cos(x) - x, { a: 0, fa: 1, b: 1, fb: Math.cos(1) - 1 }, 1e-12)).toBeCloseTo(
+      0.7390851332151607,
+      11,
+    );
     expect(bracketedRoot((x) => (x < 0.3 ? 1 : -1), { a: 0, fa: 1, b: 1, fb: -1 }, 1e-10)).toBeCloseTo(0.3, 9);
   });
   it("refuses ends that bracket nothing", () => {

@@ -78,7 +78,11 @@ export function integrate(options: IntegrateOptions): Integration {
     const scaled = new Array<number>(n);
     if (rates === undefined) {
       if (evaluations === 1 || ++refusedInARow > untenableInARow) {
-        throw new EngineError("no-convergence", `No state of the fluid could be found just after ${accepted.t.toPrecision(4)} s.`, { timeS: accepted.t });
+        throw new EngineError(
+          "no-convergence",
+          `No state of the fluid could be found just after ${accepted.t.toPrecision(4)} s.`,
+          { timeS: accepted.t },
+        );
       }
       return scaled.fill(untenable);
     }
@@ -86,7 +90,10 @@ export function integrate(options: IntegrateOptions): Integration {
     for (let i = 0; i < n; i++) {
       const rate = rates[i];
       if (rate === undefined || !Number.isFinite(rate)) {
-        throw new EngineError("no-convergence", `A rate of change was not a number just after ${accepted.t.toPrecision(4)} s.`, { timeS: accepted.t, component: i });
+        throw new EngineError("no-convergence", `A rate of change was not a number just after ${accepted.t.toPrecision(4)} s.`, {
+          timeS: accepted.t,
+          component: i,
+        });
       }
       scaled[i] = rate * timeScaleS;
     }
@@ -98,7 +105,10 @@ export function integrate(options: IntegrateOptions): Integration {
   let stoppedBy: string | undefined;
   const out = (nr: number, xOld: number, x: number, y: number[], dense?: (component: number, x: number) => number): boolean => {
     if (nr === 1 || !dense) return true;
-    if (!y.every(Number.isFinite)) throw new EngineError("no-convergence", `The state was not a number after ${accepted.t.toPrecision(4)} s.`, { timeS: accepted.t });
+    if (!y.every(Number.isFinite))
+      throw new EngineError("no-convergence", `The state was not a number after ${accepted.t.toPrecision(4)} s.`, {
+        timeS: accepted.t,
+      });
     const told = accepted.t;
     const t = x >= xEnd ? tEnd : t0 + x * timeScaleS;
     const at = (time: number): number[] => {
@@ -126,16 +136,29 @@ export function integrate(options: IntegrateOptions): Integration {
     const { outcome } = solver.solve(f, 0, [...options.y0], xEnd, out);
     // On an early stop the solver's own `xEnd` and `y` are not those of the event: only what `out` kept counts.
     if (outcome === Outcome.MaxStepsExceeded || (stoppedBy === undefined && accepted.t < tEnd)) {
-      throw new EngineError("no-convergence", `The integration could not get past ${accepted.t.toPrecision(4)} s.`, { timeS: accepted.t, steps });
+      throw new EngineError("no-convergence", `The integration could not get past ${accepted.t.toPrecision(4)} s.`, {
+        timeS: accepted.t,
+        steps,
+      });
     }
   }
   return { t: accepted.t, y: accepted.y, stoppedBy, marks: watch.marks, steps, evaluations };
 }
 
-function checkArguments({ t0, tEnd, y0, relativeTolerance, absoluteTolerance, timeScaleS, maxEvaluations }: IntegrateOptions): void {
+function checkArguments({
+  t0,
+  tEnd,
+  y0,
+  relativeTolerance,
+  absoluteTolerance,
+  timeScaleS,
+  maxEvaluations,
+}: IntegrateOptions): void {
   if (y0.length === 0 || !y0.every(Number.isFinite)) throw new RangeError("the initial state must be finite numbers");
-  if (absoluteTolerance.length !== y0.length || !absoluteTolerance.every((a) => a > 0)) throw new RangeError("one absolute tolerance above zero for each component");
-  if (!(relativeTolerance > 0 && timeScaleS > 0 && maxEvaluations > 0)) throw new RangeError("tolerance, time scale and budget must be above zero");
+  if (absoluteTolerance.length !== y0.length || !absoluteTolerance.every((a) => a > 0))
+    throw new RangeError("one absolute tolerance above zero for each component");
+  if (!(relativeTolerance > 0 && timeScaleS > 0 && maxEvaluations > 0))
+    throw new RangeError("tolerance, time scale and budget must be above zero");
   if (!(tEnd >= t0)) throw new RangeError("the end must not be before the start");
 }
 
@@ -160,7 +183,17 @@ class EventWatch {
     this.last = events.map((event) => event.value(t0, y0));
   }
 
-  look({ told, t, at, samples }: { told: number; t: number; at: (t: number) => number[]; samples: number }): { id: string; t: number; y: number[] } | undefined {
+  look({
+    told,
+    t,
+    at,
+    samples,
+  }: {
+    told: number;
+    t: number;
+    at: (t: number) => number[];
+    samples: number;
+  }): { id: string; t: number; y: number[] } | undefined {
     if (this.events.length === 0) return undefined;
     let from = told;
     for (let k = 1; k <= samples + 1; k++) {
@@ -171,7 +204,14 @@ class EventWatch {
         const before = this.last[i] ?? Number.NaN;
         const now = event.value(to, y);
         if (before > 0 && now <= 0 && !this.done.has(event.id)) {
-          found.push({ event, t: farSide((time) => event.value(time, at(time)), { a: from, fa: before, b: to, fb: now }, 1e-10 * Math.max(to, 1e-3 * (t - told))) });
+          found.push({
+            event,
+            t: farSide(
+              (time) => event.value(time, at(time)),
+              { a: from, fa: before, b: to, fb: now },
+              1e-10 * Math.max(to, 1e-3 * (t - told)),
+            ),
+          });
         }
         this.last[i] = now;
       });

@@ -5,7 +5,16 @@
  */
 import table from "./steels.json";
 
-export const steelIds = ["carbon_steel", "carbon_steel_lt", "nickel_3_5", "nickel_9", "ss304", "ss316", "duplex2205", "al5083"] as const;
+export const steelIds = [
+  "carbon_steel",
+  "carbon_steel_lt",
+  "nickel_3_5",
+  "nickel_9",
+  "ss304",
+  "ss316",
+  "duplex2205",
+  "al5083",
+] as const;
 export type SteelId = (typeof steelIds)[number];
 
 export type Steel = {
@@ -59,7 +68,11 @@ class BrokenLine {
     this.x = points.map((point) => point[0] ?? Number.NaN);
     this.y = points.map((point) => point[1] ?? Number.NaN);
     this.area = [0];
-    for (let i = 1; i < this.x.length; i++) this.area.push(this.n(this.area, i - 1) + ((this.n(this.y, i) + this.n(this.y, i - 1)) / 2) * (this.n(this.x, i) - this.n(this.x, i - 1)));
+    for (let i = 1; i < this.x.length; i++)
+      this.area.push(
+        this.n(this.area, i - 1) +
+          ((this.n(this.y, i) + this.n(this.y, i - 1)) / 2) * (this.n(this.x, i) - this.n(this.x, i - 1)),
+      );
     this.range = [this.n(this.x, 0), this.n(this.x, this.x.length - 1)];
   }
 

@@ -3,8 +3,20 @@ import { describe, expect, it } from "vitest";
 import { levelAtVolume, measureVessel, type VesselShape } from "./geometry";
 import { headShapes, makeHead, wholeHead, type HeadShape } from "./head";
 
-const lying = (heads: HeadShape, D = 2, L = 6): VesselShape => ({ shape: "cylinder", orientation: "horizontal", insideDiameterM: D, tangentLengthM: L, heads });
-const standing = (heads: HeadShape, D = 2, L = 6): VesselShape => ({ shape: "cylinder", orientation: "vertical", insideDiameterM: D, tangentLengthM: L, heads });
+const lying = (heads: HeadShape, D = 2, L = 6): VesselShape => ({
+  shape: "cylinder",
+  orientation: "horizontal",
+  insideDiameterM: D,
+  tangentLengthM: L,
+  heads,
+});
+const standing = (heads: HeadShape, D = 2, L = 6): VesselShape => ({
+  shape: "cylinder",
+  orientation: "vertical",
+  insideDiameterM: D,
+  tangentLengthM: L,
+  heads,
+});
 const relative = (value: number, expected: number) => Math.abs(value / expected - 1);
 
 describe("heads", () => {
@@ -32,7 +44,9 @@ describe("heads", () => {
     const [R, crown, knuckle] = [1, 2, 0.2];
     const joint = (crown * (R - knuckle)) / (crown - knuckle);
     const angle = Math.acos((R - knuckle) / (crown - knuckle));
-    const closed = 2 * Math.PI * crown * (crown - Math.sqrt(crown ** 2 - joint ** 2)) + 2 * Math.PI * knuckle * ((R - knuckle) * angle + knuckle * Math.sin(angle));
+    const closed =
+      2 * Math.PI * crown * (crown - Math.sqrt(crown ** 2 - joint ** 2)) +
+      2 * Math.PI * knuckle * ((R - knuckle) * angle + knuckle * Math.sin(angle));
     expect(relative(wholeHead(makeHead("torispherical-kloepper", 2)).areaM2, closed)).toBeLessThan(1e-12);
   });
 });
@@ -45,11 +59,14 @@ describe("measureVessel", () => {
     ["lying, flanged and dished", lying("torispherical-flanged-dished"), 0.5, 3.879405, 14.15126],
     ["standing, Klöpper", standing("torispherical-kloepper"), 0.5, 1.14500492, 4.66650234],
     ["sphere of 12 m", { shape: "sphere", insideDiameterM: 12 } as VesselShape, 4, 234.5723, 150.7964],
-  ] as [string, VesselShape, number, number, number][])("%s: liquid volume and wetted area at a level", (_title, shape, level, volume, area) => {
-    const filled = measureVessel(shape).below?.(level);
-    expect(relative(filled?.volumeM3 ?? 0, volume)).toBeLessThan(1e-6);
-    expect(relative(filled?.areaM2 ?? 0, area)).toBeLessThan(1e-6);
-  });
+  ] as [string, VesselShape, number, number, number][])(
+    "%s: liquid volume and wetted area at a level",
+    (_title, shape, level, volume, area) => {
+      const filled = measureVessel(shape).below?.(level);
+      expect(relative(filled?.volumeM3 ?? 0, volume)).toBeLessThan(1e-6);
+      expect(relative(filled?.areaM2 ?? 0, area)).toBeLessThan(1e-6);
+    },
+  );
 
   it("agrees with the closed form of a liquid in a lying spheroid head at every level", () => {
     const [R, a] = [1, 0.5];
@@ -68,7 +85,10 @@ describe("measureVessel", () => {
   });
 
   it("has a wall volume that tends to area times thickness as the wall thins, for every shape", () => {
-    const shapes: VesselShape[] = [...headShapes.flatMap((heads) => [lying(heads), standing(heads)]), { shape: "sphere", insideDiameterM: 3 }];
+    const shapes: VesselShape[] = [
+      ...headShapes.flatMap((heads) => [lying(heads), standing(heads)]),
+      { shape: "sphere", insideDiameterM: 3 },
+    ];
     for (const shape of shapes) {
       const geometry = measureVessel(shape);
       // Two ellipses of equally enlarged axes are not parallel curves: the head's steel comes out a little low, never high.

@@ -10,7 +10,13 @@ import { headBelowLevelLyingDown, headBelowLevelStanding, makeHead, segmentArea,
 
 export type VesselShape =
   | { shape: "volume"; volumeM3: number; innerAreaM2?: number }
-  | { shape: "cylinder"; orientation: "vertical" | "horizontal"; insideDiameterM: number; tangentLengthM: number; heads: HeadShape }
+  | {
+      shape: "cylinder";
+      orientation: "vertical" | "horizontal";
+      insideDiameterM: number;
+      tangentLengthM: number;
+      heads: HeadShape;
+    }
   | { shape: "sphere"; insideDiameterM: number };
 
 export type Filled = { volumeM3: number; areaM2: number };
@@ -90,7 +96,8 @@ function cylinder(vessel: Extract<VesselShape, { shape: "cylinder" }>): Measured
     const bottom = headBelowLevelStanding(head, h);
     const shell = Math.min(Math.max(h - head.depthM, 0), L);
     const inTop = h - head.depthM - L;
-    if (inTop <= 0 && h < heightM) return { volumeM3: bottom.volumeM3 + Math.PI * R ** 2 * shell, areaM2: bottom.areaM2 + Math.PI * D * shell };
+    if (inTop <= 0 && h < heightM)
+      return { volumeM3: bottom.volumeM3 + Math.PI * R ** 2 * shell, areaM2: bottom.areaM2 + Math.PI * D * shell };
     const dry = headBelowLevelStanding(head, heightM - h);
     const roofDry = h >= heightM ? 0 : dry.areaM2;
     return { volumeM3: volumeM3 - dry.volumeM3, areaM2: innerAreaM2 - roofDry };

@@ -7,7 +7,14 @@
  */
 import { integral } from "./gauss-legendre";
 
-export const headShapes = ["flat", "hemispherical", "ellipsoidal-2-1", "torispherical-kloepper", "torispherical-korbbogen", "torispherical-flanged-dished"] as const;
+export const headShapes = [
+  "flat",
+  "hemispherical",
+  "ellipsoidal-2-1",
+  "torispherical-kloepper",
+  "torispherical-korbbogen",
+  "torispherical-flanged-dished",
+] as const;
 export type HeadShape = (typeof headShapes)[number];
 
 /** A piece of meridian by its parameter: radius from the axis, its derivative, depth beyond the tangent line, arc length per parameter. */
@@ -73,7 +80,8 @@ function dished(R: number, crown: number, knuckle: number): Head {
 
 /** Volume [m³] between head and tangent plane, and inside area [m²] of the head. */
 export function wholeHead(head: Head): { volumeM3: number; areaM2: number } {
-  if (head.pieces.length === 0) return { volumeM3: Math.PI * head.radiusM ** 2 * head.depthM, areaM2: Math.PI * head.radiusM ** 2 };
+  if (head.pieces.length === 0)
+    return { volumeM3: Math.PI * head.radiusM ** 2 * head.depthM, areaM2: Math.PI * head.radiusM ** 2 };
   return byRings(head, () => 2 * Math.PI, []);
 }
 
@@ -97,7 +105,11 @@ export function headBelowLevelStanding(head: Head, levelM: number): { volumeM3: 
   for (const piece of head.pieces) {
     const top = parameterWhere((p) => head.depthM - piece.depth(p) - h, piece);
     // Slices π ρ² dy turned by parts into shells, so that only the surface itself is integrated.
-    volumeM3 += integral((p) => 2 * Math.PI * piece.radius(p) * (h - head.depthM + piece.depth(p)) * piece.radiusRate(p), piece.from, top);
+    volumeM3 += integral(
+      (p) => 2 * Math.PI * piece.radius(p) * (h - head.depthM + piece.depth(p)) * piece.radiusRate(p),
+      piece.from,
+      top,
+    );
     areaM2 += integral((p) => 2 * Math.PI * piece.radius(p) * piece.arc(p), piece.from, top);
   }
   return { volumeM3, areaM2 };

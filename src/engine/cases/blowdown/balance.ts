@@ -90,7 +90,9 @@ export class Balance {
   private nozzle({ outlet, outletComposition: z }: Contents): NozzleFlow {
     const { fluid, flowModel, backPressurePa } = this.model;
     if (flowModel === "frozen") return frozenNozzle(fluid, outlet, z, backPressurePa);
-    const atRest = assemble(fluid, outlet.temperatureK, outlet.pressurePa, [{ moleFraction: 1, composition: z, molarVolume: outlet.molarVolumeM3PerMol }]);
+    const atRest = assemble(fluid, outlet.temperatureK, outlet.pressurePa, [
+      { moleFraction: 1, composition: z, molarVolume: outlet.molarVolumeM3PerMol },
+    ]);
     return equilibriumNozzle(fluid, atRest, z, backPressurePa);
   }
 

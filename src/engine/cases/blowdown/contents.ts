@@ -98,7 +98,11 @@ export class ContentsFinder {
       totalMolesMol: total,
       phases: dense ? 2 : 1,
       vapourMoleFraction: found.vapourMoleFraction,
-      liquidVolumeM3: dense ? total * dense.moleFraction * dense.state.molarVolumeM3PerMol : found.phase === "liquid" ? this.volumeM3 : 0,
+      liquidVolumeM3: dense
+        ? total * dense.moleFraction * dense.state.molarVolumeM3PerMol
+        : found.phase === "liquid"
+          ? this.volumeM3
+          : 0,
       outlet: light.state,
       outletComposition: light.composition,
       equilibrium: dense ? found : undefined,
@@ -108,7 +112,12 @@ export class ContentsFinder {
   /** Two phases from those of the last call, which is where they nearly always are. */
   private fromSeed(u: number, v: number): Equilibrium | undefined {
     const { seed, fluid, z, volumes } = this;
-    if (!seed || !seedFrom(seed, z, v, volumes) || !solveAtVolume(fluid, z, { hold: "energy", value: u, molarVolume: v }, volumes)) return undefined;
+    if (
+      !seed ||
+      !seedFrom(seed, z, v, volumes) ||
+      !solveAtVolume(fluid, z, { hold: "energy", value: u, molarVolume: v }, volumes)
+    )
+      return undefined;
     return assembleVolumes(fluid, volumes);
   }
 
@@ -139,7 +148,9 @@ export class ContentsFinder {
     } catch (error) {
       if (!isRefusal(error)) throw error;
       const alone = this.homogeneous(total, u, v);
-      const onIt = alone.pressurePa > 0 && this.fluid.stability(alone.temperatureK, alone.pressurePa, this.z).tangentPlaneDistance > onTheBoundary;
+      const onIt =
+        alone.pressurePa > 0 &&
+        this.fluid.stability(alone.temperatureK, alone.pressurePa, this.z).tangentPlaneDistance > onTheBoundary;
       if (!onIt) throw error;
       return undefined;
     }

@@ -56,7 +56,11 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
 
   while (t < stopTimeS) {
     if (run.segments.length >= maxSegments) {
-      throw new EngineError("no-convergence", `The fluid changed between one and two phases ${maxSegments} times by ${t.toPrecision(4)} s, and the run was given up. Check the pressure near the critical point.`, { timeS: t });
+      throw new EngineError(
+        "no-convergence",
+        `The fluid changed between one and two phases ${maxSegments} times by ${t.toPrecision(4)} s, and the run was given up. Check the pressure near the critical point.`,
+        { timeS: t },
+      );
     }
     const segment: Segment = { mode, dense: new DenseRun() };
     run.segments.push(segment);
@@ -72,18 +76,32 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
       timeScaleS: t < openingTimeS ? Math.sqrt(emptyingTimeS * Math.min(openingTimeS, emptyingTimeS)) : emptyingTimeS,
       maxEvaluations: options.maxEvaluations - run.evaluations,
       events: [
-        { id: "stop", stops: true, value: (time, state) => balance.at(time, state, segment.mode).contents.pressurePa / stopAt - 1 },
+        {
+          id: "stop",
+          stops: true,
+          value: (time, state) => balance.at(time, state, segment.mode).contents.pressurePa / stopAt - 1,
+        },
         phaseEvent(balance, segment.mode),
         subsonicEvent(balance, segment.mode),
-        { id: "too-hot", stops: true, value: (time, state) => 1 - balance.at(time, state, segment.mode).contents.temperatureK / hottestK },
+        {
+          id: "too-hot",
+          stops: true,
+          value: (time, state) => 1 - balance.at(time, state, segment.mode).contents.temperatureK / hottestK,
+        },
         ...solidEvent(balance, segment.mode, model.solids),
         ...marksWanted
           .filter(({ id }) => !run.marks.has(id))
-          .map(({ id, pressurePa }): IntegrationEvent => ({ id, stops: false, value: (time, state) => balance.at(time, state, segment.mode).contents.pressurePa / pressurePa - 1 })),
+          .map(({ id, pressurePa }): IntegrationEvent => ({
+            id,
+            stops: false,
+            value: (time, state) => balance.at(time, state, segment.mode).contents.pressurePa / pressurePa - 1,
+          })),
       ],
       onStep: (step) => {
         segment.dense.keep(step);
-        options.onProgress?.(progress(step.t1 / stopTimeS, balance.at(step.t1, step.y1, segment.mode).contents.pressurePa, start.pressurePa, stopAt));
+        options.onProgress?.(
+          progress(step.t1 / stopTimeS, balance.at(step.t1, step.y1, segment.mode).contents.pressurePa, start.pressurePa, stopAt),
+        );
       },
       isCancelled: options.isCancelled,
     });
@@ -152,10 +170,17 @@ function subsonicEvent(balance: Balance, mode: PhaseMode): IntegrationEvent {
 
 function solidEvent(balance: Balance, mode: PhaseMode, curves: readonly SolidCurve[]): IntegrationEvent[] {
   if (curves.length === 0) return [];
-  return [{ id: "solid", stops: true, value: (time, state) => solidMargin(balance.model.fluid, balance.at(time, state, mode).contents, curves) }];
+  return [
+    {
+      id: "solid",
+      stops: true,
+      value: (time, state) => solidMargin(balance.model.fluid, balance.at(time, state, mode).contents, curves),
+    },
+  ];
 }
 
-const fullRate = (balance: Balance, y: number[], mode: PhaseMode): number => balance.model.effectiveAreaM2 * balance.at(0, y, mode).flow.massFluxKgPerM2S;
+const fullRate = (balance: Balance, y: number[], mode: PhaseMode): number =>
+  balance.model.effectiveAreaM2 * balance.at(0, y, mode).flow.massFluxKgPerM2S;
 
 function progress(timePart: number, pressurePa: number, startPa: number, stopPa: number): number {
   const fallen = Math.log(startPa / pressurePa) / Math.log(startPa / stopPa);

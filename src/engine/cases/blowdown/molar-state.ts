@@ -14,9 +14,21 @@ export function rebuiltState(fluid: FluidModel, contents: Contents): RebuiltStat
   const { temperatureK, pressurePa, equilibrium } = contents;
   const composition = Float64Array.from(contents.composition);
   const parts = equilibrium
-    ? equilibrium.phases.map((phase) => ({ share: phase.moleFraction, z: phase.composition, root: phase === equilibrium.phases[0] ? ("vapour" as const) : ("liquid" as const) }))
+    ? equilibrium.phases.map((phase) => ({
+        share: phase.moleFraction,
+        z: phase.composition,
+        root: phase === equilibrium.phases[0] ? ("vapour" as const) : ("liquid" as const),
+      }))
     : [{ share: 1, z: composition, root: "stable" as const }];
-  const sum: RebuiltState = { temperatureK, pressurePa, composition, internalEnergyJPerMol: 0, enthalpyJPerMol: 0, entropyJPerMolK: 0, molarVolumeM3PerMol: 0 };
+  const sum: RebuiltState = {
+    temperatureK,
+    pressurePa,
+    composition,
+    internalEnergyJPerMol: 0,
+    enthalpyJPerMol: 0,
+    entropyJPerMolK: 0,
+    molarVolumeM3PerMol: 0,
+  };
   for (const { share, z, root } of parts) {
     const state = fluid.phaseAtPressure(temperatureK, pressurePa, z, root, createPhaseState());
     const ideal = fluid.idealGas(temperatureK, pressurePa, z);

@@ -20,15 +20,19 @@ describe("blowdowns by Peng-Robinson", () => {
       expect(relative(valueAt(series, "massKg", point.t), point.mass)).toBeLessThan(2e-3);
       expect(Math.abs(valueAt(series, "fluidTemperatureK", point.t) - point.T)).toBeLessThan(0.1);
       expect(relative(valueAt(series, "ventRateKgPerS", point.t), point.vent_rate)).toBeLessThan(2e-3);
-      if (point.T_wall !== null) expect(Math.abs(valueAt(series, "gasWallTemperatureK", point.t) - point.T_wall)).toBeLessThan(0.02);
+      if (point.T_wall !== null)
+        expect(Math.abs(valueAt(series, "gasWallTemperatureK", point.t) - point.T_wall)).toBeLessThan(0.02);
     }
     const { events, minima } = row;
     expect(relative(summary.endTimeS, events.t_end_event ?? 0)).toBeLessThan(1e-4);
-    if (events.t_50pct_gauge !== null) expect(relative(summary.timeToHalfGaugePressureS ?? 0, events.t_50pct_gauge)).toBeLessThan(2e-5);
-    if (events.t_6p9barg !== null) expect(relative(summary.timeToSixPointNineBarGaugeS ?? 0, events.t_6p9barg)).toBeLessThan(2e-5);
+    if (events.t_50pct_gauge !== null)
+      expect(relative(summary.timeToHalfGaugePressureS ?? 0, events.t_50pct_gauge)).toBeLessThan(2e-5);
+    if (events.t_6p9barg !== null)
+      expect(relative(summary.timeToSixPointNineBarGaugeS ?? 0, events.t_6p9barg)).toBeLessThan(2e-5);
     expect(relative(summary.initialMassKg, row.initial.mass)).toBeLessThan(1e-9);
     expect(Math.abs(summary.minimumFluidTemperatureK - minima.T_fluid_min)).toBeLessThan(2e-3);
-    if (minima.T_wall_min != null) expect(Math.abs((summary.minimumWallTemperatureK ?? 0) - minima.T_wall_min)).toBeLessThan(2e-3);
+    if (minima.T_wall_min != null)
+      expect(Math.abs((summary.minimumWallTemperatureK ?? 0) - minima.T_wall_min)).toBeLessThan(2e-3);
     expect(relative(summary.peakVentRateKgPerS, minima.peak_vent_rate)).toBeLessThan(1e-6);
     const last = row.series.at(-1);
     expect(relative(summary.ventedMassKg, last?.mass_out ?? 0)).toBeLessThan(1e-4);
@@ -50,11 +54,25 @@ describe("phase changes of S1-B12", () => {
 describe("closed forms of an ideal gas that stays choked", () => {
   // p/p0 = [1 + (κ−1)/2 t/τ]^(−2κ/(κ−1)), τ = m0/W0; checks M3-05 and M3-10 of tests/fixtures/checks/methods.json.
   it.each([
-    ["M3-05", 1.4, 0.0280134, { volumeM3: 10, diameterM: 0.02, dischargeCoefficient: 0.84, pressurePa: 1e7, temperatureK: 300, stopPressurePa: 5e6 }],
-    ["M3-10", 1.3, 0.01604, { volumeM3: 20, diameterM: 0.03, dischargeCoefficient: 0.975, pressurePa: 7e6, temperatureK: 290, stopPressurePa: 7e5 }],
+    [
+      "M3-05",
+      1.4,
+      0.0280134,
+      { volumeM3: 10, diameterM: 0.02, dischargeCoefficient: 0.84, pressurePa: 1e7, temperatureK: 300, stopPressurePa: 5e6 },
+    ],
+    [
+      "M3-10",
+      1.3,
+      0.01604,
+      { volumeM3: 20, diameterM: 0.03, dischargeCoefficient: 0.975, pressurePa: 7e6, temperatureK: 290, stopPressurePa: 7e5 },
+    ],
   ] as const)("%s", (id, k, molarMass, over) => {
     const check = methods.checks.find((row) => row.id === id);
-    const expected = check?.expected as { t_adiabatic: { value: number }; T_adiabatic: { value: number }; tau: { value: number } };
+    const expected = check?.expected as {
+      t_adiabatic: { value: number };
+      T_adiabatic: { value: number };
+      tau: { value: number };
+    };
     const { summary } = runBlowdown(plainCase(idealGas(k, molarMass), over));
     expect(relative(summary.endTimeS, expected.t_adiabatic.value)).toBeLessThan(2e-6);
     expect(relative(summary.finalTemperatureK, expected.T_adiabatic.value)).toBeLessThan(1e-6);
@@ -62,11 +80,21 @@ describe("closed forms of an ideal gas that stays choked", () => {
   });
 
   it("M3-05, isothermal: p/p0 = exp(−t/τ) when a huge wall with a strong film keeps the gas warm", () => {
-    const base = plainCase(idealGas(1.4, 0.0280134), { volumeM3: 10, diameterM: 0.02, dischargeCoefficient: 0.84, pressurePa: 1e7, stopPressurePa: 5e6 });
+    const base = plainCase(idealGas(1.4, 0.0280134), {
+      volumeM3: 10,
+      diameterM: 0.02,
+      dischargeCoefficient: 0.84,
+      pressurePa: 1e7,
+      stopPressurePa: 5e6,
+    });
     const { summary } = runBlowdown({
       ...base,
       vessel: { ...base.vessel, wall: { steel: "carbon_steel", thicknessM: 0.1, massKg: 1e8, specificHeatJPerKgK: 500 } },
-      heat: { inside: { model: "constant", coefficientWPerM2K: 1e5 }, wall: { model: "lumped" }, outside: { model: "adiabatic" } },
+      heat: {
+        inside: { model: "constant", coefficientWPerM2K: 1e5 },
+        wall: { model: "lumped" },
+        outside: { model: "adiabatic" },
+      },
     });
     // 390 kW through 2.8 MW/K leave the gas 0.14 K below the wall: 2.3e-4 in time (rate ~ T^-1/2).
     expect(relative(summary.endTimeS, 128.5527)).toBeLessThan(4e-4);
@@ -86,13 +114,30 @@ describe("the nitrogen test vessel by Peng-Robinson with the heat capacity of th
           criticalTemperatureK: 126.192,
           criticalPressurePa: 3395800,
           acentricFactor: 0.0372,
-          idealGasHeatCapacityOverR: { polynomial: [3.4486, 0.85671e-3, -4.8311e-6, 11.161e-9, -9.4839e-12, 2.7745e-15], rangeK: [110, 900] },
+          idealGasHeatCapacityOverR: {
+            polynomial: [3.4486, 0.85671e-3, -4.8311e-6, 11.161e-9, -9.4839e-12, 2.7745e-15],
+            rangeK: [110, 900],
+          },
         },
       },
     ],
   };
-  const base = plainCase(fluid, { diameterM: 0.00635, dischargeCoefficient: 0.8, pressurePa: 1.5e7, temperatureK: 290, stopPressurePa: 1e6 });
-  const vessel = { geometry: { shape: "cylinder" as const, orientation: "vertical" as const, insideDiameterM: 0.273, tangentLengthM: 1.524, heads: "flat" as const } };
+  const base = plainCase(fluid, {
+    diameterM: 0.00635,
+    dischargeCoefficient: 0.8,
+    pressurePa: 1.5e7,
+    temperatureK: 290,
+    stopPressurePa: 1e6,
+  });
+  const vessel = {
+    geometry: {
+      shape: "cylinder" as const,
+      orientation: "vertical" as const,
+      insideDiameterM: 0.273,
+      tangentLengthM: 1.524,
+      heads: "flat" as const,
+    },
+  };
 
   it("M3-12: mass, time to 75 bar and to 10 bar; M3-11: temperatures on the isentrope", () => {
     const { summary, series } = runBlowdown({ ...base, vessel, limits: { targetPressurePa: 7.5e6, targetTimeS: 60 } });

@@ -39,7 +39,13 @@ const refusalOf = (work: () => unknown): EngineError => {
 };
 
 const gas = fc.record({
-  fluid: fc.constantFrom(nitrogen, leanGas, pengRobinson(["methane", 1]), pengRobinson(["hydrogen", 1]), pengRobinson(["argon", 0.5], ["oxygen", 0.5])),
+  fluid: fc.constantFrom(
+    nitrogen,
+    leanGas,
+    pengRobinson(["methane", 1]),
+    pengRobinson(["hydrogen", 1]),
+    pengRobinson(["argon", 0.5], ["oxygen", 0.5]),
+  ),
   pressurePa: fc.double({ min: 1e6, max: 2e7, noNaN: true }),
   temperatureK: fc.double({ min: 290, max: 400, noNaN: true }),
   volumeM3: fc.double({ min: 0.01, max: 50, noNaN: true }),
@@ -50,14 +56,23 @@ describe("runBlowdown", () => {
   it("closes mass to 1e-9 and energy to 1e-6, falls in pressure, and cools when adiabatic, whatever the gas", () => {
     fc.assert(
       fc.property(gas, fc.boolean(), ({ fluid, bore, volumeM3, ...state }, wall) => {
-        const over = { ...state, volumeM3, diameterM: bore * volumeM3 ** (1 / 3), stopPressurePa: 0.3 * state.pressurePa + 0.7 * 101325 };
+        const over = {
+          ...state,
+          volumeM3,
+          diameterM: bore * volumeM3 ** (1 / 3),
+          stopPressurePa: 0.3 * state.pressurePa + 0.7 * 101325,
+        };
         const { summary, series } = runBlowdown(wall ? walled(fluid, over) : plainCase(fluid, over));
         expect(summary.massClosure).toBeLessThan(1e-9);
         expect(summary.energyClosure).toBeLessThan(1e-6);
         expect(summary.endedBy).toBe("pressure");
         series.pressurePa.forEach((p, i) => i > 0 && expect(p).toBeLessThanOrEqual(series.pressurePa[i - 1] ?? 0));
-        if (!wall) series.fluidTemperatureK.forEach((T, i) => i > 0 && expect(T).toBeLessThanOrEqual((series.fluidTemperatureK[i - 1] ?? 0) + 1e-9));
-        for (const column of Object.values(series)) expect(column.every(Number.isFinite) && column.length === series.timeS.length).toBe(true);
+        if (!wall)
+          series.fluidTemperatureK.forEach(
+            (T, i) => i > 0 && expect(T).toBeLessThanOrEqual((series.fluidTemperatureK[i - 1] ?? 0) + 1e-9),
+          );
+        for (const column of Object.values(series))
+          expect(column.every(Number.isFinite) && column.length === series.timeS.length).toBe(true);
       }),
       { numRuns: 25 },
     );
@@ -69,7 +84,11 @@ describe("runBlowdown", () => {
       const balance = new Balance(makeVesselModel(blowdown));
       const run = integrateRun(balance, blowdown, { relativeTolerance: 1e-7, maxEvaluations: 1e5 });
       const entropies = run.segments.flatMap((segment) =>
-        segment.dense.steps.map((step) => rebuiltState(balance.model.fluid, balance.at(step.t1, DenseRun.inside(step, step.t1), segment.mode).contents).entropyJPerMolK),
+        segment.dense.steps.map(
+          (step) =>
+            rebuiltState(balance.model.fluid, balance.at(step.t1, DenseRun.inside(step, step.t1), segment.mode).contents)
+              .entropyJPerMolK,
+        ),
       );
       expect(Math.max(...entropies) - Math.min(...entropies)).toBeLessThan(1e-6 * 8.314);
     }
@@ -85,7 +104,10 @@ describe("runBlowdown", () => {
 
   it("moves the governing figures less than claimed at a tenfold tighter tolerance", () => {
     for (const relativeTolerance of [1e-4, 1e-5, 1e-6]) {
-      const { confirmation } = runConfirmed(walled(leanGas, { relativeTolerance, pressurePa: 7e6 }), { engineVersion: "test", caseSha256: "0" });
+      const { confirmation } = runConfirmed(walled(leanGas, { relativeTolerance, pressurePa: 7e6 }), {
+        engineVersion: "test",
+        caseSha256: "0",
+      });
       expect(confirmation.relativeTolerance).toBeCloseTo(relativeTolerance / 10, 12);
       for (const { id, value, change } of confirmation.figures) {
         // Dense output carries an error of its own of some ten times the tolerance; 30 covers all figures measured.
@@ -126,7 +148,10 @@ describe("runBlowdown", () => {
 
   it("opens linearly: no flow at the start, the peak at the end of the stroke", () => {
     const base = plainCase(nitrogen);
-    const { series, summary } = runBlowdown({ ...base, release: { ...base.release, openingTimeS: 4 } as BlowdownCase["release"] });
+    const { series, summary } = runBlowdown({
+      ...base,
+      release: { ...base.release, openingTimeS: 4 } as BlowdownCase["release"],
+    });
     const sudden = runBlowdown(base).summary;
     expect(series.ventRateKgPerS[0]).toBe(0);
     expect(summary.peakVentRateTimeS).toBeCloseTo(4, 6);
@@ -149,7 +174,10 @@ describe("runBlowdown", () => {
 
   it("stops where heat drives a gas past the data instead of running on for ever", () => {
     const base = plainCase(nitrogen);
-    const { summary, warnings } = runBlowdown({ ...base, heat: { ...base.heat, outside: { model: "constant-heat", heatW: 50000 } } });
+    const { summary, warnings } = runBlowdown({
+      ...base,
+      heat: { ...base.heat, outside: { model: "constant-heat", heatW: 50000 } },
+    });
     expect(summary.endedBy).toBe("too-hot");
     expect(summary.finalTemperatureK).toBeCloseTo(1000, 3);
     expect(warnings.map((warning) => warning.code)).toContain("too-hot");
@@ -157,7 +185,11 @@ describe("runBlowdown", () => {
 
   it("lets the wall take heat from still air, more slowly the lower the coefficient", () => {
     const base = walled(nitrogen);
-    const coldest = [0, 10, 1000].map((coefficientWPerM2K) => runBlowdown({ ...base, heat: { ...base.heat, outside: { model: "ambient", temperatureK: 300, coefficientWPerM2K } } }).summary.minimumWallTemperatureK ?? 0);
+    const coldest = [0, 10, 1000].map(
+      (coefficientWPerM2K) =>
+        runBlowdown({ ...base, heat: { ...base.heat, outside: { model: "ambient", temperatureK: 300, coefficientWPerM2K } } })
+          .summary.minimumWallTemperatureK ?? 0,
+    );
     expect(coldest[0]).toBeLessThan(coldest[1] ?? 0);
     expect(coldest[1]).toBeLessThan(coldest[2] ?? 0);
   });
@@ -165,7 +197,11 @@ describe("runBlowdown", () => {
   it("uses the steel's table where no specific heat is given, which matters little near room temperature", () => {
     const base = walled(nitrogen);
     const table = runBlowdown(base).summary.minimumWallTemperatureK ?? 0;
-    const constant = runBlowdown({ ...base, vessel: { ...base.vessel, wall: { steel: "carbon_steel", thicknessM: 0.02, specificHeatJPerKgK: 440 } } }).summary.minimumWallTemperatureK ?? 0;
+    const constant =
+      runBlowdown({
+        ...base,
+        vessel: { ...base.vessel, wall: { steel: "carbon_steel", thicknessM: 0.02, specificHeatJPerKgK: 440 } },
+      }).summary.minimumWallTemperatureK ?? 0;
     expect(Math.abs(table - constant)).toBeLessThan(0.5);
     expect(table).not.toBe(constant);
   });
@@ -187,7 +223,9 @@ describe("runBlowdown", () => {
   });
 
   it("follows methane that condenses inside the vessel, and says so", () => {
-    const { series, summary, cautionIds, cautions } = runBlowdown(plainCase(pengRobinson(["methane", 1]), { pressurePa: 1e7, temperatureK: 250, stopPressurePa: 2e5 }));
+    const { series, summary, cautionIds, cautions } = runBlowdown(
+      plainCase(pengRobinson(["methane", 1]), { pressurePa: 1e7, temperatureK: 250, stopPressurePa: 2e5 }),
+    );
     expect(Math.min(...series.vapourMoleFraction)).toBeLessThan(1);
     expect(cautionIds).toContain("C3");
     expect(cautions[cautionIds.indexOf("C3")]).toMatch(/below about −\d+\u00a0°C/);
@@ -203,12 +241,23 @@ describe("runBlowdown", () => {
     expect(run.summary.endedBy).toBe("solid-phase");
     expect(run.summary.finalTemperatureK).toBeLessThan(216.6);
     expect(run.warnings.map((warning) => warning.code)).toContain("solid-phase");
-    expect(refusalOf(() => runBlowdown(plainCase(dioxide, { pressurePa: 5e5, temperatureK: 190, stopPressurePa: 1.2e5 }))).code).toBe("solid-phase");
+    expect(
+      refusalOf(() => runBlowdown(plainCase(dioxide, { pressurePa: 5e5, temperatureK: 190, stopPressurePa: 1.2e5 }))).code,
+    ).toBe("solid-phase");
   });
 
   it.each([
     ["heat.wall.model", { heat: { inside: { model: "none" }, wall: { model: "conduction" }, outside: { model: "adiabatic" } } }],
-    ["heat.outside.model", { heat: { inside: { model: "none" }, wall: { model: "none" }, outside: { model: "pool-fire", drainage: "adequate", environmentFactor: 1 } } }],
+    [
+      "heat.outside.model",
+      {
+        heat: {
+          inside: { model: "none" },
+          wall: { model: "none" },
+          outside: { model: "pool-fire", drainage: "adequate", environmentFactor: 1 },
+        },
+      },
+    ],
   ] as [string, Partial<BlowdownCase>][])("refuses %s as not computed yet, by name", (path, change) => {
     const refusal = refusalOf(() => runBlowdown({ ...walled(nitrogen), ...change }));
     expect(refusal).toMatchObject({ code: "not-applicable", path });

@@ -26,7 +26,9 @@ export type BlowdownOptions = {
   maxEvaluations?: number;
 };
 
-export type BlowdownBody = Omit<BlowdownResult, "engineVersion" | "caseSha256" | "numerics"> & { numerics: Omit<BlowdownResult["numerics"], "wallClockMs"> };
+export type BlowdownBody = Omit<BlowdownResult, "engineVersion" | "caseSha256" | "numerics"> & {
+  numerics: Omit<BlowdownResult["numerics"], "wallClockMs">;
+};
 
 const previewTolerance = 1e-4;
 const previewGaps = 3;
@@ -36,7 +38,9 @@ export function runBlowdown(blowdown: BlowdownCase, options: BlowdownOptions = {
   const balance = new Balance(model);
   refuseSolidStart(balance);
 
-  const relativeTolerance = options.relativeTolerance ?? (options.coarse ? Math.max(previewTolerance, blowdown.run.relativeTolerance) : blowdown.run.relativeTolerance);
+  const relativeTolerance =
+    options.relativeTolerance ??
+    (options.coarse ? Math.max(previewTolerance, blowdown.run.relativeTolerance) : blowdown.run.relativeTolerance);
   const run = integrateRun(balance, blowdown, {
     relativeTolerance,
     maxEvaluations: options.maxEvaluations ?? 200_000,
@@ -50,7 +54,10 @@ export function runBlowdown(blowdown: BlowdownCase, options: BlowdownOptions = {
   const ends = endStates(balance, run, found.fluid);
   const summary = summarise(balance, run, rows, found, ends);
   const warnings = warningsOf(blowdown, model, run, rows, summary);
-  const assessed = assess(blowdownFigures(blowdown, summary), { bandK: blowdown.limits?.nearBandK, bandFraction: blowdown.limits?.nearBandFraction });
+  const assessed = assess(blowdownFigures(blowdown, summary), {
+    bandK: blowdown.limits?.nearBandK,
+    bandFraction: blowdown.limits?.nearBandFraction,
+  });
   const closes = summary.massClosure <= closureLimit && summary.energyClosure <= closureLimit;
   const cautions = cautionsOfRun(blowdown, run, warnings);
   return {
@@ -60,7 +67,9 @@ export function runBlowdown(blowdown: BlowdownCase, options: BlowdownOptions = {
     series: seriesOf(balance, rows, outletK),
     energyAccount: accountOf(balance, ends, found.fluid.timeS, run.endTimeS),
     verdict: closes ? assessed.verdict : "open",
-    limits: closes ? assessed.limits : assessed.limits.map((limit) => ({ ...limit, verdict: "open" as const, governs: false, note: "The run does not close." })),
+    limits: closes
+      ? assessed.limits
+      : assessed.limits.map((limit) => ({ ...limit, verdict: "open" as const, governs: false, note: "The run does not close." })),
     warnings,
     cautions: cautions.map((caution) => caution.words),
     cautionIds: cautions.map((caution) => caution.id),
@@ -72,7 +81,12 @@ function refuseSolidStart(balance: Balance): void {
   const { start, solids, fluid } = balance.model;
   const { contents } = balance.at(0, balance.startState(), start.twoPhase ? "two-phase" : "one-phase");
   if (solids.length > 0 && solidMargin(fluid, contents, solids) <= 0) {
-    throw new EngineError("solid-phase", `At ${start.temperatureK} K and ${Math.round(start.pressurePa)} Pa part of the fluid is already solid, which is outside this program. Start warmer.`, {}, "start");
+    throw new EngineError(
+      "solid-phase",
+      `At ${start.temperatureK} K and ${Math.round(start.pressurePa)} Pa part of the fluid is already solid, which is outside this program. Start warmer.`,
+      {},
+      "start",
+    );
   }
 }
 
@@ -125,7 +139,8 @@ function summarise(balance: Balance, run: Run, rows: Row[], found: Extremes, end
   if (!first || !last) throw new EngineError("no-convergence", "The run ended before its first step.");
   const { energy, mass } = closures(balance, ends);
   const time = (id: string): number | undefined => run.marks.get(id);
-  const optional = <K extends string>(key: K, value: number | undefined) => (value === undefined ? {} : ({ [key]: value } as Record<K, number>));
+  const optional = <K extends string>(key: K, value: number | undefined) =>
+    value === undefined ? {} : ({ [key]: value } as Record<K, number>);
   return {
     initialMassKg: first.massKg,
     finalMassKg: last.massKg,
@@ -174,7 +189,12 @@ function closures(balance: Balance, { first, last, lastY }: Ends): { energy: num
   };
 }
 
-function accountOf(balance: Balance, { first, coldest, last, lastY }: Ends, coldestTimeS: number, endTimeS: number): EnergyAccount {
+function accountOf(
+  balance: Balance,
+  { first, coldest, last, lastY }: Ends,
+  coldestTimeS: number,
+  endTimeS: number,
+): EnergyAccount {
   const { fluid, vessel, wall } = balance.model;
   const total = (state: RebuiltState): number => (vessel.volumeM3 / state.molarVolumeM3PerMol) * state.internalEnergyJPerMol;
   const [startJ, endJ] = [total(first), total(last)];
@@ -186,6 +206,13 @@ function accountOf(balance: Balance, { first, coldest, last, lastY }: Ends, cold
   return {
     startToColdest: { ...threeSteps(fluid, first, coldest), atTimeS: coldestTimeS },
     startToEnd: { ...threeSteps(fluid, first, last), atTimeS: endTimeS },
-    wholeRun: { startJ, heatFromWallJ, heatFromOutsideJ, ventedJ, endJ, leftOverJ: startJ + heatFromWallJ + heatFromOutsideJ - ventedJ - endJ },
+    wholeRun: {
+      startJ,
+      heatFromWallJ,
+      heatFromOutsideJ,
+      ventedJ,
+      endJ,
+      leftOverJ: startJ + heatFromWallJ + heatFromOutsideJ - ventedJ - endJ,
+    },
   };
 }

@@ -43,4 +43,5 @@ export function outletTemperatureAt(balance: Balance, segment: Segment, step: Ke
   return throttleTemperature(balance.model.fluid, contents.outlet, contents.outletComposition, balance.model.backPressurePa);
 }
 
-export const levelOf = (balance: Balance, sample: Sample): number | undefined => levelAtVolume(balance.model.vessel, sample.liquidVolumeM3);
+export const levelOf = (balance: Balance, sample: Sample): number | undefined =>
+  levelAtVolume(balance.model.vessel, sample.liquidVolumeM3);

@@ -61,7 +61,12 @@ export function seriesOf(balance: Balance, rows: Row[], outletTemperatureK: numb
   const { wall } = balance.model;
   const twoPhase = rows.some((row) => row.segment.mode === "two-phase");
   const column = (pick: (row: Row) => number): number[] => rows.map(pick);
-  const wallColumn = wall ? { gasWallTemperatureK: column((row) => row.wallTemperatureK ?? 0), liquidWallTemperatureK: column((row) => row.wallTemperatureK ?? 0) } : {};
+  const wallColumn = wall
+    ? {
+        gasWallTemperatureK: column((row) => row.wallTemperatureK ?? 0),
+        liquidWallTemperatureK: column((row) => row.wallTemperatureK ?? 0),
+      }
+    : {};
   const levels = twoPhase ? rows.map((row) => levelOf(balance, row)) : [];
   return {
     timeS: column((row) => row.timeS),
@@ -80,4 +85,5 @@ export function seriesOf(balance: Balance, rows: Row[], outletTemperatureK: numb
   };
 }
 
-export const outletColumn = (balance: Balance, rows: Row[]): number[] => rows.map((row) => outletTemperatureAt(balance, row.segment, row.step, row.timeS));
+export const outletColumn = (balance: Balance, rows: Row[]): number[] =>
+  rows.map((row) => outletTemperatureAt(balance, row.segment, row.step, row.timeS));

@@ -16,7 +16,13 @@ import type { FluidSpec } from "../fluid-spec";
 import { findLibraryRow } from "../../substances/library";
 import type { Contents } from "./contents";
 
-export type SolidCurve = { index: number; id: string; triplePointK: number; pure: boolean; sublimationPa?: (temperatureK: number) => number };
+export type SolidCurve = {
+  index: number;
+  id: string;
+  triplePointK: number;
+  pure: boolean;
+  sublimationPa?: (temperatureK: number) => number;
+};
 
 const tripleK = 216.592;
 const triplePa = 517950;
@@ -29,7 +35,9 @@ export function carbonDioxideSublimationPa(temperatureK: number): number {
 
 /** Components of the fluid for which solid is looked at: a pure fluid with a known triple point, and carbon dioxide anywhere. */
 export function solidCurves(fluid: FluidSpec): SolidCurve[] {
-  const present = fluid.components.flatMap(({ id, moleFraction, custom, pseudo }, index) => (moleFraction > 0 && !custom && !pseudo ? [{ id, index }] : []));
+  const present = fluid.components.flatMap(({ id, moleFraction, custom, pseudo }, index) =>
+    moleFraction > 0 && !custom && !pseudo ? [{ id, index }] : [],
+  );
   const pure = fluid.components.filter(({ moleFraction }) => moleFraction > 0).length === 1;
   return present.flatMap(({ id, index }): SolidCurve[] => {
     const row = findLibraryRow(id);
@@ -45,14 +53,22 @@ export function solidMargin(fluid: FluidModel, contents: Contents, curves: reado
     const T = contents.temperatureK;
     if (T >= curve.triplePointK) margin = Math.min(margin, T / curve.triplePointK - 1 + 1e-12);
     else if (!curve.sublimationPa || (curve.pure && contents.phases === 2)) margin = Math.min(margin, T / curve.triplePointK - 1);
-    else margin = Math.min(margin, Math.log(solidFugacity(fluid, curve.sublimationPa, contents) / fugacity(fluid, curve.index, contents)));
+    else
+      margin = Math.min(
+        margin,
+        Math.log(solidFugacity(fluid, curve.sublimationPa, contents) / fugacity(fluid, curve.index, contents)),
+      );
   }
   return margin;
 }
 
 const scratch = createPhaseState();
 
-function solidFugacity(fluid: FluidModel, sublimationPa: (T: number) => number, { temperatureK: T, pressurePa: p }: Contents): number {
+function solidFugacity(
+  fluid: FluidModel,
+  sublimationPa: (T: number) => number,
+  { temperatureK: T, pressurePa: p }: Contents,
+): number {
   const sublimation = sublimationPa(T);
   const R = fluid.gasConstantJPerMolK;
   // φ of the vapour over the solid: within 2 % of one below the triple point of carbon dioxide's 5.2 bar; its second virial estimate.
@@ -63,7 +79,17 @@ function solidFugacity(fluid: FluidModel, sublimationPa: (T: number) => number, 
 }
 
 function fugacity(fluid: FluidModel, index: number, { temperatureK, pressurePa, outlet, outletComposition }: Contents): number {
-  const root = outlet.molarVolumeM3PerMol > fluid.phaseAtPressure(temperatureK, pressurePa, outletComposition, "liquid", scratch).molarVolumeM3PerMol * 1.000001 ? "vapour" : "stable";
-  const lnPhi = fluid.lnFugacityCoefficients(temperatureK, pressurePa, outletComposition, root, new Float64Array(outletComposition.length));
+  const root =
+    outlet.molarVolumeM3PerMol >
+    fluid.phaseAtPressure(temperatureK, pressurePa, outletComposition, "liquid", scratch).molarVolumeM3PerMol * 1.000001
+      ? "vapour"
+      : "stable";
+  const lnPhi = fluid.lnFugacityCoefficients(
+    temperatureK,
+    pressurePa,
+    outletComposition,
+    root,
+    new Float64Array(outletComposition.length),
+  );
   return pressurePa * (outletComposition[index] ?? 0) * Math.exp(lnPhi[index] ?? 0);
 }

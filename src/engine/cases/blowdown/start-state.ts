@@ -7,12 +7,24 @@ import { flashPT } from "../../flash/flash-pt";
 import { bracketedRoot } from "../../ode/bracketed-root";
 import type { StartSpec } from "../blowdown-case";
 
-export type StartState = { temperatureK: number; pressurePa: number; molesMol: Float64Array; totalMolesMol: number; internalEnergyJ: number; twoPhase: boolean };
+export type StartState = {
+  temperatureK: number;
+  pressurePa: number;
+  molesMol: Float64Array;
+  totalMolesMol: number;
+  internalEnergyJ: number;
+  twoPhase: boolean;
+};
 
 export function startState(fluid: FluidModel, start: StartSpec, volumeM3: number): StartState {
   const found = "liquidVolumeFraction" in start ? atLevel(fluid, start) : flashPT(fluid, start);
   if (found.phases.length === 2 && found.phases[0]?.kind === "liquid") {
-    throw new EngineError("not-applicable", "At the start the fluid splits into two liquids, which can't be computed yet. Check the composition.", {}, "start");
+    throw new EngineError(
+      "not-applicable",
+      "At the start the fluid splits into two liquids, which can't be computed yet. Check the composition.",
+      {},
+      "start",
+    );
   }
   const total = volumeM3 / found.molarVolumeM3PerMol;
   return {
@@ -32,7 +44,9 @@ export function startState(fluid: FluidModel, start: StartSpec, volumeM3: number
 function atLevel(fluid: FluidModel, start: Exclude<StartSpec, { pressurePa: number; temperatureK: number }>): Equilibrium {
   const wanted = start.liquidVolumeFraction;
   const saturated = (vapourMoleFraction: number): Equilibrium =>
-    "temperatureK" in start ? flashTQ(fluid, { temperatureK: start.temperatureK, vapourMoleFraction }) : flashPQ(fluid, { pressurePa: start.pressurePa, vapourMoleFraction });
+    "temperatureK" in start
+      ? flashTQ(fluid, { temperatureK: start.temperatureK, vapourMoleFraction })
+      : flashPQ(fluid, { pressurePa: start.pressurePa, vapourMoleFraction });
   const excess = (vapourMoleFraction: number): number => liquidPart(saturated(vapourMoleFraction)) - wanted;
   try {
     if (wanted === 0) return saturated(1);

@@ -32,7 +32,12 @@ export function makeVesselModel(blowdown: BlowdownCase): VesselModel {
   const vessel = measureVessel(given.geometry);
   const start = startState(fluid, blowdown.start, vessel.volumeM3);
   if (!(release.backPressurePa < start.pressurePa)) {
-    throw new EngineError("invalid-case", `The back pressure must be below the pressure at start, ${Math.round(start.pressurePa)} Pa, or nothing leaves.`, {}, "release.backPressurePa");
+    throw new EngineError(
+      "invalid-case",
+      `The back pressure must be below the pressure at start, ${Math.round(start.pressurePa)} Pa, or nothing leaves.`,
+      {},
+      "release.backPressurePa",
+    );
   }
   const walled = heat.wall.model === "lumped";
   const area = vessel.innerAreaM2 ?? 0;
@@ -61,12 +66,21 @@ function outsideHeat({ heat: { outside } }: BlowdownCase, areaM2: number): (temp
 
 function computable({ release, heat, vessel }: BlowdownCase): OrificeRelease {
   const refuse = (path: string, what: string): never => {
-    throw new EngineError("not-applicable", `${what} can't be computed yet. Choose another model, or wait for a later version.`, {}, path);
+    throw new EngineError(
+      "not-applicable",
+      `${what} can't be computed yet. Choose another model, or wait for a later version.`,
+      {},
+      path,
+    );
   };
   if (heat.wall.model === "conduction") refuse("heat.wall.model", "Heat conduction through the wall");
   if (heat.inside.model === "correlations") refuse("heat.inside.model", "An inside film from correlations");
   if (heat.outside.model === "pool-fire" || heat.outside.model === "surface-fire") refuse("heat.outside.model", "A fire outside");
-  if (vessel.wall?.insulation && heat.outside.model === "ambient") refuse("vessel.wall.insulation", "Insulation between wall and surroundings");
-  if (release.from !== "vapour") refuse("release.from", `An outlet from the ${release.from === "liquid" ? "liquid" : "whole contents"}`);
-  return release.path === "orifice" ? release : refuse("release.path", release.path === "valve" ? "A control valve" : "A search for the bore");
+  if (vessel.wall?.insulation && heat.outside.model === "ambient")
+    refuse("vessel.wall.insulation", "Insulation between wall and surroundings");
+  if (release.from !== "vapour")
+    refuse("release.from", `An outlet from the ${release.from === "liquid" ? "liquid" : "whole contents"}`);
+  return release.path === "orifice"
+    ? release
+    : refuse("release.path", release.path === "valve" ? "A control valve" : "A search for the bore");
 }

@@ -25,7 +25,12 @@ export function makeWallLump(wall: WallSpec, vessel: MeasuredVessel, startTemper
   const volume = wall.massKg === undefined ? vessel.wallVolume(wall.thicknessM) : undefined;
   const massKg = wall.massKg ?? (volume === undefined ? undefined : volume * steel.densityKgPerM3);
   if (massKg === undefined) {
-    throw new EngineError("invalid-case", "The mass of the wall follows from neither its mass nor the inside area. Give one of them.", {}, "vessel.wall.massKg");
+    throw new EngineError(
+      "invalid-case",
+      "The mass of the wall follows from neither its mass nor the inside area. Give one of them.",
+      {},
+      "vessel.wall.massKg",
+    );
   }
   const c = wall.specificHeatJPerKgK;
   if (c !== undefined) {
@@ -49,6 +54,12 @@ export function makeWallLump(wall: WallSpec, vessel: MeasuredVessel, startTemper
 
 function findSteel(id: string): Steel {
   const known = steelIds.find((steel): steel is SteelId => steel === id);
-  if (!known) throw new EngineError("invalid-case", `There is no wall material "${id}". Use one of ${steelIds.join(", ")}.`, {}, "vessel.wall.steel");
+  if (!known)
+    throw new EngineError(
+      "invalid-case",
+      `There is no wall material "${id}". Use one of ${steelIds.join(", ")}.`,
+      {},
+      "vessel.wall.steel",
+    );
   return steelById(known);
 }

@@ -9,7 +9,13 @@ import type { VesselModel } from "./vessel-model";
 
 export const closureLimit = 1e-4;
 
-export function warningsOf(blowdown: BlowdownCase, model: VesselModel, run: Run, rows: Row[], summary: BlowdownSummary): Warning[] {
+export function warningsOf(
+  blowdown: BlowdownCase,
+  model: VesselModel,
+  run: Run,
+  rows: Row[],
+  summary: BlowdownSummary,
+): Warning[] {
   return [
     ...model.fluid.notes.map((message) => ({ code: "fluid-data", message })),
     ...dataRange(blowdown, summary),
@@ -26,7 +32,12 @@ function dataRange({ fluid }: BlowdownCase, { minimumFluidTemperatureK, minimumO
   return fluid.components.flatMap(({ id, moleFraction, custom }) => {
     const low = custom ? custom.idealGasHeatCapacityOverR.rangeK[0] : findLibraryRow(id)?.cp0.range_K[0];
     if (low === undefined || moleFraction === 0 || coldest >= low) return [];
-    return [{ code: "outside-data-range", message: `The fluid reaches ${coldest.toFixed(1)} K; the heat capacity of ${id} is known from ${low} K upward.` }];
+    return [
+      {
+        code: "outside-data-range",
+        message: `The fluid reaches ${coldest.toFixed(1)} K; the heat capacity of ${id} is known from ${low} K upward.`,
+      },
+    ];
   });
 }
 
@@ -37,22 +48,44 @@ function nearCritical({ fluid }: BlowdownCase, model: VesselModel, rows: Row[]):
   const Tc = model.fluid.criticalTemperaturesK[only] ?? 0;
   const pc = model.fluid.criticalPressuresPa[only] ?? 0;
   const close = rows.find((row) => Math.abs(row.temperatureK / Tc - 1) < 0.02 && Math.abs(row.pressurePa / pc - 1) < 0.1);
-  return close ? [{ code: "near-critical", message: `At ${close.timeS.toPrecision(3)} s the fluid is near its critical point, where the equation of state is least sure.` }] : [];
+  return close
+    ? [
+        {
+          code: "near-critical",
+          message: `At ${close.timeS.toPrecision(3)} s the fluid is near its critical point, where the equation of state is least sure.`,
+        },
+      ]
+    : [];
 }
 
 function solids(blowdown: BlowdownCase, run: Run, rows: Row[], { minimumFluidTemperatureK }: BlowdownSummary): Warning[] {
   const found: Warning[] = [];
   if (run.endedBy === "solid-phase") {
-    found.push({ code: "solid-phase", message: `At ${run.endTimeS.toPrecision(4)} s solid begins to form. The run ends there: solid may plug the outlet and hold back pressure, and re-warming releases it.` });
+    found.push({
+      code: "solid-phase",
+      message: `At ${run.endTimeS.toPrecision(4)} s solid begins to form. The run ends there: solid may plug the outlet and hold back pressure, and re-warming releases it.`,
+    });
   }
   const dioxide = solidCurves(blowdown.fluid).find((curve) => curve.sublimationPa);
-  const throat = rows.find((row) => dioxide?.pure && row.throatTemperatureK < dioxide.triplePointK && carbonDioxideSublimationPa(row.throatTemperatureK) < row.pressurePa);
-  if (throat && run.endedBy !== "solid-phase") found.push({ code: "solid-in-throat", message: `From ${throat.timeS.toPrecision(3)} s the throat is below the triple point of carbon dioxide: solid can form in the outlet.` });
+  const throat = rows.find(
+    (row) =>
+      dioxide?.pure &&
+      row.throatTemperatureK < dioxide.triplePointK &&
+      carbonDioxideSublimationPa(row.throatTemperatureK) < row.pressurePa,
+  );
+  if (throat && run.endedBy !== "solid-phase")
+    found.push({
+      code: "solid-in-throat",
+      message: `From ${throat.timeS.toPrecision(3)} s the throat is below the triple point of carbon dioxide: solid can form in the outlet.`,
+    });
   const present = blowdown.fluid.components.filter(({ moleFraction, custom, pseudo }) => moleFraction > 0 && !custom && !pseudo);
   for (const { id, moleFraction } of present.length > 1 ? present : []) {
     const triple = findLibraryRow(id)?.triplePoint.T_K;
     if (triple !== undefined && minimumFluidTemperatureK < triple) {
-      found.push({ code: "below-triple-point", message: `The fluid reaches ${minimumFluidTemperatureK.toFixed(1)} K, below the triple point of ${id} (${triple.toFixed(1)} K, mole fraction ${moleFraction}). Check whether it freezes out; this is not computed.` });
+      found.push({
+        code: "below-triple-point",
+        message: `The fluid reaches ${minimumFluidTemperatureK.toFixed(1)} K, below the triple point of ${id} (${triple.toFixed(1)} K, mole fraction ${moleFraction}). Check whether it freezes out; this is not computed.`,
+      });
     }
   }
   return found;
@@ -62,18 +95,38 @@ function wallTable({ wall }: VesselModel, { minimumWallTemperatureK }: BlowdownS
   if (!wall?.fromTable || minimumWallTemperatureK === undefined) return [];
   const [low, high] = wall.steel.specificHeatRangeK;
   if (minimumWallTemperatureK >= low && minimumWallTemperatureK <= high) return [];
-  return [{ code: "outside-data-range", message: `The wall reaches ${minimumWallTemperatureK.toFixed(1)} K; the specific heat of ${wall.steel.name.toLowerCase()} is tabulated from ${low} to ${high} K.` }];
+  return [
+    {
+      code: "outside-data-range",
+      message: `The wall reaches ${minimumWallTemperatureK.toFixed(1)} K; the specific heat of ${wall.steel.name.toLowerCase()} is tabulated from ${low} to ${high} K.`,
+    },
+  ];
 }
 
 function howItEnded({ run: asked }: BlowdownCase, run: Run): Warning[] {
   if (run.endedBy === "too-hot") {
-    return [{ code: "too-hot", message: `The fluid reached 1000 K at ${run.endTimeS.toPrecision(4)} s, where the heat capacities end. The run stops there; steel has lost its strength long before.` }];
+    return [
+      {
+        code: "too-hot",
+        message: `The fluid reached 1000 K at ${run.endTimeS.toPrecision(4)} s, where the heat capacities end. The run stops there; steel has lost its strength long before.`,
+      },
+    ];
   }
   if (run.endedBy !== "back-pressure") return [];
-  return [{ code: "back-pressure-reached", message: `The pressure met the back pressure before it reached ${asked.stopPressurePa} Pa; nothing flows from there on.` }];
+  return [
+    {
+      code: "back-pressure-reached",
+      message: `The pressure met the back pressure before it reached ${asked.stopPressurePa} Pa; nothing flows from there on.`,
+    },
+  ];
 }
 
 function closure({ massClosure, energyClosure }: BlowdownSummary): Warning[] {
   if (massClosure <= closureLimit && energyClosure <= closureLimit) return [];
-  return [{ code: "does-not-close", message: `Mass closes to ${massClosure.toExponential(1)} and energy to ${energyClosure.toExponential(1)}, worse than ${closureLimit}. No verdict is given; tighten the tolerance.` }];
+  return [
+    {
+      code: "does-not-close",
+      message: `Mass closes to ${massClosure.toExponential(1)} and energy to ${energyClosure.toExponential(1)}, worse than ${closureLimit}. No verdict is given; tighten the tolerance.`,
+    },
+  ];
 }

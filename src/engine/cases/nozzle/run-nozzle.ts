@@ -12,9 +12,18 @@ import type { NozzleCase, NozzleResult } from "../nozzle-case";
 export function runNozzle({ fluid: given, stagnation, backPressurePa, flowModel }: NozzleCase): NozzleResult {
   const fluid = createFluidModel(given);
   const state: Equilibrium = "temperatureK" in stagnation ? flashPT(fluid, stagnation) : flashPQ(fluid, stagnation);
-  const flow = flowModel === "equilibrium" ? equilibriumNozzle(fluid, state, fluid.feed, backPressurePa) : frozenNozzle(fluid, onlyPhase(state), fluid.feed, backPressurePa);
+  const flow =
+    flowModel === "equilibrium"
+      ? equilibriumNozzle(fluid, state, fluid.feed, backPressurePa)
+      : frozenNozzle(fluid, onlyPhase(state), fluid.feed, backPressurePa);
   const warnings = fluid.notes.map((message) => ({ code: "fluid-data", message }));
-  return { format: "ebbmark-result/1", kind: "nozzle", ...flow, warnings, cautions: [screeningCaution.words, equationCaution.words] };
+  return {
+    format: "ebbmark-result/1",
+    kind: "nozzle",
+    ...flow,
+    warnings,
+    cautions: [screeningCaution.words, equationCaution.words],
+  };
 }
 
 /** The one phase there is; a saturated state of all vapour or all liquid counts as one. */
@@ -22,7 +31,12 @@ function onlyPhase({ phases }: Equilibrium): Equilibrium["phases"][number]["stat
   const filled = phases.filter((phase) => phase.moleFraction > 1e-12);
   const [one] = filled;
   if (filled.length !== 1 || !one) {
-    throw new EngineError("two-phase-start", 'The stagnation state is part vapour and part liquid, which frozen flow does not hold for. Use "equilibrium".', {}, "flowModel");
+    throw new EngineError(
+      "two-phase-start",
+      'The stagnation state is part vapour and part liquid, which frozen flow does not hold for. Use "equilibrium".',
+      {},
+      "flowModel",
+    );
   }
   return one.state;
 }
