@@ -28,16 +28,22 @@ export function denseRoot(
     rho = Math.min(rho * 1.04, ceiling);
     if (k === 59) return undefined;
   }
-  return newton(evaluate, point, p, rho, 0, rho);
+  return newton(evaluate, point, p, rho, 0, rho, false);
 }
 
-/** Density of the thin root: Newton from below, where p(ρ) of a gas is concave. */
+/**
+ * Density of the thin root: Newton from below. Below the critical temperature p(ρ) of a gas is concave up to the spinodal, so
+ * a step that passes the target has left the branch: multiparameter equations have further, meaningless loops behind it.
+ *
+ * subcritical   is that so at this temperature?
+ */
 export function thinRoot(
   evaluate: (rho: number) => void,
   point: PressurePoint,
   p: number,
   start: number,
   ceiling: number,
+  subcritical: boolean,
 ): number | undefined {
   let rho = start;
   for (let k = 0; k < 60; k++) {
@@ -46,7 +52,7 @@ export function thinRoot(
     rho *= 0.8;
     if (k === 59) return undefined;
   }
-  return newton(evaluate, point, p, rho, rho, ceiling);
+  return newton(evaluate, point, p, rho, rho, ceiling, subcritical);
 }
 
 function newton(
@@ -56,24 +62,37 @@ function newton(
   start: number,
   floor: number,
   ceiling: number,
+  strict: boolean,
 ): number | undefined {
   let rho = start;
   let low = floor;
   let high = ceiling;
+  let highSeen = false;
+  let lowSeen = false;
   let previous = Infinity;
   for (let step = 0; step < maximumSteps; step++) {
     const excess = point.pressure - p;
-    // Between the spinodals the slope is negative: the branch has ended without a root.
-    if (!(point.slope > 0)) return undefined;
+    if (strict && excess > 1e-6 * p) return undefined;
+    if (excess > 0) {
+      high = Math.min(high, rho);
+      highSeen = true;
+    } else {
+      low = Math.max(low, rho);
+      lowSeen = true;
+    }
+    const closed = highSeen && lowSeen;
     const change = excess / point.slope;
-    const relative = Math.abs(change) / rho;
-    if (relative < 1e-15 || (relative < 1e-12 && relative >= 0.5 * previous)) return rho;
-    if (excess > 0) high = Math.min(high, rho);
-    else low = Math.max(low, rho);
-    previous = relative;
+    if (point.slope > 0) {
+      const relative = Math.abs(change) / rho;
+      if (relative < 1e-15 || (relative < 1e-12 && relative >= 0.5 * previous)) return rho;
+      previous = relative;
+    } else if (!closed) {
+      return undefined; // between the spinodals, and no sign change was met: the branch has ended without a root
+    }
+    if (high - low < 1e-15 * high) return point.slope > 0 ? rho : undefined;
     let next = rho - change;
-    if (!(next > low && next < high)) next = low > 0 && high < Infinity ? 0.5 * (low + high) : 0.5 * rho;
-    if (!(next > 0) || high - low < 1e-15 * high) return rho;
+    if (!(point.slope > 0) || !(next > low && next < high)) next = low > 0 && high < Infinity ? 0.5 * (low + high) : 0.5 * rho;
+    if (!(next > 0)) return undefined;
     rho = next;
     evaluate(rho);
   }

@@ -3,6 +3,7 @@ import type { Substance } from "../substances/substance";
 import { buildCubic } from "./cubic/build-cubic";
 import { cubicEquations, type CubicEquationId } from "./cubic/cubic-equations";
 import type { FluidModel } from "./fluid-model";
+import { buildGerg } from "./gerg/build-gerg";
 import { buildReference } from "./reference/build-reference";
 
 /** What an equation's own file offers; one line below makes it known to the form, the schema, the tests and the spread. */
@@ -26,6 +27,12 @@ export const equations: Partial<Record<EquationId, EquationEntry>> = {
   "soave-redlich-kwong": cubicEntry("soave-redlich-kwong"),
   "peng-robinson-1976": cubicEntry("peng-robinson-1976"),
   "peng-robinson-1978": cubicEntry("peng-robinson-1978"),
+  "gerg-2008": {
+    id: "gerg-2008",
+    title: "GERG-2008",
+    source: "Kunz and Wagner, J. Chem. Eng. Data 57 (2012) 3032-3091; ISO 20765-2",
+    build: buildGerg,
+  },
   reference: {
     id: "reference",
     title: "Reference equation of the pure fluid",

@@ -2,7 +2,7 @@ import { EngineError } from "../../errors";
 import { denseRoot, thinRoot, type PressurePoint } from "../density-roots";
 import type { ResidualDerivatives, ResidualModel, Root, SaturationVolumes } from "../fluid-model";
 import { ancillary, type ReferenceFluid } from "./reference-data";
-import { createReducedDerivatives, ReducedTerms } from "./reduced-terms";
+import { createReducedDerivatives, ReducedTerms, type ReducedDerivatives } from "./reduced-terms";
 
 /** Highest reduced density that is searched; the densest liquids of the fluids in the table lie near 3.5. */
 const densestReduced = 5;
@@ -21,7 +21,7 @@ export class ReferenceResidual implements ResidualModel {
   private T = 0;
 
   constructor(private readonly fluid: ReferenceFluid) {
-    this.terms = new ReducedTerms(fluid.residual);
+    this.terms = new ReducedTerms([fluid.residual]);
     this.R = fluid.R_J_per_molK;
     this.rhoR = fluid.reducing.rho_mol_per_m3;
     this.Tr = fluid.reducing.T_K;
@@ -36,9 +36,8 @@ export class ReferenceResidual implements ResidualModel {
   }
 
   evaluate(T: number, V: number, order: 0 | 1 | 2, out: ResidualDerivatives): void {
-    const { n, reduced, terms } = this;
-    terms.evaluate(n / (V * this.rhoR), this.Tr / T, reduced);
-    const { a, d, t, dd, dt, tt } = reduced;
+    const { n } = this;
+    const { a, d, t, dd, dt, tt } = this.reduce(n / (V * this.rhoR), this.Tr / T);
     out.F = n * a;
     out.FV = (-n * d) / V;
     out.FVV = (n * (dd + 2 * d)) / (V * V);
@@ -53,9 +52,22 @@ export class ReferenceResidual implements ResidualModel {
     out.Fnn[0] = (2 * d + dd) / n;
   }
 
+  private reduce(delta: number, tau: number): ReducedDerivatives {
+    const { terms, reduced } = this;
+    const { sums } = terms;
+    terms.evaluate(delta, tau);
+    reduced.a = sums[0]!;
+    reduced.d = sums[1]!;
+    reduced.t = sums[2]!;
+    reduced.dd = sums[3]!;
+    reduced.dt = sums[4]!;
+    reduced.tt = sums[5]!;
+    return reduced;
+  }
+
   private readonly pressureAt = (rho: number): void => {
-    const { reduced, point, R, T } = this;
-    this.terms.evaluate(rho / this.rhoR, this.Tr / T, reduced);
+    const { point, R, T } = this;
+    const reduced = this.reduce(rho / this.rhoR, this.Tr / T);
     point.pressure = rho * R * T * (1 + reduced.d);
     point.slope = R * T * (1 + 2 * reduced.d + reduced.dd);
   };
@@ -63,7 +75,7 @@ export class ReferenceResidual implements ResidualModel {
   volumeAtPressure(T: number, p: number, root: Root): number {
     this.T = T;
     const { critical, saturationAncillaries } = this.fluid;
-    const thin = () => thinRoot(this.pressureAt, this.point, p, p / (this.R * T), densestReduced * this.rhoR);
+    const thin = () => thinRoot(this.pressureAt, this.point, p, p / (this.R * T), densestReduced * this.rhoR, T < critical.T_K);
     const dense = () => {
       const start = T < critical.T_K ? 1.02 * ancillary(saturationAncillaries.rhoLiquid, T) : 2.2 * this.rhoR;
       return denseRoot(this.pressureAt, this.point, p, start, densestReduced * this.rhoR);
@@ -90,8 +102,7 @@ export class ReferenceResidual implements ResidualModel {
   private lowerGibbs(thin: number | undefined, dense: number | undefined, p: number): number | undefined {
     if (thin === undefined || dense === undefined) return thin ?? dense;
     const gibbs = (rho: number) => {
-      this.terms.evaluate(rho / this.rhoR, this.Tr / this.T, this.reduced);
-      return this.reduced.a + p / (rho * this.R * this.T) + Math.log(rho);
+      return this.reduce(rho / this.rhoR, this.Tr / this.T).a + p / (rho * this.R * this.T) + Math.log(rho);
     };
     return gibbs(dense) < gibbs(thin) ? dense : thin;
   }
@@ -105,18 +116,18 @@ export class ReferenceResidual implements ResidualModel {
   saturation(T: number): SaturationVolumes | undefined {
     const { critical, saturationAncillaries } = this.fluid;
     if (!(T < critical.T_K)) return undefined;
-    const { terms, reduced, rhoR, R } = this;
+    const { reduced, rhoR, R } = this;
     const tau = this.Tr / T;
     let dense = ancillary(saturationAncillaries.rhoLiquid, T) / rhoR;
     let thin = ancillary(saturationAncillaries.rhoVapour, T) / rhoR;
     let previous = Infinity;
     for (let iteration = 0; iteration < 60; iteration++) {
-      terms.evaluate(dense, tau, reduced);
+      this.reduce(dense, tau);
       const J_L = dense * (1 + reduced.d);
       const K_L = reduced.d + reduced.a + Math.log(dense);
       const dJ_L = 1 + 2 * reduced.d + reduced.dd;
       const dK_L = dJ_L / dense;
-      terms.evaluate(thin, tau, reduced);
+      this.reduce(thin, tau);
       const J_V = thin * (1 + reduced.d);
       const K_V = reduced.d + reduced.a + Math.log(thin);
       const dJ_V = 1 + 2 * reduced.d + reduced.dd;
