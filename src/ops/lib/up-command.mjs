@@ -47,34 +47,23 @@ async function start({ dev, port, places, processes, say }) {
   await checkPortFree(port);
 
   await step("packages", () => installPackages(processes, say));
-  const server = await step("database", () => openDatabase(processes, places, { say }));
+  const [server, workers] = await Promise.all([
+    step("database", () => openDatabase(processes, places, { say })),
+    step("engine", () => buildEngineFiles(processes, places, say)),
+  ]);
   const { secrets } = server;
-  const workers = await step("engine", () => buildEngineFiles(processes, places, say));
+  const migration = migrateEnvironment({ secrets, port: server.port, database });
   const [fakes] = await Promise.all([
     step("stand-ins", () => startFakes(processes, { places, secrets })),
-    step("migrations", () =>
-      runScript(processes, "migrations", "src/ops/migrate.ts", migrateEnvironment({ secrets, port: server.port, database })).then(
-        () => {},
-      ),
-    ),
+    step("migrations", () => runScript(processes, "migrations", "src/ops/migrate.ts", migration).then(() => {})),
   ]);
-  const env = webEnvironment({
-    secrets,
-    databasePort: server.port,
-    database,
-    port,
-    services: fakes,
-    places,
-    workers,
-    nodeEnv: dev ? "development" : "production",
-  });
-  const seeded = await step("demo", async () =>
-    lastJsonLine(await runScript(processes, "demo", "src/ops/seed.ts", env), "accounts"),
-  );
+  const nodeEnv = dev ? "development" : "production";
+  const env = webEnvironment({ secrets, databasePort: server.port, database, port, services: fakes, places, workers, nodeEnv });
+  const [seeded, web] = await Promise.all([
+    step("demo", async () => lastJsonLine(await runScript(processes, "demo", "src/ops/seed.ts", env), "accounts")),
+    dev ? startDevelopment({ step, processes, port, env }) : startProduct({ step, processes, places, say, port, env }),
+  ]);
 
-  const web = dev
-    ? await startDevelopment({ step, processes, port, env })
-    : await startProduct({ step, processes, places, say, port, env });
   welcomeLines({ port, accounts: seeded?.accounts, places }).forEach(say);
   return untilOneEnds({
     "The web server": web.ended,
