@@ -6,13 +6,15 @@ import { Power, useShown } from "@/components/quantity/quantity";
 import { MarginHead, MarginNote } from "@/components/shell/margin";
 import { Digest } from "@/components/sign/sign-panel";
 import type { PreparedView } from "@/contracts/views";
+import type { EndedBy } from "@/engine/cases/blowdown-result";
 
-const endings = {
+const endings: Record<EndedBy, string> = {
   pressure: "It ended at the pressure of line 7.11.",
   time: "It ended at the time of line 7.10.",
   "solid-phase": "It ended where solid begins to form.",
   "back-pressure": "It ended at the back pressure.",
-} as const;
+  "too-hot": "It ended where the fluid became too hot to go on.",
+};
 
 /** How the figures were computed, and the names of the stored bytes. */
 export function RunFacts({ prepared }: { prepared: PreparedView }) {

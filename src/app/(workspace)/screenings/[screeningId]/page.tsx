@@ -1,5 +1,6 @@
 import type { Metadata } from "next";
 import { notFound } from "next/navigation";
+import { WithdrawButton } from "@/features/approval/withdraw-button";
 import { ScreeningSheet } from "@/features/screening/results/screening-sheet";
 import { requireViewer } from "@/server/auth/viewer";
 import { getScreening } from "@/server/screenings/read";
@@ -14,5 +15,7 @@ export default async function ScreeningPage({ params, searchParams }: Props) {
   const [{ screeningId }, { rev }] = await Promise.all([params, searchParams]);
   const screening = await getScreening(viewer, screeningId, revisionAsked(rev));
   if (!screening) notFound();
-  return <ScreeningSheet screening={screening} />;
+  const { prepared, may } = screening;
+  const acts = may.withdraw && prepared && <WithdrawButton screeningId={screening.id} prepared={prepared} />;
+  return <ScreeningSheet screening={screening} acts={acts} />;
 }
