@@ -129,7 +129,7 @@ export function solveAtVolume(model: FluidModel, z: ArrayLike<number>, target: V
       state.pressurePa = R * T * pl;
       const stiffV = nv / (Vv * Vv) + light.FVV;
       const stiffL = nl / (Vl * Vl) + dense.FVV;
-      return state.pressurePa > 0 && pv > 0 && stiffV > 0 && stiffL > 0 && distinct(state, nv, nl);
+      return state.pressurePa > 0 && pv > 0 && stiffV > 0 && stiffL > 0 && distinct(state, nv, nl) && onOuterRoots(model, work, state, nv, nl);
     }
     previous = error;
     if (!solveLinear(matrix, step, size)) return false;
@@ -219,6 +219,22 @@ function addEntropyTerms(work: VolumeWork, active: number, size: number, scaleV:
   const rowT = active + 1;
   for (let k = 0; k < active; k++) matrix[rowT * size + k] = matrix[rowT * size + k]! + step[k]!;
   matrix[rowT * size + active] = matrix[rowT * size + active]! + scaleV * pressureGap;
+}
+
+/**
+ * Is each phase on the least or the most dense root at its pressure? Reference equations have false, stable-looking branches between them,
+ * where a second "liquid" meets every condition of equilibrium.
+ */
+function onOuterRoots(model: FluidModel, { trial }: VolumeWork, state: TwoPhaseVolumes, nv: number, nl: number): boolean {
+  const { temperatureK: T, pressurePa: p } = state;
+  const isOuter = (moles: Float64Array, total: number, volume: number): boolean => {
+    for (let i = 0; i < moles.length; i++) trial[i] = moles[i]! / total;
+    model.residual.setComposition(trial);
+    const own = volume / total;
+    const is = (root: "liquid" | "vapour") => Math.abs(model.residual.volumeAtPressure(T, p, root) / own - 1) < 1e-5;
+    return is("liquid") || is("vapour");
+  };
+  return isOuter(state.l, nl, state.liquidVolume) && isOuter(state.v, nv, state.vapourVolume);
 }
 
 function distinct(state: TwoPhaseVolumes, nv: number, nl: number): boolean {
