@@ -17,6 +17,7 @@ export type LineMessage = { tone: "warn" | "bad"; text: ReactNode };
  * source     a `<SourceNote />`, or nothing where no source is asked for
  * message    what is wrong, why we think so, what to do; read with the field
  * tone       `derived` for computed lines, `locked` once signed; a message sets `warn` or `bad` by itself
+ * across     the field takes the whole width under the label, and no source is asked for
  * group      the field is several controls (radios): the label names the group instead of pointing at one control
  */
 export function Line({
@@ -30,6 +31,7 @@ export function Line({
   message,
   tone = "rest",
   group = false,
+  across = false,
 }: {
   no: string;
   label: string;
@@ -41,6 +43,7 @@ export function Line({
   message?: LineMessage;
   tone?: LineTone;
   group?: boolean;
+  across?: boolean;
 }) {
   const valueId = `value-${no}`;
   const labelId = `label-${no}`;
@@ -74,8 +77,8 @@ export function Line({
           )}
           {other && <small className="block text-label text-ink-3">{other}</small>}
         </div>
-        <div className="min-w-0 phone:col-start-2">{children}</div>
-        <div className="min-w-0 phone:col-start-2">{source}</div>
+        <div className={`min-w-0 ${across ? "col-span-full border-t" : "phone:col-start-2"}`}>{children}</div>
+        {!across && <div className="min-w-0 phone:col-start-2">{source}</div>}
         {message && (
           <p
             id={messageId}

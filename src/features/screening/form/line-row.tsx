@@ -68,8 +68,8 @@ function ChoiceRow({ line, lineKey }: { line: ChoiceLine; lineKey: LineKey }) {
   };
   if (line.radios) {
     return (
-      <Line {...common} group>
-        <RadioRow value={typed} options={line.options} onValueChange={(chosen) => setLine(lineKey, { typed: chosen })} />
+      <Line {...common} group across>
+        <RadioRow across value={typed} options={line.options} onValueChange={(chosen) => setLine(lineKey, { typed: chosen })} />
       </Line>
     );
   }

@@ -1,5 +1,5 @@
 /** Which unit a line is shown in, and what then stands in its field. The stored text, unit and SI value never change by showing. */
-import { formatForField } from "@/components/quantity/format";
+import { formatForField, formatQuantity } from "@/components/quantity/format";
 import type { UnitSystem } from "@/components/units/unit-system";
 import type { LineValue } from "@/contracts/draft";
 import type { QuantityLine } from "@/contracts/lines/line";
@@ -36,7 +36,7 @@ export function otherText(
   if (value?.si == null) return undefined;
   const unit = line.shown[system === "SI" ? "US" : "SI"];
   if (unit === line.shown[system]) return undefined;
-  return `${formatForField(line.quantity, value.si, unit, barometricPressurePa)} ${unit}`;
+  return formatQuantity(line.quantity, value.si, unit, { barometricPressurePa }).text;
 }
 
 /** A unit written behind the figure moves into the unit box: "1.24 in" becomes 1.24, in. Undefined where there is nothing to move. */

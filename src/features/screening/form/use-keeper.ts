@@ -42,7 +42,7 @@ export type Keeper = {
  */
 export function useKeeper(document: DraftDocument, start: DraftView, replace: (document: DraftDocument) => void): Keeper {
   const { screeningId, rev } = start;
-  const [keeping, setKeeping] = useState<Keeping>({ state: "kept", at: formatClock(new Date(start.updatedAt), true) });
+  const [keeping, setKeeping] = useState<Keeping>({ state: "untouched" });
   const [trouble, setTrouble] = useState<string | null>(null);
   const [conflict, setConflict] = useState<Conflict | null>(null);
   const [taken, setTaken] = useState<Keeper["taken"]>(null);
@@ -59,6 +59,12 @@ export function useKeeper(document: DraftDocument, start: DraftView, replace: (d
     now.current = document;
   }, [document]);
 
+  // The reader's own clock is known in the browser only, so the time is written after the first drawing.
+  useEffect(() => {
+    // eslint-disable-next-line react-hooks/set-state-in-effect
+    setKeeping((first) => (first.state === "untouched" ? { state: "kept", at: formatClock(new Date(start.updatedAt)) } : first));
+  }, [start.updatedAt]);
+
   const changed = useCallback(() => JSON.stringify(now.current) !== JSON.stringify(held.current.document), []);
 
   const took = useCallback((view: DraftView, sent: DraftDocument) => {
@@ -67,7 +73,7 @@ export function useKeeper(document: DraftDocument, start: DraftView, replace: (d
     setKept(held.current);
     failures.current = 0;
     setTrouble(null);
-    setKeeping({ state: "kept", at: formatClock(new Date(view.updatedAt), true) });
+    setKeeping({ state: "kept", at: formatClock(new Date(view.updatedAt)) });
   }, []);
 
   const meet = useCallback(
