@@ -14,6 +14,7 @@ import { assemble } from "../../flash/assemble";
 import { equilibriumNozzle } from "../../flow/equilibrium-nozzle";
 import { frozenNozzle, type NozzleFlow } from "../../flow/frozen-nozzle";
 import { ContentsFinder, type Contents, type Effort, type PhaseMode } from "./contents";
+import { DenseRun, type KeptStep } from "./dense-run";
 import type { VesselModel } from "./vessel-model";
 
 /** Everything about one instant that a series, an event or a limit may ask for. */
@@ -50,6 +51,13 @@ export class Balance {
 
   beginSegment(): void {
     this.refusedInARow = quickRefusals;
+  }
+
+  /** Everything at a time of a kept step, searched for from the temperature that the run had there. */
+  within(segment: { mode: PhaseMode }, step: KeptStep, t: number): { y: number[]; instant: Instant } {
+    const y = DenseRun.inside(step, t);
+    this.finder.startFrom(DenseRun.guessK(step, t));
+    return { y, instant: this.at(t, y, segment.mode) };
   }
 
   startState(): number[] {

@@ -57,6 +57,11 @@ export class ContentsFinder {
     this.guessK = startTemperatureK;
   }
 
+  /** Where the next search for a temperature starts. Inside a dome an equation may have more than one answer; the nearest is meant. */
+  startFrom(temperatureK: number): void {
+    this.guessK = temperatureK;
+  }
+
   /** n_i [mol] and U [J] of the contents; throws EngineError where no state exists. */
   find(mode: PhaseMode, moles: ArrayLike<number>, internalEnergyJ: number, effort: Effort): Contents {
     const z = this.z;

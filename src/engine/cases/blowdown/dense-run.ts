@@ -10,20 +10,26 @@ const points = 20;
 const nodes = Array.from({ length: points }, (_, j) => (1 - Math.cos((Math.PI * j) / (points - 1))) / 2);
 const weights = nodes.map((_, j) => (j % 2 === 0 ? 1 : -1) * (j === 0 || j === points - 1 ? 0.5 : 1));
 
-export type KeptStep = { t0: number; t1: number; values: number[][] };
+/** With the fluid's temperature at both ends, from which searches inside the step start. */
+export type KeptStep = { t0: number; t1: number; values: number[][]; temperaturesK: [number, number] };
 
 export class DenseRun {
   readonly steps: KeptStep[] = [];
 
-  keep({ t0, y0, t1, y1, at }: AcceptedStep): void {
+  keep({ t0, y0, t1, y1, at }: AcceptedStep, temperaturesK: [number, number]): void {
     // An event at the very start of a segment leaves a step without length.
     if (!(t1 > t0)) return;
     const values = nodes.map((s, j) => (j === 0 ? [...y0] : j === points - 1 ? y1 : at(t0 + s * (t1 - t0))));
-    this.steps.push({ t0, t1, values });
+    this.steps.push({ t0, t1, values, temperaturesK });
   }
 
   get endTimeS(): number {
     return this.steps.at(-1)?.t1 ?? 0;
+  }
+
+  /** A first guess of the fluid's temperature at a time of one step. */
+  static guessK({ t0, t1, temperaturesK: [a, b] }: KeptStep, t: number): number {
+    return a + ((b - a) * (t - t0)) / (t1 - t0);
   }
 
   /** State at a time of one step. */

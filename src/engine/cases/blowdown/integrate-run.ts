@@ -51,6 +51,7 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
   const run: Run = { segments: [], endTimeS: 0, endedBy: "time", marks: new Map(), phaseChanges: [], steps: 0, evaluations: 0 };
   let t = 0;
   let y = balance.startState();
+  let lastK = start.temperatureK;
   let mode: PhaseMode = start.twoPhase ? "two-phase" : "one-phase";
   const emptyingTimeS = Math.max(balance.massScaleKg / Math.max(fullRate(balance, y, mode), 1e-300), 1e-9);
 
@@ -98,10 +99,10 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
           })),
       ],
       onStep: (step) => {
-        segment.dense.keep(step);
-        options.onProgress?.(
-          progress(step.t1 / stopTimeS, balance.at(step.t1, step.y1, segment.mode).contents.pressurePa, start.pressurePa, stopAt),
-        );
+        const { temperatureK, pressurePa } = balance.at(step.t1, step.y1, segment.mode).contents;
+        segment.dense.keep(step, [lastK, temperatureK]);
+        lastK = temperatureK;
+        options.onProgress?.(progress(step.t1 / stopTimeS, pressurePa, start.pressurePa, stopAt));
       },
       isCancelled: options.isCancelled,
     });

@@ -7,7 +7,6 @@ import type { BlowdownCase } from "../blowdown-case";
 import type { FluidSpec } from "../fluid-spec";
 import { Balance } from "./balance";
 import { integrateRun } from "./integrate-run";
-import { DenseRun } from "./dense-run";
 import { rebuiltState } from "./molar-state";
 import { runBlowdown } from "./run-blowdown";
 import { makeVesselModel } from "./vessel-model";
@@ -85,9 +84,7 @@ describe("runBlowdown", () => {
       const run = integrateRun(balance, blowdown, { relativeTolerance: 1e-7, maxEvaluations: 1e5 });
       const entropies = run.segments.flatMap((segment) =>
         segment.dense.steps.map(
-          (step) =>
-            rebuiltState(balance.model.fluid, balance.at(step.t1, DenseRun.inside(step, step.t1), segment.mode).contents)
-              .entropyJPerMolK,
+          (step) => rebuiltState(balance.model.fluid, balance.within(segment, step, step.t1).instant.contents).entropyJPerMolK,
         ),
       );
       expect(Math.max(...entropies) - Math.min(...entropies)).toBeLessThan(1e-6 * 8.314);

@@ -7,7 +7,6 @@ import type { BlowdownCase } from "../blowdown-case";
 import type { BlowdownResult, BlowdownSummary, EnergyAccount } from "../blowdown-result";
 import { Balance } from "./balance";
 import { cautionsOfRun } from "./cautions-of-run";
-import { DenseRun } from "./dense-run";
 import { highest, lowest, type Extreme } from "./extremes";
 import { integrateRun, type Run } from "./integrate-run";
 import { rebuiltState, type RebuiltState } from "./molar-state";
@@ -126,8 +125,8 @@ function endStates(balance: Balance, run: Run, coldest: Extreme): Ends {
     const inside = all.filter(({ step }) => t >= step.t0 && t <= step.t1);
     const place = (side === "first" ? inside[0] : inside.at(-1)) ?? all.at(side === "first" ? 0 : -1);
     if (!place) throw new EngineError("no-convergence", "The run ended before its first step.");
-    const y = DenseRun.inside(place.step, t);
-    return { state: rebuiltState(balance.model.fluid, balance.at(t, y, place.segment.mode).contents), y };
+    const { y, instant } = balance.within(place.segment, place.step, t);
+    return { state: rebuiltState(balance.model.fluid, instant.contents), y };
   };
   const last = stateAt(run.endTimeS, "last");
   return { first: stateAt(0, "first").state, coldest: stateAt(coldest.timeS, "last").state, last: last.state, lastY: last.y };

@@ -2,7 +2,7 @@
 import { throttleTemperature } from "../../flow/throttle";
 import { levelAtVolume } from "../../vessel/geometry";
 import type { Balance } from "./balance";
-import { DenseRun, type KeptStep } from "./dense-run";
+import type { KeptStep } from "./dense-run";
 import type { Segment } from "./integrate-run";
 
 export type Sample = {
@@ -20,8 +20,8 @@ export type Sample = {
 };
 
 export function sampleAt(balance: Balance, segment: Segment, step: KeptStep, t: number): Sample {
-  const y = DenseRun.inside(step, t);
-  const { contents, flow, ventRateKgPerS, wallTemperatureK } = balance.at(t, y, segment.mode);
+  const { y, instant } = balance.within(segment, step, t);
+  const { contents, flow, ventRateKgPerS, wallTemperatureK } = instant;
   return {
     timeS: t,
     pressurePa: contents.pressurePa,
@@ -39,7 +39,7 @@ export function sampleAt(balance: Balance, segment: Segment, step: KeptStep, t: 
 
 /** Temperature of the stream behind the opening, at the back pressure. */
 export function outletTemperatureAt(balance: Balance, segment: Segment, step: KeptStep, t: number): number {
-  const { contents } = balance.at(t, DenseRun.inside(step, t), segment.mode);
+  const { contents } = balance.within(segment, step, t).instant;
   return throttleTemperature(balance.model.fluid, contents.outlet, contents.outletComposition, balance.model.backPressurePa);
 }
 

@@ -1,7 +1,7 @@
 /**
  * Does a component freeze out of what is in the vessel?
  *
- * Carbon dioxide: its fugacity in any phase against that of its solid, from the sublimation pressure
+ * Carbon dioxide: alone, its pressure against the sublimation pressure; in a mixture, its fugacity against that of its solid
  *
  *   ln(p_sub/p_t) = (T_t/T) [−14.740846 θ + 2.4327015 θ^1.9 − 5.3061778 θ^2.9],  θ = 1 − T/T_t
  *   f_solid = p_sub φ_sub exp[v_s (p − p_sub)/(R T)],  v_s = 2.8e-5 m³/mol
@@ -53,11 +53,11 @@ export function solidMargin(fluid: FluidModel, contents: Contents, curves: reado
     const T = contents.temperatureK;
     if (T >= curve.triplePointK) margin = Math.min(margin, T / curve.triplePointK - 1 + 1e-12);
     else if (!curve.sublimationPa || (curve.pure && contents.phases === 2)) margin = Math.min(margin, T / curve.triplePointK - 1);
-    else
-      margin = Math.min(
-        margin,
-        Math.log(solidFugacity(fluid, curve.sublimationPa, contents) / fugacity(fluid, curve.index, contents)),
-      );
+    else if (curve.pure) margin = Math.min(margin, Math.log(curve.sublimationPa(T) / contents.pressurePa));
+    else {
+      const ratio = solidFugacity(fluid, curve.sublimationPa, contents) / fugacity(fluid, curve.index, contents);
+      margin = Math.min(margin, Math.log(ratio));
+    }
   }
   return margin;
 }
