@@ -199,6 +199,8 @@ export interface ResidualDerivatives {
 }
 
 export interface ResidualModel {
+  /** Does the equation have mechanically stable branches between its outer density roots that mean nothing? */
+  readonly hasFalseBranches: boolean;
   /**
    * Fixes the mole numbers of the evaluations that follow. Evaluations at other temperatures and volumes of the same
    * composition then cost no mixing sums. The flashes call it before each phase; nothing else may rely on it.

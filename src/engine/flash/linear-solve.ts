@@ -30,6 +30,66 @@ export function solvePositiveDefinite(A: Float64Array, b: Float64Array, size: nu
   return true;
 }
 
+/**
+ * Solves [A b; r c] [x; t] = [f; g] where A is symmetric positive definite of `size` and the matrix is stored row-major with
+ * `size + 1` columns: Cholesky of A, then the Schur complement of the last row. Leaves the answer in `rhs`, and the matrix as it
+ * was. Returns false where A is not positive definite.
+ */
+export function solveBordered(
+  matrix: Float64Array,
+  rhs: Float64Array,
+  size: number,
+  factor: Float64Array,
+  column: Float64Array,
+): boolean {
+  const stride = size + 1;
+  for (let i = 0; i < size; i++) {
+    const row = i * size;
+    for (let j = 0; j <= i; j++) {
+      const other = j * size;
+      let sum = matrix[i * stride + j]!;
+      for (let k = 0; k < j; k++) sum -= factor[row + k]! * factor[other + k]!;
+      if (i === j) {
+        if (!(sum > 1e-14)) return false;
+        factor[row + i] = 1 / Math.sqrt(sum);
+      } else {
+        factor[row + j] = sum * factor[other + j]!;
+      }
+    }
+  }
+  for (let i = 0; i < size; i++) {
+    let f = rhs[i]!;
+    let b = matrix[i * stride + size]!;
+    for (let k = 0; k < i; k++) {
+      f -= factor[i * size + k]! * rhs[k]!;
+      b -= factor[i * size + k]! * column[k]!;
+    }
+    rhs[i] = f * factor[i * size + i]!;
+    column[i] = b * factor[i * size + i]!;
+  }
+  for (let i = size - 1; i >= 0; i--) {
+    let f = rhs[i]!;
+    let b = column[i]!;
+    for (let k = i + 1; k < size; k++) {
+      f -= factor[k * size + i]! * rhs[k]!;
+      b -= factor[k * size + i]! * column[k]!;
+    }
+    rhs[i] = f * factor[i * size + i]!;
+    column[i] = b * factor[i * size + i]!;
+  }
+  let above = rhs[size]!;
+  let below = matrix[size * stride + size]!;
+  for (let k = 0; k < size; k++) {
+    above -= matrix[size * stride + k]! * rhs[k]!;
+    below -= matrix[size * stride + k]! * column[k]!;
+  }
+  if (below === 0) return false;
+  const t = above / below;
+  for (let k = 0; k < size; k++) rhs[k] = rhs[k]! - t * column[k]!;
+  rhs[size] = t;
+  return true;
+}
+
 /** Solves A x = b by LU with row pivoting, overwriting A and leaving x in b. Returns false when A is singular. */
 export function solveLinear(A: Float64Array, b: Float64Array, size: number): boolean {
   for (let column = 0; column < size; column++) {

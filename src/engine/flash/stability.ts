@@ -7,6 +7,7 @@ import { wilsonLnK } from "./wilson";
 /** Below this a negative tangent-plane distance is a split and not round-off. */
 const negativeDistance = -1e-10;
 const substitutions = 4;
+const pureSearches = 3;
 const newtonSteps = 60;
 /** Strongly non-ideal trials (water in the cold) defeat Newton from afar: half-length substitutions bring them near. */
 const dampedSubstitutions = 300;
@@ -61,7 +62,7 @@ export function testStability(model: FluidModel, T: number, p: number, z: ArrayL
   const unstable =
     consider((i) => z[i]! * Math.exp(lnK[i]!)) ||
     consider((i) => z[i]! * Math.exp(-lnK[i]!)) ||
-    pureTrials(z, (pure) => consider((i) => (i === pure ? 0.999 : 0.001 * z[i]!)));
+    likeliestPure(model, T, p, z, work).some((pure) => consider((i) => (i === pure ? 0.999 : 0.001 * z[i]!)));
 
   return {
     stable: !unstable,
@@ -71,9 +72,22 @@ export function testStability(model: FluidModel, T: number, p: number, z: ArrayL
   };
 }
 
-function pureTrials(z: ArrayLike<number>, attempt: (index: number) => boolean): boolean {
-  for (let i = 0; i < z.length; i++) if (z[i]! > 1e-12 && attempt(i)) return true;
-  return false;
+/**
+ * The components whose pure phase lies lowest over the tangent plane, ln φ_i(pure) − d_i: where a new phase is rich in one
+ * component, it is rich in one of these. flash/brute-force.test.ts compares the verdicts with a search from every corner.
+ */
+function likeliestPure(model: FluidModel, T: number, p: number, z: ArrayLike<number>, work: StabilityWork): number[] {
+  const { trial, d } = work;
+  const heights: { index: number; height: number }[] = [];
+  for (let i = 0; i < z.length; i++) {
+    if (!(z[i]! > 1e-12)) continue;
+    trial.composition.fill(0);
+    trial.composition[i] = 1;
+    evaluateLnPhi(model, trial, T, p, "stable", 1);
+    heights.push({ index: i, height: trial.lnPhi[i]! - d[i]! });
+  }
+  heights.sort((a, b) => a.height - b.height);
+  return heights.slice(0, pureSearches).map(({ index }) => index);
 }
 
 /** Follows W from where it stands to a stationary point of tm, or until tm < 0 is certain. */

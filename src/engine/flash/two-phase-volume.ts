@@ -1,7 +1,7 @@
 import type { FluidModel, ResidualDerivatives } from "../eos/fluid-model";
 import { createResidualDerivatives } from "../eos/residual-derivatives";
 import { referencePressurePa } from "../gas-constant";
-import { solveLinear } from "./linear-solve";
+import { solveBordered, solveLinear } from "./linear-solve";
 
 /** Two phases of one mole of feed, as the unknowns of the volume-based Newton. */
 export interface TwoPhaseVolumes {
@@ -35,7 +35,7 @@ const maximumIterations = 30;
 export function solveAtVolume(model: FluidModel, z: ArrayLike<number>, target: VolumeTarget, state: TwoPhaseVolumes): boolean {
   const count = z.length;
   const work = volumeWork(count);
-  const { light, dense, matrix, step, scale, cp0, h0, s0, index } = work;
+  const { light, dense, matrix, step, kept, factor, column, scale, cp0, h0, s0, index } = work;
   const { residual, gasConstantJPerMolK: R, idealHelmholtz } = model;
   const [coldest, hottest] = model.temperatureRangeK;
   let active = 0;
@@ -125,14 +125,19 @@ export function solveAtVolume(model: FluidModel, z: ArrayLike<number>, target: V
     if (target.hold === "entropy") addEntropyTerms(work, active, size, scaleV, pv - pl);
 
     const settled = error < 1e-13 || (error < 1e-10 && error >= 0.5 * previous);
+    const stable = pv > 0 && pl > 0 && nv / (Vv * Vv) + light.FVV > 0 && nl / (Vl * Vl) + dense.FVV > 0;
     if (settled) {
-      state.pressurePa = R * T * pl;
-      const stiffV = nv / (Vv * Vv) + light.FVV;
-      const stiffL = nl / (Vl * Vl) + dense.FVV;
-      return state.pressurePa > 0 && pv > 0 && stiffV > 0 && stiffL > 0 && distinct(state, nv, nl) && onOuterRoots(model, work, state, nv, nl);
+      state.pressurePa = R * T * pv;
+      return stable && distinct(state, nv, nl) && onOuterRoots(model, work, state, nv, nl);
     }
+    // Newton doubles the digits: the step from here lands on round-off and need not be evaluated.
+    const last = error < 1e-8;
     previous = error;
-    if (!solveLinear(matrix, step, size)) return false;
+    kept.set(step);
+    if (!solveBordered(matrix, step, size - 1, factor, column)) {
+      step.set(kept);
+      if (!solveLinear(matrix, step, size)) return false;
+    }
 
     let length = 1;
     for (let k = 0; k < active; k++) {
@@ -171,6 +176,19 @@ export function solveAtVolume(model: FluidModel, z: ArrayLike<number>, target: V
     }
   }
   return false;
+}
+
+/** Pressure of the lighter phase, the one that round-off in a volume hardly moves. */
+function pressureOf(model: FluidModel, { light }: VolumeWork, { v, vapourVolume, temperatureK }: TwoPhaseVolumes): number {
+  model.residual.setComposition(v);
+  model.residual.evaluate(temperatureK, vapourVolume, 0, light);
+  return model.gasConstantJPerMolK * temperatureK * (sumOf(v) / vapourVolume - light.FV);
+}
+
+function sumOf(values: Float64Array): number {
+  let sum = 0;
+  for (let i = 0; i < values.length; i++) sum += values[i]!;
+  return sum;
 }
 
 /** Shortens the step until both phases stay above their smallest possible volume. */
@@ -226,6 +244,7 @@ function addEntropyTerms(work: VolumeWork, active: number, size: number, scaleV:
  * where a second "liquid" meets every condition of equilibrium.
  */
 function onOuterRoots(model: FluidModel, { trial }: VolumeWork, state: TwoPhaseVolumes, nv: number, nl: number): boolean {
+  if (!model.residual.hasFalseBranches) return true;
   const { temperatureK: T, pressurePa: p } = state;
   const isOuter = (moles: Float64Array, total: number, volume: number): boolean => {
     for (let i = 0; i < moles.length; i++) trial[i] = moles[i]! / total;
@@ -251,7 +270,10 @@ interface VolumeWork {
   light: ResidualDerivatives;
   dense: ResidualDerivatives;
   matrix: Float64Array;
+  factor: Float64Array;
+  column: Float64Array;
   step: Float64Array;
+  kept: Float64Array;
   scale: Float64Array;
   trial: Float64Array;
   cp0: Float64Array;
@@ -269,7 +291,10 @@ function volumeWork(count: number): VolumeWork {
       light: createResidualDerivatives(count),
       dense: createResidualDerivatives(count),
       matrix: new Float64Array((count + 2) ** 2),
+      factor: new Float64Array((count + 1) ** 2),
+      column: new Float64Array(count + 1),
       step: new Float64Array(count + 2),
+      kept: new Float64Array(count + 2),
       scale: new Float64Array(count + 2),
       trial: new Float64Array(count),
       cp0: new Float64Array(count),

@@ -22,6 +22,7 @@ export interface CubicComponent {
  * derivatives need three mixing sums a composition, not one a temperature. √a_i stays positive below `maximumTemperatureK`.
  */
 export class CubicResidual implements ResidualModel {
+  readonly hasFalseBranches = false;
   readonly maximumTemperatureK: number;
   private readonly count: number;
   private readonly b: Float64Array;

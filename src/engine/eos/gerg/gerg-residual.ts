@@ -16,6 +16,7 @@ const singleRootTemperature = 1.6;
  * Source   Kunz and Wagner, J. Chem. Eng. Data 57 (2012) 3032-3091; ISO 20765-2.
  */
 export class GergResidual implements ResidualModel {
+  readonly hasFalseBranches = true;
   private readonly count: number;
   private readonly terms: ReducedTerms;
   private readonly volume: ReducingFunction;

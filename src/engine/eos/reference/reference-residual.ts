@@ -11,6 +11,7 @@ const undecided = 0.01;
 
 /** F = n αr(δ, τ) of a pure fluid by its reference equation. */
 export class ReferenceResidual implements ResidualModel {
+  readonly hasFalseBranches = true;
   private readonly terms: ReducedTerms;
   private readonly reduced = createReducedDerivatives();
   private readonly point: PressurePoint = { pressure: 0, slope: 0 };
