@@ -27,9 +27,10 @@ interface Trial {
  *
  * Source   Michelsen, Fluid Phase Equilib. 9 (1982) 1-19: Wilson trials on both sides, then each component nearly pure;
  *          successive substitution, then Newton in 2√W.
+ * searches how many nearly pure starts are followed, likeliest first; the default agrees with all of them (brute-force.test.ts)
  * Throws   "no-convergence" when a search does neither: a failed test is never a verdict
  */
-export function testStability(model: FluidModel, T: number, p: number, z: ArrayLike<number>): Stability {
+export function testStability(model: FluidModel, T: number, p: number, z: ArrayLike<number>, searches = pureSearches): Stability {
   const count = z.length;
   const work = stabilityWork(count);
   const { feed, trial, d, lnK, W, best } = work;
@@ -62,7 +63,7 @@ export function testStability(model: FluidModel, T: number, p: number, z: ArrayL
   const unstable =
     consider((i) => z[i]! * Math.exp(lnK[i]!)) ||
     consider((i) => z[i]! * Math.exp(-lnK[i]!)) ||
-    likeliestPure(model, T, p, z, work).some((pure) => consider((i) => (i === pure ? 0.999 : 0.001 * z[i]!)));
+    likeliestPure(model, T, p, z, work, searches).some((pure) => consider((i) => (i === pure ? 0.999 : 0.001 * z[i]!)));
 
   return {
     stable: !unstable,
@@ -76,7 +77,14 @@ export function testStability(model: FluidModel, T: number, p: number, z: ArrayL
  * The components whose pure phase lies lowest over the tangent plane, ln φ_i(pure) − d_i: where a new phase is rich in one
  * component, it is rich in one of these. flash/brute-force.test.ts compares the verdicts with a search from every corner.
  */
-function likeliestPure(model: FluidModel, T: number, p: number, z: ArrayLike<number>, work: StabilityWork): number[] {
+function likeliestPure(
+  model: FluidModel,
+  T: number,
+  p: number,
+  z: ArrayLike<number>,
+  work: StabilityWork,
+  searches: number,
+): number[] {
   const { trial, d } = work;
   const heights: { index: number; height: number }[] = [];
   for (let i = 0; i < z.length; i++) {
@@ -87,7 +95,7 @@ function likeliestPure(model: FluidModel, T: number, p: number, z: ArrayLike<num
     heights.push({ index: i, height: trial.lnPhi[i]! - d[i]! });
   }
   heights.sort((a, b) => a.height - b.height);
-  return heights.slice(0, pureSearches).map(({ index }) => index);
+  return heights.slice(0, searches).map(({ index }) => index);
 }
 
 /** Follows W from where it stands to a stationary point of tm, or until tm < 0 is certain. */
