@@ -1,4 +1,3 @@
-import { existsSync } from "node:fs";
 import { join } from "node:path";
 import { baseEnvironment } from "./environment.mjs";
 import { root } from "./places.mjs";
@@ -7,7 +6,7 @@ import { underLock } from "./single-start.mjs";
 import { Trouble } from "./trouble.mjs";
 
 /** Worker threads of the server by the variable that tells the server where they are. */
-const threads = { EBBMARK_ENGINE_THREAD: "server-thread", EBBMARK_PASSWORD_THREAD: "password-thread" };
+export const threads = { EBBMARK_ENGINE_THREAD: "server-thread", EBBMARK_PASSWORD_THREAD: "password-thread" };
 
 /**
  * Writes the engine as one file named by its hash, and each worker thread of the server as one file beside it.
@@ -15,37 +14,17 @@ const threads = { EBBMARK_ENGINE_THREAD: "server-thread", EBBMARK_PASSWORD_THREA
  * Returns  the paths of the threads by variable name
  */
 export async function buildEngineFiles(processes, places, say) {
-  return underLock(join(places.home, "engines.lock"), say, async () => {
-    const env = { ...baseEnvironment(), EBBMARK_ENGINE_DIR: places.engines };
-    const { code, output, logFile } = await processes.runToEnd(
-      "build-engine",
-      process.execPath,
-      [join(root, "src/ops/build-engine.mjs")],
-      { cwd: root, env },
-    );
-    if (code !== 0) throw new Trouble(`The engine could not be built: ${lastWords(output)} The whole output is in ${logFile}.`);
-    return buildThreads(places.engines);
+  const env = { ...baseEnvironment(), EBBMARK_ENGINE_DIR: places.engines };
+  const run = async (name, what) => {
+    const { code, output, logFile } = await processes.runToEnd(name, process.execPath, [join(root, `src/ops/${name}.mjs`)], {
+      cwd: root,
+      env,
+    });
+    if (code !== 0) throw new Trouble(`${what} could not be built: ${lastWords(output)} The whole output is in ${logFile}.`);
+  };
+  await underLock(join(places.home, "engines.lock"), say, async () => {
+    await run("build-engine", "The engine");
+    await run("bundle-threads", "The worker threads");
   });
-}
-
-async function buildThreads(folder) {
-  const present = Object.entries(threads).filter(([, name]) => existsSync(join(root, `src/workers/${name}.ts`)));
-  const { build } = await import("esbuild");
-  await build({
-    absWorkingDir: root,
-    entryPoints: present.map(([, name]) => `src/workers/${name}.ts`),
-    outdir: folder,
-    outExtension: { ".js": ".mjs" },
-    bundle: true,
-    platform: "node",
-    format: "esm",
-    target: "node20",
-    conditions: ["react-server"],
-    // Packages in the older module format call `require` for what Node.js has built in.
-    banner: { js: 'import { createRequire } from "node:module"; const require = createRequire(import.meta.url);' },
-    logLevel: "silent",
-  }).catch((error) => {
-    throw new Trouble(`A worker thread could not be built: ${error.errors?.[0]?.text ?? error.message}`);
-  });
-  return Object.fromEntries(present.map(([variable, name]) => [variable, join(folder, `${name}.mjs`)]));
+  return Object.fromEntries(Object.entries(threads).map(([variable, name]) => [variable, join(places.engines, `${name}.mjs`)]));
 }

@@ -17,7 +17,7 @@ export async function runCommand({ places, work, cleanUp = () => {} }) {
   const processes = createProcesses(places);
   const stop = async () => {
     await processes.stopAll();
-    cleanUp();
+    await cleanUp();
   };
   const signals = onStopSignals({ stop, stopNow: processes.stopNow, say });
   let exitCode = 1;

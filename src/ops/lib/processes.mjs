@@ -84,8 +84,13 @@ export function createProcesses({ run, logs }) {
   async function runToEnd(name, command, args, options = {}) {
     const { ended, logFile } = start(name, command, args, options);
     const end = await ended;
-    if (closing) await new Promise(() => {}); // whoever is stopping us ends the program
+    await unlessStopping();
     return { ...end, output: options.stdio || !existsSync(logFile) ? "" : readFileSync(logFile, "utf8"), logFile };
+  }
+
+  /** Goes on at once, or never: whoever is stopping us ends the program, and nothing that follows may happen. */
+  async function unlessStopping() {
+    if (closing) await new Promise(() => {});
   }
 
   async function stopAll() {
@@ -94,7 +99,7 @@ export function createProcesses({ run, logs }) {
     await Promise.all([...running.values()].map((entry) => entry.ended));
   }
 
-  return { start, runToEnd, stopAll, stopNow: () => [...running.values()].forEach(({ note }) => killHard(note)) };
+  return { start, runToEnd, unlessStopping, stopAll, stopNow: () => [...running.values()].forEach(({ note }) => killHard(note)) };
 }
 
 /** Ends what an earlier start left behind. Only a process that is still the very one of the note is touched. */

@@ -1,5 +1,4 @@
-import { existsSync, linkSync, readdirSync, rmSync, writeFileSync } from "node:fs";
-import { join } from "node:path";
+import { linkSync, rmSync, writeFileSync } from "node:fs";
 import { setTimeout as sleep } from "node:timers/promises";
 import { isAlive, processIdentity } from "./process-identity.mjs";
 import { readNote } from "./processes.mjs";
@@ -42,16 +41,4 @@ export async function underLock(file, say, work) {
   } finally {
     lock.release();
   }
-}
-
-/** The homes of test runs that were killed: folders named test-PID whose process is gone. */
-export function abandonedHomes(home) {
-  if (!existsSync(home)) return [];
-  return readdirSync(home)
-    .filter((name) => /^test-\d+$/.test(name))
-    .map((name) => join(home, name))
-    .filter((folder) => {
-      const holder = readNote(join(folder, "holder.json"));
-      return !holder || !isAlive(holder);
-    });
 }

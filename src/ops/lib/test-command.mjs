@@ -1,8 +1,5 @@
-import { rmSync, writeFileSync } from "node:fs";
-import { join } from "node:path";
 import { parseTestArguments } from "./arguments.mjs";
 import { buildProduct } from "./build.mjs";
-import { fallbackFolder } from "./cluster-place.mjs";
 import { checkDisk } from "./check-disk.mjs";
 import { refuse, runCommand } from "./command.mjs";
 import { addCounts, closingLine, failure } from "./count-tests.mjs";
@@ -10,41 +7,34 @@ import { baseEnvironment } from "./environment.mjs";
 import { findChromium } from "./find-chromium.mjs";
 import { freePort } from "./free-port.mjs";
 import { installPackages } from "./install-packages.mjs";
-import { home, makePlaces, placesOf, root } from "./places.mjs";
-import { processIdentity } from "./process-identity.mjs";
-import { endLeftovers } from "./processes.mjs";
+import { root } from "./places.mjs";
 import { createProgress } from "./progress.mjs";
 import { lastJsonLine, runScript } from "./scripts.mjs";
 import { startWeb } from "./services.mjs";
-import { abandonedHomes } from "./single-start.mjs";
 import { createTestGround } from "./test-ground.mjs";
+import { abandonedHomes, makeTestHome, removeTestHome } from "./test-home.mjs";
 import { runCheck, runPlaywright, runVitest } from "./test-runners.mjs";
 import { troubleLine } from "./trouble.mjs";
 
 /** From nothing to one line that counts every test. */
 export async function test(args) {
-  const places = placesOf(join(home, `test-${process.pid}`), join(home, "test-logs"));
-  let options;
+  let options, places;
   try {
     options = parseTestArguments(args);
     checkDisk(root);
-    makePlaces(places);
-    writeFileSync(join(places.home, "holder.json"), JSON.stringify({ pid: process.pid, identity: processIdentity(process.pid) }));
+    places = makeTestHome();
   } catch (error) {
     return refuse(error);
   }
   await runCommand({
     places,
-    cleanUp: () => removeHome(places.home),
+    cleanUp: () => removeTestHome(places.home),
     work: ({ processes, say }) => runParts({ ...options, places, processes, say }),
   });
 }
 
 async function runParts({ parts, filters, places, processes, say }) {
-  for (const folder of abandonedHomes(home)) {
-    await endLeftovers(join(folder, "run"));
-    removeHome(folder);
-  }
+  for (const folder of abandonedHomes()) await removeTestHome(folder);
   const { step } = createProgress(say);
   const run = { filters, places, processes, say, step };
   const counts = [];
@@ -54,6 +44,7 @@ async function runParts({ parts, filters, places, processes, say }) {
     try {
       counts.push(...(await work(run)));
     } catch (error) {
+      await processes.unlessStopping();
       const { line, expected } = troubleLine(error);
       counts.push(failure(`${name}: ${line}`));
       if (!expected) say(error.stack);
@@ -61,7 +52,7 @@ async function runParts({ parts, filters, places, processes, say }) {
   };
 
   await step("packages", () => installPackages(processes, say));
-  run.base = { ...baseEnvironment(), FORCE_COLOR: "0" };
+  run.base = { ...baseEnvironment(), FORCE_COLOR: "0", TMPDIR: places.temporary };
   run.ground = createTestGround(run);
   await part("static", testStatic);
   await part("unit", testUnit);
@@ -119,8 +110,4 @@ async function testInBrowser({ ground, processes, places, filters, base, say, st
     E2E_SCREENS: places.screens,
   };
   return [await runPlaywright(processes, "e2e", { filters, env })];
-}
-
-function removeHome(folder) {
-  for (const path of [folder, fallbackFolder(join(folder, "cluster"))]) rmSync(path, { recursive: true, force: true });
 }
