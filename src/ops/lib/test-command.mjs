@@ -67,16 +67,11 @@ async function runParts({ parts, filters, places, processes, say }) {
 }
 
 async function testStatic({ processes, base }) {
-  const lint = await runCheck(processes, "lint", "eslint/bin/eslint.js", [".", "--max-warnings", "0"], base);
-  const types = await runCheck(processes, "typecheck", "typescript/bin/tsc", ["--noEmit"], base);
-  const engineTypes = await runCheck(
-    processes,
-    "typecheck of the engine",
-    "typescript/bin/tsc",
-    ["--noEmit", "-p", "tsconfig.engine.json"],
-    base,
-  );
-  return [lint, types, engineTypes];
+  const tsc = "typescript/bin/tsc";
+  return [
+    await runCheck(processes, "lint", [["eslint/bin/eslint.js", ".", "--max-warnings", "0"]], base),
+    await runCheck(processes, "typecheck", [[tsc, "--noEmit"], [tsc, "--noEmit", "-p", "tsconfig.engine.json"]], base), // prettier-ignore
+  ];
 }
 
 async function testUnit({ ground, processes, places, filters, base }) {

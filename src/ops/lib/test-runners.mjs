@@ -5,14 +5,18 @@ import { home, root } from "./places.mjs";
 
 const reports = join(home, "test-reports");
 
-/** Runs a check that is one command and counts as one test. Its output goes to the terminal. */
-export async function runCheck(processes, name, script, args, env) {
-  const { code } = await processes.runToEnd(name, process.execPath, [join(root, "node_modules", script), ...args], {
-    cwd: root,
-    env,
-    stdio,
-  });
-  return countCommand(name, code ?? 1);
+/** Runs a check that counts as one test: one command or several, all of which must end with 0. Their output goes to the terminal. */
+export async function runCheck(processes, name, commands, env) {
+  let worst = 0;
+  for (const [script, ...args] of commands) {
+    const { code } = await processes.runToEnd(name, process.execPath, [join(root, "node_modules", script), ...args], {
+      cwd: root,
+      env,
+      stdio,
+    });
+    worst = Math.max(worst, code ?? 1);
+  }
+  return countCommand(name, worst);
 }
 
 /** Runs projects of Vitest and counts its JSON report. */
