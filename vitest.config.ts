@@ -5,7 +5,7 @@ import { defineConfig } from "vitest/config";
 // `server-only` opens for the react-server condition alone; React's own client library closes for it, so `dom` goes without.
 const onTheServer = {
   resolve: { conditions: ["react-server"] },
-  ssr: { resolve: { conditions: ["react-server", "node", "import", "default"] } },
+  ssr: { resolve: { conditions: ["react-server", "node", "default"] } },
 };
 
 export default defineConfig({
