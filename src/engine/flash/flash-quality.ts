@@ -54,16 +54,24 @@ function pureMix(model: FluidModel, saturation: PureSaturation, Q: number, z: Ar
 type Given = { lnT: number; lnP?: undefined } | { lnP: number; lnT?: undefined };
 
 function solve(model: FluidModel, z: ArrayLike<number>, Q: number, given: Given): Equilibrium {
+  const work = createSaturationWork(z.length);
+  return result(model, z, Q, saturationPoint(model, z, Q, given, work), work);
+}
+
+/** The converged unknowns of a mixture's saturated state; `work` is left with both phases evaluated there. */
+export function saturationPoint(
+  model: FluidModel,
+  z: ArrayLike<number>,
+  Q: number,
+  given: Given,
+  work: SaturationWork,
+): SaturationPoint {
   const count = z.length;
-  const work = createSaturationWork(count);
   const [specified, value] = given.lnT !== undefined ? [count, given.lnT] : [count + 1, given.lnP];
-  const point = wilsonPoint(model, z, Q, given);
-  const direct = copyOf(point);
-  if (solveSaturation(model, z, Q, direct, specified, value, work) > 0 && plausible(direct, z)) {
-    return result(model, z, Q, direct, work);
-  }
+  const direct = wilsonPoint(model, z, Q, given);
+  if (solveSaturation(model, z, Q, direct, specified, value, work) > 0 && plausible(direct, z)) return direct;
   const continued = continuation(model, z, Q, given, work);
-  if (continued) return result(model, z, Q, continued, work);
+  if (continued) return continued;
   throw new EngineError(
     "no-convergence",
     "no saturated state was found; the temperature or pressure may lie beyond the phase envelope",

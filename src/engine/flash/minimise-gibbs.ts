@@ -14,6 +14,9 @@ const gibbsNoise = 1e-13;
  * lowest Gibbs energy: Newton in v_i scaled by √(v_i l_i/z_i), damped where the Hessian is not positive definite, and cut back
  * where the energy does not fall. It therefore cannot end above the energy it started from.
  *
+ * firstDamping   added to the scaled Hessian (unit diagonal at infinite dilution) where it is indefinite: little near a critical
+ *                point, where the curvature itself is little; more where water makes it wild
+ *
  * Source   Michelsen, Fluid Phase Equilib. 9 (1982) 21-40; Michelsen and Mollerup (2007), chapter 10.
  */
 export function minimiseGibbs(
@@ -22,6 +25,7 @@ export function minimiseGibbs(
   p: number,
   z: ArrayLike<number>,
   work: TwoPhaseWork,
+  firstDamping = 1e-9,
 ): TwoPhaseOutcome {
   const { vapour, liquid, lnK, v, l, savedV, savedL, scale, step, gradient } = work;
   const count = z.length;
@@ -75,7 +79,7 @@ export function minimiseGibbs(
     for (let i = 0; i < count; i++) scale[i] = z[i]! > 0 ? Math.sqrt((v[i]! * l[i]!) / z[i]!) : 0;
     let damping = 0;
     while (!solveStep(work, count, 1 / V, 1 / L, damping)) {
-      damping = damping === 0 ? 1e-5 : damping * 8;
+      damping = damping === 0 ? firstDamping : damping * 10;
       if (damping > 1e12) return "failed";
     }
     length = 1;

@@ -103,11 +103,17 @@ export function splitOffTrial(
       savedV.set(v);
     }
   }
-  for (let i = 0; i < z.length; i++) {
-    v[i] = savedV[i]!;
-    l[i] = z[i]! - v[i]!;
+  const start = savedV.slice();
+  let outcome: TwoPhaseOutcome = "failed";
+  for (const firstDamping of [1e-9, 1e-5, 0.05]) {
+    for (let i = 0; i < z.length; i++) {
+      v[i] = start[i]!;
+      l[i] = z[i]! - v[i]!;
+    }
+    outcome = minimiseGibbs(model, T, p, z, work, firstDamping);
+    if (outcome === "converged") break;
   }
-  return minimiseGibbs(model, T, p, z, work);
+  return outcome;
 }
 
 function gibbsOf(model: FluidModel, T: number, p: number, z: ArrayLike<number>, work: TwoPhaseWork, root: Root): number {
