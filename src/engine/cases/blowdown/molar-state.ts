@@ -1,10 +1,10 @@
 /**
- * The contents as one molar state, built again from temperature and pressure alone.
+ * The contents as one molar state, built again from the temperature, the pressure and the phases that are there.
  *
- * Closure rests on this: energy and mass of the last state come from the equation of state at (T, p), not from what the integrator added up.
+ * Closure rests on this: energy and mass of the last state come from the equation of state by way of the ideal gas and the departure, not from
+ * what the integrator added up.
  */
 import type { FluidModel } from "../../eos/fluid-model";
-import { createPhaseState } from "../../eos/fluid-model";
 import type { MolarState } from "../../account/three-steps";
 import type { Contents } from "./contents";
 
@@ -14,12 +14,12 @@ export function rebuiltState(fluid: FluidModel, contents: Contents): RebuiltStat
   const { temperatureK, pressurePa, equilibrium } = contents;
   const composition = Float64Array.from(contents.composition);
   const parts = equilibrium
-    ? equilibrium.phases.map((phase) => ({
-        share: phase.moleFraction,
-        z: phase.composition,
-        root: phase === equilibrium.phases[0] ? ("vapour" as const) : ("liquid" as const),
+    ? equilibrium.phases.map(({ moleFraction, composition: z, state }) => ({
+        share: moleFraction,
+        z,
+        v: state.molarVolumeM3PerMol,
       }))
-    : [{ share: 1, z: composition, root: "stable" as const }];
+    : [{ share: 1, z: composition, v: contents.outlet.molarVolumeM3PerMol }];
   const sum: RebuiltState = {
     temperatureK,
     pressurePa,
@@ -29,14 +29,13 @@ export function rebuiltState(fluid: FluidModel, contents: Contents): RebuiltStat
     entropyJPerMolK: 0,
     molarVolumeM3PerMol: 0,
   };
-  for (const { share, z, root } of parts) {
-    const state = fluid.phaseAtPressure(temperatureK, pressurePa, z, root, createPhaseState());
+  for (const { share, z, v } of parts) {
     const ideal = fluid.idealGas(temperatureK, pressurePa, z);
-    const departure = fluid.departures(temperatureK, state.molarVolumeM3PerMol, z);
+    const departure = fluid.departures(temperatureK, v, z);
     sum.internalEnergyJPerMol += share * (ideal.internalEnergyJPerMol + departure.internalEnergyJPerMol);
     sum.enthalpyJPerMol += share * (ideal.enthalpyJPerMol + departure.enthalpyJPerMol);
     sum.entropyJPerMolK += share * (ideal.entropyJPerMolK + departure.entropyJPerMolK);
-    sum.molarVolumeM3PerMol += share * state.molarVolumeM3PerMol;
+    sum.molarVolumeM3PerMol += share * v;
   }
   return sum;
 }

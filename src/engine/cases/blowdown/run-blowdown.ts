@@ -10,8 +10,8 @@ import { cautionsOfRun } from "./cautions-of-run";
 import { highest, lowest, type Extreme } from "./extremes";
 import { integrateRun, type Run } from "./integrate-run";
 import { rebuiltState, type RebuiltState } from "./molar-state";
-import { outletTemperatureAt, sampleAt } from "./sample";
-import { outletColumn, sampleRows, seriesOf, type Row } from "./series";
+import { sampleAt, type Sample } from "./sample";
+import { sampleRows, seriesOf, type Row } from "./series";
 import { solidMargin } from "./solid-check";
 import { makeVesselModel } from "./vessel-model";
 import { closureLimit, warningsOf } from "./warnings";
@@ -47,9 +47,7 @@ export function runBlowdown(blowdown: BlowdownCase, options: BlowdownOptions = {
     isCancelled: options.isCancelled,
   });
   const rows = sampleRows(balance, run, options.coarse ? previewGaps : 1);
-  const outletK = outletColumn(balance, rows);
-
-  const found = extremesOf(balance, rows, outletK);
+  const found = extremesOf(balance, rows);
   const ends = endStates(balance, run, found.fluid);
   const summary = summarise(balance, run, rows, found, ends);
   const warnings = warningsOf(blowdown, model, run, rows, summary);
@@ -63,7 +61,7 @@ export function runBlowdown(blowdown: BlowdownCase, options: BlowdownOptions = {
     format: "ebbmark-result/1",
     kind: "blowdown",
     summary,
-    series: seriesOf(balance, rows, outletK),
+    series: seriesOf(balance, rows),
     energyAccount: accountOf(balance, ends, found.fluid.timeS, run.endTimeS),
     verdict: closes ? assessed.verdict : "open",
     limits: closes
@@ -91,27 +89,29 @@ function refuseSolidStart(balance: Balance): void {
 
 type Extremes = { fluid: Extreme; wall: Extreme | undefined; outlet: Extreme; ventRate: Extreme };
 
-function extremesOf(balance: Balance, rows: Row[], outletK: number[]): Extremes {
-  const again = (row: Row, t: number) => sampleAt(balance, row.segment, row.step, t);
-  const column = (pick: (row: Row) => number): number[] => rows.map(pick);
+function extremesOf(balance: Balance, rows: Row[]): Extremes {
+  const of = (pick: (sample: Sample) => number) => ({
+    pick,
+    at: (row: Row, t: number) => pick(sampleAt(balance, row.segment, row.step, t)),
+  });
   return {
     fluid: lowest(
       rows,
-      column((row) => row.temperatureK),
-      (row, t) => again(row, t).temperatureK,
+      of((sample) => sample.temperatureK),
     ),
     wall: balance.model.wall
       ? lowest(
           rows,
-          column((row) => row.wallTemperatureK ?? 0),
-          (row, t) => again(row, t).wallTemperatureK ?? 0,
+          of((sample) => sample.wallTemperatureK ?? 0),
         )
       : undefined,
-    outlet: lowest(rows, outletK, (row, t) => outletTemperatureAt(balance, row.segment, row.step, t)),
+    outlet: lowest(
+      rows,
+      of((sample) => sample.outletTemperatureK),
+    ),
     ventRate: highest(
       rows,
-      column((row) => row.ventRateKgPerS),
-      (row, t) => again(row, t).ventRateKgPerS,
+      of((sample) => sample.ventRateKgPerS),
     ),
   };
 }

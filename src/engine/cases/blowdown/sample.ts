@@ -17,6 +17,8 @@ export type Sample = {
   vapourMoleFraction: number;
   liquidVolumeM3: number;
   throatTemperatureK: number;
+  /** Behind the opening, at the back pressure. */
+  outletTemperatureK: number;
 };
 
 export function sampleAt(balance: Balance, segment: Segment, step: KeptStep, t: number): Sample {
@@ -34,13 +36,13 @@ export function sampleAt(balance: Balance, segment: Segment, step: KeptStep, t: 
     vapourMoleFraction: contents.vapourMoleFraction,
     liquidVolumeM3: contents.liquidVolumeM3,
     throatTemperatureK: flow.throatTemperatureK,
+    outletTemperatureK: throttleTemperature(
+      balance.model.fluid,
+      contents.outlet,
+      contents.outletComposition,
+      balance.model.backPressurePa,
+    ),
   };
-}
-
-/** Temperature of the stream behind the opening, at the back pressure. */
-export function outletTemperatureAt(balance: Balance, segment: Segment, step: KeptStep, t: number): number {
-  const { contents } = balance.within(segment, step, t).instant;
-  return throttleTemperature(balance.model.fluid, contents.outlet, contents.outletComposition, balance.model.backPressurePa);
 }
 
 export const levelOf = (balance: Balance, sample: Sample): number | undefined =>

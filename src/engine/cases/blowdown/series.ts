@@ -6,7 +6,7 @@ import type { BlowdownSeries } from "../blowdown-result";
 import type { Balance } from "./balance";
 import type { KeptStep } from "./dense-run";
 import type { Run, Segment } from "./integrate-run";
-import { levelOf, outletTemperatureAt, sampleAt, type Sample } from "./sample";
+import { levelOf, sampleAt, type Sample } from "./sample";
 
 /** Multiplies the allowed gaps; 1 for a stored run, more for a preview. */
 export type Coarseness = number;
@@ -57,7 +57,7 @@ function fill(a: Row, b: Row, filling: Filling): void {
   }
 }
 
-export function seriesOf(balance: Balance, rows: Row[], outletTemperatureK: number[]): BlowdownSeries {
+export function seriesOf(balance: Balance, rows: Row[]): BlowdownSeries {
   const { wall } = balance.model;
   const twoPhase = rows.some((row) => row.segment.mode === "two-phase");
   const column = (pick: (row: Row) => number): number[] => rows.map(pick);
@@ -81,9 +81,6 @@ export function seriesOf(balance: Balance, rows: Row[], outletTemperatureK: numb
     ventedEnergyJ: column((row) => row.ventedEnergyJ),
     vapourMoleFraction: column((row) => row.vapourMoleFraction),
     ...(twoPhase && levels.every((level): level is number => level !== undefined) ? { liquidLevelM: levels } : {}),
-    outletTemperatureK,
+    outletTemperatureK: column((row) => row.outletTemperatureK),
   };
 }
-
-export const outletColumn = (balance: Balance, rows: Row[]): number[] =>
-  rows.map((row) => outletTemperatureAt(balance, row.segment, row.step, row.timeS));
