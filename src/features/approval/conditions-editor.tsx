@@ -9,7 +9,9 @@ type Props = { conditions: readonly string[]; onChange: (conditions: string[]) =
 export function ConditionsEditor({ conditions, onChange, disabled }: Props) {
   return (
     <section aria-label="Conditions" className="mt-[18px]">
-      <h3 className="mb-1.5">Conditions</h3>
+      <h3 className="mb-1.5">
+        Conditions <span className="font-normal text-ink-3">{conditions.length === 0 && "none"}</span>
+      </h3>
       {conditions.map((text, index) => (
         <div key={index} className="border-t border-rule-2 py-2">
           <TextArea
@@ -19,15 +21,13 @@ export function ConditionsEditor({ conditions, onChange, disabled }: Props) {
             disabled={disabled}
             onValueChange={(value) => onChange(conditions.map((one, at) => (at === index ? value : one)))}
           />
-          {conditions.length > 1 && (
-            <Button
-              kind="quiet"
-              aria-label={`Remove condition ${index + 1}`}
-              onClick={() => onChange(conditions.filter((_, at) => at !== index))}
-            >
-              Remove
-            </Button>
-          )}
+          <Button
+            kind="quiet"
+            aria-label={`Remove condition ${index + 1}`}
+            onClick={() => onChange(conditions.filter((_, at) => at !== index))}
+          >
+            Remove
+          </Button>
         </div>
       ))}
       <Button kind="quiet" onClick={() => onChange([...conditions, ""])}>

@@ -72,14 +72,11 @@ export function DecisionPanel({ screeningId, prepared, author, acknowledged, vie
         <Option choice="countersign" current={choice} onChoose={(one) => set("choice", one)} label="Countersign">
           {meanings.countersign}
         </Option>
-        <Option choice="conditions" current={choice} onChoose={(one) => set("choice", one)} label="Countersign with conditions">
-          The same, and your conditions stand on the record.
-        </Option>
         <Option choice="return" current={choice} onChoose={(one) => set("choice", one)} label="Return with remarks">
           The record goes back to {author}. Your remarks are kept in the log.
         </Option>
       </fieldset>
-      {choice === "conditions" && (
+      {choice === "countersign" && (
         <ConditionsEditor conditions={draft.conditions} onChange={(all) => set("conditions", all)} disabled={held} />
       )}
       {returns && (

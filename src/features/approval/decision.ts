@@ -3,7 +3,7 @@ import type { RecordContent } from "@/contracts/record-content";
 import { citedLine } from "./cited-line";
 import { missingAcknowledgements } from "./missing-words";
 
-export type Choice = "countersign" | "conditions" | "return";
+export type Choice = "countersign" | "return";
 export type RemarkDraft = { key: number; line: string; text: string };
 
 export type DecisionDraft = { choice: Choice | null; conditions: string[]; remarks: RemarkDraft[]; password: string };
@@ -26,8 +26,7 @@ export function missingFor(
     const empty = begun.find(({ text }) => text.trim() === "");
     if (empty) return `The remark on line ${empty.line.trim()} has no words.`;
   } else {
-    if (choice === "conditions" && !conditions.some((text) => text.trim() !== ""))
-      return "Write the condition, or countersign without one.";
+    if (conditions.some((text) => text.trim() === "")) return "A condition has no words. Write it, or remove it.";
     const unticked = missingAcknowledgements(content.cautions, acknowledged);
     if (unticked) return unticked;
   }
@@ -41,7 +40,7 @@ export const remarksToSend = (remarks: readonly RemarkDraft[], content: RecordCo
     return key ? [{ line: key, text: text.trim() }] : [];
   });
 
-export const conditionsToSend = ({ choice, conditions }: Pick<DecisionDraft, "choice" | "conditions">): string[] =>
-  choice === "conditions" ? conditions.map((text) => text.trim()).filter((text) => text !== "") : [];
+export const conditionsToSend = ({ conditions }: Pick<DecisionDraft, "conditions">): string[] =>
+  conditions.map((text) => text.trim());
 
 const isBegun = ({ line, text }: RemarkDraft): boolean => line.trim() !== "" || text.trim() !== "";
