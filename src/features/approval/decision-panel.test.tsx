@@ -136,6 +136,21 @@ describe("the decision panel", () => {
     expect(sent[3]?.body).toMatchObject({ nonce: later.nonce, idempotencyKey: later.idempotencyKey });
   });
 
+  it("sends the conditions that were written, and waits for the words of one that is empty", async () => {
+    draw();
+    answers = [ok(ceremony), ok(receipt)];
+    await choose("Countersign");
+    await userEvent.type(password(), "correct horse battery");
+    await userEvent.click(screen.getByRole("button", { name: "Add a condition" }));
+    expect(screen.getByRole("button", { name: "Countersign" })).toHaveAccessibleDescription(
+      "A condition has no words. Write it, or remove it.",
+    );
+    await userEvent.type(screen.getByLabelText("Condition 1"), "Measure the wall.");
+    await userEvent.click(screen.getByRole("button", { name: "Countersign" }));
+    await screen.findByRole("status", { name: "Receipt" });
+    expect(sent[1]?.body.conditions).toEqual(["Measure the wall."]);
+  });
+
   it("refuses a remark on a line that the record has not", async () => {
     draw();
     await choose("Return with remarks");

@@ -28,7 +28,7 @@ export function DecisionPanel({ screeningId, prepared, author, acknowledged, vie
   const { content, contentSha256 } = prepared;
   const [draft, setDraft] = useState<DecisionDraft>({
     choice: null,
-    conditions: [""],
+    conditions: [],
     remarks: [{ key: 0, line: "", text: "" }],
     password: "",
   });
