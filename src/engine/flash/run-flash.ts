@@ -3,6 +3,7 @@ import { createFluidModel } from "../eos/create-fluid-model";
 import type { FluidModel } from "../eos/fluid-model";
 import { stateWarnings } from "../eos/state-warnings";
 import { summarise } from "../path/run-path";
+import { solidWarnings } from "../solids/solid-warnings";
 import type { Equilibrium, EquilibriumPhase } from "./equilibrium";
 import { flashPH, flashPS } from "./flash-ph";
 import { flashPT } from "./flash-pt";
@@ -27,7 +28,7 @@ export function runFlash(document: FlashCase): FlashResult {
       ...(single ? { soundSpeedMPerS: single.state.soundSpeedMPerS } : {}),
     },
     phases: state.phases.map((phase) => describe(model, phase)),
-    warnings: [...phaseWarnings(model, state), ...stateWarnings(model, [state.temperatureK])],
+    warnings: [...phaseWarnings(model, state), ...solidWarnings(model, state), ...stateWarnings(model, [state.temperatureK])],
   };
 }
 

@@ -6,6 +6,7 @@ import { EngineError } from "../errors";
 import type { Equilibrium } from "../flash/equilibrium";
 import { flashPT } from "../flash/flash-pt";
 import { phaseWarnings } from "../flash/phase-warnings";
+import { solidWarnings } from "../solids/solid-warnings";
 import { changeOfState } from "./change-of-state";
 
 /** kind "path". Throws EngineError with the path of the field. */
@@ -22,6 +23,8 @@ export function runPath(document: PathCase): PathResult {
     warnings: [
       ...phaseWarnings(model, from),
       ...phaseWarnings(model, to),
+      ...solidWarnings(model, from),
+      ...solidWarnings(model, to),
       ...stateWarnings(model, [from.temperatureK, to.temperatureK]),
     ],
   };
