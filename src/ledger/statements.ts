@@ -19,6 +19,8 @@ export type AcknowledgedCaution = { id: string; words: string };
 type Common<Act extends SigningAct> = {
   act: Act;
   authentication: { method: SigningMethod };
+  /** How the person proved who they are, and under which policy, in the words shown ("Password again (demo policy)"). */
+  factor: string;
   /** `sha256` names the stored record content, the bytes the signing page was drawn from. */
   content: { sha256: string };
   meaning: string;

@@ -25,6 +25,8 @@ export type SigningRequest = {
   idempotencyKey: string;
   /** The hash the signing page showed. */
   shownSha256: string;
+  /** How the person proved who they are, in the words shown. */
+  factor: string;
 };
 
 /** The members that all statements share, from what the database knows now. */
@@ -41,6 +43,7 @@ export async function commonStatement<Act extends SigningAct>({ read, write }: D
     act,
     authentication: { method: open.method satisfies SigningMethod },
     content: { sha256: request.shownSha256 },
+    factor: request.factor,
     meaning: meanings[act],
     nonce: request.nonce,
     person: who,

@@ -1,9 +1,9 @@
 import "server-only";
-import { and, desc, eq } from "drizzle-orm";
+import { and, desc, eq, sql } from "drizzle-orm";
 import type { Transaction } from "@db/clients";
 import { draft } from "@db/schema/app/draft";
 import { screening } from "@db/schema/app/screening";
-import { revision } from "@db/schema/ledger/entry";
+import { entry, revision } from "@db/schema/ledger/entry";
 import { person } from "@db/schema/ledger/person";
 import type { DraftView, PreparedView, ScreeningView } from "@/contracts/views";
 import { mayDo } from "@/server/auth/authorise";
@@ -12,7 +12,7 @@ import { reading } from "@/server/reading";
 import { storedRecord, storedRuns } from "./content";
 import { findMatter, matterOf, openDraft, type Found } from "./matter";
 import { permissions } from "./permissions";
-import { selectRows, stateOf, toRow } from "./rows";
+import { newestEntry, selectRows, stateOf, toRow } from "./rows";
 import { listSignatures, remarksOf } from "./signatures";
 
 export { listScreenings } from "./list";
@@ -76,14 +76,15 @@ async function listRevisions(
   signedOnly: boolean,
 ): Promise<ScreeningView["revisions"]> {
   const rows = await transaction
-    .select({ rev: draft.rev, state: stateOf, updatedAt: draft.updatedAt, signedSeq: revision.signedSeq })
+    .select({ rev: draft.rev, state: stateOf, updatedAt: draft.updatedAt, signedSeq: revision.signedSeq, entryAt: entry.at })
     .from(draft)
     .leftJoin(revision, and(eq(revision.screeningId, draft.screeningId), eq(revision.rev, draft.rev)))
+    .leftJoin(entry, sql`${entry.seq} = ${newestEntry}`)
     .where(eq(draft.screeningId, screeningId))
     .orderBy(desc(draft.rev));
   return rows
     .filter(({ signedSeq }) => !signedOnly || signedSeq !== null)
-    .map(({ rev, state, updatedAt }) => ({ rev, state, changedAt: updatedAt.toISOString() }));
+    .map(({ rev, state, updatedAt, entryAt }) => ({ rev, state, changedAt: entryAt ?? updatedAt.toISOString() }));
 }
 
 async function draftView(transaction: Transaction, viewer: Viewer, found: Found, kept: DraftRow): Promise<DraftView> {

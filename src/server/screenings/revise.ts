@@ -35,17 +35,15 @@ export async function newRevision(
       .where(and(eq(draft.screeningId, screeningId), eq(draft.rev, fromRev)));
     if (!last) throw new Refusal("not-found");
     const rev = fromRev + 1;
-    await transaction
-      .insert(draft)
-      .values({
-        screeningId,
-        rev,
-        authorId: viewer.id,
-        updatedBy: viewer.id,
-        document: last.document,
-        replacesRev: fromRev,
-        reason,
-      });
+    await transaction.insert(draft).values({
+      screeningId,
+      rev,
+      authorId: viewer.id,
+      updatedBy: viewer.id,
+      document: last.document,
+      replacesRev: fromRev,
+      reason,
+    });
     return { id: screeningId, record: recordName(found.screening.number), rev };
   }).catch(
     alreadyExists(

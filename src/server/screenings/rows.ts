@@ -22,7 +22,8 @@ export const newest = (which: "any" | "signed"): SQL =>
 
 /** Who signed it; who began it while nobody has. */
 const authorOf = sql`coalesce(${revision.author}, ${draft.authorId})`;
-const newestEntry = sql`coalesce(${revision.closedSeq}, ${revision.decidedSeq}, ${revision.signedSeq})`;
+/** The entry that brought a signed revision to where it stands. */
+export const newestEntry = sql`coalesce(${revision.closedSeq}, ${revision.decidedSeq}, ${revision.signedSeq})`;
 
 export function selectRows(transaction: Transaction, which: "any" | "signed", where: SQL | undefined) {
   return transaction

@@ -5,10 +5,11 @@ import type { CeremonyAct } from "@db/schema/app/ceremony";
 import type { Viewer } from "@/server/auth/viewer";
 import { databases } from "@/server/database";
 import type { Receipt } from "@/server/ledger/call";
+import type { SigningRequest } from "@/server/ledger/statement";
 import { countersignRevision, returnRevision, signRevision, withdrawRevision } from "@/server/ledger/write";
 import { reading } from "@/server/reading";
 import { Refusal } from "@/server/refusal";
-import { authoriseSigning, proveOnPage } from "./ceremony";
+import { authoriseSigning, methodWords, proveOnPage } from "./ceremony";
 import { storedRecord } from "./content";
 import { parseLineKey } from "@/contracts/lines/registry";
 import { requireMatter } from "./matter";
@@ -60,19 +61,13 @@ async function act(
   screeningId: string,
   name: CeremonyAct,
   { rev, nonce, idempotencyKey, shownSha256, password }: Common,
-  file: (common: {
-    personId: string;
-    screeningId: string;
-    rev: number;
-    nonce: string;
-    idempotencyKey: string;
-    shownSha256: string;
-  }) => Promise<Receipt>,
+  file: (common: SigningRequest) => Promise<Receipt>,
 ): Promise<ReceiptView> {
   const found = await reading(viewer, (transaction) => requireMatter(transaction, screeningId));
   authoriseSigning(viewer, found, name, rev);
   await proveOnPage(viewer, { nonce, idempotencyKey, password });
-  const receipt = await file({ personId: viewer.id, screeningId, rev, nonce, idempotencyKey, shownSha256 });
+  const factor = methodWords();
+  const receipt = await file({ personId: viewer.id, screeningId, rev, nonce, idempotencyKey, shownSha256, factor });
   return { seq: receipt.seq, at: receipt.at, hash: receipt.leaf, contentSha256: shownSha256 };
 }
 

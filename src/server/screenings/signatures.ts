@@ -17,12 +17,11 @@ type SignatureKind = keyof typeof actOfKind;
 /** The part of a statement that sheets show; what else it holds stays where it is. */
 const statementSchema = z.object({
   meaning: z.string(),
-  method: z.string().optional(),
-  authentication: z.object({ method: z.string() }),
   person: z.object({ badge: z.string(), printedName: z.string(), role: z.enum(roles) }),
   conditions: z.array(z.string()).default([]),
   remarks: z.array(z.object({ line: z.string(), text: z.string() })).default([]),
   reason: z.string().optional(),
+  authentication: z.object({ method: z.string() }),
   factor: z.string().optional(),
 });
 

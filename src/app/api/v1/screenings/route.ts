@@ -1,12 +1,13 @@
 import { createScreeningSchema, screeningFilterSchema } from "@/contracts/requests";
 import { defineRoute } from "@/server/door";
 import { createScreening } from "@/server/screenings/create";
+import { listCautions } from "@/server/screenings/list-cautions";
 import { listScreenings } from "@/server/screenings/list";
 
 export const GET = defineRoute({
   act: "screening.list",
   query: screeningFilterSchema,
-  work: (viewer, { query }) => listScreenings(viewer, query),
+  work: async (viewer, { query }) => ({ ...(await listScreenings(viewer, query)), cautions: listCautions }),
 });
 
 export const POST = defineRoute({
