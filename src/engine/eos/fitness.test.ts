@@ -1,0 +1,60 @@
+import { describe, expect, it } from "vitest";
+import type { FluidSpec } from "../cases/fluid-spec";
+import { fitness } from "./fitness";
+import { spread } from "./spread";
+
+const fluid = (composition: Record<string, number>): FluidSpec => ({
+  equation: "peng-robinson-1976",
+  components: Object.entries(composition).map(([id, moleFraction]) => ({ id, moleFraction })),
+});
+const verdicts = (spec: FluidSpec, temperatureK: number, pressurePa: number) =>
+  Object.fromEntries(fitness(spec, { temperatureK, pressurePa }).map((entry) => [entry.equation, entry]));
+
+describe("the fitness of each equation", () => {
+  it("puts the reference equation of a pure fluid first and measures the others against it", () => {
+    const found = verdicts(fluid({ methane: 1 }), 300, 1e7);
+    expect(found.reference!.verdict).toBe("first");
+    expect(found["peng-robinson-1976"]!.verdict).toBe("fit");
+    expect(found["van-der-waals"]!.verdict).toBe("comparison-only");
+    // deviations of Z at this state: SRK +1.8, PR -2.5, RK +0.1, vdW -4.8 % (docs/methods/fitness.md); density is the reciprocal
+    expect(found["soave-redlich-kwong"]!.deviation!.densityPercent).toBeCloseTo(-1.8, 0);
+    expect(found["peng-robinson-1976"]!.deviation!.densityPercent).toBeCloseTo(2.5, 0);
+    expect(found["van-der-waals"]!.deviation!.densityPercent).toBeCloseTo(5, 0);
+  });
+
+  it("puts GERG-2008 first for a natural gas and says when its range is left", () => {
+    const gas = fluid({ methane: 0.9, ethane: 0.06, nitrogen: 0.04 });
+    expect(verdicts(gas, 300, 7e6)["gerg-2008"]!.verdict).toBe("first");
+    expect(verdicts(gas, 500, 7e6)["gerg-2008"]!.verdict).toBe("uncertain");
+    expect(verdicts(gas, 300, 7e6).reference!.verdict).toBe("not-applicable");
+  });
+
+  it("doubts cubic equations near the critical point, with hydrogen, and with water", () => {
+    expect(verdicts(fluid({ propane: 1 }), 372, 4.3e6)["peng-robinson-1976"]!.verdict).toBe("uncertain");
+    expect(verdicts(fluid({ hydrogen: 0.5, methane: 0.5 }), 300, 1e7)["peng-robinson-1976"]!.verdict).toBe("uncertain");
+    expect(verdicts(fluid({ methane: 0.98, water: 0.02 }), 400, 1e6)["soave-redlich-kwong"]!.verdict).toBe("uncertain");
+  });
+});
+
+describe("the spread of a quantity over equations", () => {
+  it("gives lowest and highest, and lists a refusal as one", () => {
+    const found = spread(
+      fluid({ methane: 0.9, ethane: 0.1 }),
+      ["peng-robinson-1976", "soave-redlich-kwong", "gerg-2008", "reference"],
+      (model) => model.phaseAtPressure(300, 1e7, model.feed).compressibility,
+    );
+    expect(found.entries).toHaveLength(4);
+    expect(found.entries[3]).toHaveProperty("refused");
+    expect(found.high! - found.low!).toBeGreaterThan(0.005);
+    expect(found.high! - found.low!).toBeLessThan(0.06);
+  });
+
+  it("has no range when every equation refuses", () => {
+    const found = spread(
+      fluid({ methane: 1 }),
+      ["peng-robinson-1976"],
+      (model) => model.phaseAtPressure(1e6, 1e5, [1]).compressibility,
+    );
+    expect(found.low).toBeUndefined();
+  });
+});
