@@ -2,6 +2,7 @@ import Form from "next/form";
 import type { ReactNode } from "react";
 import { Button } from "@/components/button/button";
 import { ButtonLink } from "@/components/button/button-link";
+import { Chevron } from "@/components/line/chevron";
 import { pages } from "@/contracts/paths";
 import type { LogFilter } from "@/contracts/requests";
 import { entryKinds } from "@/ledger/entry-kinds";
@@ -23,7 +24,7 @@ export function LogFilterForm({ filter }: { filter: Partial<LogFilter> }) {
         <input name="badge" defaultValue={badge} maxLength={12} placeholder="anyone" size={8} className="field-value words" />
       </Labelled>
       <Labelled label="What">
-        <select name="kind" defaultValue={kind} className="field-value words">
+        <select name="kind" defaultValue={kind} className="field-value words !pr-7">
           <option value="">anything</option>
           {Object.entries(entryKinds).map(([value, { words }]) => (
             <option key={value} value={value}>
@@ -31,6 +32,7 @@ export function LogFilterForm({ filter }: { filter: Partial<LogFilter> }) {
             </option>
           ))}
         </select>
+        <Chevron />
       </Labelled>
       <Labelled label="From">
         <input name="from" type="date" defaultValue={from} className="field-value words" />
@@ -52,7 +54,7 @@ function Labelled({ label, children }: { label: string; children: ReactNode }) {
   return (
     <label className="grid gap-1 text-label text-ink-3 phone:flex-[1_0_45%]">
       {label}
-      <span className="field-box">{children}</span>
+      <span className="field-box relative">{children}</span>
     </label>
   );
 }

@@ -44,7 +44,7 @@ export function SignInAxis() {
       <text x={left + 2} y="92" fontSize="15" className="fill-ink-3">
         pressure, bar(g)
       </text>
-      <text x={right - 24} y="780" textAnchor="end" fontSize="15" className="fill-ink-3">
+      <text x="900" y="780" textAnchor="end" fontSize="15" className="fill-ink-3">
         time since the valve opened, min
       </text>
     </svg>

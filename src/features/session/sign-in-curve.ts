@@ -12,7 +12,7 @@ const startBarGauge = 84;
 const timeConstantMin = 6.6;
 
 export const targetBarGauge = 6.9;
-export const lastMinute = 22;
+export const lastMinute = 24;
 
 const startBar = startBarGauge + atmosphereBar;
 const exponent = (2 * kappa) / (kappa - 1);

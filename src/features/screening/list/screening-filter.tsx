@@ -1,6 +1,7 @@
 import Form from "next/form";
 import { Button } from "@/components/button/button";
 import { ButtonLink } from "@/components/button/button-link";
+import { Chevron } from "@/components/line/chevron";
 import { pages } from "@/contracts/paths";
 import type { ScreeningFilter } from "@/contracts/requests";
 import { revisionStates, type RevisionState, type SectionView } from "@/contracts/views";
@@ -38,8 +39,8 @@ export function ScreeningFilterForm({
       </label>
       <label className="grid gap-1 text-label text-ink-3 phone:flex-[1_0_45%]">
         State
-        <span className="field-box">
-          <select name="state" defaultValue={state} className="field-value words">
+        <span className="field-box relative">
+          <select name="state" defaultValue={state} className="field-value words !pr-7">
             <option value="">any</option>
             {revisionStates.map((one) => (
               <option key={one} value={one}>
@@ -47,12 +48,13 @@ export function ScreeningFilterForm({
               </option>
             ))}
           </select>
+          <Chevron />
         </span>
       </label>
       <label className="grid gap-1 text-label text-ink-3 phone:flex-[1_0_45%]">
         Section
-        <span className="field-box">
-          <select name="sectionId" defaultValue={sectionId} className="field-value words">
+        <span className="field-box relative">
+          <select name="sectionId" defaultValue={sectionId} className="field-value words !pr-7">
             <option value="">any</option>
             {sections.map(({ id, tag, name, facility }) => (
               <option key={id} value={id}>
@@ -60,6 +62,7 @@ export function ScreeningFilterForm({
               </option>
             ))}
           </select>
+          <Chevron />
         </span>
       </label>
       <Button type="submit">Show</Button>
