@@ -41,6 +41,7 @@ export function librarySubstance(row: LibraryRow): Substance {
     criticalTemperatureK: row.Tc_K,
     criticalPressurePa: row.Pc_Pa,
     acentricFactor: row.acentricFactor,
+    criticalVolumeM3PerMol: row.Vc_m3_per_mol,
     heatCapacity: {
       form: "planck-einstein",
       c0: row.cp0.c0,

@@ -9,6 +9,8 @@ export interface Substance {
   criticalTemperatureK: number;
   criticalPressurePa: number;
   acentricFactor: number;
+  /** Only transport properties need it; estimated from the acentric factor where it is not held. */
+  criticalVolumeM3PerMol?: number;
   heatCapacity: HeatCapacity;
   /** Where the heat-capacity form was fitted; outside it the form extrapolates and a warning is due. */
   heatCapacityRangeK: readonly [number, number];
