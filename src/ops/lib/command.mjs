@@ -14,6 +14,7 @@ const say = (line) => process.stdout.write(`${line}\n`);
  * cleanUp   runs last, once, after all processes have ended
  */
 export async function runCommand({ places, work, cleanUp = () => {} }) {
+  outliveTerminal();
   const processes = createProcesses(places);
   const stop = async () => {
     await processes.stopAll();
@@ -35,6 +36,11 @@ export async function runCommand({ places, work, cleanUp = () => {} }) {
     exitCode = 1;
   }
   if (!signals.stopping) process.exit(exitCode);
+}
+
+/** A closed terminal refuses our last words; without a listener that refusal would end us before the rest is ended. */
+function outliveTerminal() {
+  for (const stream of [process.stdout, process.stderr]) stream.on("error", () => {});
 }
 
 /** Prints what went wrong before there was anything to end, and ends the program. */
