@@ -171,7 +171,12 @@ describe("what is not signed", () => {
   it("is not there for the auditor", async () => {
     expect((await ask("/api/v1/screenings/[screeningId]", "GET", inside.auditor)).status).toBe(404);
     const list = await ask("/api/v1/screenings", "GET", inside.auditor);
-    expect(list.body).toEqual({ rows: [], total: 0, next: null });
+    expect(list.body).toMatchObject({
+      rows: [],
+      total: 0,
+      next: null,
+      cautions: [expect.stringContaining("This is a screening.")],
+    });
   });
 
   it("shows on no desk but those of the facility", async () => {
