@@ -25,6 +25,8 @@ export type BlowdownSummary = {
   timeToHalfGaugePressureS?: number;
   timeToSixPointNineBarGaugeS?: number;
   timeToTargetPressureS?: number;
+  /** The bore that was searched for, where the case asks for one. */
+  sizedDiameterM?: number;
   energyVentedJ: number;
   heatFromWallJ: number;
   heatFromOutsideJ: number;

@@ -9,13 +9,15 @@
  * Returns  T2 [K]
  * Throws   EngineError "no-convergence" | "outside-validity"
  */
-import { createPhaseState, type FluidModel, type PhaseState } from "../eos/fluid-model";
+import { createPhaseState, type FluidModel } from "../eos/fluid-model";
 import { EngineError } from "../errors";
 import { flashPH } from "../flash/flash-ph";
 
+export type Stream = { temperatureK: number; pressurePa: number; enthalpyJPerMol: number };
+
 const scratch = createPhaseState();
 
-export function throttleTemperature(fluid: FluidModel, stream: PhaseState, z: ArrayLike<number>, pressurePa: number): number {
+export function throttleTemperature(fluid: FluidModel, stream: Stream, z: ArrayLike<number>, pressurePa: number): number {
   if (pressurePa >= stream.pressurePa) return stream.temperatureK;
   return (
     asOnePhase(fluid, stream, z, pressurePa) ??
@@ -25,7 +27,7 @@ export function throttleTemperature(fluid: FluidModel, stream: PhaseState, z: Ar
 
 function asOnePhase(
   fluid: FluidModel,
-  { enthalpyJPerMol, temperatureK: guessK }: PhaseState,
+  { enthalpyJPerMol, temperatureK: guessK }: Stream,
   z: ArrayLike<number>,
   pressurePa: number,
 ): number | undefined {

@@ -2,27 +2,30 @@
  * The balances of a rigid vessel with one outlet, as the right-hand side of dy/dt.
  *
  *   dn_i/dt = −ṅ y_i        dU/dt = −ṅ h + Q_wall (+ Q_out without a wall)        dE_wall/dt = Q_out − Q_wall
- *   ṅ = C_d A(t) G / M       Q_wall = h_f S (T_w − T)
+ *   ṅ = stroke(t) W / M       Q_wall = h_f S (T_w − T)
  *
- * with y_i, h, M of the stream that leaves (h its stagnation enthalpy) and G from the nozzle. Kinetic energy inside is neglected.
+ * with y_i, h, M of the stream that leaves (h its stagnation enthalpy) and W from the opening. Kinetic energy inside is neglected.
  * Carried along: mass vented, enthalpy vented, heat from the wall, heat from outside.
  *
  * Scales   amounts by n0, every energy by n0 R T0
  */
 import { EngineError } from "../../errors";
-import { assemble } from "../../flash/assemble";
-import { equilibriumNozzle } from "../../flow/equilibrium-nozzle";
-import { frozenNozzle, type NozzleFlow } from "../../flow/frozen-nozzle";
 import { ContentsFinder, type Contents, type Effort, type PhaseMode } from "./contents";
 import { DenseRun, type KeptStep } from "./dense-run";
+import { heatFlows, type HeatFlows } from "./heat-flows";
+import { leavingStreams } from "./leaving-stream";
+import { outflow, type Outflow } from "./outflow";
 import type { VesselModel } from "./vessel-model";
 
 /** Everything about one instant that a series, an event or a limit may ask for. */
 export type Instant = {
   contents: Contents;
-  flow: NozzleFlow;
+  /** Through the opening, fully open. */
+  flow: Outflow;
+  /** Part of the stroke that the valve has made. */
+  stroke: number;
   ventRateKgPerS: number;
-  wallTemperatureK: number | undefined;
+  heat: HeatFlows;
 };
 
 /** After so many refusals in a row the long searches are worth their time. */
@@ -81,27 +84,15 @@ export class Balance {
   at(t: number, y: readonly number[], mode: PhaseMode, effort: Effort = "thorough"): Instant {
     const { last } = this;
     if (last && last.y === y && last.mode === mode && last.t === t) return last.instant;
-    const { wall, effectiveAreaM2, openingTimeS } = this.model;
+    const { fluid, vessel, wall, opening, openingTimeS, from } = this.model;
     const contents = this.finder.find(mode, this.molesOf(y), this.internalEnergyJ(y), effort);
-    const opening = openingTimeS > 0 ? Math.min(t / openingTimeS, 1) : 1;
-    const flow = this.nozzle(contents);
-    const instant: Instant = {
-      contents,
-      flow,
-      ventRateKgPerS: opening * effectiveAreaM2 * flow.massFluxKgPerM2S,
-      wallTemperatureK: wall?.temperatureAtK(this.wallEnergyJ(y)),
-    };
+    const flow = outflow(fluid, opening, leavingStreams(fluid, contents, from, vessel.volumeM3));
+    const stroke = openingTimeS > 0 ? Math.min(t / openingTimeS, 1) : 1;
+    const wallMeanK = wall?.temperatureAtK(this.wallEnergyJ(y));
+    const heat = heatFlows(this.model, contents.temperatureK, wallMeanK, contents.liquidVolumeM3);
+    const instant: Instant = { contents, flow, stroke, ventRateKgPerS: stroke * flow.rateKgPerS, heat };
     this.last = { y, mode, t, instant };
     return instant;
-  }
-
-  private nozzle({ outlet, outletComposition: z }: Contents): NozzleFlow {
-    const { fluid, flowModel, backPressurePa } = this.model;
-    if (flowModel === "frozen") return frozenNozzle(fluid, outlet, z, backPressurePa);
-    const atRest = assemble(fluid, outlet.temperatureK, outlet.pressurePa, [
-      { moleFraction: 1, composition: z, molarVolume: outlet.molarVolumeM3PerMol },
-    ]);
-    return equilibriumNozzle(fluid, atRest, z, backPressurePa);
   }
 
   /** dy/dt, or undefined for a trial state that no fluid can be in. */
@@ -115,24 +106,20 @@ export class Balance {
       return undefined;
     }
     this.refusedInARow = 0;
-    const { contents, ventRateKgPerS, wallTemperatureK } = instant;
+    const { contents, flow, stroke, ventRateKgPerS, heat } = instant;
     if (!(contents.pressurePa > 0)) return undefined;
-    const { fluid, filmWPerK, outside, start } = this.model;
-    const { outlet, outletComposition: leaving } = contents;
-    const molesPerS = ventRateKgPerS / fluid.mixtureMolarMass(leaving);
-    const enthalpyW = molesPerS * outlet.enthalpyJPerMol;
-    const fromWallW = wallTemperatureK === undefined ? 0 : filmWPerK * (wallTemperatureK - contents.temperatureK);
-    const fromOutsideW = outside(wallTemperatureK ?? contents.temperatureK);
-    const intoFluidW = wallTemperatureK === undefined ? fromOutsideW : fromWallW;
+    const { wall, start } = this.model;
+    const enthalpyW = stroke * flow.enthalpyW;
+    const intoFluidW = wall ? heat.fromWallW : heat.fromOutsideW;
 
     const rates = new Array<number>(this.size);
-    for (let i = 0; i < this.count; i++) rates[i] = (-molesPerS * (leaving[i] ?? 0)) / start.totalMolesMol;
+    for (let i = 0; i < this.count; i++) rates[i] = (-stroke * (flow.molesPerS[i] ?? 0)) / start.totalMolesMol;
     rates[this.count] = (intoFluidW - enthalpyW) / this.energyScaleJ;
-    rates[this.count + 1] = wallTemperatureK === undefined ? 0 : (fromOutsideW - fromWallW) / this.energyScaleJ;
+    rates[this.count + 1] = wall ? (heat.fromOutsideW - heat.fromWallW) / this.energyScaleJ : 0;
     rates[this.count + 2] = ventRateKgPerS / this.massScaleKg;
     rates[this.count + 3] = enthalpyW / this.energyScaleJ;
-    rates[this.count + 4] = fromWallW / this.energyScaleJ;
-    rates[this.count + 5] = fromOutsideW / this.energyScaleJ;
+    rates[this.count + 4] = heat.fromWallW / this.energyScaleJ;
+    rates[this.count + 5] = heat.fromOutsideW / this.energyScaleJ;
     return rates;
   }
 }

@@ -7,6 +7,7 @@
  */
 import { createPhaseState, type FluidModel, type PhaseState } from "../../eos/fluid-model";
 import { EngineError } from "../../errors";
+import { classifyPhase } from "../../flash/classify-phase";
 import type { Equilibrium } from "../../flash/equilibrium";
 import { flashUV } from "../../flash/flash-uv";
 import { onlyComponent } from "../../flash/saturation-pure";
@@ -30,9 +31,11 @@ export type Contents = {
   phases: 1 | 2;
   vapourMoleFraction: number;
   liquidVolumeM3: number;
-  /** The stream at the outlet, at rest: the vapour of two phases, or the one phase there is. */
-  outlet: PhaseState;
-  outletComposition: Float64Array;
+  /** The one phase there is, or the lighter of two. */
+  lightest: PhaseState;
+  lightestComposition: Float64Array;
+  /** One phase, and that a liquid. */
+  isLiquidFull: boolean;
   /** Present where two phases were found. */
   equilibrium: Equilibrium | undefined;
 };
@@ -76,16 +79,19 @@ export class ContentsFinder {
   private homogeneous(total: number, u: number, v: number): Contents {
     const state = this.fluid.phaseFromEnergy(u, v, this.z, this.guessK, this.state);
     this.guessK = state.temperatureK;
+    const { temperatureK, pressurePa, molarVolumeM3PerMol } = state;
+    const isLiquidFull = classifyPhase(this.fluid, temperatureK, pressurePa, molarVolumeM3PerMol, this.z) === "liquid";
     return {
-      temperatureK: state.temperatureK,
-      pressurePa: state.pressurePa,
+      temperatureK,
+      pressurePa,
       composition: this.z,
       totalMolesMol: total,
       phases: 1,
-      vapourMoleFraction: 1,
-      liquidVolumeM3: 0,
-      outlet: state,
-      outletComposition: this.z,
+      vapourMoleFraction: isLiquidFull ? 0 : 1,
+      liquidVolumeM3: isLiquidFull ? this.volumeM3 : 0,
+      lightest: state,
+      lightestComposition: this.z,
+      isLiquidFull,
       equilibrium: undefined,
     };
   }
@@ -108,8 +114,9 @@ export class ContentsFinder {
         : found.phase === "liquid"
           ? this.volumeM3
           : 0,
-      outlet: light.state,
-      outletComposition: light.composition,
+      lightest: light.state,
+      lightestComposition: light.composition,
+      isLiquidFull: !dense && found.phase === "liquid",
       equilibrium: dense ? found : undefined,
     };
   }

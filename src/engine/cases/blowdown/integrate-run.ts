@@ -180,8 +180,7 @@ function solidEvent(balance: Balance, mode: PhaseMode, curves: readonly SolidCur
   ];
 }
 
-const fullRate = (balance: Balance, y: number[], mode: PhaseMode): number =>
-  balance.model.effectiveAreaM2 * balance.at(0, y, mode).flow.massFluxKgPerM2S;
+const fullRate = (balance: Balance, y: number[], mode: PhaseMode): number => balance.at(0, y, mode).flow.rateKgPerS;
 
 function progress(timePart: number, pressurePa: number, startPa: number, stopPa: number): number {
   const fallen = Math.log(startPa / pressurePa) / Math.log(startPa / stopPa);

@@ -19,7 +19,7 @@ export function rebuiltState(fluid: FluidModel, contents: Contents): RebuiltStat
         z,
         v: state.molarVolumeM3PerMol,
       }))
-    : [{ share: 1, z: composition, v: contents.outlet.molarVolumeM3PerMol }];
+    : [{ share: 1, z: composition, v: contents.lightest.molarVolumeM3PerMol }];
   const sum: RebuiltState = {
     temperatureK,
     pressurePa,

@@ -7,13 +7,13 @@ import type { Contents } from "./contents";
 
 const scratch = createPhaseState();
 
-export function isStableAlone(fluid: FluidModel, { temperatureK, pressurePa, composition, outlet }: Contents): boolean {
-  if (!(pressurePa > 0) || !(outlet.pressureByVolume < 0)) return false;
+export function isStableAlone(fluid: FluidModel, { temperatureK, pressurePa, composition, lightest }: Contents): boolean {
+  if (!(pressurePa > 0) || !(lightest.pressureByVolume < 0)) return false;
   // A pure fluid has no other composition to split into: what tells is whether its volume lies between the saturated ones.
   if (onlyComponent(composition) >= 0)
-    return insideDome(fluid, temperatureK, outlet.molarVolumeM3PerMol, composition) === undefined;
+    return insideDome(fluid, temperatureK, lightest.molarVolumeM3PerMol, composition) === undefined;
   // Of several roots the stable one must be ours.
   const { molarVolumeM3PerMol } = fluid.phaseAtPressure(temperatureK, pressurePa, composition, "stable", scratch);
-  if (Math.abs(molarVolumeM3PerMol / outlet.molarVolumeM3PerMol - 1) > 1e-6) return false;
+  if (Math.abs(molarVolumeM3PerMol / lightest.molarVolumeM3PerMol - 1) > 1e-6) return false;
   return fluid.stability(temperatureK, pressurePa, composition).stable;
 }

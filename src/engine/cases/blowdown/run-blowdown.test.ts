@@ -243,21 +243,14 @@ describe("runBlowdown", () => {
     ).toBe("solid-phase");
   });
 
-  it.each([
-    ["heat.wall.model", { heat: { inside: { model: "none" }, wall: { model: "conduction" }, outside: { model: "adiabatic" } } }],
-    [
-      "heat.outside.model",
-      {
-        heat: {
-          inside: { model: "none" },
-          wall: { model: "none" },
-          outside: { model: "pool-fire", drainage: "adequate", environmentFactor: 1 },
-        },
-      },
-    ],
-  ] as [string, Partial<BlowdownCase>][])("refuses %s as not computed yet, by name", (path, change) => {
-    const refusal = refusalOf(() => runBlowdown({ ...walled(nitrogen), ...change }));
-    expect(refusal).toMatchObject({ code: "not-applicable", path });
+  it("refuses an inside film from correlations as not computed yet, by name", () => {
+    const refusal = refusalOf(() =>
+      runBlowdown({
+        ...walled(nitrogen),
+        heat: { inside: { model: "correlations" }, wall: { model: "lumped" }, outside: { model: "adiabatic" } },
+      }),
+    );
+    expect(refusal).toMatchObject({ code: "not-applicable", path: "heat.inside.model" });
     expect(refusal.message).toMatch(/can't be computed yet/);
   });
 

@@ -11,6 +11,7 @@ import { highest, lowest, type Extreme } from "./extremes";
 import { integrateRun, type Run } from "./integrate-run";
 import { rebuiltState, type RebuiltState } from "./molar-state";
 import { sampleAt, type Sample } from "./sample";
+import { sizeBore } from "./size-bore";
 import { sampleRows, seriesOf, type Row } from "./series";
 import { solidMargin } from "./solid-check";
 import { makeVesselModel } from "./vessel-model";
@@ -32,7 +33,13 @@ export type BlowdownBody = Omit<BlowdownResult, "engineVersion" | "caseSha256" |
 const previewTolerance = 1e-4;
 const previewGaps = 3;
 
-export function runBlowdown(blowdown: BlowdownCase, options: BlowdownOptions = {}): BlowdownBody {
+export function runBlowdown(given: BlowdownCase, options: BlowdownOptions = {}): BlowdownBody {
+  const maxEvaluations = options.maxEvaluations ?? 200_000;
+  const sized =
+    given.release.path === "sized"
+      ? sizeBore(given, given.release, { maxEvaluations, isCancelled: options.isCancelled })
+      : undefined;
+  const blowdown = sized?.document ?? given;
   const model = makeVesselModel(blowdown);
   const balance = new Balance(model);
   refuseSolidStart(balance);
@@ -42,14 +49,14 @@ export function runBlowdown(blowdown: BlowdownCase, options: BlowdownOptions = {
     (options.coarse ? Math.max(previewTolerance, blowdown.run.relativeTolerance) : blowdown.run.relativeTolerance);
   const run = integrateRun(balance, blowdown, {
     relativeTolerance,
-    maxEvaluations: options.maxEvaluations ?? 200_000,
+    maxEvaluations,
     onProgress: options.onProgress,
     isCancelled: options.isCancelled,
   });
   const rows = sampleRows(balance, run, options.coarse ? previewGaps : 1);
   const found = extremesOf(balance, rows);
   const ends = endStates(balance, run, found.fluid);
-  const summary = summarise(balance, run, rows, found, ends);
+  const summary = { ...summarise(balance, run, rows, found, ends), ...(sized ? { sizedDiameterM: sized.diameterM } : {}) };
   const warnings = warningsOf(blowdown, model, run, rows, summary);
   const assessed = assess(blowdownFigures(blowdown, summary), {
     bandK: blowdown.limits?.nearBandK,

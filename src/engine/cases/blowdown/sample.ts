@@ -23,12 +23,12 @@ export type Sample = {
 
 export function sampleAt(balance: Balance, segment: Segment, step: KeptStep, t: number): Sample {
   const { y, instant } = balance.within(segment, step, t);
-  const { contents, flow, ventRateKgPerS, wallTemperatureK } = instant;
+  const { contents, flow, ventRateKgPerS, heat } = instant;
   return {
     timeS: t,
     pressurePa: contents.pressurePa,
     temperatureK: contents.temperatureK,
-    wallTemperatureK,
+    wallTemperatureK: heat.innerSurfaceK,
     massKg: contents.totalMolesMol * balance.model.fluid.mixtureMolarMass(contents.composition),
     ventRateKgPerS,
     ventedMassKg: balance.ventedMassKg(y),
@@ -36,12 +36,7 @@ export function sampleAt(balance: Balance, segment: Segment, step: KeptStep, t: 
     vapourMoleFraction: contents.vapourMoleFraction,
     liquidVolumeM3: contents.liquidVolumeM3,
     throatTemperatureK: flow.throatTemperatureK,
-    outletTemperatureK: throttleTemperature(
-      balance.model.fluid,
-      contents.outlet,
-      contents.outletComposition,
-      balance.model.backPressurePa,
-    ),
+    outletTemperatureK: throttleTemperature(balance.model.fluid, flow, flow.composition, balance.model.backPressurePa),
   };
 }
 

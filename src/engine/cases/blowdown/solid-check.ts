@@ -78,18 +78,22 @@ function solidFugacity(
   return sublimation * Math.exp(lnPhi + (solidVolumeM3PerMol * (p - sublimation)) / (R * T));
 }
 
-function fugacity(fluid: FluidModel, index: number, { temperatureK, pressurePa, outlet, outletComposition }: Contents): number {
+function fugacity(
+  fluid: FluidModel,
+  index: number,
+  { temperatureK, pressurePa, lightest, lightestComposition }: Contents,
+): number {
   const root =
-    outlet.molarVolumeM3PerMol >
-    fluid.phaseAtPressure(temperatureK, pressurePa, outletComposition, "liquid", scratch).molarVolumeM3PerMol * 1.000001
+    lightest.molarVolumeM3PerMol >
+    fluid.phaseAtPressure(temperatureK, pressurePa, lightestComposition, "liquid", scratch).molarVolumeM3PerMol * 1.000001
       ? "vapour"
       : "stable";
   const lnPhi = fluid.lnFugacityCoefficients(
     temperatureK,
     pressurePa,
-    outletComposition,
+    lightestComposition,
     root,
-    new Float64Array(outletComposition.length),
+    new Float64Array(lightestComposition.length),
   );
-  return pressurePa * (outletComposition[index] ?? 0) * Math.exp(lnPhi[index] ?? 0);
+  return pressurePa * (lightestComposition[index] ?? 0) * Math.exp(lnPhi[index] ?? 0);
 }

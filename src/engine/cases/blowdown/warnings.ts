@@ -22,6 +22,9 @@ export function warningsOf(
     ...nearCritical(blowdown, model, rows),
     ...solids(blowdown, run, rows, summary),
     ...wallTable(model, summary),
+    ...wallProfile(blowdown, model, summary),
+    ...outletPhase(blowdown, run, rows),
+    ...dryInPoolFire(blowdown, rows),
     ...howItEnded(blowdown, run),
     ...closure(summary),
   ];
@@ -101,6 +104,57 @@ function wallTable({ wall }: VesselModel, { minimumWallTemperatureK }: BlowdownS
       message: `The wall reaches ${minimumWallTemperatureK.toFixed(1)} K; the specific heat of ${wall.steel.name.toLowerCase()} is tabulated from ${low} to ${high} K.`,
     },
   ];
+}
+
+/** A lump hides the cold inside of a thick wall; the profile is wrong while it is still forming. */
+function wallProfile({ heat, vessel }: BlowdownCase, { wall, start }: VesselModel, { endTimeS }: BlowdownSummary): Warning[] {
+  if (!wall || !vessel.wall || heat.inside.model !== "constant") return [];
+  const biot = (heat.inside.coefficientWPerM2K * vessel.wall.thicknessM) / wall.steel.conductivityWPerMK(start.temperatureK);
+  if (heat.wall.model === "lumped" && biot > 0.1) {
+    return [
+      {
+        code: "thick-wall",
+        message: `Film times thickness over conductivity is ${biot.toPrecision(2)}, above 0.1: the inside of the wall is colder than the one temperature shown. Use the wall model "conduction".`,
+      },
+    ];
+  }
+  if (wall.slowestModeS > 0.1 * endTimeS) {
+    return [
+      {
+        code: "wall-profile-forming",
+        message: `The temperature profile of the wall takes ${wall.slowestModeS.toPrecision(2)} s to form, which is not short against the run of ${endTimeS.toPrecision(3)} s. The inside surface is less sure.`,
+      },
+    ];
+  }
+  return [];
+}
+
+/** Frozen flow means a vapour that stays vapour; anything else was taken in equilibrium. */
+function outletPhase({ release }: BlowdownCase, run: Run, rows: Row[]): Warning[] {
+  if (release.flowModel !== "frozen" || release.from === "vapour") return [];
+  const wet = run.segments.some((segment) => segment.mode === "two-phase") || rows.some((row) => row.vapourMoleFraction === 0);
+  return wet
+    ? [
+        {
+          code: "equilibrium-outlet",
+          message:
+            "Frozen flow holds for a vapour. While liquid left the vessel its flow was computed in equilibrium; a short opening passes more.",
+        },
+      ]
+    : [];
+}
+
+function dryInPoolFire({ heat }: BlowdownCase, rows: Row[]): Warning[] {
+  if (heat.outside.model !== "pool-fire") return [];
+  const dry = rows.find((row) => row.liquidVolumeM3 === 0);
+  return dry
+    ? [
+        {
+          code: "dry-in-fire",
+          message: `From ${dry.timeS.toPrecision(3)} s nothing wets the wall, and the wetted-area law gives no heat at all. A dry wall in flames fails early: compute it with a surface fire.`,
+        },
+      ]
+    : [];
 }
 
 function howItEnded({ run: asked }: BlowdownCase, run: Run): Warning[] {

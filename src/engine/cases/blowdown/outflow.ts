@@ -1,0 +1,54 @@
+/** What leaves the vessel at one instant with the valve fully open: the streams through the opening, added up. */
+import type { FluidModel } from "../../eos/fluid-model";
+import type { Passed, Opening } from "./opening";
+import type { LeavingStream } from "./leaving-stream";
+
+export type Outflow = {
+  rateKgPerS: number;
+  /** ṅ_i [mol/s] */
+  molesPerS: Float64Array;
+  /** Stagnation enthalpy that leaves [W]. */
+  enthalpyW: number;
+  /** State before the opening, mixed: for the temperature behind it. */
+  temperatureK: number;
+  pressurePa: number;
+  enthalpyJPerMol: number;
+  composition: Float64Array;
+  /** Of the stream with the larger share. */
+  throatPressurePa: number;
+  throatTemperatureK: number;
+  choked: boolean;
+};
+
+export function outflow(fluid: FluidModel, opening: Opening, streams: LeavingStream[]): Outflow {
+  const molesPerS = new Float64Array(fluid.componentIds.length);
+  let rateKgPerS = 0;
+  let enthalpyW = 0;
+  let total = 0;
+  let main: { stream: LeavingStream; passed: Passed } | undefined;
+  for (const stream of streams) {
+    const passed = opening(stream);
+    const rate = stream.share * passed.rateKgPerS;
+    const moles = rate / fluid.mixtureMolarMass(stream.composition);
+    rateKgPerS += rate;
+    enthalpyW += moles * stream.enthalpyJPerMol;
+    total += moles;
+    for (let i = 0; i < molesPerS.length; i++) molesPerS[i] = (molesPerS[i] ?? 0) + moles * (stream.composition[i] ?? 0);
+    if (!main || stream.share > main.stream.share) main = { stream, passed };
+  }
+  if (!main) throw new RangeError("nothing leaves");
+  const { stream, passed } = main;
+  const flows = total > 0;
+  return {
+    rateKgPerS,
+    molesPerS,
+    enthalpyW,
+    temperatureK: stream.temperatureK,
+    pressurePa: stream.pressurePa,
+    enthalpyJPerMol: flows ? enthalpyW / total : stream.enthalpyJPerMol,
+    composition: flows && streams.length > 1 ? molesPerS.map((moles) => moles / total) : stream.composition,
+    throatPressurePa: passed.throatPressurePa,
+    throatTemperatureK: passed.throatTemperatureK,
+    choked: passed.choked,
+  };
+}
