@@ -71,6 +71,7 @@ const exportLoop: Screening = {
 
 for (const [at, screening] of [bottleBank, exportLoop].entries()) {
   test(`three people and a ${screening.name}`, async ({ browser }) => {
+    test.setTimeout(300_000); // five signed-in stretches, each with its own browser
     const dark = at === 1;
     const engineer = await personAt(browser, "engineer", { width: 1440, height: 900, dark });
     const { page } = engineer;
@@ -83,7 +84,7 @@ for (const [at, screening] of [bottleBank, exportLoop].entries()) {
       await page.getByRole("button", { name: "Start the screening" }).click();
       await expect(page.getByRole("heading", { level: 1, name: "Scope" })).toBeVisible();
       await screening.describe(page);
-      await expect(page.getByRole("complementary", { name: "Forerun" }).getByText("Peak vent load")).toBeVisible();
+      await expect(page.getByRole("complementary", { name: "Forerun" }).getByText("Peak vent load")).toBeVisible({ timeout: 45_000 });
       await photograph(page, `walk-${at}-1-form`);
       record = (await page.getByText(/^SC-\d{4}$/).first().textContent()) ?? "";
     });
@@ -91,7 +92,7 @@ for (const [at, screening] of [bottleBank, exportLoop].entries()) {
     await test.step("the server's own run stands on the sheet, cautions before the charts", async () => {
       await page.getByRole("button", { name: "Compute in full" }).click();
       await expect(page).toHaveURL(/\/screenings\/[0-9a-f-]{36}$/);
-      await expect(page.getByRole("heading", { level: 1 })).toContainText(screening.sentence);
+      await expect(page.getByRole("heading", { level: 1 })).toContainText(screening.sentence, { timeout: 45_000 });
       await expect(page.getByText("This is a screening. It does not size, rate or approve equipment.").first()).toBeVisible();
       await photograph(page, `walk-${at}-2-sheet`);
     });
