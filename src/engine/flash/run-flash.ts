@@ -2,7 +2,6 @@ import type { FlashCase, FlashPhase, FlashResult } from "../cases/flash-case";
 import { createFluidModel } from "../eos/create-fluid-model";
 import type { FluidModel } from "../eos/fluid-model";
 import { stateWarnings } from "../eos/state-warnings";
-import { summarise } from "../path/run-path";
 import { solidWarnings } from "../solids/solid-warnings";
 import type { Equilibrium, EquilibriumPhase } from "./equilibrium";
 import { flashPH, flashPS } from "./flash-ph";
@@ -10,6 +9,7 @@ import { flashPT } from "./flash-pt";
 import { flashPQ, flashTQ } from "./flash-quality";
 import { flashUV } from "./flash-uv";
 import { phaseWarnings } from "./phase-warnings";
+import { summarise } from "./summarise";
 
 /** kind "flash". Throws EngineError with the path of the field where one field is at fault. */
 export function runFlash(document: FlashCase): FlashResult {

@@ -130,8 +130,6 @@ export function solveAtVolume(model: FluidModel, z: ArrayLike<number>, target: V
       state.pressurePa = R * T * pv;
       return stable && distinct(state, nv, nl) && onOuterRoots(model, work, state, nv, nl);
     }
-    // Newton doubles the digits: the step from here lands on round-off and need not be evaluated.
-    const last = error < 1e-8;
     previous = error;
     kept.set(step);
     if (!solveBordered(matrix, step, size - 1, factor, column)) {
@@ -176,19 +174,6 @@ export function solveAtVolume(model: FluidModel, z: ArrayLike<number>, target: V
     }
   }
   return false;
-}
-
-/** Pressure of the lighter phase, the one that round-off in a volume hardly moves. */
-function pressureOf(model: FluidModel, { light }: VolumeWork, { v, vapourVolume, temperatureK }: TwoPhaseVolumes): number {
-  model.residual.setComposition(v);
-  model.residual.evaluate(temperatureK, vapourVolume, 0, light);
-  return model.gasConstantJPerMolK * temperatureK * (sumOf(v) / vapourVolume - light.FV);
-}
-
-function sumOf(values: Float64Array): number {
-  let sum = 0;
-  for (let i = 0; i < values.length; i++) sum += values[i]!;
-  return sum;
 }
 
 /** Shortens the step until both phases stay above their smallest possible volume. */

@@ -1,4 +1,4 @@
-import type { PathCase, PathResult, StatePoint, StateSummary } from "../cases/path-case";
+import type { PathCase, PathResult, StatePoint } from "../cases/path-case";
 import { createFluidModel } from "../eos/create-fluid-model";
 import type { FluidModel } from "../eos/fluid-model";
 import { stateWarnings } from "../eos/state-warnings";
@@ -6,6 +6,7 @@ import { EngineError } from "../errors";
 import type { Equilibrium } from "../flash/equilibrium";
 import { flashPT } from "../flash/flash-pt";
 import { phaseWarnings } from "../flash/phase-warnings";
+import { summarise } from "../flash/summarise";
 import { solidWarnings } from "../solids/solid-warnings";
 import { changeOfState } from "./change-of-state";
 
@@ -36,16 +37,4 @@ function equilibriumAt(model: FluidModel, point: StatePoint, path: string): Equi
   } catch (error) {
     throw error instanceof EngineError ? error.at(error.path ? `${path}.${error.path}` : path) : error;
   }
-}
-
-export function summarise(model: FluidModel, state: Equilibrium): StateSummary {
-  const { temperatureK, pressurePa, molarVolumeM3PerMol, vapourMoleFraction, phase } = state;
-  return {
-    temperatureK,
-    pressurePa,
-    molarVolumeM3PerMol,
-    compressibility: (pressurePa * molarVolumeM3PerMol) / (model.gasConstantJPerMolK * temperatureK),
-    vapourMoleFraction,
-    phase,
-  };
 }
