@@ -18,6 +18,7 @@ export type LineMessage = { tone: "warn" | "bad"; text: ReactNode };
  * message    what is wrong, why we think so, what to do; read with the field
  * tone       `derived` for computed lines, `locked` once signed; a message sets `warn` or `bad` by itself
  * across     the field takes the whole width under the label, and no source is asked for
+ * wide       the field takes the source's column as well, for words where no source is asked for
  * group      the field is several controls (radios): the label names the group instead of pointing at one control
  */
 export function Line({
@@ -32,6 +33,7 @@ export function Line({
   tone = "rest",
   group = false,
   across = false,
+  wide = false,
 }: {
   no: string;
   label: string;
@@ -44,6 +46,7 @@ export function Line({
   tone?: LineTone;
   group?: boolean;
   across?: boolean;
+  wide?: boolean;
 }) {
   const valueId = `value-${no}`;
   const labelId = `label-${no}`;
@@ -77,8 +80,12 @@ export function Line({
           )}
           {other && <small className="block text-label text-ink-3">{other}</small>}
         </div>
-        <div className={`min-w-0 ${across ? "col-span-full border-t" : "phone:col-start-2"}`}>{children}</div>
-        {!across && <div className="min-w-0 phone:col-start-2">{source}</div>}
+        <div
+          className={`min-w-0 ${across ? "col-span-full border-t" : wide ? "col-span-2 phone:col-span-1 phone:col-start-2" : "phone:col-start-2"}`}
+        >
+          {children}
+        </div>
+        {!across && !wide && <div className="min-w-0 phone:col-start-2">{source}</div>}
         {message && (
           <p
             id={messageId}

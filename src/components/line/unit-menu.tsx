@@ -4,8 +4,9 @@ import { Chevron } from "./chevron";
 
 type Props = { unit: string; units: readonly string[]; label: string; onChange?: (unit: string) => void };
 
-/** The unit behind a value: plain text, or a menu where there is a choice. */
+/** The unit behind a value: plain text, or a menu where there is a choice; nothing where a head of the column says it. */
 export function UnitMenu({ unit, units, label, onChange }: Props) {
+  if (unit === "") return null;
   if (units.length < 2 || !onChange) {
     return <span className="field-unit flex min-w-[64px] items-center border-l px-2 text-note text-ink-2">{unit}</span>;
   }

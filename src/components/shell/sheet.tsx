@@ -58,20 +58,28 @@ export function SheetWithMargin({
 }
 
 /**
- * The form's sheet: parts at the left, lines, Forerun at the right. Under 1240 px the Forerun moves beneath the lines, under 720 px the
- * parts become a row that scrolls inside itself.
+ * The form's sheet: parts at the left, lines, Forerun at the right. Under 1240 px the Forerun moves beneath the lines. Under 720 px the
+ * parts become a row that scrolls inside itself, and where there is a bar the Forerun opens above it.
+ *
+ * forerunBar    stands at the foot of a phone's screen; `forerunId` and `forerunOpen` say what it opens, and whether it is open
  */
 export function FormSheet({
   titleBlock,
   parts,
   forerun,
   forerunLabel = "Forerun",
+  forerunBar,
+  forerunId,
+  forerunOpen = false,
   children,
 }: {
   titleBlock?: ReactNode;
   parts: ReactNode;
   forerun?: ReactNode;
   forerunLabel?: string;
+  forerunBar?: ReactNode;
+  forerunId?: string;
+  forerunOpen?: boolean;
   children: ReactNode;
 }) {
   return (
@@ -86,11 +94,21 @@ export function FormSheet({
         <div className="min-w-0 px-6 pb-[26px] pt-5 phone:p-4">{children}</div>
         {forerun && (
           <aside
+            id={forerunId}
             aria-label={forerunLabel}
-            className="col-span-2 border-t border-rule-2 bg-tint px-[18px] py-4 wide:col-span-1 wide:border-l wide:border-t-0"
+            className={`col-span-2 border-t border-rule-2 bg-tint px-[18px] py-4 wide:col-span-1 wide:border-l wide:border-t-0 ${
+              !forerunBar
+                ? ""
+                : forerunOpen
+                  ? "phone:fixed phone:inset-x-0 phone:bottom-[58px] phone:z-10 phone:max-h-[75vh] phone:overflow-y-auto phone:border-t-1.5 phone:border-ink"
+                  : "phone:hidden"
+            }`}
           >
             {forerun}
           </aside>
+        )}
+        {forerunBar && (
+          <div className="hidden phone:sticky phone:bottom-0 phone:z-10 phone:mt-auto phone:block print:hidden">{forerunBar}</div>
         )}
       </div>
     </Sheet>

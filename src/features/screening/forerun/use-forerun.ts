@@ -5,14 +5,18 @@ import type { BlowdownCase } from "@/engine/cases/blowdown-case";
 import type { BlowdownResult } from "@/engine/cases/blowdown-result";
 import type { PreviewAnswer, PreviewRequest } from "@/workers/browser";
 
-/** A pause short enough that curves follow the typing, long enough that a word is finished. */
-const restMs = 120;
+/** A pause short enough that curves follow the typing, long enough that a figure is finished. */
+const restMs = 250;
 /** A run that takes longer is given up, so that one case can't hold the form. */
-const patienceMs = 10_000;
+const patienceMs = 20_000;
+/** How long an older run may stand in the way of the newest one. Starting a worker anew costs less than that. */
+const inTheWayMs = 1_000;
 
 export type ForerunState = {
   /** The newest answer; kept, greyed, while the lines can't be computed. */
   result: BlowdownResult | null;
+  /** The case that `result` answers. */
+  document: BlowdownCase | null;
   /** The answer before the last edit, for the ghost. */
   before: BlowdownResult | null;
   running: boolean;
@@ -21,16 +25,18 @@ export type ForerunState = {
   seconds: number | null;
 };
 
-const nothing: ForerunState = { result: null, before: null, running: false, problem: null, seconds: null };
+const nothing: ForerunState = { result: null, document: null, before: null, running: false, problem: null, seconds: null };
 
 /** Runs the case in the browser's own worker after every change: latest wins, nothing is stored. */
 export function useForerun(document: BlowdownCase | undefined): ForerunState {
   const [state, setState] = useState(nothing);
   const worker = useRef<Worker>(undefined);
   const newest = useRef(0);
-  const text = document ? JSON.stringify(document) : undefined;
+  const busySince = useRef<number>(undefined);
+  // A title moves no curve, so typing one starts no run.
+  const text = document ? JSON.stringify({ ...document, title: undefined }) : undefined;
 
-  useEffect(() => () => worker.current?.terminate(), []);
+  useEffect(() => () => stop(worker, busySince), []);
 
   useEffect(() => {
     const id = (newest.current += 1);
@@ -42,24 +48,29 @@ export function useForerun(document: BlowdownCase | undefined): ForerunState {
     }
     let patience: ReturnType<typeof setTimeout>;
     const giveUp = (problem: string) => {
-      worker.current?.terminate();
-      worker.current = undefined;
+      stop(worker, busySince);
       setState((before) => ({ ...before, running: false, problem }));
     };
     const rest = setTimeout(() => {
       const started = performance.now();
+      // A run can't be broken off from outside; one that is in the way for long is ended with its worker.
+      if (busySince.current !== undefined && started - busySince.current > inTheWayMs) stop(worker, busySince);
+      const asked = JSON.parse(text) as BlowdownCase; // written from a case above
       worker.current ??= new Worker(new URL("../../../workers/browser.ts", import.meta.url), { type: "module" });
       worker.current.onerror = () =>
         giveUp("The preview could not be started in this browser. Compute in full works without it.");
       worker.current.onmessage = ({ data }: MessageEvent<PreviewAnswer>) => {
-        if (data.id !== newest.current || data.type === "progress" || data.type === "replaced") return;
+        if (data.type === "progress" || data.type === "replaced") return;
+        busySince.current = data.id === newest.current ? undefined : performance.now();
+        if (data.id !== newest.current) return;
         clearTimeout(patience);
         const seconds = (performance.now() - started) / 1000;
-        setState((before) => answered(before, data, seconds));
+        setState((before) => answered(before, data, asked, seconds));
       };
+      busySince.current ??= started;
       setState((before) => ({ ...before, running: true }));
       patience = setTimeout(() => giveUp("The preview takes too long for this case. Compute in full to see it."), patienceMs);
-      worker.current.postMessage({ id, document: JSON.parse(text), coarse: true } satisfies PreviewRequest);
+      worker.current.postMessage({ id, document: asked, coarse: true } satisfies PreviewRequest);
     }, restMs);
     return () => {
       clearTimeout(rest);
@@ -70,9 +81,17 @@ export function useForerun(document: BlowdownCase | undefined): ForerunState {
   return state;
 }
 
-function answered(before: ForerunState, answer: PreviewAnswer, seconds: number): ForerunState {
+type Box<T> = { current: T | undefined };
+
+function stop(worker: Box<Worker>, busySince: Box<number>): void {
+  worker.current?.terminate();
+  worker.current = undefined;
+  busySince.current = undefined;
+}
+
+function answered(before: ForerunState, answer: PreviewAnswer, document: BlowdownCase, seconds: number): ForerunState {
   if (answer.type === "result" && answer.result.kind === "blowdown") {
-    return { result: answer.result, before: before.result, running: false, problem: null, seconds };
+    return { result: answer.result, document, before: before.result, running: false, problem: null, seconds };
   }
   if (answer.type === "refused") {
     const { error } = answer;

@@ -61,9 +61,9 @@ export function CompositionTable({ lineKey }: { lineKey: LineKey }) {
             <tr>
               <HeadCell>Component</HeadCell>
               <HeadCell hideOnPhone>CAS</HeadCell>
-              <HeadCell numeric>As reported</HeadCell>
+              <HeadCell numeric>As reported, mol %</HeadCell>
               <HeadCell hideOnPhone>log scale, 0.01 to 100</HeadCell>
-              <HeadCell numeric>{off && !normalised ? "Share" : "Normalised"}, mol %</HeadCell>
+              <HeadCell numeric>{off && !normalised ? "Share" : "Normalised"}</HeadCell>
               {editable && (
                 <HeadCell>
                   <span className="sr-only">Remove</span>
@@ -83,10 +83,10 @@ export function CompositionTable({ lineKey }: { lineKey: LineKey }) {
                     {known.get(id)?.cas}
                   </Cell>
                   <Cell numeric>
-                    <span className="inline-block w-[132px]">
+                    <span className="inline-block w-[108px]">
                       <UnitField
                         value={typed}
-                        unit="mol %"
+                        unit=""
                         label={`${name}, mol %`}
                         readOnly={!editable}
                         tone={editable ? (typed !== "" && molePercent === null ? "bad" : "rest") : "locked"}
@@ -100,13 +100,17 @@ export function CompositionTable({ lineKey }: { lineKey: LineKey }) {
                   <Cell numeric>{formatNumber((fractions.get(id) ?? 0) * 100, { decimals: 3 })}</Cell>
                   {editable && (
                     <Cell>
-                      <Button
-                        kind="quiet"
+                      <button
+                        type="button"
                         aria-label={`Remove ${name}`}
+                        title={`Remove ${name}`}
+                        className="grid h-[34px] w-[34px] place-items-center text-tide phone:h-11 phone:w-9"
                         onClick={() => setComposition({ rows: rows.filter((row) => row.id !== id), normalised: false })}
                       >
-                        Remove
-                      </Button>
+                        <svg width="14" height="14" viewBox="0 0 14 14" aria-hidden="true">
+                          <path d="M2 2l10 10M12 2L2 12" stroke="currentColor" strokeWidth="1.8" />
+                        </svg>
+                      </button>
                     </Cell>
                   )}
                 </Row>

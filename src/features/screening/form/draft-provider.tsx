@@ -9,6 +9,7 @@ import { caseFromDraft } from "@/contracts/draft-to-case";
 import type { LineKey, QuantityLine } from "@/contracts/lines/line";
 import { parseLineKey } from "@/contracts/lines/registry";
 import type { DraftView } from "@/contracts/views";
+import { ForerunProvider } from "../forerun/forerun-context";
 import { DraftContext, type FormSubject } from "./draft-context";
 import { lineErrors } from "./line-schema";
 import { shownUnitOf } from "./shown-unit";
@@ -93,7 +94,7 @@ function Held({ subject, start, children }: { subject: FormSubject; start: Draft
   return (
     <DraftContext.Provider value={held}>
       {journal}
-      {children}
+      <ForerunProvider>{children}</ForerunProvider>
     </DraftContext.Provider>
   );
 }

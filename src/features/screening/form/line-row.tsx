@@ -48,7 +48,7 @@ function TextRow({ line, lineKey }: { line: TextLine; lineKey: LineKey }) {
       hint={line.hint}
       message={badMessage(errors[lineKey])}
       tone={editable ? "rest" : "locked"}
-      source={<RowSource line={line} lineKey={lineKey} />}
+      wide
     >
       <TextField value={value?.typed ?? ""} maxLength={line.maxLength} onValueChange={(typed) => setLine(lineKey, { typed })} />
     </Line>
@@ -113,11 +113,11 @@ function DerivedRow({ line, lineKey }: { line: DerivedLine; lineKey: LineKey }) 
   );
 }
 
-/** The source of a line whose value is a text or a choice: offered once it says something, never in the way. */
+/** The source of a line whose value is a choice: offered once it says something, never in the way. */
 function RowSource({ line, lineKey }: { line: RegisteredLine; lineKey: LineKey }) {
   const { draft, editable, setLine } = useDraft();
   const value = draft.lines[lineKey];
-  if (line.sourceFree || line.kind === "text") return null;
+  if (line.sourceFree) return null;
   return (
     <SourceField
       lineNo={lineKey}

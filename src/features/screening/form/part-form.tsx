@@ -1,7 +1,8 @@
 "use client";
 
 import Link from "next/link";
-import { useMemo, useState } from "react";
+import { useId, useMemo, useState } from "react";
+import { Button } from "@/components/button/button";
 import { ButtonLink } from "@/components/button/button-link";
 import { Notice } from "@/components/caution/notice";
 import { MarginNote } from "@/components/shell/margin";
@@ -17,6 +18,8 @@ import type { LineKey } from "@/contracts/lines/line";
 import { parts, partBySlug, type PartSlug } from "@/contracts/lines/parts";
 import { pages } from "@/contracts/paths";
 import { Forerun } from "../forerun/forerun";
+import { ForerunBar } from "../forerun/forerun-bar";
+import { ForerunSaid } from "../forerun/forerun-said";
 import { ComputeButton } from "./compute-button";
 import { ConflictDialog } from "./conflict-dialog";
 import { useDraft } from "./draft-context";
@@ -33,6 +36,8 @@ export function PartForm({ slug }: { slug: PartSlug }) {
   const held = useDraft();
   const { draft, made, subject, start, keeper, editable } = held;
   const [pasted, setPasted] = useState<{ from: LineKey; cells: string[] } | null>(null);
+  const [forerunOpen, setForerunOpen] = useState(false);
+  const forerunId = useId();
   const part = partBySlug(slug) ?? parts[0];
   const statuses = useMemo(() => partStatuses(draft, made), [draft, made]);
   const asked = askedKeys(draft).filter(({ line }) => line.part === part.part);
@@ -81,6 +86,9 @@ export function PartForm({ slug }: { slug: PartSlug }) {
           />
         }
         forerun={<Forerun />}
+        forerunId={forerunId}
+        forerunOpen={forerunOpen}
+        forerunBar={<ForerunBar controls={forerunId} open={forerunOpen} onToggle={() => setForerunOpen((open) => !open)} />}
       >
         {keeper.trouble && (
           <Notice tone="error" title="Not kept.">
@@ -95,7 +103,10 @@ export function PartForm({ slug }: { slug: PartSlug }) {
         {keeper.taken && (
           <Notice tone="caution" title="Taken over.">
             {keeper.taken.by} changed {keeper.taken.lines.length === 1 ? "line" : "lines"} {keeper.taken.lines.join(", ")}{" "}
-            meanwhile. They stand here now.
+            meanwhile. They stand here now.{" "}
+            <Button kind="quiet" onClick={keeper.forgetTaken}>
+              Close this note
+            </Button>
           </Notice>
         )}
         {start.answers.map((remark) => (
@@ -139,6 +150,7 @@ export function PartForm({ slug }: { slug: PartSlug }) {
           </p>
         )}
         <FormKeys />
+        <ForerunSaid />
       </FormSheet>
       {keeper.conflict && <ConflictDialog conflict={keeper.conflict} onSettle={keeper.settle} />}
       {pasted && <FillDialog from={pasted.from} cells={pasted.cells} onClose={() => setPasted(null)} />}

@@ -76,8 +76,8 @@ export function PolicyLine({ line, lineKey }: { line: QuantityLine; lineKey: Lin
       hint={line.hint}
       tone="derived"
       source={
-        <span className="flex flex-wrap items-baseline gap-x-3 font-serif text-note text-ink-2">
-          {given === null ? `${name} asks for none` : `Policy ${name}`}
+        <span className="flex flex-wrap items-baseline gap-x-3">
+          <span className="font-serif text-note text-ink-2">{given === null ? `${name} asks for none` : `Policy ${name}`}</span>
           {editable && (
             <Button kind="quiet" onClick={() => setOpened(true)}>
               {given === null ? "Ask for it" : "Set here"}
