@@ -184,7 +184,7 @@ function assemble(draft: DraftDocument, letter: string, site: SiteFacts): Blowdo
       from: "vapour",
       backPressurePa: required("5.04"),
       openingTimeS: required("5.05"),
-      flowModel: choice("5.09") as "frozen",
+      flowModel: choice("5.09") as BlowdownCase["release"]["flowModel"],
     },
     heat: {
       inside: walled && choice("6.01") === "constant" ? { model: "constant", coefficientWPerM2K: required("6.08") } : { model: "none" },

@@ -10,7 +10,14 @@ export const fluidLines: Line[] = [
     label: "Equation of state",
     hint: "decides density, energy and temperature",
     sourceFree: true,
-    options: [{ value: "peng-robinson-1976", label: "Peng–Robinson 1976" }],
+    // Van der Waals and Redlich-Kwong can be computed from a case file for comparison; neither is a basis for a figure that is signed.
+    options: [
+      { value: "peng-robinson-1976", label: "Peng–Robinson 1976" },
+      { value: "peng-robinson-1978", label: "Peng–Robinson 1978" },
+      { value: "soave-redlich-kwong", label: "Soave–Redlich–Kwong" },
+      { value: "gerg-2008", label: "GERG-2008, natural gas" },
+      { value: "reference", label: "Reference equation, pure fluid" },
+    ],
     initial: "peng-robinson-1976",
   },
   {

@@ -54,7 +54,10 @@ export const releaseLines: Line[] = [
     no: "5.09",
     label: "Flow in the throat",
     sourceFree: true,
-    options: [{ value: "frozen", label: "Gas stays gas" }],
+    options: [
+      { value: "frozen", label: "Gas stays gas" },
+      { value: "equilibrium", label: "Gas may condense" },
+    ],
     initial: "frozen",
   },
 ];
