@@ -52,6 +52,11 @@ export class Balance {
     this.moles = new Float64Array(this.count);
   }
 
+  /** Tight for amounts: a component that is all but gone must not swing below nothing. */
+  absoluteTolerances(relativeTolerance: number): number[] {
+    return Array.from({ length: this.size }, (_, i) => (i < this.count ? 1e-4 : 1e-2) * relativeTolerance);
+  }
+
   beginSegment(): void {
     this.refusedInARow = quickRefusals;
   }

@@ -34,6 +34,8 @@ export type RunOptions = {
 };
 
 const maxSegments = 60;
+/** A fresh start at the sonic limit spares steps; where the throat's place is noise, more of them would only chatter. */
+const subsonicRestarts = 2;
 /** The flow stops where the pressure meets the back pressure; so near it, nothing is left to leave. */
 const backPressureReached = 1e-5;
 
@@ -52,6 +54,7 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
   let t = 0;
   let y = balance.startState();
   let lastK = start.temperatureK;
+  let subsonicSeen = 0;
   let mode: PhaseMode = start.twoPhase ? "two-phase" : "one-phase";
   const emptyingTimeS = Math.max(balance.massScaleKg / Math.max(fullRate(balance, y, mode), 1e-300), 1e-9);
 
@@ -73,7 +76,7 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
       tEnd: until,
       y0: y,
       relativeTolerance: options.relativeTolerance,
-      absoluteTolerance: new Array<number>(balance.size).fill(0.01 * options.relativeTolerance),
+      absoluteTolerance: balance.absoluteTolerances(options.relativeTolerance),
       timeScaleS: t < openingTimeS ? Math.sqrt(emptyingTimeS * Math.min(openingTimeS, emptyingTimeS)) : emptyingTimeS,
       maxEvaluations: options.maxEvaluations - run.evaluations,
       events: [
@@ -83,7 +86,7 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
           value: (time, state) => balance.at(time, state, segment.mode).contents.pressurePa / stopAt - 1,
         },
         phaseEvent(balance, segment.mode),
-        subsonicEvent(balance, segment.mode),
+        ...(subsonicSeen < subsonicRestarts ? [subsonicEvent(balance, segment.mode)] : []),
         {
           id: "too-hot",
           stops: true,
@@ -120,6 +123,7 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
       run.endedBy = result.stoppedBy === "solid" ? "solid-phase" : "too-hot";
       break;
     }
+    if (result.stoppedBy === "subsonic") subsonicSeen++;
     if (result.stoppedBy === "phase") {
       mode = mode === "one-phase" ? "two-phase" : "one-phase";
       const { temperatureK, pressurePa } = balance.at(t, y, mode).contents;
