@@ -29,5 +29,7 @@ describe("why a revision can't be decided on now", () => {
     ["not signed", { state: "computed" as const, signatures: [] }, "There is nothing to decide yet"],
     ["withdrawn", { state: "withdrawn" as const }, "Revision 2 is withdrawn"],
     ["another role", {}, "You can’t decide on this record"],
-  ])("%s", (_, fields, title) => expect(whyNotDecide({ ...madeScreening(), ...fields }).title).toBe(title));
+  ])("%s", (_, fields, title) => expect(whyNotDecide({ ...madeScreening(), ...fields }, "someone").title).toBe(title));
+
+  it("own work, for its author", () => expect(whyNotDecide(madeScreening(), "e").title).toBe("You prepared this revision"));
 });

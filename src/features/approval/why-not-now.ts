@@ -20,7 +20,7 @@ export function whyNotSign({ state, rev, prepared }: ScreeningView): Reason {
 }
 
 /** Why a revision can't be decided on by this person now. */
-export function whyNotDecide({ state, rev, whyNot, signatures }: ScreeningView): Reason {
+export function whyNotDecide({ state, rev, whyNot, signatures, author, facility }: ScreeningView, viewerId: string): Reason {
   if (whyNot) return { title: "Another approver decides", words: whyNot };
   const decision = signatures.find(({ act }) => act === "countersigned" || act === "returned");
   if (decision)
@@ -28,5 +28,11 @@ export function whyNotDecide({ state, rev, whyNot, signatures }: ScreeningView):
   if (state === "draft" || state === "computed")
     return { title: "There is nothing to decide yet", words: "The revision is not signed." };
   if (state !== "signed") return { title: `Revision ${rev} is ${state}`, words: "It is not open for a decision." };
+  if (author.id === viewerId) {
+    return {
+      title: "You prepared this revision",
+      words: `Nobody decides on their own work. An approver of ${facility.name} decides.`,
+    };
+  }
   return { title: "You can’t decide on this record", words: "Only an approver of its facility who had no hand in it decides." };
 }

@@ -52,17 +52,17 @@ function bridgeOf({ result: { energyAccount, series, summary } }: CaseRunView, {
     decimals: system === "SI" ? 2 : 0,
     steps: [
       {
-        label: "1 Departure out",
+        label: "Departure out",
         note: `real gas at ${pressure(summary.initialPressurePa)}, ${temperature(summary.initialTemperatureK)}, to ideal gas`,
         value: value(steps.departureOut),
       },
       {
-        label: "2 Ideal-gas change",
+        label: "Ideal-gas change",
         note: `${temperature(summary.initialTemperatureK)} to ${temperature(coldest)}`,
         value: value(steps.idealGas),
       },
       {
-        label: "3 Departure back",
+        label: "Departure back",
         note: `ideal gas to real gas at ${pressure(valueAtTime(series.timeS, series.pressurePa, atTimeS))}`,
         value: value(steps.departureBack),
       },

@@ -10,6 +10,10 @@ import { LineLink } from "./line-link";
 import { lineWords } from "./line-words";
 import { useShowing } from "./use-showing";
 
+/** The same columns in every part, so that values stand under each other down the sheet. */
+const columns =
+  "[&_table.stack]:table-fixed [&_table.stack_th:nth-child(1)]:w-[76px] [&_table.stack_th:nth-child(2)]:w-[34%] [&_table.stack_th:nth-child(3)]:w-[24%] [&_table.stack_th:nth-child(4)]:pl-6 [&_table.stack_td:nth-child(4)]:pl-6 phone:[&_table.stack_td:nth-child(4)]:pl-0";
+
 /**
  * Every line the record rests on, by part, with its source.
  *
@@ -25,7 +29,7 @@ export function Inputs({ content, edits }: { content: RecordContent; edits?: str
         const lines = linesOf(part);
         if (lines.length === 0 && part !== 3) return null;
         return (
-          <div key={part} className="mt-4">
+          <div key={part} className={`mt-4 ${columns}`}>
             <h3>
               {part} {title}
             </h3>

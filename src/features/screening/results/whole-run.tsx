@@ -1,15 +1,20 @@
 "use client";
 
+import { formatNumber } from "@/components/quantity/format";
 import { Power, useShown } from "@/components/quantity/quantity";
+import { shownUnit } from "@/components/quantity/shown-units";
+import { useUnits } from "@/components/units/units-provider";
 import { Cell, Row, Table } from "@/components/table/table";
 import type { CaseRunView } from "@/contracts/views";
+import { fromSi } from "@/engine/units";
 
 /** start + heat − vented − end = left over, which is what the integration did not account for. */
 export function WholeRun({ run }: { run: CaseRunView }) {
   const shown = useShown();
   const { wholeRun } = run.result.energyAccount;
   const { energyClosure, massClosure, ventedMassKg } = run.result.summary;
-  const energy = (si: number, signed = true) => shown("energy", si, { signed, neverZero: true }).text;
+  const unit = shownUnit("energy", useUnits().system);
+  const energy = (si: number, signed = true) => shown("energy", si, { signed }).text;
   return (
     <section>
       <h2 className="mb-1">Energy over the whole run</h2>
@@ -38,7 +43,7 @@ export function WholeRun({ run }: { run: CaseRunView }) {
           <Row total>
             <Cell head>Left over</Cell>
             <Cell numeric>
-              {energy(wholeRun.leftOverJ)}, <Share value={energyClosure} />
+              <Share value={fromSi("energy", wholeRun.leftOverJ, unit)} /> {unit}, <Share value={energyClosure} />
             </Cell>
           </Row>
         </tbody>
@@ -51,4 +56,8 @@ export function WholeRun({ run }: { run: CaseRunView }) {
   );
 }
 
-const Share = ({ value }: { value: number }) => (value === 0 ? <>0</> : <Power value={value} figures={1} />);
+/** What is left over is arithmetic, so its size is told as a power of ten; where it is not small it is told in full. */
+function Share({ value }: { value: number }) {
+  if (value === 0) return <>0</>;
+  return Math.abs(value) < 0.01 ? <Power value={value} figures={1} /> : <>{formatNumber(value, { figures: 3 })}</>;
+}

@@ -23,7 +23,7 @@ export default async function DecidePage({ params }: { params: Promise<{ screeni
   const titleBlock = <RecordTitleBlock screening={screening} />;
   const { prepared, may, author } = screening;
   if (!may.decide || !prepared) {
-    const { title, words } = whyNotDecide(screening);
+    const { title, words } = whyNotDecide(screening, viewer.id);
     return (
       <NotNow screeningId={screeningId} title={title} titleBlock={titleBlock}>
         {words}
@@ -40,9 +40,9 @@ export default async function DecidePage({ params }: { params: Promise<{ screeni
           author={author.badge}
           viewer={viewerView(viewer)}
           method={methodWords()}
-          assumed={<AssumedTable content={prepared.content} />}
-          governs={<GoverningPanel prepared={prepared} />}
-          holds={<HoldsPanel prepared={prepared} />}
+          assumed={<AssumedTable key="assumed" content={prepared.content} />}
+          governs={<GoverningPanel key="governs" prepared={prepared} />}
+          holds={<HoldsPanel key="holds" prepared={prepared} />}
         />
       </Sheet>
     </SitePressure>

@@ -5,6 +5,7 @@ import { SitePressure } from "@/components/units/units-provider";
 import { NotNow } from "@/features/approval/not-now";
 import { SignDesk } from "@/features/approval/sign-desk";
 import { whyNotSign } from "@/features/approval/why-not-now";
+import { AssumedTable } from "@/features/screening/results/assumed-table";
 import { HoldsPanel } from "@/features/screening/results/holds-panel";
 import { RecordTitleBlock } from "@/features/screening/results/record-title-block";
 import { requireViewer, viewerView } from "@/server/auth/viewer";
@@ -41,6 +42,8 @@ export default async function SignPage({ params }: { params: Promise<{ screening
           method={methodWords()}
         >
           <HoldsPanel prepared={prepared} />
+          <h2 className="mb-1 mt-6">What is assumed</h2>
+          <AssumedTable content={prepared.content} />
         </SignDesk>
       </Sheet>
     </SitePressure>
