@@ -5,11 +5,18 @@ import typescript from "eslint-config-next/typescript";
 const never = (files, groups, reason) => ({
   files,
   rules: {
-    "no-restricted-imports": ["error", { patterns: groups.map((group) => ({ group, message: reason })) }],
+    "no-restricted-imports": [
+      "error",
+      {
+        // Bare names of Node's modules are names, not patterns: a pattern "path" would also catch our own folder of that name.
+        paths: groups.includes(node) ? ["fs", "path", "crypto", "worker_threads"].map((name) => ({ name, message: reason })) : [],
+        patterns: groups.map((group) => ({ group, message: reason })),
+      },
+    ],
   },
 });
 
-const node = ["node:*", "fs", "path", "crypto", "worker_threads"];
+const node = ["node:*"];
 const web = ["react", "react-dom", "react/*", "next", "next/*", "formik", "chart.js", "react-chartjs-2"];
 const database = ["pg", "pg-boss", "drizzle-orm", "drizzle-orm/*", "@db/*", "**/db/**"];
 
