@@ -94,7 +94,7 @@ export class Balance {
     const flow = outflow(fluid, opening, leavingStreams(fluid, contents, from, vessel.volumeM3));
     const stroke = openingTimeS > 0 ? Math.min(t / openingTimeS, 1) : 1;
     const wallMeanK = wall?.temperatureAtK(this.wallEnergyJ(y));
-    const heat = heatFlows(this.model, contents.temperatureK, wallMeanK, contents.liquidVolumeM3);
+    const heat = heatFlows(this.model, contents, wallMeanK);
     const instant: Instant = { contents, flow, stroke, ventRateKgPerS: stroke * flow.rateKgPerS, heat };
     this.last = { y, mode, t, instant };
     return instant;

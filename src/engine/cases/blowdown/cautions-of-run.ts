@@ -25,7 +25,7 @@ export function cautionsOfRun({ fluid, heat, release, vessel }: BlowdownCase, ru
   if (warnings.some((warning) => warning.code === "outside-data-range")) cautions.push(outsideDataCaution);
   if (cubic.includes(fluid.equation)) cautions.push(equationCaution);
   if (heat.outside.model === "pool-fire" || heat.outside.model === "surface-fire") cautions.push(fireCaution);
-  if (heat.inside.model === "constant") cautions.push(filmCaution);
+  if (heat.inside.model !== "none") cautions.push(filmCaution);
   if (heat.wall.model !== "none" || vessel.wall?.minimumDesignMetalTemperatureK !== undefined) cautions.push(steelCaution);
   if (release.openingTimeS > 0) cautions.push(openingCaution);
   return cautions;

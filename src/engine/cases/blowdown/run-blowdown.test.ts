@@ -243,17 +243,6 @@ describe("runBlowdown", () => {
     ).toBe("solid-phase");
   });
 
-  it("refuses an inside film from correlations as not computed yet, by name", () => {
-    const refusal = refusalOf(() =>
-      runBlowdown({
-        ...walled(nitrogen),
-        heat: { inside: { model: "correlations" }, wall: { model: "lumped" }, outside: { model: "adiabatic" } },
-      }),
-    );
-    expect(refusal).toMatchObject({ code: "not-applicable", path: "heat.inside.model" });
-    expect(refusal.message).toMatch(/can't be computed yet/);
-  });
-
   it("reports progress that rises to the end, and stops when cancelled", () => {
     const parts: number[] = [];
     runBlowdown(plainCase(nitrogen), { onProgress: (part) => parts.push(part) });

@@ -1,4 +1,4 @@
-/** What a blowdown case says, resolved into the numbers that the balance works with. Refuses what cannot be computed yet, by name. */
+/** What a blowdown case says, resolved into the numbers that the balance works with. */
 import type { FluidModel } from "../../eos/fluid-model";
 import { createFluidModel } from "../../eos/create-fluid-model";
 import { EngineError } from "../../errors";
@@ -15,8 +15,7 @@ export type VesselModel = {
   vessel: MeasuredVessel;
   start: StartState;
   wall: Wall | undefined;
-  /** Inside film [W/(m² K)]; zero without one. */
-  filmWPerM2K: number;
+  film: "none" | "correlations" | { coefficientWPerM2K: number };
   insideAreaM2: number;
   outside: OutsideHeat;
   opening: Opening;
@@ -28,7 +27,6 @@ export type VesselModel = {
 
 export function makeVesselModel(blowdown: BlowdownCase): VesselModel {
   const { release, heat, vessel: given } = blowdown;
-  refuseNotComputed(blowdown);
   const fluid = createFluidModel(blowdown.fluid);
   const vessel = measureVessel(given.geometry);
   const start = startState(fluid, blowdown.start, vessel.volumeM3);
@@ -46,7 +44,7 @@ export function makeVesselModel(blowdown: BlowdownCase): VesselModel {
     vessel,
     start,
     wall: walled && given.wall ? makeWall(heat.wall.model, given.wall, vessel, start.temperatureK) : undefined,
-    filmWPerM2K: walled && heat.inside.model === "constant" ? heat.inside.coefficientWPerM2K : 0,
+    film: !walled ? "none" : heat.inside.model === "constant" ? heat.inside : heat.inside.model,
     insideAreaM2: vessel.innerAreaM2 ?? 0,
     outside: outsideHeat(blowdown, vessel),
     opening: makeOpening(fluid, release),
@@ -55,14 +53,4 @@ export function makeVesselModel(blowdown: BlowdownCase): VesselModel {
     from: release.from,
     solids: solidCurves(blowdown.fluid),
   };
-}
-
-function refuseNotComputed({ heat }: BlowdownCase): void {
-  if (heat.inside.model !== "correlations") return;
-  throw new EngineError(
-    "not-applicable",
-    "An inside film from correlations can't be computed yet. Give a constant coefficient.",
-    {},
-    "heat.inside.model",
-  );
 }

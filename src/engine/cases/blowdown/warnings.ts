@@ -23,6 +23,7 @@ export function warningsOf(
     ...solids(blowdown, run, rows, summary),
     ...wallTable(model, summary),
     ...wallProfile(blowdown, model, summary),
+    ...unknownLevel(blowdown, model, run),
     ...outletPhase(blowdown, run, rows),
     ...dryInPoolFire(blowdown, rows),
     ...howItEnded(blowdown, run),
@@ -127,6 +128,19 @@ function wallProfile({ heat, vessel }: BlowdownCase, { wall, start }: VesselMode
     ];
   }
   return [];
+}
+
+/** Correlations need to know what the liquid wets. */
+function unknownLevel({ heat }: BlowdownCase, { vessel }: VesselModel, run: Run): Warning[] {
+  if (heat.inside.model !== "correlations" || vessel.below || !run.segments.some((segment) => segment.mode === "two-phase"))
+    return [];
+  return [
+    {
+      code: "no-level",
+      message:
+        "There is liquid, but a plain volume does not tell what it wets: the whole wall counted as dry. Give the vessel's shape.",
+    },
+  ];
 }
 
 /** Frozen flow means a vapour that stays vapour; anything else was taken in equilibrium. */
