@@ -48,3 +48,4 @@ for (const { title, targetMs, document } of benchCases) {
     `${title}: median ${time.median.toFixed(1)} ms (target ${targetMs}), least ${time.least.toFixed(1)}, first ${time.first.toFixed(0)}; ${((1000 * time.median) / one).toFixed(0)} times one ln φ vector (${one.toFixed(2)} µs); ${facts}`,
   );
 }
+await import("./thermodynamics");

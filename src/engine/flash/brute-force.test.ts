@@ -12,7 +12,7 @@ describe("phase verdicts over random fluids", () => {
     fc.assert(
       fc.property(randomFluid(10), randomTemperatureK, randomPressurePa, (fluid, temperatureK, pressurePa) => {
         const model = createFluidModel(fluid);
-        const brute = (z: ArrayLike<number>) => testStability(model, temperatureK, pressurePa, z, 99);
+        const brute = (z: ArrayLike<number>) => testStability(model, temperatureK, pressurePa, z, { searches: 99 });
         const found = flashPT(model, { temperatureK, pressurePa });
         expect(found.phases.length === 1).toBe(brute(model.feed).tangentPlaneDistance > -1e-9);
         if (found.phases.length === 2) {

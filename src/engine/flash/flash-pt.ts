@@ -2,6 +2,7 @@ import { EngineError } from "../errors";
 import type { FluidModel } from "../eos/fluid-model";
 import { assemble } from "./assemble";
 import type { Equilibrium } from "./equilibrium";
+import { testStability } from "./stability";
 import { minimiseGibbs } from "./minimise-gibbs";
 import { createTwoPhaseWork, solveTwoPhase, splitOffTrial, type TwoPhaseOutcome, type TwoPhaseWork } from "./two-phase-pt";
 import { wilsonLnK } from "./wilson";
@@ -53,7 +54,7 @@ export function findSplit(
 ): Split {
   if (!convergedSplit(model, T, p, z, work, seed)) return "one-phase";
   for (let round = 0; round < 3; round++) {
-    const test = model.stability(T, p, work.liquid.composition);
+    const test = testStability(model, T, p, work.liquid.composition, { partner: work.vapour.composition });
     if (test.tangentPlaneDistance > thirdPhaseDistance) return "two-phase";
     const before = work.gibbs;
     const kept = [work.v.slice(), work.l.slice()] as const;

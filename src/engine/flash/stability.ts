@@ -12,6 +12,13 @@ const newtonSteps = 60;
 /** Strongly non-ideal trials (water in the cold) defeat Newton from afar: half-length substitutions bring them near. */
 const dampedSubstitutions = 300;
 
+export interface StabilityEffort {
+  /** How many nearly pure starts are followed, likeliest first. */
+  searches?: number;
+  /** The other phase of a known split: a search that comes back to it has found nothing new and ends there. */
+  partner?: ArrayLike<number>;
+}
+
 interface Trial {
   distance: number;
   trivial: boolean;
@@ -27,10 +34,16 @@ interface Trial {
  *
  * Source   Michelsen, Fluid Phase Equilib. 9 (1982) 1-19: Wilson trials on both sides, then each component nearly pure;
  *          successive substitution, then Newton in 2√W.
- * searches how many nearly pure starts are followed, likeliest first; the default agrees with all of them (brute-force.test.ts)
+ * effort   how wide the search is; the default agrees with a search from every corner (brute-force.test.ts)
  * Throws   "no-convergence" when a search does neither: a failed test is never a verdict
  */
-export function testStability(model: FluidModel, T: number, p: number, z: ArrayLike<number>, searches = pureSearches): Stability {
+export function testStability(
+  model: FluidModel,
+  T: number,
+  p: number,
+  z: ArrayLike<number>,
+  { searches = pureSearches, partner }: StabilityEffort = {},
+): Stability {
   const count = z.length;
   const work = stabilityWork(count);
   const { feed, trial, d, lnK, W, best } = work;
@@ -51,7 +64,7 @@ export function testStability(model: FluidModel, T: number, p: number, z: ArrayL
   let lightest = false;
   const consider = (start: (i: number) => number): boolean => {
     for (let i = 0; i < count; i++) W[i] = z[i]! > 0 ? start(i) : 0;
-    const { distance, trivial } = search(model, T, p, z, work);
+    const { distance, trivial } = search(model, T, p, z, work, partner);
     if (!trivial && distance < lowest) {
       lowest = distance;
       best.set(trial.composition);
@@ -99,7 +112,14 @@ function likeliestPure(
 }
 
 /** Follows W from where it stands to a stationary point of tm, or until tm < 0 is certain. */
-function search(model: FluidModel, T: number, p: number, z: ArrayLike<number>, work: StabilityWork): Trial {
+function search(
+  model: FluidModel,
+  T: number,
+  p: number,
+  z: ArrayLike<number>,
+  work: StabilityWork,
+  partner?: ArrayLike<number>,
+): Trial {
   const { trial, d, W, saved, step, gradient } = work;
   const count = z.length;
   let distance = Infinity;
@@ -130,6 +150,7 @@ function search(model: FluidModel, T: number, p: number, z: ArrayLike<number>, w
     }
     distance = tm;
     if (gap < 1e-8) return { distance: 0, trivial: true };
+    if (partner && Math.abs(tm) < 1e-4 && distanceTo(partner, W) < 1e-3) return { distance: 0, trivial: true };
     if (iteration >= 2 && tm < -1e-6) return { distance, trivial: false };
     if (error < 1e-9) return { distance, trivial: false };
     // On the way back to z, tm is half its slope along W − z (Michelsen 1982).
@@ -175,6 +196,13 @@ function search(model: FluidModel, T: number, p: number, z: ArrayLike<number>, w
     tangentPlaneDistance: distance,
     iterations: substitutions + newtonSteps,
   });
+}
+
+/** Σ (W_i − y_i)²/y_i over the components present. */
+function distanceTo(y: ArrayLike<number>, W: Float64Array): number {
+  let sum = 0;
+  for (let i = 0; i < W.length; i++) if (y[i]! > 0) sum += (W[i]! - y[i]!) ** 2 / y[i]!;
+  return sum;
 }
 
 /** Newton direction of tm in α = 2√W, damped until it points downhill. */
