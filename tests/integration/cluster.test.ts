@@ -1,30 +1,50 @@
+import { execFileSync } from "node:child_process";
 import { chmodSync, existsSync, mkdirSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
 import pg from "pg";
-import { afterEach, beforeEach, describe, expect, it } from "vitest";
+import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it } from "vitest";
 import { databaseUrl } from "@/ops/lib/environment.mjs";
 import { openDatabase } from "@/ops/lib/open-database.mjs";
 import { processIdentity } from "@/ops/lib/process-identity.mjs";
 import { createProcesses, endLeftovers } from "@/ops/lib/processes.mjs";
 
-/** Starts and stops a real cluster of its own in a folder that is removed afterwards. */
-let base: string;
-let places: { home: string; cluster: string; run: string; logs: string };
+/** Starts and stops real clusters in folders that are removed afterwards. One is made, and copied for each test that only needs to have one. */
+type Places = { home: string; cluster: string; run: string; logs: string };
+
+let made: Places;
+let places: Places;
 let processes: ReturnType<typeof createProcesses>;
 
 const quiet = { say: () => {}, throwAway: true };
 
+function newPlaces(): Places {
+  const home = mkdtempSync(join(tmpdir(), "ebbmark-cluster-"));
+  chmodSync(home, 0o711);
+  return { home, cluster: join(home, "cluster"), run: join(home, "run"), logs: join(home, "logs") };
+}
+
+/** Owners and modes kept: the server is particular about both. */
+function copyMade(): void {
+  execFileSync("cp", ["-a", made.cluster, join(made.home, "secrets.json"), places.home]);
+}
+
+beforeAll(async () => {
+  made = newPlaces();
+  const makers = createProcesses(made);
+  await openDatabase(makers, made, quiet);
+  await makers.stopAll();
+});
+afterAll(() => rmSync(made.home, { recursive: true, force: true }));
+
 beforeEach(() => {
-  base = mkdtempSync(join(tmpdir(), "ebbmark-cluster-"));
-  chmodSync(base, 0o711);
-  places = { home: base, cluster: join(base, "cluster"), run: join(base, "run"), logs: join(base, "logs") };
+  places = newPlaces();
   processes = createProcesses(places);
 });
 
 afterEach(async () => {
   await processes.stopAll();
-  rmSync(base, { recursive: true, force: true });
+  rmSync(places.home, { recursive: true, force: true });
 });
 
 async function ask(server: { port: number; secrets: Record<string, string> }, sql: string): Promise<unknown[]> {
@@ -64,6 +84,7 @@ describe("a cluster of the project's own", () => {
   });
 
   it("starts again after the server was killed, with what had been written", async () => {
+    copyMade();
     const first = await openDatabase(processes, places, { ...quiet, throwAway: false });
     await ask(first, "create table kept as select 7 as n");
     process.kill(postmasterPid(), "SIGKILL");
@@ -74,6 +95,7 @@ describe("a cluster of the project's own", () => {
   });
 
   it("ends a server that a killed start left running, and starts its own", async () => {
+    copyMade();
     await openDatabase(processes, places, quiet);
     const left = postmasterPid();
     expect(processIdentity(left)).toBeDefined();
@@ -129,10 +151,8 @@ describe("a damaged data folder", () => {
       /is damaged \(pg_wal is missing\).*mv /,
     ],
   ])("%s is refused in one line that says what to do", async (_, damage, message) => {
-    await openDatabase(processes, places, quiet);
-    await processes.stopAll();
+    copyMade();
     damage();
-    processes = createProcesses(places);
     const refusal = await openDatabase(processes, places, quiet).then(
       () => undefined,
       (error: Error) => error,
@@ -151,10 +171,8 @@ describe("a damaged data folder", () => {
   });
 
   it("is not mistaken for a new one when only the secrets are lost", async () => {
-    await openDatabase(processes, places, quiet);
-    await processes.stopAll();
+    copyMade();
     rmSync(join(places.home, "secrets.json"));
-    processes = createProcesses(places);
     await expect(openDatabase(processes, places, quiet)).rejects.toThrow(
       /secrets\.json is missing, but the database that needs it exists/,
     );
