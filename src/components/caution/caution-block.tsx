@@ -33,7 +33,7 @@ export function CautionBlock({
           {cautions.map(({ id, words }) => (
             <li
               key={id}
-              className="grid max-w-[72ch] grid-cols-[minmax(34px,auto)_1fr] items-baseline py-1 font-serif text-body leading-[1.42]"
+              className="grid max-w-[72ch] grid-cols-[minmax(26px,auto)_1fr] items-baseline gap-x-2 py-1 font-serif text-body leading-[1.42]"
             >
               <b className="font-num text-label text-near">{id}</b>
               <span>{words}</span>

@@ -37,7 +37,9 @@ export function EntryDetail({ entry, screeningId, around }: Props) {
           )}
         </span>
       </nav>
-      <h2>Entry {seq}</h2>
+      {/* Beside the list it is a part of the page; on a phone it is the page. */}
+      <h2 className="phone:hidden">Entry {seq}</h2>
+      <h1 className="hidden phone:block">Entry {seq}</h1>
       <p className="pb-3 font-serif text-prose">
         {by === "server" ? "The server" : by}: {lowerFirst(what)}
         {record && (

@@ -24,7 +24,7 @@ export function LogFilterForm({ filter }: { filter: Partial<LogFilter> }) {
         <input name="badge" defaultValue={badge} maxLength={12} placeholder="anyone" size={8} className="field-value words" />
       </Labelled>
       <Labelled label="What">
-        <select name="kind" defaultValue={kind} className="field-value words !pr-7">
+        <select name="kind" defaultValue={kind} className="field-value words w-[190px] !pr-7 phone:w-auto">
           <option value="">anything</option>
           {Object.entries(entryKinds).map(([value, { words }]) => (
             <option key={value} value={value}>

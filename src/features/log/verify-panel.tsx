@@ -1,6 +1,6 @@
 "use client";
 
-import { useEffect, useRef } from "react";
+import { useEffect } from "react";
 import { Button } from "@/components/button/button";
 import { Notice } from "@/components/caution/notice";
 import { SealWord } from "@/components/log/seal-word";
@@ -19,11 +19,8 @@ import { useVerification } from "./verification";
  */
 export function VerifyPanel({ size, start = false }: { size: number; start?: boolean }) {
   const { check, verify, cancel } = useVerification();
-  const started = useRef(false);
   useEffect(() => {
-    if (!start || started.current) return;
-    started.current = true;
-    verify();
+    if (start) verify();
   }, [start, verify]);
 
   return (

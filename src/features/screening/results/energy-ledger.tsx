@@ -88,7 +88,7 @@ function StepsTable({ caption, account, showing: { system } }: { caption: string
   return (
     <div className="mt-4">
       <h3>{caption}</h3>
-      <Table caption={caption} stack={false}>
+      <Table caption={caption}>
         <thead>
           <tr>
             <HeadCell>Step</HeadCell>
@@ -100,10 +100,18 @@ function StepsTable({ caption, account, showing: { system } }: { caption: string
         <tbody>
           {steps.map(({ key, label }) => (
             <Row key={key} total={key === "total"}>
-              <Cell head>{label}</Cell>
-              <Cell numeric>{write("molarEnergy", account.internalEnergyJPerMol[key], energy)}</Cell>
-              <Cell numeric>{write("molarEnergy", account.enthalpyJPerMol[key], energy)}</Cell>
-              <Cell numeric>{write("molarEntropy", account.entropyJPerMolK[key], entropy)}</Cell>
+              <Cell head wholeRow>
+                {label}
+              </Cell>
+              <Cell numeric label={`Internal energy, ${energy}`}>
+                {write("molarEnergy", account.internalEnergyJPerMol[key], energy)}
+              </Cell>
+              <Cell numeric label={`Enthalpy, ${energy}`}>
+                {write("molarEnergy", account.enthalpyJPerMol[key], energy)}
+              </Cell>
+              <Cell numeric label={`Entropy, ${entropy}`}>
+                {write("molarEntropy", account.entropyJPerMolK[key], entropy)}
+              </Cell>
             </Row>
           ))}
         </tbody>

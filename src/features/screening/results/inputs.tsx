@@ -12,7 +12,7 @@ import { useShowing } from "./use-showing";
 
 /** The same columns in every part, so that values stand under each other down the sheet. */
 const columns =
-  "[&_table.stack]:table-fixed [&_table.stack_th:nth-child(1)]:w-[76px] [&_table.stack_th:nth-child(2)]:w-[34%] [&_table.stack_th:nth-child(3)]:w-[24%] [&_table.stack_th:nth-child(4)]:pl-6 [&_table.stack_td:nth-child(4)]:pl-6 phone:[&_table.stack_td:nth-child(4)]:pl-0";
+  "[&_table.stack]:table-fixed [&_table.stack_th:nth-child(1)]:w-[76px] [&_table.stack_th:nth-child(2)]:w-[34%] [&_table.stack_th:nth-child(3)]:w-[24%] [&_table.stack_th:nth-child(4)]:pl-6 [&_table.stack_td:nth-child(4)]:pl-6 phone:[&_table.stack_td:nth-child(4)]:pl-0 phone:[&_table.stack_tr]:!grid-cols-[64px_minmax(0,1fr)_auto]";
 
 /**
  * Every line the record rests on, by part, with its source.
