@@ -13,6 +13,7 @@ import { ForerunProvider } from "../forerun/forerun-context";
 import { DraftContext, type FormSubject } from "./draft-context";
 import { lineErrors } from "./line-schema";
 import { shownUnitOf } from "./shown-unit";
+import { newTab } from "./tab-alive";
 import { useJournal } from "./use-journal";
 import { useKeeper } from "./use-keeper";
 
@@ -47,8 +48,9 @@ function Held({ subject, start, children }: { subject: FormSubject; start: Draft
   const units = chosen.system === system ? chosen.units : none;
 
   const replace = useCallback((document: DraftDocument) => void setValues(deriveSi(document, baro), false), [setValues, baro]);
-  const keeper = useKeeper(draft, start, replace);
-  const journal = useJournal(start, replace);
+  const [tab] = useState(newTab);
+  const keeper = useKeeper(draft, start, tab, replace);
+  const journal = useJournal(start, tab, keeper.adopt);
 
   const setLine = useCallback(
     (key: LineKey, change: Partial<LineValue>) =>

@@ -46,4 +46,20 @@ describe("mergeDrafts", () => {
     expect(merge.conflicts).toEqual(["3.01"]);
     expect(applyChoices(merge, with_(80), { "3.01": "theirs" }).composition.rows[0]?.molePercent).toBe(80);
   });
+
+  it("takes its own words back from the server for nobody else's", () => {
+    const sent = typed(base, "2.01-1", "V-2");
+    expect(mergeDrafts(base, typed(base, "2.01-1", "V-21"), sent).conflicts).toEqual(["2.01-1"]);
+    const merge = mergeDrafts(base, typed(base, "2.01-1", "V-21"), sent, [sent]);
+    expect(merge.conflicts).toEqual([]);
+    expect(merge.merged.lines["2.01-1"]?.typed).toBe("V-21");
+  });
+
+  it("does not mind the order in which a database keeps keys", () => {
+    const stored: DraftDocument = {
+      ...base,
+      lines: { ...base.lines, "2.01-1": { source: null, si: null, unit: null, typed: "V-1" } },
+    };
+    expect(mergeDrafts(base, typed(base, "2.01-1", "V-2"), stored).conflicts).toEqual([]);
+  });
 });

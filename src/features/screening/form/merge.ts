@@ -15,32 +15,56 @@ export type Merge = {
   taken: LineKey[];
 };
 
-const same = (a: unknown, b: unknown): boolean => JSON.stringify(a) === JSON.stringify(b);
+/** Equal in content; the order of keys says nothing, as a database keeps its own. */
+export const same = (a: unknown, b: unknown): boolean => JSON.stringify(a, inOrder) === JSON.stringify(b, inOrder);
+
+const inOrder = (_key: string, value: unknown): unknown =>
+  typeof value === "object" && value !== null && !Array.isArray(value)
+    ? Object.fromEntries(Object.entries(value).sort(([a], [b]) => (a < b ? -1 : 1)))
+    : value;
 
 /**
  * base     the draft as last known to both
  * mine     as it stands in this tab
  * theirs   as it was saved meanwhile
+ * sent     what this tab sent without hearing whether it arrived: a line saved in just these words is no other's work
  */
-export function mergeDrafts(base: DraftDocument, mine: DraftDocument, theirs: DraftDocument): Merge {
+export function mergeDrafts(
+  base: DraftDocument,
+  mine: DraftDocument,
+  theirs: DraftDocument,
+  sent: readonly DraftDocument[] = [],
+): Merge {
   const lines: DraftDocument["lines"] = {};
   const conflicts: LineKey[] = [];
   const taken: LineKey[] = [];
 
   for (const key of new Set([...Object.keys(base.lines), ...Object.keys(mine.lines), ...Object.keys(theirs.lines)])) {
-    const side = settle(key, base.lines[key], mine.lines[key], theirs.lines[key]);
+    const side = settle(
+      key,
+      base.lines[key],
+      mine.lines[key],
+      theirs.lines[key],
+      sent.map(({ lines }) => lines[key]),
+    );
     const value = side === "theirs" ? theirs.lines[key] : mine.lines[key];
     if (value) lines[key] = value;
   }
-  const compositionSide = settle(compositionKey, base.composition, mine.composition, theirs.composition);
+  const compositionSide = settle(
+    compositionKey,
+    base.composition,
+    mine.composition,
+    theirs.composition,
+    sent.map(({ composition }) => composition),
+  );
   return {
     merged: { ...mine, lines, composition: compositionSide === "theirs" ? theirs.composition : mine.composition },
     conflicts,
     taken,
   };
 
-  function settle(key: LineKey, before: unknown, ours: unknown, other: unknown): Choice {
-    if (same(ours, other) || same(other, before)) return "mine";
+  function settle(key: LineKey, before: unknown, ours: unknown, other: unknown, ownWords: unknown[]): Choice {
+    if (same(ours, other) || same(other, before) || ownWords.some((own) => same(own, other))) return "mine";
     if (same(ours, before)) {
       taken.push(key);
       return "theirs";

@@ -3,46 +3,54 @@
 import { useEffect, useState, type ReactNode } from "react";
 import { Button } from "@/components/button/button";
 import { Notice } from "@/components/caution/notice";
-import type { DraftDocument } from "@/contracts/draft";
 import { draftDifferences } from "@/contracts/draft-differences";
 import type { DraftView } from "@/contracts/views";
-import { mergeDrafts } from "./merge";
-import { readJournal, tearOut } from "./journal";
+import { bringBack, readJournal, tearOut, type FoundPage } from "./journal";
+import { isAlive, keepAlive } from "./tab-alive";
+import type { Keeper } from "./use-keeper";
 
 /**
- * Brings back what was typed in this browser and never reached the server: once, when the form opens. Lines that the server has by now in
- * other words stay as typed here and are kept by the next save; the notice names them all.
+ * Brings back what was typed in this browser and never reached the server: once, when the form opens, from tabs that are gone. A line that
+ * somebody else has saved differently meanwhile is put to choice; the rest is kept by the next save, and a notice names it.
  */
-export function useJournal(start: DraftView, replace: (document: DraftDocument) => void): ReactNode {
-  const [found, setFound] = useState<{ lines: string[]; at: string } | null>(null);
+export function useJournal(start: DraftView, tab: string, adopt: Keeper["adopt"]): ReactNode {
+  const [lines, setLines] = useState<string[] | null>(null);
 
   useEffect(() => {
-    const page = start.editable ? readJournal(localStorage, start.screeningId, start.rev) : undefined;
-    if (!page) return;
-    const { merged } = mergeDrafts(page.base, page.document, start.document);
-    const lines = draftDifferences(start.document, merged).map(({ line }) => line);
-    if (lines.length === 0) {
-      tearOut(localStorage, start.screeningId, start.rev);
-      return;
-    }
-    replace(merged);
-    // Storage is read after the first drawing on purpose: the server has none.
-    // eslint-disable-next-line react-hooks/set-state-in-effect
-    setFound({ lines, at: page.at });
+    const ended = new AbortController();
+    keepAlive(tab, ended.signal);
+    void (async () => {
+      if (!start.editable) return;
+      const pages = await left(readJournal(localStorage, start), tab);
+      if (ended.signal.aborted || pages.length === 0) return;
+      const throwAway = () => pages.forEach((page) => tearOut(localStorage, start, page.tab));
+      const merge = bringBack(pages, start.document);
+      const brought = draftDifferences(start.document, merge.merged).map(({ line }) => line);
+      if (brought.length === 0) return throwAway();
+      adopt(merge, throwAway);
+      setLines(brought);
+    })();
+    return () => ended.abort();
     // Only what the form opened with counts.
     // eslint-disable-next-line react-hooks/exhaustive-deps
   }, []);
 
-  if (!found) return null;
+  if (!lines) return null;
   return (
     <div className="mx-auto max-w-sheet">
       <Notice tone="caution" title="Brought back from this browser.">
-        {found.lines.length === 1 ? "Line" : "Lines"} {found.lines.join(", ")} had not reached the server when this page was last
-        closed. They stand as you typed them and are being kept.{" "}
-        <Button kind="quiet" onClick={() => setFound(null)}>
+        {lines.length === 1 ? "Line" : "Lines"} {lines.join(", ")} had not reached the server when this page was last closed. They
+        stand as you typed them and are being kept.{" "}
+        <Button kind="quiet" onClick={() => setLines(null)}>
           Close this note
         </Button>
       </Notice>
     </div>
   );
+}
+
+/** Pages of tabs that are gone. */
+async function left(pages: FoundPage[], own: string): Promise<FoundPage[]> {
+  const gone = await Promise.all(pages.map(async ({ tab }) => tab === own || !(await isAlive(tab))));
+  return pages.filter((_, at) => gone[at]);
 }
