@@ -121,9 +121,8 @@ function pure(
   state: TwoPhaseVolumes,
 ): Equilibrium {
   const v = target.molarVolume;
-  if (single && !insideDome(model, single.temperatureK, v, z)) {
-    if (single.pressurePa > 0) return assembleOne(model, single, z);
-  }
+  // A one-phase state in tension is no answer, and at its temperature the saturation pressure may be beyond all numbers.
+  if (single && single.pressurePa > 0 && !insideDome(model, single.temperatureK, v, z)) return assembleOne(model, single, z);
   const start = domeStart(model, v, z, single?.temperatureK);
   if (start === undefined) {
     throw new EngineError("no-convergence", "no equilibrium state has this energy at this volume", {
@@ -147,12 +146,14 @@ function pure(
   ]);
 }
 
-/** A temperature at which v lies inside the dome, starting where the one-phase state was found. */
+/** A temperature at which v lies inside the dome: from near the critical one downwards. */
 function domeStart(model: FluidModel, v: number, z: ArrayLike<number>, near: number | undefined): number | undefined {
   const Tc = model.criticalTemperaturesK[onlyComponent(z)]!;
-  const candidates = near !== undefined && near < Tc ? [near] : [];
+  const candidates: number[] = [];
   for (let reduced = 0.98; reduced > 0.25; reduced -= 0.06) candidates.push(reduced * Tc);
-  return candidates.find((T) => T > model.temperatureRangeK[0] && insideDome(model, T, v, z) !== undefined);
+  for (const reduced of [0.99, 0.995, 0.998, 0.9995]) candidates.push(reduced * Tc);
+  if (near !== undefined && near < Tc) candidates.push(near);
+  return candidates.find((T) => T > model.temperatureRangeK[0] && attempted(() => insideDome(model, T, v, z)) !== undefined);
 }
 
 /**

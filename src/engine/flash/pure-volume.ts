@@ -1,4 +1,5 @@
 import { createPhaseState, type FluidModel } from "../eos/fluid-model";
+import { EngineError } from "../errors";
 import { bracketedRoot } from "./bracketed-root";
 import { saturationAtTemperature, type PureSaturation } from "./saturation-pure";
 
@@ -48,11 +49,19 @@ export function saturatedMix(
   let fa = excess(a);
   let b = a;
   let fb = fa;
-  for (let k = 0; k < 60 && fa * fb > 0; k++) {
+  let ceiling = Tc; // lowered where the two phases can no longer be told apart
+  for (let k = 0; k < 80 && fa * fb > 0; k++) {
     a = b;
     fa = fb;
-    b = fb > 0 ? Math.max(b * 0.93, model.temperatureRangeK[0]) : Math.min(b * 1.04, 0.5 * (b + Tc));
-    fb = excess(b);
+    b = fb > 0 ? Math.max(b * 0.93, model.temperatureRangeK[0]) : Math.min(b * 1.04, 0.5 * (b + ceiling));
+    try {
+      fb = excess(b);
+    } catch (error) {
+      if (!(error instanceof EngineError) || b < a) throw error;
+      ceiling = b;
+      b = a;
+      fb = fa;
+    }
   }
   const T = bracketedRoot(excess, { a, fa, b, fb }, { within: 1e-13 * start, what: "saturation temperature at given volume" });
   excess(T);

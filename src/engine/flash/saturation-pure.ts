@@ -79,7 +79,7 @@ export function saturationAtTemperature(model: FluidModel, T: number, z: ArrayLi
       next = x - step;
       if (!(next > low && next < high)) next = low === -Infinity ? x - 1 : 0.5 * (low + high);
     }
-    if (high - low < 3e-16 * Math.abs(x)) {
+    if (high - low < 3e-16 * Math.abs(x) && vapour > liquid * (1 + 1e-6)) {
       return { temperatureK: T, pressurePa: p, vapourVolume: vapour, liquidVolume: liquid };
     }
     x = next;
