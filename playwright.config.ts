@@ -8,7 +8,7 @@ export default defineConfig({
   fullyParallel: false,
   forbidOnly: true,
   retries: 0,
-  timeout: 120_000,
+  timeout: 240_000, // far above what a journey takes, for a machine that is busy with other work
   expect: { timeout: 15_000 },
   reporter: [["list"], ["json", { outputFile: process.env.PLAYWRIGHT_JSON_OUTPUT_NAME ?? ".ebbmark/test-reports/e2e.json" }]],
   use: {
