@@ -99,7 +99,8 @@ for (const [at, screening] of [bottleBank, exportLoop].entries()) {
 
     await test.step("the engineer signs what is shown", async () => {
       await page.getByRole("link", { name: "Review and sign" }).first().click();
-      for (const box of await page.getByRole("checkbox").all()) await box.check();
+      await expect(page.getByRole("heading", { level: 1, name: "Review and sign" })).toBeVisible();
+      await tickAll(page);
       await page.getByLabel("Password, once more").fill(engineer.account.password);
       await photograph(page, `walk-${at}-3-sign`);
       await page.getByRole("button", { name: "Sign and hand over" }).click();
@@ -146,6 +147,7 @@ async function optionOf(page: Page, tag: string): Promise<string> {
 
 /** On a phone the decision is the last of five steps; on a desk all stands on one sheet. */
 async function countersign(page: Page, password: string): Promise<void> {
+  await expect(page.getByText("What was assumed").first()).toBeVisible();
   const next = page.getByRole("button", { name: /^[2-5] / });
   for (let step = 0; step < 5 && (await next.first().isVisible()); step++) {
     await tickAll(page);
@@ -158,7 +160,14 @@ async function countersign(page: Page, password: string): Promise<void> {
 }
 
 async function tickAll(page: Page): Promise<void> {
-  for (const box of await page.getByRole("checkbox").all()) if (await box.isVisible()) await box.check();
+  for (const box of await page.getByRole("checkbox").all()) {
+    if (!(await box.isVisible())) continue;
+    // A tick before the page has woken up would be taken back; it is given until it stays.
+    await expect(async () => {
+      await box.check();
+      await expect(box).toBeChecked({ timeout: 500 });
+    }).toPass();
+  }
 }
 
 test("the demo names its people", () => {
