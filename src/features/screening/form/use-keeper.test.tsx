@@ -143,6 +143,18 @@ describe("the keeper", () => {
     expect(pages()).toEqual([]);
   });
 
+  it("says that all is kept when the choice is for what the server holds", async () => {
+    server.held = view(typed(base, "1.03", "theirs"), 2, "E-115");
+    type(typed(base, "1.03", "mine"));
+    await wait(700);
+    expect(hook.result.current.keeping.state).toBe("conflict");
+    const puts = server.puts;
+    act(() => hook.result.current.settle(server.held.document));
+    await wait(700);
+    expect(hook.result.current.keeping.state).toBe("kept");
+    expect(server.puts).toBe(puts);
+  });
+
   it("knows its own save again when only the answer was lost", async () => {
     server.cut = "answer";
     type(typed(base, "1.03", "bet"));

@@ -133,7 +133,11 @@ export function useKeeper(
 
   const save = useCallback(async (): Promise<number | null> => {
     if (stopped.current) return null;
-    if (!changed()) return held.current.version;
+    if (!changed()) {
+      // The choice may have been for what the server holds already: then all is kept, and said so.
+      setKeeping((before) => (before.state === "conflict" ? { state: "kept", at: formatClock(new Date()) } : before));
+      return held.current.version;
+    }
     const document = now.current;
     unanswered.current = [...unanswered.current, document].slice(-rememberedSends);
     note();
