@@ -17,14 +17,30 @@ export function LogFilterForm({ filter }: { filter: Partial<LogFilter> }) {
       action={pages.log}
       className="mb-1 flex flex-wrap items-end gap-2.5 border-b border-rule-2 pb-3.5"
     >
-      <Labelled label="Record">
-        <input name="record" defaultValue={record} maxLength={20} placeholder="SC-0001" size={9} className="field-value words" />
+      <Labelled id="filter-record" label="Record">
+        <input
+          id="filter-record"
+          name="record"
+          defaultValue={record}
+          maxLength={20}
+          placeholder="SC-0001"
+          size={9}
+          className="field-value words"
+        />
       </Labelled>
-      <Labelled label="By">
-        <input name="badge" defaultValue={badge} maxLength={12} placeholder="anyone" size={8} className="field-value words" />
+      <Labelled id="filter-badge" label="By">
+        <input
+          id="filter-badge"
+          name="badge"
+          defaultValue={badge}
+          maxLength={12}
+          placeholder="anyone"
+          size={8}
+          className="field-value words"
+        />
       </Labelled>
-      <Labelled label="What">
-        <select name="kind" defaultValue={kind} className="field-value words w-[190px] !pr-7 phone:w-auto">
+      <Labelled id="filter-kind" label="What">
+        <select id="filter-kind" name="kind" defaultValue={kind} className="field-value words w-[190px] !pr-7 phone:w-auto">
           <option value="">anything</option>
           {Object.entries(entryKinds).map(([value, { words }]) => (
             <option key={value} value={value}>
@@ -34,11 +50,11 @@ export function LogFilterForm({ filter }: { filter: Partial<LogFilter> }) {
         </select>
         <Chevron />
       </Labelled>
-      <Labelled label="From">
-        <input name="from" type="date" defaultValue={from} className="field-value words" />
+      <Labelled id="filter-from" label="From">
+        <input id="filter-from" name="from" type="date" defaultValue={from} className="field-value words" />
       </Labelled>
-      <Labelled label="To">
-        <input name="to" type="date" defaultValue={to} className="field-value words" />
+      <Labelled id="filter-to" label="To">
+        <input id="filter-to" name="to" type="date" defaultValue={to} className="field-value words" />
       </Labelled>
       <Button type="submit">Show</Button>
       {filtered && (
@@ -50,11 +66,13 @@ export function LogFilterForm({ filter }: { filter: Partial<LogFilter> }) {
   );
 }
 
-function Labelled({ label, children }: { label: string; children: ReactNode }) {
+function Labelled({ id, label, children }: { id: string; label: string; children: ReactNode }) {
   return (
-    <label className="grid gap-1 text-label text-ink-3 phone:flex-[1_0_45%]">
-      {label}
+    <div className="grid gap-1 phone:flex-[1_0_45%]">
+      <label htmlFor={id} className="text-label text-ink-3">
+        {label}
+      </label>
       <span className="field-box relative">{children}</span>
-    </label>
+    </div>
   );
 }

@@ -31,16 +31,20 @@ export function ScreeningFilterForm({
       action={pages.screenings}
       className="mb-1 flex flex-wrap items-end gap-2.5 border-b border-rule-2 pb-3.5"
     >
-      <label className="grid gap-1 text-label text-ink-3 phone:flex-[1_0_100%]">
-        Record, title or section
+      <div className="grid gap-1 phone:flex-[1_0_100%]">
+        <label htmlFor="filter-text" className="text-label text-ink-3">
+          Record, title or section
+        </label>
         <span className="field-box">
-          <input name="text" type="search" maxLength={80} defaultValue={text} className="field-value words" />
+          <input id="filter-text" name="text" type="search" maxLength={80} defaultValue={text} className="field-value words" />
         </span>
-      </label>
-      <label className="grid gap-1 text-label text-ink-3 phone:flex-[1_0_45%]">
-        State
+      </div>
+      <div className="grid gap-1 phone:flex-[1_0_45%]">
+        <label htmlFor="filter-state" className="text-label text-ink-3">
+          State
+        </label>
         <span className="field-box relative">
-          <select name="state" defaultValue={state} className="field-value words !pr-7">
+          <select id="filter-state" name="state" defaultValue={state} className="field-value words !pr-7">
             <option value="">any</option>
             {revisionStates.map((one) => (
               <option key={one} value={one}>
@@ -50,11 +54,13 @@ export function ScreeningFilterForm({
           </select>
           <Chevron />
         </span>
-      </label>
-      <label className="grid gap-1 text-label text-ink-3 phone:flex-[1_0_45%]">
-        Section
+      </div>
+      <div className="grid gap-1 phone:flex-[1_0_45%]">
+        <label htmlFor="filter-section" className="text-label text-ink-3">
+          Section
+        </label>
         <span className="field-box relative">
-          <select name="sectionId" defaultValue={sectionId} className="field-value words !pr-7">
+          <select id="filter-section" name="sectionId" defaultValue={sectionId} className="field-value words !pr-7">
             <option value="">any</option>
             {sections.map(({ id, tag, name, facility }) => (
               <option key={id} value={id}>
@@ -64,7 +70,7 @@ export function ScreeningFilterForm({
           </select>
           <Chevron />
         </span>
-      </label>
+      </div>
       <Button type="submit">Show</Button>
       {(text || state || sectionId) && (
         <ButtonLink kind="quiet" href={pages.screenings}>
