@@ -70,7 +70,7 @@ export function DecisionPanel({ screeningId, prepared, author, acknowledged, vie
       <fieldset disabled={held} className="mt-2.5 border-t border-ink">
         <legend className="sr-only">Your decision</legend>
         <Option choice="countersign" current={choice} onChoose={(one) => set("choice", one)} label="Countersign">
-          {meanings.countersign}
+          Read, and accepted as a basis for review, no more. Conditions may stand with it.
         </Option>
         <Option choice="return" current={choice} onChoose={(one) => set("choice", one)} label="Return with remarks">
           The record goes back to {author}. Your remarks are kept in the log.

@@ -37,7 +37,9 @@ export function PersonPanel({ person, takesTwo }: Props) {
         {person.printedName}
         {!person.active && ". The account is disabled."}
       </p>
-      <div role="status">{done && <Notice tone="caution">{done}</Notice>}</div>
+      <p role="status" className="font-semibold [&:not(:empty)]:border-y [&:not(:empty)]:py-2.5">
+        {done}
+      </p>
       {change.isError && (
         <Notice tone="error">
           {wordsOf(change.error)}

@@ -5,9 +5,7 @@ import { dataCsv, dataFileName } from "./data-csv";
 
 const written = (system: "SI" | "US") => dataCsv(madeContent(), madeRun(), { system, barometricPressurePa: 101325 });
 const read = (text: string) => {
-  const rows: string[][] = parse(text, { comment: "#", relax_column_count: true });
-  const table = rows.filter((row) => !row[0]?.startsWith("#"));
-  const [head = [], ...body] = table;
+  const [head = [], ...body]: string[][] = parse(text, { comment: "#" });
   return { head, body };
 };
 

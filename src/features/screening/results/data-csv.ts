@@ -25,7 +25,7 @@ const columns: Column[] = [
 ];
 
 /**
- * The series of a run for a spreadsheet (RFC 4180, comma and CRLF): each column in SI and beside it in the unit shown. Rows that open with #
+ * The series of a run for a spreadsheet (RFC 4180, comma and CRLF): each column in SI and beside it in the unit shown. Lines that open with #
  * say what the figures are and which cautions stand with them.
  */
 export function dataCsv(
@@ -55,10 +55,10 @@ export function dataCsv(
     `# engine ${content.engineVersion}, case ${result.caseSha256}`,
     ...content.cautions.map(({ id, words }) => `# ${id} ${words}`),
   ];
-  return [...about.map((line) => [line]), head, ...rows].map((row) => row.map(cell).join(",")).join("\r\n") + "\r\n";
+  return [...about, ...[head, ...rows].map((row) => row.map(cell).join(","))].map((line) => `${line}\r\n`).join("");
 }
 
-/** Quoted where the format asks for it. Text never starts with what a spreadsheet would run as a formula: every text here is our own or opens with #. */
+/** Quoted where the format asks for it. Names of columns are our own; what people typed stands behind a # only. */
 function cell(value: string | number): string {
   const text = typeof value === "number" ? (Number.isFinite(value) ? String(value) : "") : value;
   return /[",\r\n]/.test(text) ? `"${text.replaceAll('"', '""')}"` : text;
