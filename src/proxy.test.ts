@@ -1,3 +1,4 @@
+import { createHash } from "node:crypto";
 import { NextRequest } from "next/server";
 import { afterEach, describe, expect, it, vi } from "vitest";
 import { contentSecurityPolicy, proxy } from "./proxy";
@@ -41,7 +42,11 @@ describe("the content policy", () => {
 
   it("allows neither eval nor inline styles outside development", () => {
     const policy = contentSecurityPolicy("n", false);
-    expect(policy).not.toContain("unsafe");
+    expect(policy).not.toContain("unsafe-inline");
+    expect(policy).not.toContain("unsafe-eval");
+    // The one style attribute let in is React's own, by its hash.
+    const hidden = createHash("sha256").update("display:none").digest("base64");
+    expect(policy).toContain(`style-src 'self' 'nonce-n' 'unsafe-hashes' 'sha256-${hidden}';`);
     expect(policy).toContain("default-src 'none'");
     expect(policy).toContain("frame-ancestors 'none'");
     expect(contentSecurityPolicy("n", true)).toContain("'unsafe-eval'");

@@ -46,12 +46,18 @@ function canonicalAddress(request: NextRequest): URL | null {
   return new URL(request.nextUrl.pathname + request.nextUrl.search, origin);
 }
 
+/**
+ * SHA-256 of "display:none": React hides a streamed piece of a drawing with just this attribute until its place is ready. No other style
+ * attribute is let in.
+ */
+const hiddenSegment = "sha256-aqNNdDLnnrDOnTNdkJpYlAxKVJtLt9CtFLklmInuUAE=";
+
 /** Scripts and styles of our own only. Development needs eval and inline styles for its overlay and hot reload; the product never does. */
 export function contentSecurityPolicy(nonce: string, development: boolean): string {
   const directives = {
     "default-src": "'none'",
     "script-src": `'self' 'nonce-${nonce}' 'strict-dynamic'${development ? " 'unsafe-eval'" : ""}`,
-    "style-src": development ? "'self' 'unsafe-inline'" : `'self' 'nonce-${nonce}'`,
+    "style-src": development ? "'self' 'unsafe-inline'" : `'self' 'nonce-${nonce}' 'unsafe-hashes' '${hiddenSegment}'`,
     "img-src": "'self' data:",
     "font-src": "'self'",
     "connect-src": development ? "'self' ws:" : "'self'",
