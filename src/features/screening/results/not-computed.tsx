@@ -8,22 +8,27 @@ import { ComputeButton } from "./compute-button";
 export function NotComputed({ screening }: { screening: ScreeningView }) {
   const { id, may, draft } = screening;
   return (
-    <EmptyState
-      axes
-      title={`${screening.record} rev ${screening.rev} is not computed yet`}
-      action={
-        <>
-          {may.edit && (
-            <ButtonLink kind="main" href={pages.part(id, "scope")}>
-              Go to the lines
-            </ButtonLink>
-          )}
-          {may.compute && draft && <ComputeButton draft={draft}>Compute in full</ComputeButton>}
-        </>
-      }
-    >
-      Figures, limits and cautions stand here once the lines of parts 1 to 7 are entered and computed in full. Until then there is
-      nothing to rely on.
-    </EmptyState>
+    <>
+      <h1 className="sr-only">
+        {screening.record} rev {screening.rev}
+      </h1>
+      <EmptyState
+        axes
+        title={`${screening.record} rev ${screening.rev} is not computed yet`}
+        action={
+          <>
+            {may.edit && (
+              <ButtonLink kind="main" href={pages.part(id, "scope")}>
+                Go to the lines
+              </ButtonLink>
+            )}
+            {may.compute && draft && <ComputeButton draft={draft}>Compute in full</ComputeButton>}
+          </>
+        }
+      >
+        Figures, limits and cautions stand here once the lines of parts 1 to 7 are entered and computed in full. Until then there
+        is nothing to rely on.
+      </EmptyState>
+    </>
   );
 }

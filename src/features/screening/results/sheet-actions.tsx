@@ -27,7 +27,7 @@ export function SheetActions({ screening, more }: { screening: ScreeningView; mo
         </ButtonLink>
       )}
       {may.revise && <NewRevisionButton screeningId={id} rev={rev} returned={state === "returned"} />}
-      {draft && may.edit && <ButtonLink href={pages.part(id, "scope")}>Back to the lines</ButtonLink>}
+      {draft && prepared && may.edit && <ButtonLink href={pages.part(id, "scope")}>Back to the lines</ButtonLink>}
       {draft && may.compute && prepared && !prepared.stale && <ComputeButton draft={draft}>Compute again</ComputeButton>}
       {prepared && <DataButton prepared={prepared} />}
       {more}
