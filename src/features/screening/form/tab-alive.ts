@@ -16,7 +16,8 @@ export function keepAlive(tab: string, signal: AbortSignal): void {
 
 export async function isAlive(tab: string): Promise<boolean> {
   if (!navigator.locks) return false;
-  return navigator.locks.request(lockOf(tab), { ifAvailable: true }, (lock) => lock === null);
+  // Shared, so that two who ask at the same moment do not take each other for the tab.
+  return navigator.locks.request(lockOf(tab), { mode: "shared", ifAvailable: true }, (lock) => lock === null);
 }
 
 export const newTab = (): string => Array.from(crypto.getRandomValues(new Uint32Array(2)), (part) => part.toString(36)).join("");
