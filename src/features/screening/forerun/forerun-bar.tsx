@@ -26,7 +26,7 @@ export function ForerunBar({ controls, open, onToggle }: { controls: string; ope
         {result && governing ? (
           <>
             <VerdictWord verdict={result.verdict} /> <b>{governing.figure}</b>
-            <span className="block text-label text-ink-3">{note ?? `${governing.words}; Forerun`}</span>
+            <span className="block text-label text-ink-3">{note ?? governing.words}</span>
           </>
         ) : (
           <>

@@ -2,7 +2,6 @@
 
 import { Line } from "@/components/line/line";
 import { UnitField } from "@/components/line/unit-field";
-import { useUnits } from "@/components/units/units-provider";
 import type { LineKey, QuantityLine } from "@/contracts/lines/line";
 import { unitSymbols } from "@/engine/units";
 import { useDraft } from "./draft-context";
@@ -13,7 +12,6 @@ import { usePasteColumn } from "./use-paste-column";
 /** A number with its unit and its source. Typing keeps the text; the SI value beside it follows; choosing a unit changes what is shown only. */
 export function QuantityRow({ line, lineKey }: { line: QuantityLine; lineKey: LineKey }) {
   const { draft, editable, errors, made, setLine, unitOf, chooseUnit, subject } = useDraft();
-  const { system } = useUnits();
   const baro = subject.site.barometricPressurePa;
   const value = draft.lines[lineKey];
   const unit = unitOf(lineKey, line);
@@ -28,7 +26,7 @@ export function QuantityRow({ line, lineKey }: { line: QuantityLine; lineKey: Li
       no={lineKey}
       label={line.label}
       hint={line.optional && !line.hint ? "may stay empty" : line.hint}
-      other={otherText(line, value, system, baro)}
+      other={otherText(line, value, unit, baro)}
       message={error ? { tone: "bad", text: error } : undefined}
       tone={!editable ? "locked" : "rest"}
       source={

@@ -51,8 +51,9 @@ describe("a unit typed behind the figure", () => {
 
 describe("the other system under the label", () => {
   it("stands where the systems differ and there is a value", () => {
-    expect(otherText(bore, value("25.4", "mm", 0.0254), "SI", 101325)).toMatch(/^1\.\d*\u00a0in$/);
-    expect(otherText(bore, undefined, "SI", 101325)).toBeUndefined();
-    expect(otherText(lineByNo("5.05") as QuantityLine, value("5", "s", 5), "SI", 101325)).toBeUndefined();
+    expect(otherText(bore, value("25.4", "mm", 0.0254), "mm", 101325)).toMatch(/^1\.\d*\u00a0in$/);
+    expect(otherText(bore, value("1", "in", 0.0254), "in", 101325)).toBe("25.4\u00a0mm");
+    expect(otherText(bore, undefined, "mm", 101325)).toBeUndefined();
+    expect(otherText(lineByNo("5.05") as QuantityLine, value("5", "s", 5), "s", 101325)).toBeUndefined();
   });
 });

@@ -26,16 +26,15 @@ export function shownText(line: QuantityLine, value: LineValue | undefined, unit
   return value.si === null ? "" : formatForField(line.quantity, value.si, unit, barometricPressurePa);
 }
 
-/** The stored value in the other system, small under the label; nothing where both read alike. */
+/** The stored value in the system that its field does not show, small under the label; nothing where both read alike. */
 export function otherText(
   line: QuantityLine,
   value: LineValue | undefined,
-  system: UnitSystem,
+  shown: string,
   barometricPressurePa: number,
 ): string | undefined {
-  if (value?.si == null) return undefined;
-  const unit = line.shown[system === "SI" ? "US" : "SI"];
-  if (unit === line.shown[system]) return undefined;
+  if (value?.si == null || line.shown.SI === line.shown.US) return undefined;
+  const unit = line.shown[unitFits(shown, "SI") ? "US" : "SI"];
   return formatQuantity(line.quantity, value.si, unit, { barometricPressurePa }).text;
 }
 
