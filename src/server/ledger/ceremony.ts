@@ -58,6 +58,10 @@ export async function proveCeremony(
     .set({ method: input.method, provedAt: sql`now()` })
     .where(and(eq(ceremony.nonce, input.nonce), isNull(ceremony.usedAt), gt(ceremony.expiresAt, sql`now()`)))
     .returning({ nonce: ceremony.nonce });
-  if (proved.length === 0)
+  if (proved.length > 0) return;
+  // A twin of this request may have used the page since it was read above; the record gives both the same receipt.
+  const [since] = await writeDatabase.select({ usedAt: ceremony.usedAt }).from(ceremony).where(eq(ceremony.nonce, input.nonce));
+  if (!since?.usedAt) {
     throw new Refusal("ceremony-expired", { detail: "The signing page was open for more than five minutes." });
+  }
 }
