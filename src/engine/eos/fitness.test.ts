@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import type { FluidSpec } from "../cases/fluid-spec";
+import { equationIds, type FluidSpec } from "../cases/fluid-spec";
 import { fitness } from "./fitness";
 import { spread } from "./spread";
 
@@ -33,6 +33,39 @@ describe("the fitness of each equation", () => {
     expect(verdicts(fluid({ propane: 1 }), 372, 4.3e6)["peng-robinson-1976"]!.verdict).toBe("uncertain");
     expect(verdicts(fluid({ hydrogen: 0.5, methane: 0.5 }), 300, 1e7)["peng-robinson-1976"]!.verdict).toBe("uncertain");
     expect(verdicts(fluid({ methane: 0.98, water: 0.02 }), 400, 1e6)["soave-redlich-kwong"]!.verdict).toBe("uncertain");
+  });
+});
+
+describe("the fields of a fitness entry", () => {
+  it("hold the state by each equation, the published range, and which phases disagree", () => {
+    const found = fitness(fluid({ propane: 1 }), { temperatureK: 300, pressurePa: 2e6 });
+    expect(found.map(({ equation }) => equation)).toEqual(equationIds);
+    const reference = found.at(-1)!;
+    expect(reference.published).toEqual({ temperatureK: [85.525, 650], maximumPressurePa: 1e9, inside: true });
+    expect(reference.deviation).toBeUndefined();
+    expect(reference.values!.phase).toBe("liquid");
+    // liquid propane at 300 K, 20 bar: Lemmon et al. 2009, 491.7 kg/m3 (from memory of the saturated liquid, 489.4, and a little above)
+    expect(reference.values!.densityKgPerM3).toBeGreaterThan(489);
+    expect(reference.values!.densityKgPerM3).toBeLessThan(496);
+    const srk = found.find(({ equation }) => equation === "soave-redlich-kwong")!;
+    expect(srk.deviation!.densityPercent).toBeCloseTo(-8, 0); // +8.6 % in Z, docs/methods/fitness.md
+    expect(srk.deviation!.otherPhase).toBe(false);
+    expect(srk.published).toBeUndefined();
+  });
+
+  it("say when two equations find other phases, between their boiling pressures", () => {
+    // saturation of propane at 300 K: reference 9.978 bar; van der Waals boils far above
+    const found = verdicts(fluid({ propane: 1 }), 300, 1.05e6);
+    expect(found["van-der-waals"]!.deviation!.otherPhase).toBe(true);
+  });
+
+  it("refuse a wrong state by the name of its field, and call no state below a triple point fit", () => {
+    expect(() => fitness(fluid({ methane: 1 }), { temperatureK: -1, pressurePa: 1e5 })).toThrow(
+      expect.objectContaining({ code: "invalid-case", path: "temperatureK" }),
+    );
+    for (const { verdict } of fitness(fluid({ carbon_dioxide: 1 }), { temperatureK: 200, pressurePa: 1e6 })) {
+      expect(["outside-range", "comparison-only"]).toContain(verdict);
+    }
   });
 });
 

@@ -1,14 +1,15 @@
 import { equationIds, type EquationId, type FluidSpec } from "../cases/fluid-spec";
 import { EngineError } from "../errors";
+import type { Equilibrium } from "../flash/equilibrium";
 import { flashPT } from "../flash/flash-pt";
+import { gasConstant } from "../gas-constant";
 import { createFluidModel } from "./create-fluid-model";
 import type { FluidModel } from "./fluid-model";
-import { gergValidity } from "./gerg/gerg-data";
+import { judgeEquation, type FitnessVerdict, type PublishedRange } from "./fitness-rules";
 import { referenceFluids } from "./reference/reference-data";
 import { equations } from "./registry";
 
-/** "first": the most accurate there is for this fluid; "fit": acceptable for screening; the rest say why not. */
-export type FitnessVerdict = "first" | "fit" | "uncertain" | "comparison-only" | "outside-range" | "not-applicable";
+export type { FitnessVerdict };
 
 export interface Fitness {
   equation: EquationId;
@@ -16,8 +17,35 @@ export interface Fitness {
   verdict: FitnessVerdict;
   /** Sentences for the reader, most important first. */
   notes: string[];
-  /** Deviation of density [%] and of the enthalpy departure [% of R T] from the best equation for this fluid, where there is one. */
-  deviation?: { from: EquationId; densityPercent: number; enthalpyPercentOfRT: number };
+  /** The published range of a multiparameter equation (GERG-2008: the extended one), and whether the state lies in it. */
+  published?: PublishedRange;
+  /** The PT equilibrium by this equation; absent where it gives none. */
+  values?: FitnessValues;
+  /** From the best equation for this fluid, where there is one and this is another. */
+  deviation?: FitnessDeviation;
+}
+
+export interface FitnessValues {
+  phase: Equilibrium["phase"];
+  vapourMoleFraction: number;
+  densityKgPerM3: number;
+  compressibility: number;
+  /** Real less ideal gas at the same temperature and pressure. */
+  enthalpyDepartureJPerMol: number;
+  internalEnergyDepartureJPerMol: number;
+  /** One phase only. */
+  soundSpeedMPerS?: number;
+}
+
+export interface FitnessDeviation {
+  from: EquationId;
+  /** 100 (ρ/ρ_best − 1) */
+  densityPercent: number;
+  /** Difference of the enthalpy departures, in % of R T and in J/mol. */
+  enthalpyPercentOfRT: number;
+  enthalpyJPerMol: number;
+  /** The two equations find different phases here: the numbers compare unlike states. */
+  otherPhase: boolean;
 }
 
 interface Point {
@@ -25,46 +53,75 @@ interface Point {
   pressurePa: number;
 }
 
-/** Shares and distances of the notes (policy, ours; docs/methods/fitness.md). */
-const policy = { nearTemperature: 0.05, nearPressure: 0.1, quantumShare: 0.05, polarShare: 0.001, alphaLimit: 5 };
-const quantum = new Set(["hydrogen", "helium"]);
-const polar = new Set(["water", "methanol", "ammonia"]);
-
-/** What can be said of each equation for a fluid at a state, in the order of the registry. */
+/**
+ * What can be said of each equation for a fluid at a state: one entry for every equation, in the order of `equationIds`.
+ *
+ * Throws   EngineError "invalid-case" where the fluid or the state itself is wrong. An equation that cannot do the fluid is an
+ *          entry ("not-applicable"), and so is one that gives no state here ("outside-range").
+ */
 export function fitness(fluid: FluidSpec, point: Point): Fitness[] {
+  requirePoint(point);
   const best = bestEquation(fluid);
-  const bench = best ? attempt(() => measured(withEquation(fluid, best), point)) : undefined;
-  return equationIds.flatMap((equation): Fitness[] => {
-    const entry = equations[equation];
-    if (!entry) return [];
+  const found = equationIds.map((equation) => {
+    const entry = equations[equation]!;
     const base = { equation, title: entry.title };
     let model: FluidModel;
     try {
       model = createFluidModel(withEquation(fluid, equation));
     } catch (error) {
       if (!(error instanceof EngineError) || error.code === "invalid-case") throw error;
-      return [{ ...base, verdict: "not-applicable", notes: [error.message] }];
+      return { ...base, verdict: "not-applicable" as const, notes: [error.message] };
     }
-    const { verdict, notes } = judge(model, point, best);
-    const own = equation === best ? bench : attempt(() => measured(withEquation(fluid, equation), point));
-    if (!own) return [{ ...base, verdict: "outside-range", notes: ["The equation gives no state here.", ...notes] }];
-    const deviation =
-      best && bench && equation !== best
-        ? {
-            from: best,
-            densityPercent: 100 * (bench.volume / own.volume - 1),
-            enthalpyPercentOfRT: (100 * (own.departure - bench.departure)) / (8.314 * point.temperatureK),
-          }
-        : undefined;
-    return [deviation ? { ...base, verdict, notes, deviation } : { ...base, verdict, notes }];
+    const { verdict, notes, published } = judgeEquation(model, point, best);
+    const values = attempt(() => measured(model, point));
+    const own = { ...base, ...(published ? { published } : {}) };
+    if (!values) return { ...own, verdict: "outside-range" as const, notes: ["The equation gives no state here.", ...notes] };
+    return { ...own, verdict, notes, values };
   });
+  const reference: Fitness | undefined = found.find(({ equation }) => equation === best);
+  return found.map((entry: Fitness) => withDeviation(entry, reference, point.temperatureK));
 }
 
-/** The reference equation of a pure fluid, GERG-2008 for a mixture of its components, else none. */
-function bestEquation(fluid: FluidSpec): EquationId | undefined {
+function withDeviation(entry: Fitness, best: Fitness | undefined, T: number): Fitness {
+  if (!best?.values || !entry.values || entry.equation === best.equation) return entry;
+  const difference = entry.values.enthalpyDepartureJPerMol - best.values.enthalpyDepartureJPerMol;
+  const deviation: FitnessDeviation = {
+    from: best.equation,
+    densityPercent: 100 * (entry.values.densityKgPerM3 / best.values.densityKgPerM3 - 1),
+    enthalpyPercentOfRT: (100 * difference) / (gasConstant * T),
+    enthalpyJPerMol: difference,
+    otherPhase: unlike(entry.values, best.values),
+  };
+  return { ...entry, deviation };
+}
+
+/** Vapour here and liquid there, or a split here and none there; supercritical is a word for either. */
+function unlike(a: FitnessValues, b: FitnessValues): boolean {
+  if (a.phase === "two-phase" || b.phase === "two-phase") return a.phase !== b.phase;
+  return Math.max(a.densityKgPerM3 / b.densityKgPerM3, b.densityKgPerM3 / a.densityKgPerM3) > 2;
+}
+
+/** The most accurate equation held for a fluid: the reference equation of a pure one, GERG-2008 for a mixture that it covers. */
+export function bestEquation(fluid: FluidSpec): EquationId | undefined {
   const present = fluid.components.filter(({ moleFraction }) => moleFraction > 0);
-  if (fluid.components.length === 1 && present[0] && !present[0].custom && referenceFluids.has(present[0].id)) return "reference";
+  if (
+    fluid.components.length === 1 &&
+    present[0] &&
+    !present[0].custom &&
+    !present[0].pseudo &&
+    referenceFluids.has(present[0].id)
+  )
+    return "reference";
   return attempt(() => createFluidModel(withEquation(fluid, "gerg-2008"))) ? "gerg-2008" : undefined;
+}
+
+function requirePoint({ temperatureK, pressurePa }: Point): void {
+  for (const [field, value] of [
+    ["temperatureK", temperatureK],
+    ["pressurePa", pressurePa],
+  ] as const) {
+    if (!(value > 0 && Number.isFinite(value))) throw new EngineError("invalid-case", `${field} must be above 0`, {}, field);
+  }
 }
 
 function withEquation(fluid: FluidSpec, equation: EquationId): FluidSpec {
@@ -72,80 +129,19 @@ function withEquation(fluid: FluidSpec, equation: EquationId): FluidSpec {
   return { ...fluid, equation, interaction: list ? "library" : fluid.interaction };
 }
 
-function measured(fluid: FluidSpec, point: Point) {
-  const model = createFluidModel(fluid);
+function measured(model: FluidModel, point: Point): FitnessValues {
   const state = flashPT(model, point);
-  const ideal = model.idealGas(point.temperatureK, point.pressurePa, model.feed);
-  return { volume: state.molarVolumeM3PerMol, departure: state.enthalpyJPerMol - ideal.enthalpyJPerMol };
-}
-
-function judge(model: FluidModel, { temperatureK: T, pressurePa: p }: Point, best: EquationId | undefined) {
-  const { equation, substances, feed } = model;
-  const notes: string[] = [];
-  let verdict: FitnessVerdict = equation === best ? "first" : "fit";
-  const lower = (to: FitnessVerdict, note: string) => {
-    const order: FitnessVerdict[] = ["first", "fit", "uncertain", "comparison-only", "outside-range", "not-applicable"];
-    if (order.indexOf(to) > order.indexOf(verdict)) verdict = to;
-    notes.push(note);
+  const { temperatureK: T, pressurePa: p, molarVolumeM3PerMol: v, phase, vapourMoleFraction, phases } = state;
+  const ideal = model.idealGas(T, p, model.feed);
+  const values: FitnessValues = {
+    phase,
+    vapourMoleFraction,
+    densityKgPerM3: model.mixtureMolarMass(model.feed) / v,
+    compressibility: (p * v) / (model.gasConstantJPerMolK * T),
+    enthalpyDepartureJPerMol: state.enthalpyJPerMol - ideal.enthalpyJPerMol,
+    internalEnergyDepartureJPerMol: state.internalEnergyJPerMol - ideal.internalEnergyJPerMol,
   };
-  const isCubic = equation !== "reference" && equation !== "gerg-2008";
-  const rich = (set: ReadonlySet<string>, share: number) => substances.some(({ id }, i) => set.has(id) && feed[i]! > share);
-
-  if (equation === "van-der-waals" || equation === "redlich-kwong")
-    lower("comparison-only", "Kept for comparison; not a basis for signing.");
-  if (equation === "reference") {
-    const { validity, citation } = referenceFluids.get(substances[0]!.id)!;
-    if (T < validity.Tmin_K || T > validity.Tmax_K || p > validity.pmax_Pa) {
-      lower("outside-range", `Published for ${validity.Tmin_K} to ${validity.Tmax_K} K and up to ${validity.pmax_Pa / 1e5} bar.`);
-    }
-    notes.push(citation);
-  }
-  if (equation === "gerg-2008") {
-    const inside = ({ T_K, p_Pa }: (typeof gergValidity)["normal"]) => T >= T_K[0] && T <= T_K[1] && p <= p_Pa[1];
-    if (!inside(gergValidity.extended))
-      lower("outside-range", "Outside the extended range of GERG-2008 (60 to 700 K, up to 700 bar).");
-    else if (!inside(gergValidity.normal))
-      lower("uncertain", "Outside the normal range of GERG-2008 (90 to 450 K, up to 350 bar), inside the extended one.");
-    else notes.push("Normal range: 0.1 % in density and speed of sound for typical natural gas from 250 to 450 K (from memory).");
-  }
-  if (isCubic && rich(polar, policy.polarShare)) {
-    lower("uncertain", "Water, methanol or ammonia is present: the classical mixing rules predict their liquids badly.");
-  }
-  if (isCubic && rich(quantum, policy.quantumShare)) {
-    lower("uncertain", "Hydrogen or helium is present: the enthalpy departure may have the wrong sign near inversion.");
-  }
-  if (
-    isCubic &&
-    substances.some(
-      ({ criticalTemperatureK }, i) => feed[i]! > policy.quantumShare && T > policy.alphaLimit * criticalTemperatureK,
-    )
-  ) {
-    notes.push("A component is above five times its critical temperature, where the temperature function was not fitted.");
-  }
-  if (isCubic && nearCritical(model, T, p)) {
-    lower(
-      "uncertain",
-      "Within 5 % of the critical temperature and 10 % of the critical pressure: energies uncertain, not for acceptance.",
-    );
-  }
-  if (isCubic && notes.length === 0) {
-    notes.push("Gas densities within about 3 %, saturation pressures within about 5 %, liquid densities within 5 to 15 %.");
-  }
-  return { verdict, notes };
-}
-
-/** Li's critical temperature and the mole-weighted critical pressure, as in flash/classify-phase.ts. */
-function nearCritical({ criticalTemperaturesK: Tc, criticalPressuresPa: pc, feed }: FluidModel, T: number, p: number): boolean {
-  let volume = 0;
-  let weighted = 0;
-  let pressure = 0;
-  for (let i = 0; i < feed.length; i++) {
-    const own = feed[i]! * (Tc[i]! / pc[i]!);
-    volume += own;
-    weighted += own * Tc[i]!;
-    pressure += feed[i]! * pc[i]!;
-  }
-  return Math.abs(T / (weighted / volume) - 1) < policy.nearTemperature && Math.abs(p / pressure - 1) < policy.nearPressure;
+  return phases.length === 1 ? { ...values, soundSpeedMPerS: phases[0]!.state.soundSpeedMPerS } : values;
 }
 
 function attempt<Value>(work: () => Value): Value | undefined {
