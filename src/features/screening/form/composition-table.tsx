@@ -2,6 +2,9 @@
 
 import { useState } from "react";
 import { Button } from "@/components/button/button";
+import { AddComponent } from "@/components/composition/add-component";
+import { AmountBar } from "@/components/composition/amount-bar";
+import { PasteComposition } from "@/components/composition/paste-composition";
 import { UnitField } from "@/components/line/unit-field";
 import { WarningSign } from "@/components/line/warning-sign";
 import { ButtonRow } from "@/components/shell/page-head";
@@ -11,9 +14,7 @@ import { componentList } from "@/contracts/component-list";
 import { molePercentOf } from "@/contracts/derive-si";
 import { compositionSum, moleFractions } from "@/contracts/draft-to-case";
 import type { LineKey } from "@/contracts/lines/line";
-import { AddComponent } from "./add-component";
 import { useDraft } from "./draft-context";
-import { PasteComposition } from "./paste-composition";
 import { SourceField } from "./source-field";
 
 const known = new Map(componentList.map((component) => [component.id, component]));
@@ -161,16 +162,5 @@ export function CompositionTable({ lineKey }: { lineKey: LineKey }) {
         </p>
       )}
     </div>
-  );
-}
-
-/** Amount on a logarithmic scale from 0.01 to 100 mol %, as SVG geometry. */
-function AmountBar({ molePercent }: { molePercent: number | null }) {
-  if (!molePercent || molePercent <= 0) return null;
-  const share = Math.min(1, Math.max(0.01, (Math.log10(molePercent) + 2) / 4));
-  return (
-    <svg viewBox="0 0 200 10" width="200" height="10" aria-hidden="true" className="max-w-full">
-      <rect x="0" y="1" width={200 * share} height="8" className="fill-c-pressure" />
-    </svg>
   );
 }

@@ -6,7 +6,7 @@ import { Dialog } from "@/components/dialog/dialog";
 import { Labelled } from "@/components/line/labelled";
 import { TextArea } from "@/components/line/text-area";
 import type { CompositionRow } from "@/contracts/draft";
-import { pastedComposition } from "./paste";
+import { pastedComposition } from "./pasted-composition";
 
 /** A pasted table is read, shown with its matches, and counts only when it is taken over. */
 export function PasteComposition({
