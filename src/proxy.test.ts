@@ -31,6 +31,18 @@ describe("the one address", () => {
   });
 });
 
+describe("the page's own address", () => {
+  const told = (url: string, headers = {}) =>
+    ask(url, "localhost", headers).headers.get("x-middleware-request-x-ebbmark-address");
+  it("is told to the page with its query, without the framework's own mark", () => {
+    expect(told("http://localhost/log?entry=7&_rsc=1x2")).toBe("/log?entry=7");
+    expect(told("http://localhost/desk?_rsc=1x2")).toBe("/desk");
+  });
+  it("is never what the browser claims", () => {
+    expect(told("http://localhost/desk", { "x-ebbmark-address": "//elsewhere.invalid" })).toBe("/desk");
+  });
+});
+
 describe("the content policy", () => {
   it("carries a fresh nonce for every answer and passes it to the page", () => {
     const nonceOf = () =>

@@ -1,4 +1,5 @@
 import { NextResponse, type NextRequest } from "next/server";
+import { addressHeader } from "@/server/auth/address-header";
 
 /**
  * Headers of every page and answer, and the one address of the product. It decides nothing about who may do what: that is asked where a
@@ -15,6 +16,7 @@ export function proxy(request: NextRequest): NextResponse {
   const forwarded = new Headers(request.headers);
   forwarded.set("x-nonce", nonce);
   forwarded.set("content-security-policy", policy);
+  forwarded.set(addressHeader, addressOf(request));
   // Only the framework itself sends these; from outside they have been ways past a check.
   forwarded.delete("x-middleware-subrequest");
   forwarded.delete("next-action");
@@ -27,6 +29,13 @@ export function proxy(request: NextRequest): NextResponse {
     response.headers.set("strict-transport-security", "max-age=31536000; includeSubDomains");
   }
   return response;
+}
+
+/** Path and query of the page, without the mark by which the framework asks for a page's data. */
+function addressOf({ nextUrl }: NextRequest): string {
+  const query = new URLSearchParams(nextUrl.searchParams);
+  query.delete("_rsc");
+  return nextUrl.pathname + (query.size > 0 ? `?${query}` : "");
 }
 
 export const config = { matcher: ["/((?!_next/static|_next/image|icon.svg|favicon.ico).*)"] };

@@ -6,23 +6,30 @@ const points = 40;
 
 /**
  * The pressure curve of a run as a thumbnail: x over twice the time allowed (over the run where none is set), y over the start pressure, at
- * even steps; the post where the target is due.
+ * even steps; the post where the pressure reaches its target, if it does within the width.
  */
 export function ebbOf(
   { limits, start }: Pick<BlowdownCase, "limits" | "start">,
-  { series, verdict }: Pick<BlowdownResult, "series" | "verdict">,
+  {
+    series,
+    verdict,
+    summary,
+  }: Pick<BlowdownResult, "series" | "verdict"> & {
+    summary: Pick<BlowdownResult["summary"], "timeToTargetPressureS">;
+  },
 ): Ebb {
   const { timeS, pressurePa } = series;
   const endS = timeS.at(-1) ?? 0;
   const allowedS = limits?.targetTimeS;
   const widthS = allowedS ? 2 * allowedS : endS;
+  const reachedS = summary.timeToTargetPressureS;
   const startPa = ("pressurePa" in start ? start.pressurePa : undefined) ?? pressurePa[0] ?? 1;
   const lastS = Math.min(widthS, endS);
   const x = Array.from({ length: points + 1 }, (_, at) => (lastS * at) / points);
   return {
     x: x.map((time) => round(widthS > 0 ? time / widthS : 0)),
     y: x.map((time) => round(interpolate(timeS, pressurePa, time) / startPa)),
-    postX: allowedS ? 0.5 : null,
+    postX: widthS > 0 && reachedS !== undefined && reachedS <= widthS ? round(reachedS / widthS) : null,
     beyond: verdict === "beyond",
   };
 }

@@ -3,6 +3,8 @@ import type { PartSlug } from "./lines/parts";
 
 export const pages = {
   signIn: "/sign-in",
+  /** Sign-in that leads on to a page of this site; to the desk without one. */
+  signInThen: (address: string | null) => (address ? `/sign-in?next=${encodeURIComponent(address)}` : "/sign-in"),
   changePassword: "/change-password",
   desk: "/desk",
   account: "/account",

@@ -16,7 +16,12 @@ export type PersonDetailView = PersonView & {
 };
 
 /** The signed-in person, as pages know them. */
-export type ViewerView = PersonView & { mustChangePassword: boolean; units: "SI" | "US"; demo: boolean };
+export type ViewerView = PersonView & {
+  mustChangePassword: boolean;
+  units: "SI" | "US";
+  theme: "light" | "dark" | "system" | null;
+  demo: boolean;
+};
 
 export type SessionView = { id: string; startedAt: string; lastSeenAt: string; browser: string; current: boolean };
 export type AccountView = { person: ViewerView; facilities: { id: string; name: string }[]; sessions: SessionView[] };
@@ -54,7 +59,7 @@ export type ScreeningRow = {
   rev: number;
   title: string;
   section: { id: string; tag: string; name: string };
-  facility: { id: string; code: string; name: string };
+  facility: { id: string; code: string; name: string; demo: boolean };
   state: RevisionState;
   verdict: Verdict | null;
   sentence: string | null;

@@ -8,13 +8,14 @@ import { showTheme, themeCookie, themes, type Theme } from "./theme";
 const words: Record<Theme, string> = { light: "Light", dark: "Dark", system: "As the system" };
 
 /** Radios for the sheet: light, dark, or as the system says. Takes effect at once; the cookie holds it for the next page. */
-export function ThemeSwitch({ initial }: { initial: Theme }) {
+export function ThemeSwitch({ initial, onChange }: { initial: Theme; onChange?: (theme: Theme) => void }) {
   const [theme, setTheme] = useState(initial);
 
   const choose = (chosen: Theme) => {
     setTheme(chosen);
     keepInCookie(themeCookie, chosen);
     showTheme(chosen);
+    onChange?.(chosen);
   };
 
   return (

@@ -26,6 +26,7 @@ export function WaitsList({ waits }: { waits: readonly Waiting[] }) {
                 {row.section.tag} {row.section.name}
               </span>{" "}
               {stateWords[row.state]}
+              {row.facility.demo && <span className="text-ink-3"> demo</span>}
               <span className="block font-serif text-prose text-ink-2">{row.sentence ?? row.why}</span>
             </span>
             <span className="grid phone:col-span-2">

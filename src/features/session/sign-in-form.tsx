@@ -7,6 +7,8 @@ import { Labelled } from "@/components/line/labelled";
 import { PasswordField } from "@/components/line/password-field";
 import { TextField } from "@/components/line/text-field";
 import { Notice } from "@/components/caution/notice";
+import { keepInCookie } from "@/components/cookie";
+import { themeCookie } from "@/components/theme/theme";
 import { useUnits } from "@/components/units/units-provider";
 import { endpoints, pages } from "@/contracts/paths";
 import { signInSchema, type SignIn } from "@/contracts/requests";
@@ -35,6 +37,7 @@ export function SignInForm({ next, demoAccounts }: { next?: string; demoAccounts
     mutationFn: (body: SignIn) => postJson<ViewerView>(endpoints.session, body),
     onSuccess: (viewer) => {
       setSystem(viewer.units);
+      if (viewer.theme) keepInCookie(themeCookie, viewer.theme);
       // A whole new page: whatever was drawn for a stranger is gone.
       window.location.assign(viewer.mustChangePassword ? pages.changePassword : safeNext(next));
     },

@@ -7,10 +7,10 @@ import { Strip } from "@/components/shell/strip";
 import type { Theme } from "@/components/theme/theme";
 import { ThemeSwitch } from "@/components/theme/theme-switch";
 import { UnitSwitch } from "@/components/units/unit-switch";
-import { endpoints, pages } from "@/contracts/paths";
+import { pages } from "@/contracts/paths";
 import { roleWords } from "@/contracts/roles";
 import type { ViewerView } from "@/contracts/views";
-import { putJson } from "@/features/query/fetch-json";
+import { rememberChoice } from "@/features/query/remember-choice";
 import { menuFor } from "./menu";
 import { SignOutButton } from "./sign-out-button";
 
@@ -23,14 +23,14 @@ export function WorkspaceStrip({ viewer, theme }: { viewer: ViewerView; theme: T
       home={pages.desk}
       tools={
         <>
-          <UnitSwitch onChange={rememberUnits} />
+          <UnitSwitch onChange={(units) => rememberChoice({ units })} />
           <BadgeMenu badge={viewer.badge} role={roleWords[viewer.role]}>
             <p className="text-small text-ink-3">
               <b className="block text-body text-ink">{viewer.printedName}</b>
               {roleWords[viewer.role]} {viewer.badge}
               {viewer.demo && ", demo"}
             </p>
-            <ThemeSwitch initial={theme} />
+            <ThemeSwitch initial={theme} onChange={(chosen) => rememberChoice({ theme: chosen })} />
             <Link href={pages.account} className="flex min-h-[34px] items-center phone:min-h-[44px]">
               Your account
             </Link>
@@ -40,9 +40,4 @@ export function WorkspaceStrip({ viewer, theme }: { viewer: ViewerView; theme: T
       }
     />
   );
-}
-
-/** Kept with the person for the next browser. This browser holds the choice in a cookie already, so nothing is said when it can't be. */
-function rememberUnits(units: "SI" | "US"): void {
-  putJson(endpoints.preferences, { units }).catch(() => undefined);
 }

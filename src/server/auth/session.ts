@@ -19,6 +19,8 @@ export type LoadedSession = {
   active: boolean;
   mustChangePassword: boolean;
   units: "SI" | "US";
+  /** How the person likes the sheet; null where they never chose. */
+  theme: "light" | "dark" | "system" | null;
   facilityIds: ReadonlySet<string>;
   sessionId: string;
 };
@@ -44,6 +46,7 @@ export async function loadSession(sealed: string | undefined): Promise<LoadedSes
       idleS: sql<number>`extract(epoch from now() - ${session.lastSeenAt})::float8`,
       mustChange: credential.mustChange,
       units: personSetting.units,
+      theme: personSetting.theme,
     })
     .from(session)
     .innerJoin(credential, eq(credential.personId, session.personId))
@@ -71,6 +74,7 @@ export async function loadSession(sealed: string | undefined): Promise<LoadedSes
     active: found.active,
     mustChangePassword: row.mustChange,
     units: row.units ?? "SI",
+    theme: row.theme,
     facilityIds: new Set(facilities.map((facility) => facility.id)),
     sessionId,
   };

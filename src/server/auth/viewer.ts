@@ -4,6 +4,7 @@ import type { Role } from "@/contracts/roles";
 import type { ViewerView } from "@/contracts/views";
 import { env } from "@/server/env";
 import { Refusal } from "@/server/refusal";
+import { addressHeader } from "./address-header";
 import { cookieName } from "./cookie";
 import { loadSession, type LoadedSession } from "./session";
 
@@ -21,6 +22,7 @@ export type Viewer = {
   readonly active: boolean;
   readonly mustChangePassword: boolean;
   readonly units: "SI" | "US";
+  readonly theme: "light" | "dark" | "system" | null;
   readonly facilityIds: ReadonlySet<string>;
   /** SHA-256 of the session id; null for a job. */
   readonly sessionId: string | null;
@@ -43,11 +45,14 @@ export async function currentViewer(): Promise<Viewer | null> {
   return viewerFromCookie((await cookies()).get(cookieName())?.value);
 }
 
-/** For pages. Sends strangers to the sign-in page, and people with a first password to the page that changes it. */
+/** For pages. Sends strangers to the sign-in page, which leads back here, and people with a first password to the page that changes it. */
 export async function requireViewer(options: { evenIfPasswordMustChange?: true } = {}): Promise<Viewer> {
   const viewer = await currentViewer();
   const { redirect } = await import("next/navigation");
-  if (!viewer) return redirect(pages.signIn);
+  if (!viewer) {
+    const { headers } = await import("next/headers");
+    return redirect(pages.signInThen((await headers()).get(addressHeader)));
+  }
   if (viewer.mustChangePassword && !options.evenIfPasswordMustChange) return redirect(pages.changePassword);
   return viewer;
 }
@@ -62,6 +67,7 @@ export function systemViewer(job: "seed"): Viewer {
     active: true,
     mustChangePassword: false,
     units: "SI",
+    theme: null,
     facilityIds: new Set(),
     sessionId: null,
     [made]: true,
@@ -71,6 +77,6 @@ export function systemViewer(job: "seed"): Viewer {
 /** What the browser may know of the person. */
 export function viewerView(viewer: Viewer): ViewerView {
   if (viewer.role === "system") throw new Refusal("not-signed-in");
-  const { id, badge, printedName, role, active, mustChangePassword, units } = viewer;
-  return { id, badge, printedName, role, active, mustChangePassword, units, demo: env().demo };
+  const { id, badge, printedName, role, active, mustChangePassword, units, theme } = viewer;
+  return { id, badge, printedName, role, active, mustChangePassword, units, theme, demo: env().demo };
 }

@@ -38,7 +38,7 @@ export function selectRows(transaction: Transaction, which: "any" | "signed", wh
       entryAt: entry.at,
       contributors: draft.contributors,
       section: { id: section.id, tag: section.tag, name: section.name },
-      facility: { id: facility.id, code: facility.code, name: facility.name },
+      facility: { id: facility.id, code: facility.code, name: facility.name, demo: facility.demo },
       author: { id: person.id, badge: person.badge },
     })
     .from(screening)

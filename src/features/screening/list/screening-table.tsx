@@ -8,7 +8,7 @@ import { pages } from "@/contracts/paths";
 import type { ScreeningRow } from "@/contracts/views";
 
 /**
- * Screenings as listed: record, its own ebb, what it is of, where it stands, the verdict.
+ * Screenings as listed: record, its own ebb, what it is of (demo data says so), where it stands, the verdict.
  *
  * now       the server's time, so that this year's dates go without their year
  * section   leaves the section's name out where the page says it already
@@ -57,6 +57,7 @@ export function ScreeningTable({
                 </>
               )}
               <span className={section ? "text-ink-3" : "font-medium"}>{row.title}</span>
+              {row.facility.demo && <span className="text-ink-3"> demo</span>}
             </Cell>
             <Cell>
               <StateWord state={row.state} />
