@@ -15,8 +15,13 @@ export const carbonDioxideTriple = { temperatureK: 216.592, pressurePa: 517_950 
  * Checks   M5-01 in solids.checks.test.ts
  */
 export function carbonDioxideSublimationPressure(temperatureK: number): number {
+  requireRange("sublimation of carbon dioxide", temperatureK, 150, carbonDioxideTriple.temperatureK);
+  return carbonDioxideSublimationLine(temperatureK);
+}
+
+/** The same line without its bounds, for searches along a run: below 154 K it still falls steadily, and only the side of it counts. */
+export function carbonDioxideSublimationLine(temperatureK: number): number {
   const { temperatureK: Tt, pressurePa: pt } = carbonDioxideTriple;
-  requireRange("sublimation of carbon dioxide", temperatureK, 150, Tt);
   const theta = 1 - temperatureK / Tt;
   const sum = -14.740846 * theta + 2.4327015 * theta ** 1.9 - 5.3061778 * theta ** 2.9;
   return pt * Math.exp((Tt / temperatureK) * sum);
@@ -31,7 +36,7 @@ const solidCarbonDioxideVolume = 2.8e-5;
  *   f_s = p_sub(T) φ_sub exp[v_s (p − p_sub)/(R T)]
  *
  * Source   Poynting correction on the sublimation pressure; v_s about 2.8e-5 m³/mol (a rounded textbook value, from memory).
- * Holds    as the sublimation pressure
+ * Holds    as the sublimation pressure; further down it is the unbounded line
  * saturatedVapour   φ_sub [-] of the pure vapour at (T, p_sub), by the equation of the fluid
  */
 export function solidCarbonDioxideFugacity(
@@ -39,7 +44,7 @@ export function solidCarbonDioxideFugacity(
   pressurePa: number,
   saturatedVapour: (pressurePa: number) => number,
 ): number {
-  const sublimation = carbonDioxideSublimationPressure(temperatureK);
+  const sublimation = carbonDioxideSublimationLine(temperatureK);
   const poynting = (solidCarbonDioxideVolume * (pressurePa - sublimation)) / (gasConstant * temperatureK);
   return sublimation * saturatedVapour(sublimation) * Math.exp(poynting);
 }

@@ -2,17 +2,14 @@
  * Does a component freeze out of what is in the vessel?
  *
  * Carbon dioxide: alone, its pressure against the sublimation pressure; in a mixture, its fugacity against that of its solid
- *
- *   ln(p_sub/p_t) = (T_t/T) [−14.740846 θ + 2.4327015 θ^1.9 − 5.3061778 θ^2.9],  θ = 1 − T/T_t
- *   f_solid = p_sub φ_sub exp[v_s (p − p_sub)/(R T)],  v_s = 2.8e-5 m³/mol
- *
- * Source   Span and Wagner, J. Phys. Chem. Ref. Data 25 (1996) 1509, equation 3.12; the solid's molar volume is a rounded textbook value.
+ * (src/engine/solids/solid-lines.ts, with the source).
  * Other components: no sublimation line is held. A pure one is called solid below its triple point; in a mixture that is a warning.
  * Returns  above zero while nothing freezes
  */
 import type { FluidModel } from "../../eos/fluid-model";
 import { createPhaseState } from "../../eos/fluid-model";
 import type { FluidSpec } from "../fluid-spec";
+import { carbonDioxideSublimationLine, carbonDioxideTriple, solidCarbonDioxideFugacity } from "../../solids/solid-lines";
 import { findLibraryRow } from "../../substances/library";
 import type { Contents } from "./contents";
 
@@ -24,14 +21,9 @@ export type SolidCurve = {
   sublimationPa?: (temperatureK: number) => number;
 };
 
-const tripleK = 216.592;
-const triplePa = 517950;
-const solidVolumeM3PerMol = 2.8e-5;
+const tripleK = carbonDioxideTriple.temperatureK;
 
-export function carbonDioxideSublimationPa(temperatureK: number): number {
-  const q = 1 - temperatureK / tripleK;
-  return triplePa * Math.exp((tripleK / temperatureK) * (-14.740846 * q + 2.4327015 * q ** 1.9 - 5.3061778 * q ** 2.9));
-}
+export const carbonDioxideSublimationPa = carbonDioxideSublimationLine;
 
 /** Components of the fluid for which solid is looked at: a pure fluid with a known triple point, and carbon dioxide anywhere. */
 export function solidCurves(fluid: FluidSpec): SolidCurve[] {
@@ -55,7 +47,7 @@ export function solidMargin(fluid: FluidModel, contents: Contents, curves: reado
     else if (!curve.sublimationPa || (curve.pure && contents.phases === 2)) margin = Math.min(margin, T / curve.triplePointK - 1);
     else if (curve.pure) margin = Math.min(margin, Math.log(curve.sublimationPa(T) / contents.pressurePa));
     else {
-      const ratio = solidFugacity(fluid, curve.sublimationPa, contents) / fugacity(fluid, curve.index, contents);
+      const ratio = solidFugacity(fluid, curve.index, contents) / fugacity(fluid, curve.index, contents);
       margin = Math.min(margin, Math.log(ratio));
     }
   }
@@ -64,18 +56,12 @@ export function solidMargin(fluid: FluidModel, contents: Contents, curves: reado
 
 const scratch = createPhaseState();
 
-function solidFugacity(
-  fluid: FluidModel,
-  sublimationPa: (T: number) => number,
-  { temperatureK: T, pressurePa: p }: Contents,
-): number {
-  const sublimation = sublimationPa(T);
-  const R = fluid.gasConstantJPerMolK;
-  // φ of the vapour over the solid: within 2 % of one below the triple point of carbon dioxide's 5.2 bar; its second virial estimate.
-  const reduced = T / 304.1282;
-  const virial = 0.083 - 0.422 / reduced ** 1.6 + 0.22394 * (0.139 - 0.172 / reduced ** 4.2);
-  const lnPhi = (virial * sublimation * 304.1282) / (7377300 * T);
-  return sublimation * Math.exp(lnPhi + (solidVolumeM3PerMol * (p - sublimation)) / (R * T));
+function solidFugacity(fluid: FluidModel, index: number, { temperatureK: T, pressurePa: p }: Contents): number {
+  const pure = Float64Array.from(fluid.feed, (_, i) => (i === index ? 1 : 0));
+  const lnPhi = new Float64Array(pure.length);
+  return solidCarbonDioxideFugacity(T, p, (sublimationPa) =>
+    Math.exp(fluid.lnFugacityCoefficients(T, sublimationPa, pure, "vapour", lnPhi)[index] ?? 0),
+  );
 }
 
 function fugacity(
