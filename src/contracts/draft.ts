@@ -6,6 +6,7 @@
  */
 import { z } from "zod";
 import type { Line, LineKey, LineNo, LineReader } from "./lines/line";
+import { partByNumber } from "./lines/parts";
 import { lineByNo, lineKey, lines, parseLineKey } from "./lines/registry";
 
 export const sourceKinds = ["sheet", "measured", "derived", "assumed"] as const;
@@ -63,12 +64,21 @@ export function newDraft(title: string): DraftDocument {
     lines: {},
     composition: { rows: [], normalised: false, source: null },
   };
-  for (const line of lines) {
-    const value = initialValue(line);
-    if (value) draft.lines[lineKey(line, "A")] = value;
-  }
   draft.lines["1.10"] = { typed: title, unit: null, si: null, source: null };
-  return draft;
+  return withInitials(draft);
+}
+
+/**
+ * The draft with the registry's choices and assumed values in every line that nobody has touched: lines of a case just added, lines that came
+ * after the draft was begun. What was typed, emptied or chosen stays.
+ */
+export function withInitials(draft: DraftDocument): DraftDocument {
+  const added: DraftDocument["lines"] = {};
+  for (const { key, line } of everyKey(draft)) {
+    const value = key in draft.lines ? undefined : initialValue(line);
+    if (value) added[key] = value;
+  }
+  return Object.keys(added).length === 0 ? draft : { ...draft, lines: { ...draft.lines, ...added } };
 }
 
 function initialValue(line: Line): LineValue | undefined {
@@ -83,24 +93,27 @@ function initialValue(line: Line): LineValue | undefined {
 
 /** Reads other lines for `asked` rules, within one case and one item. */
 export function lineReader(draft: DraftDocument, letter = "A", item = 1): LineReader {
-  const value = (no: LineNo) => draft.lines[lineKey(lineByNo(no), letter, item)];
+  const value = (no: LineNo, of = letter) => draft.lines[lineKey(lineByNo(no), of, item)];
   return {
     choice: (no) => value(no)?.typed || undefined,
     si: (no) => value(no)?.si ?? undefined,
+    inAnyCase: (no, choice) => draft.cases.some((one) => value(no, one.letter)?.typed === choice),
   };
 }
 
 export const isAsked = (line: Line, draft: DraftDocument, letter = "A", item = 1): boolean =>
   line.asked?.(lineReader(draft, letter, item)) ?? true;
 
-/** Keys of all lines a draft asks for now, in registry order, with the case letters and items written out. */
-export function askedKeys(draft: DraftDocument): { key: LineKey; line: Line; letter: string; item: number }[] {
-  const asked: { key: LineKey; line: Line; letter: string; item: number }[] = [];
-  for (const line of lines) {
-    const perCase = lineKey(line, "A") !== lineKey(line, "B");
-    for (const { letter } of perCase ? draft.cases : draft.cases.slice(0, 1)) {
-      if (isAsked(line, draft, letter)) asked.push({ key: lineKey(line, letter), line, letter, item: 1 });
-    }
-  }
-  return asked;
+export type LinePlace = { key: LineKey; line: Line; letter: string; item: number };
+
+/** Keys of all lines of a draft, asked for or not, in registry order, with the case letters and items written out. */
+function everyKey(draft: DraftDocument): LinePlace[] {
+  return lines.flatMap((line) => {
+    const cases = partByNumber(line.part).perCase ? draft.cases : draft.cases.slice(0, 1);
+    return cases.map(({ letter }) => ({ key: lineKey(line, letter), line, letter, item: 1 }));
+  });
 }
+
+/** Keys of all lines a draft asks for now. */
+export const askedKeys = (draft: DraftDocument): LinePlace[] =>
+  everyKey(draft).filter(({ line, letter, item }) => isAsked(line, draft, letter, item));

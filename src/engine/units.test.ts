@@ -34,6 +34,10 @@ describe("the unit table", () => {
     expect(Math.abs(unitOf(quantity, symbol).factor / factor - 1)).toBeLessThan(5e-7);
   });
 
+  it("has Kv as 0.865 Cv (IEC 60534-1)", () => {
+    expect(fromSi("flowCoefficient", 1, "Kv")).toBeCloseTo(0.865, 3);
+  });
+
   it.each([
     ["°F", 32, 273.15],
     ["°F", 212, 373.15],

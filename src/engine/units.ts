@@ -15,7 +15,10 @@ const standardGravity = 9.80665;
 const btu = 1055.05585262;
 const rankine = 1 / 1.8;
 const psi = (pound * standardGravity) / inch ** 2;
-const barrel = 42 * 231 * inch ** 3;
+const gallon = 231 * inch ** 3;
+const barrel = 42 * gallon;
+/** IEC 60534-1: Kv in m³/h of water at 1 bar, Cv in US gallons a minute at 1 psi; Kv/Cv = 0.865. */
+const kvPerCv = gallon * 60 * Math.sqrt(1e5 / psi);
 
 /** 1 atm, the barometric pressure where none is given, and the datum of every key of the case format that says gauge. */
 export const standardAtmospherePa = 101325;
@@ -244,6 +247,7 @@ export const units = {
     title: "speed",
     shown: { "m/s": { factor: 1 }, "ft/s": { factor: foot }, "km/h": { factor: 1 / 3.6 }, mph: { factor: (5280 * foot) / 3600 } },
   },
+  flowCoefficient: { si: "Cv", title: "flow coefficient", shown: { Kv: { factor: 1 / kvPerCv }, Cv: { factor: 1 } } },
   fraction: {
     si: "–",
     title: "pure number",

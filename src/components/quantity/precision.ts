@@ -43,6 +43,7 @@ const rules: Record<QuantityId, Rules> = {
   molarVolume: four,
   molarMass: { usual: { decimals: 2 } },
   speed: three,
+  flowCoefficient: three,
   fraction: { usual: { figures: 3 }, "%": {} },
 };
 

@@ -27,6 +27,7 @@ const table: Record<QuantityId, Record<UnitSystem, string>> = {
   molarVolume: { SI: "m³/kmol", US: "ft³/lbmol" },
   molarMass: { SI: "g/mol", US: "g/mol" },
   speed: { SI: "m/s", US: "ft/s" },
+  flowCoefficient: { SI: "Kv", US: "Cv" },
   fraction: { SI: "–", US: "–" },
 };
 

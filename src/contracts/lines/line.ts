@@ -12,7 +12,12 @@ export type LineNo = `${PartNumber}.${string}`;
 export type LineKey = string;
 
 /** What a line's value depends on: reads the SI value or the chosen word of another line of the same case and item. */
-export type LineReader = { choice(no: LineNo): string | undefined; si(no: LineNo): number | undefined };
+export type LineReader = {
+  choice(no: LineNo): string | undefined;
+  si(no: LineNo): number | undefined;
+  /** Whether the choice is made in any case: for lines that stand once for all cases and follow one that each case makes. */
+  inAnyCase(no: LineNo, choice: string): boolean;
+};
 
 type Common = {
   no: LineNo;

@@ -1,7 +1,16 @@
 import type { Line } from "./line";
 
 export const scopeLines: Line[] = [
-  { kind: "text", no: "1.03", part: 1, group: "What is screened", label: "Between valves", hint: "the valves that close the section", maxLength: 200, optional: true },
+  {
+    kind: "text",
+    no: "1.03",
+    part: 1,
+    group: "What is screened",
+    label: "Between valves",
+    hint: "the valves that close the section",
+    maxLength: 200,
+    optional: true,
+  },
   {
     kind: "choice",
     no: "1.04",

@@ -8,14 +8,17 @@ describe("the line registry", () => {
     expect(new Set(numbers).size).toBe(numbers.length);
   });
 
-  it.each(lines.map((line) => [line.no, line] as const))("line %s stands under its own part and reads back from its key", (no, line) => {
-    expect(no.startsWith(`${line.part}.`)).toBe(true);
-    const key = lineKey(line, "C", 2);
-    const parsed = parseLineKey(key);
-    expect(parsed?.line).toBe(line);
-    expect(parsed?.letter).toBe(line.part >= 5 ? "C" : undefined);
-    expect(parsed?.item).toBe(line.perItem ? 2 : undefined);
-  });
+  it.each(lines.map((line) => [line.no, line] as const))(
+    "line %s stands under its own part and reads back from its key",
+    (no, line) => {
+      expect(no.startsWith(`${line.part}.`)).toBe(true);
+      const key = lineKey(line, "C", 2);
+      const parsed = parseLineKey(key);
+      expect(parsed?.line).toBe(line);
+      expect(parsed?.letter).toBe(line.part >= 5 ? "C" : undefined);
+      expect(parsed?.item).toBe(line.perItem ? 2 : undefined);
+    },
+  );
 
   it.each(["9.99", "A4.03", "5.02", "A5.02-1", "2.04", "", "4.3", "__proto__"])("knows no line “%s”", (key) => {
     expect(parseLineKey(key)).toBeUndefined();
@@ -40,7 +43,10 @@ describe("the line registry", () => {
   it("offers as initial choice one that it has", () => {
     for (const line of lines) {
       if (line.kind !== "choice" || !line.initial) continue;
-      expect(line.options.map((option) => option.value), line.no).toContain(line.initial);
+      expect(
+        line.options.map((option) => option.value),
+        line.no,
+      ).toContain(line.initial);
     }
   });
 });
@@ -59,6 +65,22 @@ const given: Record<string, string> = {
   "6.08": "Film coefficient, inside",
   "7.01": "Time to target pressure",
   "7.02": "Steel above its rated temperature",
+  "2.07": "Liquid level",
+  "2.08": "Condition",
+  "2.14": "Liquid, part of the volume",
+  "4.12": "Insulation",
+  "4.15": "Specific heat of the steel",
+  "5.06": "Taken from",
+  "5.07": "Flow coefficient",
+  "5.10": "Pressure to be reached",
+  "6.02": "Outside",
+  "6.03": "Kind of surface fire",
+  "6.05": "Standard the fire is taken from",
+  "6.10": "Ambient temperature",
+  "6.12": "Drainage and fire-fighting",
+  "6.13": "Environment factor",
+  "7.08": "Near, by temperature",
+  "7.12": "Near, by share",
 };
 
 describe("numbers given once", () => {

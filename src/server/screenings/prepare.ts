@@ -2,6 +2,7 @@ import "server-only";
 import { and, eq, sql } from "drizzle-orm";
 import { draft, type PreparedSummary } from "@db/schema/app/draft";
 import type { BlowdownCase } from "@/engine/cases/blowdown-case";
+import { lineKeyOfPath } from "@/contracts/draft-back-links";
 import { caseFromDraft } from "@/contracts/draft-to-case";
 import type { DraftDocument } from "@/contracts/draft";
 import { ebbOf } from "@/contracts/ebb";
@@ -103,7 +104,9 @@ function unwritable({ lines, composition }: DraftDocument): { line: string; mess
 }
 
 async function runAndStore(letter: string, document: BlowdownCase): Promise<StoredRun> {
-  const computed = await runTwice(document);
+  const computed = await runTwice(document).catch((error: unknown) => {
+    throw error instanceof Refusal ? citedByLine(error, letter) : error;
+  });
   const [caseSha256, resultSha256, confirmationSha256] = [
     await putContent(writeDatabase(), json, computed.caseText),
     await putContent(writeDatabase(), json, computed.resultText),
@@ -112,6 +115,16 @@ async function runAndStore(letter: string, document: BlowdownCase): Promise<Stor
   if (caseSha256 !== computed.caseSha256)
     throw new Error(`the stored case hashes to ${caseSha256}, the engine says ${computed.caseSha256}`);
   return { letter, marginK: document.limits?.minimumMetalMarginK ?? 0, computed, caseSha256, resultSha256, confirmationSha256 };
+}
+
+/** What the engine refuses by a path of the case, cited at the line it was made from. */
+function citedByLine(refusal: Refusal, letter: string): Refusal {
+  const { problems, ...rest } = refusal.parts;
+  if (!problems) return refusal;
+  return new Refusal(refusal.code, {
+    ...rest,
+    problems: problems.map(({ path, message }) => ({ path: lineKeyOfPath(path, letter) ?? path, message })),
+  });
 }
 
 function summaryOf(content: RecordContent, runs: readonly StoredRun[]): PreparedSummary {

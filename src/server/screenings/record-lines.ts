@@ -1,8 +1,9 @@
 import "server-only";
 import { fromSi, units } from "@/engine/units";
-import { shapeGeometry } from "@/contracts/draft-geometry";
-import { askedKeys, type DraftDocument, type LineValue, type Source } from "@/contracts/draft";
+import { derivedValue } from "@/contracts/draft-derived";
+import { askedKeys, withInitials, type DraftDocument, type LineValue, type Source } from "@/contracts/draft";
 import type { SiteFacts } from "@/contracts/draft-to-case";
+import { policyLimit } from "@/contracts/policy-limit";
 import type { Line, LineKey, QuantityLine } from "@/contracts/lines/line";
 import type { RecordContent } from "@/contracts/record-content";
 
@@ -12,7 +13,8 @@ type RecordLine = RecordContent["lines"][number];
  * Every line a draft asks for, as it counts: what was typed, what the policy of the facility gives where nothing was, and what follows from
  * the dimensions. Lines that may stay empty and are, are left out.
  */
-export function recordLines(draft: DraftDocument, site: SiteFacts): RecordLine[] {
+export function recordLines(given: DraftDocument, site: SiteFacts): RecordLine[] {
+  const draft = withInitials(given);
   return askedKeys(draft).flatMap(({ key, line }) => {
     const value = draft.lines[key];
     switch (line.kind) {
@@ -48,8 +50,8 @@ function quantity(key: LineKey, line: QuantityLine, value: LineValue | undefined
     const typed = value.typed.trim() || figure(line, value.si, unit, site);
     return [{ line: key, label: line.label, typed, unit, si: value.si, siUnit: units[line.quantity].si, source: value.source }];
   }
-  const given = fromPolicy(line, site);
-  if (given === undefined) return [];
+  const given = policyLimit(line.no, site);
+  if (given === undefined || given === null) return [];
   const unit = line.shown.SI;
   const source: Source = { kind: "sheet", note: `limit policy ${site.policy.name} rev ${site.policy.rev}` };
   return [
@@ -65,24 +67,6 @@ function quantity(key: LineKey, line: QuantityLine, value: LineValue | undefined
   ];
 }
 
-/** What the policy gives for a line of part 7 that is left empty; the same as the case is assembled with. */
-function fromPolicy({ no }: QuantityLine, { policy, barometricPressurePa }: SiteFacts): number | undefined {
-  switch (no) {
-    case "7.01":
-      return policy.targetTimeS;
-    case "7.09":
-      return policy.targetPressurePaGauge + barometricPressurePa;
-    case "7.02":
-      return policy.minimumMetalMarginK;
-    case "7.03":
-      return policy.minimumOutletTemperatureK;
-    case "7.04":
-      return policy.ventCapacityKgPerS;
-    default:
-      return undefined;
-  }
-}
-
 /** Twelve significant digits show every typed figure as it was and hide the last bits of the arithmetic. */
 function figure(
   { quantity: id }: Pick<QuantityLine, "quantity">,
@@ -94,20 +78,17 @@ function figure(
 }
 
 function derived(draft: DraftDocument, key: LineKey, line: Line & { kind: "derived" }): RecordLine[] {
-  const geometry = shapeGeometry(draft);
-  const si = line.no === "2.12" ? geometry?.volumeM3 : line.no === "4.09" ? geometry?.insideAreaM2 : undefined;
-  if (si === undefined) return [];
-  const unit = line.shown.SI;
-  const typed = String(Number(si.toPrecision(6)));
+  const found = derivedValue(draft, line);
+  if (!found) return [];
   return [
     {
       line: key,
       label: line.label,
-      typed,
-      unit,
-      si,
+      typed: String(Number(found.si.toPrecision(6))),
+      unit: line.shown.SI,
+      si: found.si,
       siUnit: units[line.quantity].si,
-      source: { kind: "derived", note: "from the dimensions" },
+      source: { kind: "derived", note: found.from },
     },
   ];
 }

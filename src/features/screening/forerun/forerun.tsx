@@ -3,6 +3,7 @@
 import Link from "next/link";
 import { formatNumber } from "@/components/quantity/format";
 import { EmptyAxes } from "@/components/states/empty-axes";
+import { lineKeyOfPath } from "@/contracts/draft-back-links";
 import { useDraft } from "../form/draft-context";
 import { lineAddress } from "../form/line-address";
 import { useForerunState } from "./forerun-context";
@@ -12,9 +13,10 @@ import { ForerunFigures } from "./forerun-figures";
 /** Live coarse run of the lines as they stand, beside the form. Never stored, never signed. */
 export function Forerun() {
   const { made, subject } = useDraft();
-  const { result, document, before, running, problem, seconds } = useForerunState();
+  const { result, document, before, running, problem, problemPath, seconds } = useForerunState();
   const inTheWay = [...made.problems.map(({ line }) => line), ...made.missing];
   const first = inTheWay[0];
+  const cited = problemPath === null ? undefined : lineKeyOfPath(problemPath, "A");
   const stale = result !== null && (first !== undefined || problem !== null);
 
   return (
@@ -45,6 +47,11 @@ export function Forerun() {
       )}
       {first === undefined && problem && (
         <p role="status" className="border-t py-2 font-serif text-note text-beyond">
+          {cited && (
+            <>
+              <Link href={lineAddress(subject.screeningId, cited)}>Line {cited}</Link>{" "}
+            </>
+          )}
           {problem}
         </p>
       )}

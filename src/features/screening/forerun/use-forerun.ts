@@ -20,12 +20,21 @@ export type ForerunState = {
   /** The answer before the last edit, for the ghost. */
   before: BlowdownResult | null;
   running: boolean;
-  /** Why there is no answer for the lines as they stand. */
+  /** Why there is no answer for the lines as they stand, and the path of the case it concerns. */
   problem: string | null;
+  problemPath: string | null;
   seconds: number | null;
 };
 
-const nothing: ForerunState = { result: null, document: null, before: null, running: false, problem: null, seconds: null };
+const nothing: ForerunState = {
+  result: null,
+  document: null,
+  before: null,
+  running: false,
+  problem: null,
+  problemPath: null,
+  seconds: null,
+};
 
 /** Runs the case in the browser's own worker after every change: latest wins, nothing is stored. */
 export function useForerun(document: BlowdownCase | undefined): ForerunState {
@@ -43,13 +52,15 @@ export function useForerun(document: BlowdownCase | undefined): ForerunState {
     if (text === undefined) {
       // The answer on show no longer belongs to the lines: said at once, without waiting for a run.
       // eslint-disable-next-line react-hooks/set-state-in-effect
-      setState((before) => (before.running || before.problem ? { ...before, running: false, problem: null } : before));
+      setState((before) =>
+        before.running || before.problem ? { ...before, running: false, problem: null, problemPath: null } : before,
+      );
       return;
     }
     let patience: ReturnType<typeof setTimeout>;
     const giveUp = (problem: string) => {
       stop(worker, busySince);
-      setState((before) => ({ ...before, running: false, problem }));
+      setState((before) => ({ ...before, running: false, problem, problemPath: null }));
     };
     const rest = setTimeout(() => {
       const started = performance.now();
@@ -91,7 +102,7 @@ function stop(worker: Box<Worker>, busySince: Box<number>): void {
 
 function answered(before: ForerunState, answer: PreviewAnswer, document: BlowdownCase, seconds: number): ForerunState {
   if (answer.type === "result" && answer.result.kind === "blowdown") {
-    return { result: answer.result, document, before: before.result, running: false, problem: null, seconds };
+    return { result: answer.result, document, before: before.result, running: false, problem: null, problemPath: null, seconds };
   }
   if (answer.type === "refused") {
     const { error } = answer;
@@ -99,6 +110,7 @@ function answered(before: ForerunState, answer: PreviewAnswer, document: Blowdow
       ...before,
       running: false,
       problem: error.problems.map(({ message }) => message).join(" ") || "The case can't be computed.",
+      problemPath: error.problems[0]?.path || null,
       seconds,
     };
   }
@@ -106,6 +118,7 @@ function answered(before: ForerunState, answer: PreviewAnswer, document: Blowdow
     ...before,
     running: false,
     problem: answer.type === "failed" ? answer.message : "The preview gave no answer.",
+    problemPath: null,
     seconds,
   };
 }

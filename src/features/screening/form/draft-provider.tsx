@@ -3,7 +3,7 @@
 import { Formik, useFormikContext } from "formik";
 import { useCallback, useEffect, useMemo, useState, type ReactNode } from "react";
 import { SitePressure, useUnits } from "@/components/units/units-provider";
-import type { DraftDocument, LineValue } from "@/contracts/draft";
+import { withInitials, type DraftDocument, type LineValue } from "@/contracts/draft";
 import { deriveSi, siOf } from "@/contracts/derive-si";
 import { caseFromDraft } from "@/contracts/draft-to-case";
 import type { LineKey, QuantityLine } from "@/contracts/lines/line";
@@ -38,7 +38,9 @@ export function DraftProvider({ subject, start, children }: { subject: FormSubje
 const emptyValue: LineValue = { typed: "", unit: null, si: null, source: null };
 
 function Held({ subject, start, children }: { subject: FormSubject; start: DraftView; children: ReactNode }) {
-  const { values: draft, setValues } = useFormikContext<DraftDocument>();
+  const { values, setValues } = useFormikContext<DraftDocument>();
+  // What is kept and compared is what people did; what is shown and computed has the registry's choices where nobody chose.
+  const draft = useMemo(() => withInitials(values), [values]);
   const { system } = useUnits();
   const { site } = subject;
   const baro = site.barometricPressurePa;
@@ -49,13 +51,13 @@ function Held({ subject, start, children }: { subject: FormSubject; start: Draft
 
   const replace = useCallback((document: DraftDocument) => void setValues(deriveSi(document, baro), false), [setValues, baro]);
   const [tab] = useState(newTab);
-  const keeper = useKeeper(draft, start, tab, replace);
+  const keeper = useKeeper(values, start, tab, replace);
   const journal = useJournal(start, tab, keeper.adopt);
 
   const setLine = useCallback(
     (key: LineKey, change: Partial<LineValue>) =>
       void setValues((before) => {
-        const value = { ...(before.lines[key] ?? emptyValue), ...change };
+        const value = { ...(withInitials(before).lines[key] ?? emptyValue), ...change };
         const line = parseLineKey(key)?.line;
         return { ...before, lines: { ...before.lines, [key]: line ? { ...value, si: siOf(line, value, baro) } : value } };
       }, false),

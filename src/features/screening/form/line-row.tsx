@@ -7,11 +7,12 @@ import { TextField } from "@/components/line/text-field";
 import { UnitField } from "@/components/line/unit-field";
 import { formatForField } from "@/components/quantity/format";
 import { useUnits } from "@/components/units/units-provider";
-import { shapeGeometry } from "@/contracts/draft-geometry";
+import { derivedValue } from "@/contracts/draft-derived";
+import { policyLimit } from "@/contracts/policy-limit";
 import type { ChoiceLine, DerivedLine, Line as RegisteredLine, LineKey, TextLine } from "@/contracts/lines/line";
 import { CompositionTable } from "./composition-table";
 import { useDraft } from "./draft-context";
-import { PolicyLine, policyValue } from "./policy-line";
+import { PolicyLine } from "./policy-line";
 import { QuantityRow } from "./quantity-row";
 import { SourceField } from "./source-field";
 
@@ -20,7 +21,7 @@ export function LineRow({ line, lineKey }: { line: RegisteredLine; lineKey: Line
   const { subject } = useDraft();
   switch (line.kind) {
     case "quantity":
-      return policyValue(line, subject.site) === undefined ? (
+      return policyLimit(line.no, subject.site) === undefined ? (
         <QuantityRow line={line} lineKey={lineKey} />
       ) : (
         <PolicyLine line={line} lineKey={lineKey} />
@@ -89,8 +90,7 @@ function ChoiceRow({ line, lineKey }: { line: ChoiceLine; lineKey: LineKey }) {
 function DerivedRow({ line, lineKey }: { line: DerivedLine; lineKey: LineKey }) {
   const { draft } = useDraft();
   const { system } = useUnits();
-  const geometry = shapeGeometry(draft);
-  const si = line.quantity === "volume" ? geometry?.volumeM3 : geometry?.insideAreaM2;
+  const found = derivedValue(draft, line);
   const unit = line.shown[system];
   return (
     <Line
@@ -101,14 +101,14 @@ function DerivedRow({ line, lineKey }: { line: DerivedLine; lineKey: LineKey }) 
         <SourceField
           lineNo={lineKey}
           label={line.label}
-          source={{ kind: "derived", note: "from lines 2.02 to 2.05" }}
+          source={found ? { kind: "derived", note: found.from } : null}
           asksFor={false}
           editable={false}
           onChange={() => undefined}
         />
       }
     >
-      <UnitField value={si === undefined ? "" : formatForField(line.quantity, si, unit)} unit={unit} readOnly placeholder="–" />
+      <UnitField value={found ? formatForField(line.quantity, found.si, unit) : ""} unit={unit} readOnly placeholder="–" />
     </Line>
   );
 }

@@ -6,28 +6,16 @@ import { Line } from "@/components/line/line";
 import { UnitField } from "@/components/line/unit-field";
 import { formatForField, withUnit } from "@/components/quantity/format";
 import { useUnits } from "@/components/units/units-provider";
-import type { SiteFacts } from "@/contracts/draft-to-case";
 import type { LineKey, QuantityLine } from "@/contracts/lines/line";
+import { againstPolicy, policyLimit } from "@/contracts/policy-limit";
 import { useDraft } from "./draft-context";
 import { QuantityRow } from "./quantity-row";
 
-/** SI value that the facility's policy gives a line; null where the policy asks for none; undefined for lines that no policy speaks of. */
-export function policyValue(line: QuantityLine, { policy, barometricPressurePa }: SiteFacts): number | null | undefined {
-  switch (line.no) {
-    case "7.01":
-      return policy.targetTimeS;
-    case "7.09":
-      return policy.targetPressurePaGauge + barometricPressurePa;
-    case "7.02":
-      return policy.minimumMetalMarginK;
-    case "7.03":
-      return policy.minimumOutletTemperatureK ?? null;
-    case "7.04":
-      return policy.ventCapacityKgPerS ?? null;
-    default:
-      return undefined;
-  }
-}
+const standingWords = {
+  same: "The same as the policy.",
+  stricter: "Stricter than the policy: give the reason as its source.",
+  looser: "Looser than the policy: the reason given as its source is shown to the approver.",
+};
 
 /** A limit: dashed with the policy's value until it is set here; then the policy's value is struck through and a source is due. */
 export function PolicyLine({ line, lineKey }: { line: QuantityLine; lineKey: LineKey }) {
@@ -35,12 +23,14 @@ export function PolicyLine({ line, lineKey }: { line: QuantityLine; lineKey: Lin
   const { system } = useUnits();
   const [opened, setOpened] = useState(false);
   const { policy, barometricPressurePa } = subject.site;
-  const given = policyValue(line, subject.site) ?? null;
+  const given = policyLimit(line.no, subject.site) ?? null;
+
   const unit = line.shown[system];
   const text = given === null ? null : formatForField(line.quantity, given, unit, barometricPressurePa);
   const value = draft.lines[lineKey];
   const setHere = opened || Boolean(value && (value.typed.trim() !== "" || value.si !== null));
   const name = `${policy.name} rev ${policy.rev}`;
+  const stands = typeof value?.si === "number" ? againstPolicy(line.no, value.si, subject.site) : undefined;
 
   if (setHere) {
     return (
@@ -52,6 +42,7 @@ export function PolicyLine({ line, lineKey }: { line: QuantityLine; lineKey: Lin
           ) : (
             <>
               {name}: <s>{withUnit(text, unit)}</s>
+              {stands && `. ${standingWords[stands]}`}
             </>
           )}{" "}
           {editable && (

@@ -5,7 +5,7 @@ import type { LineValue } from "@/contracts/draft";
 import type { QuantityLine } from "@/contracts/lines/line";
 import { readQuantity } from "@/engine/read-quantity";
 
-const customary = /psi|°F|°R|^in|^ft|lb|bbl|Btu/;
+const customary = /psi|°F|°R|^in|^ft|lb|bbl|Btu|^Cv/;
 const neutral = new Set(["s", "min", "h", "–", "%"]);
 
 /** Whether a unit belongs to a system; seconds and ratios belong to both. */
