@@ -30,8 +30,12 @@ export type BlowdownSummary = {
   energyVentedJ: number;
   heatFromWallJ: number;
   heatFromOutsideJ: number;
+  /** From rebuilt states against what the integrator carried along. */
   massClosure: number;
   energyClosure: number;
+  /** The same with outflow and heat counted again by quadrature of the rates along the run: what the integration itself lost. */
+  massClosureRecounted?: number;
+  energyClosureRecounted?: number;
 };
 
 /** Columns of equal length. A phase change or a jump has its time twice: before, after. Absent columns do not apply. */

@@ -1,10 +1,10 @@
-/** The lowest or highest value of a quantity over the run, refined between the rows of the series on the dense output. */
+/** The lowest or highest value of a quantity over the run, refined between the rows of the series on the fitted run. */
 import { smallestBetween } from "../../flow/smallest-between";
 import type { Row } from "./series";
 
 export type Extreme = { value: number; timeS: number };
 
-/** A quantity of a row, and the same at another time of the row's step. */
+/** A quantity of a row, and the same at another time of the row's piece. */
 export type Tracked = { pick: (row: Row) => number; at: (row: Row, t: number) => number };
 
 export function lowest(rows: Row[], { pick, at }: Tracked): Extreme {
@@ -19,7 +19,7 @@ export function lowest(rows: Row[], { pick, at }: Tracked): Extreme {
     [best, best + 1],
   ] as const) {
     const [a, b] = [rows[from], rows[to]];
-    // Only between rows of one step; across a phase change the time stands twice.
+    // Only between rows of one piece; across a phase change the time stands twice.
     if (!a || !b || b.timeS <= a.timeS) continue;
     const span = b.timeS - a.timeS;
     const timeS = a.timeS + span * smallestBetween((part) => at(b, a.timeS + span * part), 0, 1, 1e-4);

@@ -1,10 +1,10 @@
 /**
  * The contents as one molar state, built again from the temperature, the pressure and the phases that are there.
  *
- * Closure rests on this: energy and mass of the last state come from the equation of state by way of the ideal gas and the departure, not from
- * what the integrator added up.
+ * Closure rests on this: the volume of each phase is solved for again at (T, p), and energy and mass of the first and last state come from the
+ * equation of state by way of the ideal gas and the departure, not from what the integrator added up.
  */
-import type { FluidModel } from "../../eos/fluid-model";
+import { createPhaseState, type FluidModel } from "../../eos/fluid-model";
 import type { MolarState } from "../../account/three-steps";
 import type { Contents } from "./contents";
 
@@ -17,9 +17,15 @@ export function rebuiltState(fluid: FluidModel, contents: Contents): RebuiltStat
     ? equilibrium.phases.map(({ moleFraction, composition: z, state }) => ({
         share: moleFraction,
         z,
-        v: state.molarVolumeM3PerMol,
+        v: volumeAgain(fluid, temperatureK, pressurePa, z, state.molarVolumeM3PerMol),
       }))
-    : [{ share: 1, z: composition, v: contents.lightest.molarVolumeM3PerMol }];
+    : [
+        {
+          share: 1,
+          z: composition,
+          v: volumeAgain(fluid, temperatureK, pressurePa, composition, contents.lightest.molarVolumeM3PerMol),
+        },
+      ];
   const sum: RebuiltState = {
     temperatureK,
     pressurePa,
@@ -38,4 +44,13 @@ export function rebuiltState(fluid: FluidModel, contents: Contents): RebuiltStat
     sum.molarVolumeM3PerMol += share * v;
   }
   return sum;
+}
+
+const scratch = createPhaseState();
+
+/** The root at (T, p) that is the phase's own; near the critical point, where roots run together, the nearer of the two. */
+function volumeAgain(fluid: FluidModel, T: number, p: number, z: Float64Array, v: number): number {
+  const light = fluid.phaseAtPressure(T, p, z, "vapour", scratch).molarVolumeM3PerMol;
+  const dense = fluid.phaseAtPressure(T, p, z, "liquid", scratch).molarVolumeM3PerMol;
+  return Math.abs(light / v - 1) < Math.abs(dense / v - 1) ? light : dense;
 }

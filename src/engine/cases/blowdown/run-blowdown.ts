@@ -10,12 +10,12 @@ import { cautionsOfRun } from "./cautions-of-run";
 import { highest, lowest, type Extreme } from "./extremes";
 import { integrateRun, type Run } from "./integrate-run";
 import { rebuiltState, type RebuiltState } from "./molar-state";
-import { sampleAt, type Sample } from "./sample";
+import { fitRun, indexOf, pieceAt, recount, type Counted, type Quantity } from "./run-fit";
 import { sizeBore } from "./size-bore";
 import { sampleRows, seriesOf, type Row } from "./series";
 import { solidMargin } from "./solid-check";
 import { makeVesselModel } from "./vessel-model";
-import { closureLimit, warningsOf } from "./warnings";
+import { closureLimit, closureOf, warningsOf } from "./warnings";
 
 export type BlowdownOptions = {
   onProgress?: (part: number) => void;
@@ -33,6 +33,8 @@ export type BlowdownBody = Omit<BlowdownResult, "engineVersion" | "caseSha256" |
 // At 1e-4 the dense output of a stiff film shows dips of kelvins that are not there; one more figure costs a third more work.
 const previewTolerance = 1e-5;
 const previewGaps = 3;
+/** What the fit of a preview may leave unresolved, in parts of what a stored run may. */
+const previewLooseness = 30;
 
 export function runBlowdown(given: BlowdownCase, options: BlowdownOptions = {}): BlowdownBody {
   const maxEvaluations = options.maxEvaluations ?? 200_000;
@@ -54,16 +56,21 @@ export function runBlowdown(given: BlowdownCase, options: BlowdownOptions = {}):
     onProgress: options.onProgress,
     isCancelled: options.isCancelled,
   });
-  const rows = sampleRows(balance, run, options.coarse ? previewGaps : 1);
+  const pieces = fitRun(balance, run, options.coarse ? previewLooseness : 1);
+  const rows = sampleRows(balance, pieces, options.coarse ? previewGaps : 1);
   const found = extremesOf(balance, rows);
   const ends = endStates(balance, run, found.fluid);
-  const summary = { ...summarise(balance, run, rows, found, ends), ...(sized ? { sizedDiameterM: sized.diameterM } : {}) };
+  const counted = recount(pieces);
+  const summary = {
+    ...summarise(balance, run, rows, found, ends, counted),
+    ...(sized ? { sizedDiameterM: sized.diameterM } : {}),
+  };
   const warnings = warningsOf(blowdown, model, run, rows, summary);
   const assessed = assess(blowdownFigures(blowdown, summary), {
     bandK: blowdown.limits?.nearBandK,
     bandFraction: blowdown.limits?.nearBandFraction,
   });
-  const closes = summary.massClosure <= closureLimit && summary.energyClosure <= closureLimit;
+  const closes = closureOf(summary) <= closureLimit;
   const cautions = cautionsOfRun(blowdown, run, warnings);
   return {
     format: "ebbmark-result/1",
@@ -98,29 +105,15 @@ function refuseSolidStart(balance: Balance): void {
 type Extremes = { fluid: Extreme; wall: Extreme | undefined; outlet: Extreme; ventRate: Extreme };
 
 function extremesOf(balance: Balance, rows: Row[]): Extremes {
-  const of = (pick: (sample: Sample) => number) => ({
-    pick,
-    at: (row: Row, t: number) => pick(sampleAt(balance, row.segment, row.step, t)),
+  const of = (quantity: Quantity) => ({
+    pick: (row: Row) => pieceAt(row.piece, indexOf[quantity], row.timeS),
+    at: (row: Row, t: number) => pieceAt(row.piece, indexOf[quantity], t),
   });
   return {
-    fluid: lowest(
-      rows,
-      of((sample) => sample.temperatureK),
-    ),
-    wall: balance.model.wall
-      ? lowest(
-          rows,
-          of((sample) => sample.wallTemperatureK ?? 0),
-        )
-      : undefined,
-    outlet: lowest(
-      rows,
-      of((sample) => sample.outletTemperatureK),
-    ),
-    ventRate: highest(
-      rows,
-      of((sample) => sample.ventRateKgPerS),
-    ),
+    fluid: lowest(rows, of("temperatureK")),
+    wall: balance.model.wall ? lowest(rows, of("wallTemperatureK")) : undefined,
+    outlet: lowest(rows, of("outletTemperatureK")),
+    ventRate: highest(rows, of("ventRateKgPerS")),
   };
 }
 
@@ -140,11 +133,18 @@ function endStates(balance: Balance, run: Run, coldest: Extreme): Ends {
   return { first: stateAt(0, "first").state, coldest: stateAt(coldest.timeS, "last").state, last: last.state, lastY: last.y };
 }
 
-function summarise(balance: Balance, run: Run, rows: Row[], found: Extremes, ends: Ends): BlowdownSummary {
+function summarise(balance: Balance, run: Run, rows: Row[], found: Extremes, ends: Ends, counted: Counted): BlowdownSummary {
   const first = rows[0];
   const last = rows.at(-1);
   if (!first || !last) throw new EngineError("no-convergence", "The run ended before its first step.");
-  const { energy, mass } = closures(balance, ends);
+  const carried: Counted = {
+    massKg: balance.ventedMassKg(ends.lastY),
+    energyJ: balance.ventedEnergyJ(ends.lastY),
+    fromWallJ: balance.heatFromWallJ(ends.lastY),
+    fromOutsideJ: balance.heatFromOutsideJ(ends.lastY),
+  };
+  const { energy, mass } = closures(balance, ends, carried);
+  const again = closures(balance, ends, counted);
   const time = (id: string): number | undefined => run.marks.get(id);
   const optional = <K extends string>(key: K, value: number | undefined) =>
     value === undefined ? {} : ({ [key]: value } as Record<K, number>);
@@ -174,25 +174,28 @@ function summarise(balance: Balance, run: Run, rows: Row[], found: Extremes, end
     heatFromOutsideJ: balance.heatFromOutsideJ(ends.lastY),
     massClosure: mass,
     energyClosure: energy,
+    massClosureRecounted: again.mass,
+    energyClosureRecounted: again.energy,
   };
 }
 
 /**
  * Mass:   |V/v0 M0 − V/v1 M1 − vented| over the start mass.
- * Energy: |ΔU + ΔU_wall + vented − external heat| over the sum of their magnitudes, U from the rebuilt states.
+ * Energy: |ΔU + ΔU_wall + vented − external heat| over the sum of their magnitudes.
+ *
+ * Mass, U and the wall's energy from the rebuilt states and the wall's temperature. What left and what heat passed is taken twice: as the
+ * integrator carried it (which tests the states), and by quadrature of the rates that the states give (which tests the integration).
  */
-function closures(balance: Balance, { first, last, lastY }: Ends): { energy: number; mass: number } {
+function closures(balance: Balance, { first, last, lastY }: Ends, passed: Counted): { energy: number; mass: number } {
   const { fluid, vessel, wall } = balance.model;
   const amount = (state: RebuiltState): number => vessel.volumeM3 / state.molarVolumeM3PerMol;
   const massOf = (state: RebuiltState): number => amount(state) * fluid.mixtureMolarMass(state.composition);
   const change = amount(last) * last.internalEnergyJPerMol - amount(first) * first.internalEnergyJPerMol;
   const wallChange = wall ? wall.energyAtJ(wall.temperatureAtK(balance.wallEnergyJ(lastY))) : 0;
-  const vented = balance.ventedEnergyJ(lastY);
-  const outside = balance.heatFromOutsideJ(lastY);
-  const sum = Math.abs(change) + Math.abs(wallChange) + Math.abs(vented) + Math.abs(outside);
+  const sum = Math.abs(change) + Math.abs(wallChange) + Math.abs(passed.energyJ) + Math.abs(passed.fromOutsideJ);
   return {
-    mass: Math.abs(massOf(first) - massOf(last) - balance.ventedMassKg(lastY)) / massOf(first),
-    energy: Math.abs(change + wallChange + vented - outside) / sum,
+    mass: Math.abs(massOf(first) - massOf(last) - passed.massKg) / massOf(first),
+    energy: Math.abs(change + wallChange + passed.energyJ - passed.fromOutsideJ) / sum,
   };
 }
 

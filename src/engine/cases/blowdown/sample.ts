@@ -1,9 +1,7 @@
-/** One row of the series, copied out of the instant it was taken at. */
-import { throttleTemperature } from "../../flow/throttle";
+/** One row of the series, read off the fitted run. */
 import { levelAtVolume } from "../../vessel/geometry";
 import type { Balance } from "./balance";
-import type { KeptStep } from "./dense-run";
-import type { Segment } from "./integrate-run";
+import { indexOf, pieceAt, type FitPiece, type Quantity } from "./run-fit";
 
 export type Sample = {
   timeS: number;
@@ -21,22 +19,21 @@ export type Sample = {
   outletTemperatureK: number;
 };
 
-export function sampleAt(balance: Balance, segment: Segment, step: KeptStep, t: number): Sample {
-  const { y, instant } = balance.within(segment, step, t);
-  const { contents, flow, ventRateKgPerS, heat } = instant;
+export function sampleOf(piece: FitPiece, t: number, hasWall: boolean): Sample {
+  const read = (quantity: Quantity): number => pieceAt(piece, indexOf[quantity], t);
   return {
     timeS: t,
-    pressurePa: contents.pressurePa,
-    temperatureK: contents.temperatureK,
-    wallTemperatureK: heat.innerSurfaceK,
-    massKg: contents.totalMolesMol * balance.model.fluid.mixtureMolarMass(contents.composition),
-    ventRateKgPerS,
-    ventedMassKg: balance.ventedMassKg(y),
-    ventedEnergyJ: balance.ventedEnergyJ(y),
-    vapourMoleFraction: contents.vapourMoleFraction,
-    liquidVolumeM3: contents.liquidVolumeM3,
-    throatTemperatureK: flow.throatTemperatureK,
-    outletTemperatureK: throttleTemperature(balance.model.fluid, flow, flow.composition, balance.model.backPressurePa),
+    pressurePa: read("pressurePa"),
+    temperatureK: read("temperatureK"),
+    wallTemperatureK: hasWall ? read("wallTemperatureK") : undefined,
+    massKg: read("massKg"),
+    ventRateKgPerS: read("ventRateKgPerS"),
+    ventedMassKg: read("ventedMassKg"),
+    ventedEnergyJ: read("ventedEnergyJ"),
+    vapourMoleFraction: Math.min(Math.max(read("vapourMoleFraction"), 0), 1),
+    liquidVolumeM3: Math.max(read("liquidVolumeM3"), 0),
+    throatTemperatureK: read("throatTemperatureK"),
+    outletTemperatureK: read("outletTemperatureK"),
   };
 }
 

@@ -4,30 +4,29 @@
  */
 import type { BlowdownSeries } from "../blowdown-result";
 import type { Balance } from "./balance";
-import type { KeptStep } from "./dense-run";
-import type { Run, Segment } from "./integrate-run";
-import { levelOf, sampleAt, type Sample } from "./sample";
+import type { FitPiece } from "./run-fit";
+import { levelOf, sampleOf, type Sample } from "./sample";
 
 /** Multiplies the allowed gaps; 1 for a stored run, more for a preview. */
 export type Coarseness = number;
 
-export type Row = Sample & { segment: Segment; step: KeptStep };
+export type Row = Sample & { piece: FitPiece };
 
-export function sampleRows(balance: Balance, run: Run, coarseness: Coarseness): Row[] {
+export function sampleRows(balance: Balance, pieces: readonly FitPiece[], coarseness: Coarseness): Row[] {
   const rows: Row[] = [];
-  for (const segment of run.segments) {
-    for (const [i, step] of segment.dense.steps.entries()) {
-      const take = (t: number): Row => ({ ...sampleAt(balance, segment, step, t), segment, step });
-      const before = rows.at(-1);
-      // Only a phase change gives its time twice; a restart for another reason joins smoothly.
-      const joins = before && (i > 0 || before.segment.mode === segment.mode);
-      const first = joins ? before : take(step.t0);
-      if (!joins) rows.push(first);
-      const last = take(step.t1);
-      const gap = (a: Sample, b: Sample): number => gapOf(a, b, balance.massScaleKg, run.endTimeS) / coarseness;
-      fill(first, last, { take, gap, push: (row) => rows.push(row) });
-      rows.push(last);
-    }
+  const durationS = pieces.at(-1)?.t1 ?? 0;
+  const hasWall = balance.model.wall !== undefined;
+  for (const piece of pieces) {
+    const take = (t: number): Row => ({ ...sampleOf(piece, t, hasWall), piece });
+    const before = rows.at(-1);
+    // Only a phase change gives its time twice; steps and restarts for another reason join smoothly.
+    const joins = before && (before.piece.segment === piece.segment || before.piece.segment.mode === piece.segment.mode);
+    const first = joins ? before : take(piece.t0);
+    if (!joins) rows.push(first);
+    const last = take(piece.t1);
+    const gap = (a: Sample, b: Sample): number => gapOf(a, b, balance.massScaleKg, durationS) / coarseness;
+    fill(first, last, { take, gap, push: (row) => rows.push(row) });
+    rows.push(last);
   }
   return rows;
 }
@@ -59,7 +58,7 @@ function fill(a: Row, b: Row, filling: Filling): void {
 
 export function seriesOf(balance: Balance, rows: Row[]): BlowdownSeries {
   const { wall } = balance.model;
-  const twoPhase = rows.some((row) => row.segment.mode === "two-phase");
+  const twoPhase = rows.some((row) => row.piece.segment.mode === "two-phase");
   const column = (pick: (row: Row) => number): number[] => rows.map(pick);
   const wallColumn = wall
     ? {

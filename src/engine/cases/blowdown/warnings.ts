@@ -9,6 +9,10 @@ import type { VesselModel } from "./vessel-model";
 
 export const closureLimit = 1e-4;
 
+/** The worst of the four closures of a run. */
+export const closureOf = (summary: BlowdownSummary): number =>
+  Math.max(summary.massClosure, summary.energyClosure, summary.massClosureRecounted ?? 0, summary.energyClosureRecounted ?? 0);
+
 export function warningsOf(
   blowdown: BlowdownCase,
   model: VesselModel,
@@ -189,12 +193,13 @@ function howItEnded({ run: asked }: BlowdownCase, run: Run): Warning[] {
   ];
 }
 
-function closure({ massClosure, energyClosure }: BlowdownSummary): Warning[] {
-  if (massClosure <= closureLimit && energyClosure <= closureLimit) return [];
+function closure(summary: BlowdownSummary): Warning[] {
+  if (closureOf(summary) <= closureLimit) return [];
+  const worst = (a: number, b = 0): string => Math.max(a, b).toExponential(1);
   return [
     {
       code: "does-not-close",
-      message: `Mass closes to ${massClosure.toExponential(1)} and energy to ${energyClosure.toExponential(1)}, worse than ${closureLimit}. No verdict is given; tighten the tolerance.`,
+      message: `Mass closes to ${worst(summary.massClosure, summary.massClosureRecounted)} and energy to ${worst(summary.energyClosure, summary.energyClosureRecounted)}, worse than ${closureLimit}. No verdict is given; tighten the tolerance.`,
     },
   ];
 }

@@ -1,0 +1,135 @@
+/**
+ * Everything that a run reports, as functions of time: each step is evaluated at 9 Chebyshev points, at 17 where 9 don't resolve it, and is
+ * halved where those don't either. Rows, extremes and the recount of what left are then taken from these functions, not from further flashes.
+ *
+ * A kink inside a step stops the halving after a few times; the row next to it is then as good as the last halving.
+ */
+import { throttleTemperature } from "../../flow/throttle";
+import type { Balance } from "./balance";
+import { coarse, coarseCount, fine, integralOf, unresolved, valueAt } from "./chebyshev";
+import type { KeptStep } from "./dense-run";
+import type { Run, Segment } from "./integrate-run";
+
+export const quantities = [
+  "pressurePa",
+  "temperatureK",
+  "wallTemperatureK",
+  "massKg",
+  "ventRateKgPerS",
+  "ventedMassKg",
+  "ventedEnergyJ",
+  "vapourMoleFraction",
+  "liquidVolumeM3",
+  "throatTemperatureK",
+  "outletTemperatureK",
+  "enthalpyW",
+  "fromWallW",
+  "fromOutsideW",
+] as const;
+export type Quantity = (typeof quantities)[number];
+export const indexOf = Object.fromEntries(quantities.map((name, i) => [name, i])) as Record<Quantity, number>;
+
+/** Part of a step: `values[q]` at its Chebyshev points. */
+export type FitPiece = { t0: number; t1: number; segment: Segment; step: KeptStep; values: Float64Array[] };
+
+/** Unresolved parts that are let pass: absolute [K], or relative to the largest value in the piece. */
+const absolute: Partial<Record<Quantity, number>> = { temperatureK: 1e-3, wallTemperatureK: 1e-3, outletTemperatureK: 5e-3 };
+const relative: Partial<Record<Quantity, number>> = {
+  pressurePa: 1e-6,
+  ventRateKgPerS: 1e-6,
+  enthalpyW: 1e-6,
+  fromWallW: 1e-5,
+  fromOutsideW: 1e-5,
+};
+const deepest = 4;
+
+export function fitRun(balance: Balance, run: Run, looseness = 1): FitPiece[] {
+  const pieces: FitPiece[] = [];
+  for (const segment of run.segments)
+    for (const step of segment.dense.steps) fitPart(balance, { segment, step, t0: step.t0, t1: step.t1 }, looseness, 0, pieces);
+  return pieces;
+}
+
+type Part = Omit<FitPiece, "values">;
+
+function fitPart(balance: Balance, part: Part, looseness: number, depth: number, into: FitPiece[]): void {
+  const { t0, t1 } = part;
+  const span = t1 - t0;
+  const at = (place: number): Float64Array => evaluate(balance, part, place === 1 ? t1 : t0 + place * span);
+  const rough = Array.from(coarse.places, at);
+  const first = transposed(rough);
+  if (isResolved(first, looseness)) return void into.push({ ...part, values: first });
+  const rows = Array.from(fine.places, (place, j) => (j % 2 === 0 ? rough[j / 2]! : at(place)));
+  const second = transposed(rows);
+  if (depth >= deepest || isResolved(second, looseness) || !(span > 1e-9 * t1))
+    return void into.push({ ...part, values: second });
+  const middle = t0 + span / 2;
+  fitPart(balance, { ...part, t1: middle }, looseness, depth + 1, into);
+  fitPart(balance, { ...part, t0: middle }, looseness, depth + 1, into);
+}
+
+const transposed = (rows: Float64Array[]): Float64Array[] => quantities.map((_, q) => Float64Array.from(rows, (row) => row[q]!));
+
+function isResolved(values: Float64Array[], looseness: number): boolean {
+  for (const [name, allowed] of Object.entries(absolute) as [Quantity, number][])
+    if (unresolved(values[indexOf[name]]!) > allowed * looseness) return false;
+  for (const [name, allowed] of Object.entries(relative) as [Quantity, number][]) {
+    const column = values[indexOf[name]]!;
+    let largest = 0;
+    for (const value of column) largest = Math.max(largest, Math.abs(value));
+    if (unresolved(column) > allowed * largest * looseness) return false;
+  }
+  return true;
+}
+
+function evaluate(balance: Balance, { segment, step }: Part, t: number): Float64Array {
+  const { y, instant } = balance.within(segment, step, t);
+  const { contents, flow, stroke, ventRateKgPerS, heat } = instant;
+  const { fluid, backPressurePa } = balance.model;
+  return Float64Array.of(
+    contents.pressurePa,
+    contents.temperatureK,
+    heat.innerSurfaceK ?? 0,
+    contents.totalMolesMol * fluid.mixtureMolarMass(contents.composition),
+    ventRateKgPerS,
+    balance.ventedMassKg(y),
+    balance.ventedEnergyJ(y),
+    contents.vapourMoleFraction,
+    contents.liquidVolumeM3,
+    flow.throatTemperatureK,
+    throttleTemperature(fluid, flow, flow.composition, backPressurePa),
+    stroke * flow.enthalpyW,
+    heat.fromWallW,
+    heat.fromOutsideW,
+  );
+}
+
+/** Labels jump where a dense fluid begins to count as vapour: they are those of the nearest point while one phase is there. */
+const labels = [indexOf.vapourMoleFraction, indexOf.liquidVolumeM3];
+
+export function pieceAt(piece: FitPiece, quantity: number, t: number): number {
+  const values = piece.values[quantity]!;
+  const place = (t - piece.t0) / (piece.t1 - piece.t0);
+  if (piece.segment.mode === "one-phase" && labels.includes(quantity)) {
+    const { places } = values.length === coarseCount ? coarse : fine;
+    let nearest = 0;
+    for (let j = 1; j < places.length; j++) if (Math.abs(places[j]! - place) < Math.abs(places[nearest]! - place)) nearest = j;
+    return values[nearest]!;
+  }
+  return valueAt(values, t === piece.t1 ? 1 : place);
+}
+
+export type Counted = { massKg: number; energyJ: number; fromWallJ: number; fromOutsideJ: number };
+
+/** What left and what heat passed, by quadrature of the rates that the states give; none of the integrator's own sums is in it. */
+export function recount(pieces: readonly FitPiece[]): Counted {
+  const sum: Counted = { massKg: 0, energyJ: 0, fromWallJ: 0, fromOutsideJ: 0 };
+  for (const { t0, t1, values } of pieces) {
+    const span = t1 - t0;
+    sum.massKg += span * integralOf(values[indexOf.ventRateKgPerS]!);
+    sum.energyJ += span * integralOf(values[indexOf.enthalpyW]!);
+    sum.fromWallJ += span * integralOf(values[indexOf.fromWallW]!);
+    sum.fromOutsideJ += span * integralOf(values[indexOf.fromOutsideW]!);
+  }
+  return sum;
+}
