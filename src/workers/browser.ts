@@ -1,53 +1,86 @@
 /**
- * The browser's own engine, for the preview while typing. Nothing computed here is stored.
+ * The browser's own engine, for the preview while typing and for the pages of fluids. Nothing computed here is stored.
  *
- * asks      PreviewRequest; a newer one replaces every older one that has not begun (latest wins)
+ * asks      WorkerRequest; of each kind a newer one replaces the older one that has not begun (latest wins), and kinds take turns
  * answers   PreviewAnswer with the id of the request; a replaced request is answered "replaced"
  *
  * A run cannot be broken off from outside: an owner that will not wait terminates the worker and starts another.
  */
-import { runDocument, type ErrorDocument } from "./engine-entry";
+import { EngineError } from "@/engine/errors";
 import type { EngineResult } from "@/engine/run-case";
+import { runDocument, type ErrorDocument } from "./engine-entry";
+import { answerFluid, type FluidAnswer, type FluidAsk } from "./fluid-asks";
 
 export type PreviewRequest = {
   id: number;
   document: unknown;
   /** A loose tolerance and a thinner series; the default. */ coarse?: boolean;
 };
+export type FluidRequest = { id: number; ask: FluidAsk };
+export type WorkerRequest = PreviewRequest | FluidRequest;
+
 export type PreviewAnswer =
   | { type: "progress"; id: number; part: number }
   | { type: "result"; id: number; result: EngineResult }
+  | { type: "fluid"; id: number; answer: FluidAnswer }
   | { type: "refused"; id: number; error: ErrorDocument }
   | { type: "replaced"; id: number }
   | { type: "failed"; id: number; message: string };
 
-let waiting: PreviewRequest | undefined;
+/** In order of arrival; a map keeps it. */
+const waiting = new Map<string, WorkerRequest>();
+let turnIsSet = false;
 
 const say = (answer: PreviewAnswer): void => self.postMessage(answer);
+const kindOf = (request: WorkerRequest): string => ("ask" in request ? request.ask.kind : "case");
 
-self.addEventListener("message", ({ data }: MessageEvent<PreviewRequest>) => {
-  if (waiting) say({ type: "replaced", id: waiting.id });
-  else setTimeout(runWaiting, 0);
-  waiting = data;
+self.addEventListener("message", ({ data }: MessageEvent<WorkerRequest>) => {
+  const replaced = waiting.get(kindOf(data));
+  if (replaced) say({ type: "replaced", id: replaced.id });
+  waiting.set(kindOf(data), data);
+  setTurn();
 });
 
-function runWaiting(): void {
-  const request = waiting;
-  waiting = undefined;
-  if (!request) return;
-  const { id, document, coarse = true } = request;
+/** One request a turn, so that messages which arrive meanwhile are read in between. */
+function setTurn(): void {
+  if (turnIsSet) return;
+  turnIsSet = true;
+  setTimeout(() => {
+    turnIsSet = false;
+    const [next] = waiting;
+    if (!next) return;
+    waiting.delete(next[0]);
+    answer(next[1]);
+    if (waiting.size > 0) setTurn();
+  }, 0);
+}
+
+function answer(request: WorkerRequest): void {
+  const { id } = request;
   try {
-    const outcome = runDocument(document, {
-      engineVersion: "preview",
-      coarse,
-      now: () => performance.now(),
-      onProgress: everyFiftyMs((part) => say({ type: "progress", id, part })),
-    });
-    say(outcome.status === 0 ? { type: "result", id, result: outcome.result } : { type: "refused", id, error: outcome.error });
+    if ("ask" in request) say({ type: "fluid", id, answer: answerFluid(request.ask) });
+    else runPreview(request);
   } catch (error) {
-    say({ type: "failed", id, message: error instanceof Error ? error.message : String(error) });
+    if (error instanceof EngineError) say({ type: "refused", id, error: errorDocument(error) });
+    else say({ type: "failed", id, message: error instanceof Error ? error.message : String(error) });
   }
 }
+
+function runPreview({ id, document, coarse = true }: PreviewRequest): void {
+  const outcome = runDocument(document, {
+    engineVersion: "preview",
+    coarse,
+    now: () => performance.now(),
+    onProgress: everyFiftyMs((part) => say({ type: "progress", id, part })),
+  });
+  say(outcome.status === 0 ? { type: "result", id, result: outcome.result } : { type: "refused", id, error: outcome.error });
+}
+
+const errorDocument = ({ code, path, message }: EngineError): ErrorDocument => ({
+  format: "ebbmark-error/1",
+  code,
+  problems: [{ path: path ?? "", message }],
+});
 
 function everyFiftyMs(work: (part: number) => void): (part: number) => void {
   let last = Number.NEGATIVE_INFINITY;
