@@ -5,13 +5,14 @@
  * pass here and are refused by the engine.
  */
 import { z } from "zod";
-import type { BlowdownCase, StartSpec } from "@/engine/cases/blowdown-case";
+import type { BlowdownCase } from "@/engine/cases/blowdown-case";
 import { equationIds } from "@/engine/cases/fluid-spec";
 import type { NozzleCase } from "@/engine/cases/nozzle-case";
 import { steelIds } from "@/engine/steels/steel";
-import { headShapes } from "@/engine/vessel/head";
-import { choice, describe, fraction, pressure, quantity, temperature, text } from "./case-fields";
+import { choice, describe, fraction, pressure, quantity, sumToOne, temperature, text } from "./case-fields";
+import { diameter, geometry, sectionPart, start, wall } from "./case-vessel";
 import { readJsonText } from "./json-text";
+import { withVesselsJoined } from "./joined-vessels";
 
 export type CaseProblem = { path: string; message: string };
 
@@ -61,19 +62,7 @@ const fluid = z.strictObject({
     .array(component, { error: ({ input }) => `${describe(input)} Give a list of components.` })
     .min(1, "There is no component. Give at least one.")
     .max(50, "There are more than 50 components. Lump the smallest.")
-    .superRefine((components, context) => {
-      const sum = components.reduce((total, one) => total + one.moleFraction, 0);
-      if (!(Math.abs(sum - 1) <= 1e-6))
-        context.addIssue({ code: "custom", message: `The mole fractions sum to ${sum}. Make them sum to 1 within 1e-6.` });
-      components.forEach(({ id }, i) => {
-        if (components.findIndex((other) => other.id === id) < i)
-          context.addIssue({
-            code: "custom",
-            path: [i, "id"],
-            message: `"${id}" stands twice. Add the two fractions and keep one.`,
-          });
-      });
-    }),
+    .superRefine(sumToOne),
   equation: choice(equationIds),
   interaction: interaction.default("library"),
 });
@@ -119,53 +108,6 @@ export const nozzleCaseSchema = z.strictObject({
   backPressurePa: pressure,
   flowModel: choice(["frozen", "equilibrium"]),
 });
-
-const diameter = quantity({ unit: "m", above: 0, max: 100 });
-const geometry = z.discriminatedUnion(
-  "shape",
-  [
-    z.strictObject({
-      shape: z.literal("volume"),
-      volumeM3: quantity({ unit: "m³", above: 0, max: 1e6 }),
-      innerAreaM2: quantity({ unit: "m²", above: 0, max: 1e7 }).optional(),
-    }),
-    z.strictObject({
-      shape: z.literal("cylinder"),
-      orientation: choice(["vertical", "horizontal"]),
-      insideDiameterM: diameter,
-      tangentLengthM: quantity({ unit: "m", min: 0, max: 1e4 }),
-      heads: choice(headShapes),
-    }),
-    z.strictObject({ shape: z.literal("sphere"), insideDiameterM: diameter }),
-  ],
-  { error: 'Use one of "volume", "cylinder", "sphere".' },
-);
-
-const wall = z.strictObject({
-  steel: choice(steelIds),
-  thicknessM: quantity({ unit: "m", above: 0, max: 2 }),
-  massKg: quantity({ unit: "kg", above: 0, max: 1e9 }).optional(),
-  specificHeatJPerKgK: quantity({ unit: "J/(kg K)", above: 0, max: 1e5 }).optional(),
-  designPressurePa: pressure.optional(),
-  minimumDesignMetalTemperatureK: temperature.optional(),
-  insulation: z
-    .strictObject({
-      thicknessM: quantity({ unit: "m", above: 0, max: 5 }),
-      conductivityWPerMK: quantity({ unit: "W/(m K)", above: 0, max: 1e3 }),
-    })
-    .optional(),
-});
-
-const start = z
-  .strictObject({
-    pressurePa: pressure.optional(),
-    temperatureK: temperature.optional(),
-    liquidVolumeFraction: fraction.optional(),
-  })
-  .refine((given) => Object.values(given).filter((value) => value !== undefined).length === 2, {
-    error: "Give exactly two of pressurePa, temperatureK and liquidVolumeFraction.",
-  })
-  .transform((given) => given as StartSpec); // the refinement above leaves exactly two
 
 const outlet = {
   from: choice(["vapour", "liquid", "whole"]).default("vapour"),
@@ -244,17 +186,41 @@ const limits = z.strictObject({
   minimumMetalMarginK: quantity({ unit: "K", min: 0, max: 500 }).optional(),
   ventCapacityKgPerS: quantity({ unit: "kg/s", above: 0, max: 1e6 }).optional(),
   minimumOutletTemperatureK: temperature.optional(),
+  waterPresent: z.boolean({ error: ({ input }) => `${describe(input)} Give true or false.` }).optional(),
   nearBandK: quantity({ unit: "K", min: 10, max: 500 }).optional(),
   nearBandFraction: quantity({ unit: "", min: 0.1, max: 1 }).optional(),
 });
+
+const fireBasis = choice(["open-pool", "confined-pool", "jet"]);
+const afterwards = z.strictObject({ ambientTemperatureK: temperature.optional(), coefficientWPerM2K: coefficient.optional() });
+const steelInFire = z.strictObject({
+  basis: fireBasis.optional(),
+  heatFluxWPerM2: quantity({ unit: "W/m²", above: 0, max: 1e6 }).optional(),
+  strengthFraction: quantity({ unit: "", above: 0, max: 1 }).optional(),
+  tensileStrengthPa: quantity({ unit: "Pa", above: 1e7, max: 3e9 }).optional(),
+  items: z
+    .array(
+      z.strictObject({
+        name: text(60),
+        steel: choice(steelIds),
+        insideDiameterM: diameter,
+        thicknessM: quantity({ unit: "m", above: 0, max: 2 }),
+      }),
+    )
+    .max(50)
+    .optional(),
+});
+
+const vessel = z.strictObject({ geometry, wall: wall.optional() });
 
 export const blowdownCaseSchema = z
   .strictObject({
     ...head,
     kind: z.literal("blowdown"),
     fluid,
-    vessel: z.strictObject({ geometry, wall: wall.optional() }),
-    start,
+    vessel: vessel.optional(),
+    vessels: z.array(sectionPart).min(1, "Give at least one vessel.").max(50, "There are more than 50 vessels.").optional(),
+    start: start.optional(),
     release,
     heat: z
       .strictObject({
@@ -269,6 +235,13 @@ export const blowdownCaseSchema = z
       relativeTolerance: quantity({ unit: "", min: 1e-9, max: 1e-3 }).default(1e-6),
     }),
     limits: limits.optional(),
+    afterwards: afterwards.optional(),
+    steelInFire: steelInFire.optional(),
+  })
+  .transform((given, context): BlowdownCase => {
+    const { document, problems } = withVesselsJoined(given);
+    for (const { path, message } of problems) context.addIssue({ code: "custom", path, message });
+    return document ?? z.NEVER;
   })
   .superRefine((document, context) => {
     for (const { path, message } of blowdownContradictions(document)) context.addIssue({ code: "custom", path, message });

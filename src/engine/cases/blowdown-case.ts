@@ -1,4 +1,5 @@
 /** One blowdown of one vessel, as plain types of the case document. Meanings in docs/case-format.md. */
+import type { FireBasis } from "../heat/surface-fire";
 import type { VesselShape } from "../vessel/geometry";
 import type { FluidSpec } from "./fluid-spec";
 
@@ -17,10 +18,30 @@ export type WallSpec = {
   insulation?: Insulation;
 };
 
-export type StartSpec =
+/** What one vessel holds: two of pressure, temperature and level. */
+export type StatePair =
   | { pressurePa: number; temperatureK: number }
   | { temperatureK: number; liquidVolumeFraction: number }
   | { pressurePa: number; liquidVolumeFraction: number };
+
+/** The joined vessels equalise, with or without the heat of their steel. */
+export type SettleOut = { settleOut: "adiabatic" | "with-steel" };
+
+/** With `restAtTemperatureK` the section then stays closed in until everything has that temperature. */
+export type StartSpec = (StatePair | SettleOut) & { restAtTemperatureK?: number };
+
+/** One of several vessels or pipe runs that are joined into one section. */
+export type SectionPart = {
+  name?: string;
+  geometry: VesselGeometry;
+  wall?: WallSpec;
+  /** Before they are joined. */
+  start: StatePair;
+  /** Over components of the fluid; left out, the fluid's own composition. */
+  components?: { id: string; moleFraction: number }[];
+  /** Left out, that of the vessel's contents. */
+  wallTemperatureK?: number;
+};
 
 export type FlowModel = "frozen" | "equilibrium";
 export type OutletPlace = "vapour" | "liquid" | "whole";
@@ -44,9 +65,25 @@ export type Outside =
   | { model: "constant-heat"; heatW: number }
   | { model: "ambient"; temperatureK: number; coefficientWPerM2K: number }
   | { model: "pool-fire"; drainage: "adequate" | "inadequate"; environmentFactor: number }
-  | { model: "surface-fire"; basis: "open-pool" | "confined-pool" | "jet"; heatFluxWPerM2?: number };
+  | { model: "surface-fire"; basis: FireBasis; heatFluxWPerM2?: number };
 
 export type RunSpec = { stopTimeS: number; stopPressurePa: number; relativeTolerance: number };
+
+/** What the closed-in section warms up in, after the blowdown. */
+export type AfterwardsSpec = { ambientTemperatureK?: number; coefficientWPerM2K?: number };
+
+/** Steel that no liquid cools, in the fire of the case. Left out keys: `fire-steel/fire-steel.ts`. */
+export type SteelInFireSpec = {
+  basis?: FireBasis;
+  /** Fixes the flux, which otherwise falls as the steel heats up. */
+  heatFluxWPerM2?: number;
+  /** Part of the hot strength that is counted on. */
+  strengthFraction?: number;
+  /** At 20 °C; left out, the steel's table. */
+  tensileStrengthPa?: number;
+  /** Besides the vessel itself: pipes at the vessel's pressure. */
+  items?: { name: string; steel: string; insideDiameterM: number; thicknessM: number }[];
+};
 
 /** Keys that are absent are not asked for, except where a limit is required (`limits/assess.ts`). Pressures absolute. */
 export type LimitSpec = {
@@ -55,6 +92,8 @@ export type LimitSpec = {
   minimumMetalMarginK?: number;
   ventCapacityKgPerS?: number;
   minimumOutletTemperatureK?: number;
+  /** Free water is there, whatever the composition says: hydrate and ice are looked at. */
+  waterPresent?: boolean;
   /** Widens the band of "near", 10 K and 10 % where absent. */
   nearBandK?: number;
   nearBandFraction?: number;
@@ -66,9 +105,13 @@ export type BlowdownCase = {
   title?: string;
   fluid: FluidSpec;
   vessel: { geometry: VesselGeometry; wall?: WallSpec };
+  /** The vessels that `vessel` is made of, where there are several. */
+  vessels?: SectionPart[];
   start: StartSpec;
   release: ReleaseSpec;
   heat: { inside: InsideFilm; wall: WallModel; outside: Outside };
   run: RunSpec;
   limits?: LimitSpec;
+  afterwards?: AfterwardsSpec;
+  steelInFire?: SteelInFireSpec;
 };

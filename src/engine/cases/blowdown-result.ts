@@ -95,6 +95,86 @@ export type AssessedLimit = {
   note?: string;
 };
 
+/** Several vessels before and after they were joined; a positive `movesKg` is received. */
+export type SettleOutReport = {
+  vessels: { name: string; volumeM3: number; pressurePa: number; temperatureK: number; massKg: number; movesKg: number }[];
+  after: { volumeM3: number; pressurePa: number; temperatureK: number; massKg: number; vapourMoleFraction: number };
+  composition: Record<string, number>;
+  internalEnergyBeforeJ: number;
+  internalEnergyAfterJ: number;
+  heatFromSteelJ: number;
+  massClosure: number;
+  energyClosure: number;
+  steelTemperatureK?: number;
+  /** The other way of settling, where there is steel. */
+  alternative?: { rule: "adiabatic" | "with-steel"; pressurePa: number; temperatureK: number };
+  restAtTemperatureK?: number;
+};
+
+/** The section closed in after the blowdown, warming up in its surroundings. */
+export type Afterwards = {
+  /** What was not given, and what stands in for it. */
+  assumed: string[];
+  surroundings: { temperatureK: number; coefficientWPerM2K: number };
+  /** Times from the end of the run, with a band of half of it either way. Absent without a wall and its rated temperature. */
+  rewarm?: {
+    state: "already-above" | "rewarms" | "never";
+    ratedTemperatureK: number;
+    coldestAtStopK: number;
+    /** The steel goes on cooling while the cold fluid evens out with it. */
+    coldestAfterwardsK: number;
+    timeS?: number;
+    lowS?: number;
+    highS?: number;
+  };
+  closedIn: {
+    temperatureK: number;
+    pressurePa: number;
+    /** The pressure at `bandK` less and more. */
+    bandK: number;
+    lowPa: number;
+    highPa: number;
+    vapourMoleFraction: number;
+    /** Where a design pressure is given: is the upper end above it? */
+    aboveDesign?: boolean;
+  };
+};
+
+export type SteelInFireItem = {
+  id: string;
+  name: string;
+  steel: string;
+  part: "dry" | "wet";
+  insideDiameterM: number;
+  thicknessM: number;
+  /** Hot strength over stress, at its least while the blowdown runs. */
+  leastRatio: number;
+  leastRatioTimeS: number;
+  hottestWallK: number;
+  /** Absent: not within the time looked at. */
+  ruptureTimeS?: number;
+  ruptureTimeAtMoreFluxS?: number;
+  ruptureTimeShutInS?: number;
+  timeTo400CelsiusS?: number;
+  verdict: Verdict;
+  governs: boolean;
+  series: { timeS: number[]; wallTemperatureK: number[]; stressPa: number[]; strengthPa: number[] };
+};
+
+/** Steel in the flames against the falling pressure. */
+export type SteelInFire = {
+  fire: { basis: "open-pool" | "confined-pool" | "jet"; initialFluxWPerM2: number; fixedFluxWPerM2?: number };
+  strengthFraction: number;
+  /** Time looked at, from the start of fire and blowdown. */
+  horizonS: number;
+  /** Pressure held in the comparison without blowdown. */
+  shutInPressurePa: number;
+  items: SteelInFireItem[];
+  depressurisationWins: boolean;
+  verdict: Verdict;
+  sentence: string;
+};
+
 export type Warning = { code: string; message: string };
 
 export type BlowdownResult = {
@@ -105,6 +185,11 @@ export type BlowdownResult = {
   summary: BlowdownSummary;
   series: BlowdownSeries;
   energyAccount: EnergyAccount;
+  /** Where several vessels were joined. */
+  settleOut?: SettleOutReport;
+  afterwards?: Afterwards;
+  /** Where a wall stands in a fire. */
+  steelInFire?: SteelInFire;
   verdict: Verdict;
   /** In the order of the form; the one with the least in hand governs. */
   limits: AssessedLimit[];

@@ -1,7 +1,8 @@
 /**
  * What a vessel holds and how much of its inside a liquid wets.
  *
- * Shapes: a plain volume with a stated inside area; a cylinder lying or standing between two equal heads; a sphere.
+ * Shapes: a plain volume with a stated inside area; a cylinder lying or standing between two equal heads; a sphere; a level run of pipe,
+ * whose open ends have no metal; and a section of several of these, in which the liquid stands equally high above the lowest point of each.
  * Holds    internals, nozzles and connected pipe are not counted; straight flanges belong to the tangent length
  * Checks   geometry.test.ts
  */
@@ -17,7 +18,9 @@ export type VesselShape =
       tangentLengthM: number;
       heads: HeadShape;
     }
-  | { shape: "sphere"; insideDiameterM: number };
+  | { shape: "sphere"; insideDiameterM: number }
+  | { shape: "pipe"; insideDiameterM: number; lengthM: number }
+  | { shape: "section"; parts: VesselShape[] };
 
 export type Filled = { volumeM3: number; areaM2: number };
 
@@ -36,6 +39,8 @@ export type MeasuredVessel = {
 export function measureVessel(vessel: VesselShape): MeasuredVessel {
   if (vessel.shape === "volume") return plainVolume(vessel.volumeM3, vessel.innerAreaM2);
   if (vessel.shape === "sphere") return sphere(vessel.insideDiameterM);
+  if (vessel.shape === "pipe") return pipe(vessel.insideDiameterM, vessel.lengthM);
+  if (vessel.shape === "section") return section(vessel.parts.map(measureVessel));
   return cylinder(vessel);
 }
 
@@ -74,6 +79,40 @@ function sphere(D: number): MeasuredVessel {
       return { volumeM3: (Math.PI * h ** 2 * (3 * R - h)) / 3, areaM2: 2 * Math.PI * R * h };
     },
     wallVolume: (s) => (Math.PI * ((D + 2 * s) ** 3 - D ** 3)) / 6,
+  };
+}
+
+function pipe(D: number, L: number): MeasuredVessel {
+  const R = D / 2;
+  return {
+    volumeM3: Math.PI * R ** 2 * L,
+    innerAreaM2: Math.PI * D * L,
+    heightM: D,
+    below: (levelM) => {
+      const h = Math.min(Math.max(levelM, 0), D);
+      return { volumeM3: segmentArea(R, h) * L, areaM2: 2 * R * Math.acos((R - h) / R) * L };
+    },
+    wallVolume: (s) => Math.PI * ((R + s) ** 2 - R ** 2) * L,
+  };
+}
+
+/** One part of unknown shape or area leaves the sum unknown. */
+function section(parts: MeasuredVessel[]): MeasuredVessel {
+  const sum = (pick: (part: MeasuredVessel) => number): number => parts.reduce((total, part) => total + pick(part), 0);
+  const known = (pick: (part: MeasuredVessel) => number | undefined): number | undefined =>
+    parts.every((part) => pick(part) !== undefined) ? sum((part) => pick(part) ?? 0) : undefined;
+  const shaped = parts.every((part) => part.below && part.heightM !== undefined);
+  return {
+    volumeM3: sum((part) => part.volumeM3),
+    innerAreaM2: known((part) => part.innerAreaM2),
+    heightM: shaped ? Math.max(...parts.map((part) => part.heightM ?? 0)) : undefined,
+    below: shaped
+      ? (levelM) => ({
+          volumeM3: sum((part) => part.below?.(levelM).volumeM3 ?? 0),
+          areaM2: sum((part) => part.below?.(levelM).areaM2 ?? 0),
+        })
+      : undefined,
+    wallVolume: (s) => known((part) => part.wallVolume(s)),
   };
 }
 

@@ -1,11 +1,13 @@
-/** The contents at the start: amounts and energy in the given volume, from whichever two of pressure, temperature and level are given. */
+/** The contents at the start: amounts and energy in the given volume, before or after settling and coming to rest. */
+import { createFluidModel } from "../../eos/create-fluid-model";
 import type { FluidModel } from "../../eos/fluid-model";
 import { EngineError } from "../../errors";
 import type { Equilibrium } from "../../flash/equilibrium";
-import { flashPQ, flashTQ } from "../../flash/flash-quality";
-import { flashPT } from "../../flash/flash-pt";
-import { bracketedRoot } from "../../ode/bracketed-root";
-import type { StartSpec } from "../blowdown-case";
+import { filledState } from "../../start/filled-state";
+import { flashTV } from "../../start/flash-tv";
+import { fillParts, settle, type Settled } from "../../start/settle-out";
+import type { BlowdownCase } from "../blowdown-case";
+import type { FluidSpec } from "../fluid-spec";
 
 export type StartState = {
   temperatureK: number;
@@ -16,16 +18,41 @@ export type StartState = {
   twoPhase: boolean;
 };
 
-export function startState(fluid: FluidModel, start: StartSpec, volumeM3: number): StartState {
-  const found = "liquidVolumeFraction" in start ? atLevel(fluid, start) : flashPT(fluid, start);
-  if (found.phases.length === 2 && found.phases[0]?.kind === "liquid") {
-    throw new EngineError(
-      "not-applicable",
-      "At the start the fluid splits into two liquids, which can't be computed yet. Check the composition.",
-      {},
-      "start",
-    );
+export type Start = {
+  /** With the composition of the whole section as its feed. */
+  fluid: FluidModel;
+  spec: FluidSpec;
+  start: StartState;
+  settled: Settled | undefined;
+};
+
+type StartCase = Pick<BlowdownCase, "fluid" | "start" | "vessels">;
+
+export function startOf(blowdown: StartCase, volumeM3: number): Start {
+  const { start } = blowdown;
+  const given = createFluidModel(blowdown.fluid);
+  if (!("settleOut" in start)) {
+    const found = atRest(given, filledState(given, start, "start"), start.restAtTemperatureK);
+    return { fluid: given, spec: blowdown.fluid, start: filling(given, found, volumeM3), settled: undefined };
   }
+  const settled = settle(given, fillParts(given, partsOf(blowdown)), start.settleOut);
+  const { spec, fluid } = withFeed(blowdown.fluid, given, settled.composition);
+  const found = atRest(fluid, settled.after, start.restAtTemperatureK);
+  return { fluid, spec, start: filling(fluid, found, volumeM3), settled };
+}
+
+function partsOf({ vessels }: StartCase): NonNullable<BlowdownCase["vessels"]> {
+  if (vessels && vessels.length > 0) return vessels;
+  throw new EngineError("invalid-case", "There is nothing to settle out. List the vessels that are joined.", {}, "vessels");
+}
+
+/** Closed in at constant volume until everything has the temperature. */
+function atRest(fluid: FluidModel, before: Equilibrium, temperatureK: number | undefined): Equilibrium {
+  if (temperatureK === undefined) return before;
+  return flashTV(fluid, { temperatureK, molarVolumeM3PerMol: before.molarVolumeM3PerMol }, fluid.feed);
+}
+
+function filling(fluid: FluidModel, found: Equilibrium, volumeM3: number): StartState {
   const total = volumeM3 / found.molarVolumeM3PerMol;
   return {
     temperatureK: found.temperatureK,
@@ -37,28 +64,9 @@ export function startState(fluid: FluidModel, start: StartSpec, volumeM3: number
   };
 }
 
-/**
- * The saturated state whose liquid fills the given part of the volume. The part falls from 1 to 0 as the vapour mole fraction rises from
- * bubble to dew point, so the search is over that.
- */
-function atLevel(fluid: FluidModel, start: Exclude<StartSpec, { pressurePa: number; temperatureK: number }>): Equilibrium {
-  const wanted = start.liquidVolumeFraction;
-  const saturated = (vapourMoleFraction: number): Equilibrium =>
-    "temperatureK" in start
-      ? flashTQ(fluid, { temperatureK: start.temperatureK, vapourMoleFraction })
-      : flashPQ(fluid, { pressurePa: start.pressurePa, vapourMoleFraction });
-  const excess = (vapourMoleFraction: number): number => liquidPart(saturated(vapourMoleFraction)) - wanted;
-  try {
-    if (wanted === 0) return saturated(1);
-    if (wanted === 1) return saturated(0);
-    return saturated(bracketedRoot(excess, { a: 0, fa: 1 - wanted, b: 1, fb: -wanted }, 1e-15));
-  } catch (error) {
-    if (error instanceof EngineError && error.path === undefined) throw error.at("start");
-    throw error;
-  }
-}
-
-function liquidPart({ phases, molarVolumeM3PerMol }: Equilibrium): number {
-  const dense = phases.length === 2 ? phases[1] : phases.find((phase) => phase.kind === "liquid");
-  return dense ? (dense.moleFraction * dense.state.molarVolumeM3PerMol) / molarVolumeM3PerMol : 0;
+/** The same fluid with another composition, where it is another. */
+function withFeed(spec: FluidSpec, given: FluidModel, z: Float64Array): { spec: FluidSpec; fluid: FluidModel } {
+  if (z.every((fraction, i) => Math.abs(fraction - (given.feed[i] ?? 0)) < 1e-14)) return { spec, fluid: given };
+  const mixed = { ...spec, components: spec.components.map((one, i) => ({ ...one, moleFraction: z[i] ?? 0 })) };
+  return { spec: mixed, fluid: createFluidModel(mixed) };
 }

@@ -1,19 +1,21 @@
 /** What a blowdown case says, resolved into the numbers that the balance works with. */
 import type { FluidModel } from "../../eos/fluid-model";
-import { createFluidModel } from "../../eos/create-fluid-model";
 import { EngineError } from "../../errors";
 import { measureVessel, type MeasuredVessel } from "../../vessel/geometry";
 import { outsideHeat, type OutsideHeat } from "../../heat/outside-heat";
 import type { BlowdownCase, OutletPlace } from "../blowdown-case";
 import { makeOpening, type Opening } from "./opening";
 import { solidCurves, type SolidCurve } from "./solid-check";
-import { startState, type StartState } from "./start-state";
+import type { Settled } from "../../start/settle-out";
+import { startOf, type StartState } from "./start-state";
 import { makeWall, type Wall } from "./wall";
 
 export type VesselModel = {
   fluid: FluidModel;
   vessel: MeasuredVessel;
   start: StartState;
+  /** How several vessels came to the start together. */
+  settled: Settled | undefined;
   wall: Wall | undefined;
   film: "none" | "correlations" | { coefficientWPerM2K: number };
   insideAreaM2: number;
@@ -27,9 +29,8 @@ export type VesselModel = {
 
 export function makeVesselModel(blowdown: BlowdownCase): VesselModel {
   const { release, heat, vessel: given } = blowdown;
-  const fluid = createFluidModel(blowdown.fluid);
   const vessel = measureVessel(given.geometry);
-  const start = startState(fluid, blowdown.start, vessel.volumeM3);
+  const { fluid, spec, start, settled } = startOf(blowdown, vessel.volumeM3);
   if (!(release.backPressurePa < start.pressurePa)) {
     throw new EngineError(
       "invalid-case",
@@ -43,6 +44,7 @@ export function makeVesselModel(blowdown: BlowdownCase): VesselModel {
     fluid,
     vessel,
     start,
+    settled,
     wall: walled && given.wall ? makeWall(heat.wall.model, given.wall, vessel, start.temperatureK) : undefined,
     film: !walled ? "none" : heat.inside.model === "constant" ? heat.inside : heat.inside.model,
     insideAreaM2: vessel.innerAreaM2 ?? 0,
@@ -51,6 +53,6 @@ export function makeVesselModel(blowdown: BlowdownCase): VesselModel {
     openingTimeS: release.openingTimeS,
     backPressurePa: release.backPressurePa,
     from: release.from,
-    solids: solidCurves(blowdown.fluid),
+    solids: solidCurves(spec),
   };
 }
