@@ -27,6 +27,8 @@ const published: [QuantityId, string, number][] = [
   ["density", "lb/ft³", 1.601846e1],
   ["speed", "mph", 4.4704e-1],
   ["temperatureDifference", "°F difference", 5.555556e-1],
+  ["viscosity", "cP", 1e-3],
+  ["surfaceTension", "dyn/cm", 1e-3],
 ];
 
 describe("the unit table", () => {
@@ -36,6 +38,11 @@ describe("the unit table", () => {
 
   it("has Kv as 0.865 Cv (IEC 60534-1)", () => {
     expect(fromSi("flowCoefficient", 1, "Kv")).toBeCloseTo(0.865, 3);
+  });
+
+  it("has the Joule-Thomson coefficient in °F/psi as its two parts make it", () => {
+    const { factor } = unitOf("temperatureDifference", "°F difference");
+    expect(unitOf("jouleThomson", "°F/psi").factor / (factor / unitOf("pressureDifference", "psi").factor)).toBeCloseTo(1, 12);
   });
 
   it.each([

@@ -247,6 +247,21 @@ export const units = {
     title: "speed",
     shown: { "m/s": { factor: 1 }, "ft/s": { factor: foot }, "km/h": { factor: 1 / 3.6 }, mph: { factor: (5280 * foot) / 3600 } },
   },
+  viscosity: {
+    si: "Pa·s",
+    title: "viscosity",
+    shown: { "mPa·s": { factor: 1e-3, aliases: ["mpas"] }, "Pa·s": { factor: 1, aliases: ["pas"] }, cP: { factor: 1e-3 } },
+  },
+  surfaceTension: {
+    si: "N/m",
+    title: "surface tension",
+    shown: { "mN/m": { factor: 1e-3 }, "N/m": { factor: 1 }, "dyn/cm": { factor: 1e-3 } },
+  },
+  jouleThomson: {
+    si: "K/Pa",
+    title: "Joule-Thomson coefficient",
+    shown: { "K/bar": { factor: 1e-5 }, "K/Pa": { factor: 1 }, "°F/psi": { factor: 1 / (1.8 * psi) } },
+  },
   flowCoefficient: { si: "Cv", title: "flow coefficient", shown: { Kv: { factor: 1 / kvPerCv }, Cv: { factor: 1 } } },
   fraction: {
     si: "–",

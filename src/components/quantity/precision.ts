@@ -43,6 +43,9 @@ const rules: Record<QuantityId, Rules> = {
   molarVolume: four,
   molarMass: { usual: { decimals: 2 } },
   speed: three,
+  viscosity: three,
+  surfaceTension: three,
+  jouleThomson: three,
   flowCoefficient: three,
   fraction: { usual: { figures: 3 }, "%": {} },
 };

@@ -27,6 +27,9 @@ const table: Record<QuantityId, Record<UnitSystem, string>> = {
   molarVolume: { SI: "m³/kmol", US: "ft³/lbmol" },
   molarMass: { SI: "g/mol", US: "g/mol" },
   speed: { SI: "m/s", US: "ft/s" },
+  viscosity: { SI: "mPa·s", US: "cP" },
+  surfaceTension: { SI: "mN/m", US: "dyn/cm" },
+  jouleThomson: { SI: "K/bar", US: "°F/psi" },
   flowCoefficient: { SI: "Kv", US: "Cv" },
   fraction: { SI: "–", US: "–" },
 };

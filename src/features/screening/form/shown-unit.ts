@@ -1,16 +1,10 @@
 /** Which unit a line is shown in, and what then stands in its field. The stored text, unit and SI value never change by showing. */
 import { formatForField, formatQuantity } from "@/components/quantity/format";
+import { unitFits } from "@/components/quantity/unit-fits";
 import type { UnitSystem } from "@/components/units/unit-system";
 import type { LineValue } from "@/contracts/draft";
 import type { QuantityLine } from "@/contracts/lines/line";
 import { readQuantity } from "@/engine/read-quantity";
-
-const customary = /psi|°F|°R|^in|^ft|lb|bbl|Btu|^Cv/;
-const neutral = new Set(["s", "min", "h", "–", "%"]);
-
-/** Whether a unit belongs to a system; seconds and ratios belong to both. */
-export const unitFits = (unit: string, system: UnitSystem): boolean =>
-  neutral.has(unit) || customary.test(unit) === (system === "US");
 
 /** The unit chosen at the line, else the one typed in if it belongs to the system in use, else the line's usual one. */
 export function shownUnitOf(line: QuantityLine, value: LineValue | undefined, system: UnitSystem, chosen?: string): string {
