@@ -14,6 +14,7 @@ const heights = {
   tall: "h-[292px] phone:h-[260px]",
   panel: "h-[190px] phone:h-[190px]",
   low: "h-[150px] phone:h-[150px]",
+  diagram: "h-[420px] phone:h-[330px]",
 } as const;
 
 type Props = Curves & {
@@ -85,7 +86,7 @@ export function CurveChart({
             curves={curves}
             summary={summary}
             ground={ground}
-            low={height !== "tall"}
+            low={height === "panel" || height === "low"}
             readingX={inRange ? readingX : null}
             onPoint={setReadingX}
           />

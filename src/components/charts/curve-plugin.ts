@@ -146,9 +146,10 @@ function drawLabels({ drawing, context, area, ink, ground, toX, toY }: Paper): v
       return { ...size, places: placesAround(point, size), words: mark.label, colour: ink("--ink"), point };
     }),
     ...drawing.series.flatMap((series, own) => {
-      if (series.label === "") return [];
+      if (series.label === "" || series.quiet) return [];
       const size = sizeOf(series.label);
-      const colour = ink(curveLooks[series.tone].colour);
+      const look = curveLooks[series.tone];
+      const colour = ink(look.words ?? look.colour);
       return [{ ...size, places: placesAlong(curves[own] ?? [], size), own, words: series.label, colour }];
     }),
   ];

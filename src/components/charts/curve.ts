@@ -1,15 +1,26 @@
 /** What a chart of curves shows. All numbers are in the units shown; a chart converts nothing. */
 
 /** The job of a curve: sets colour, weight and dash on screen and on paper. */
-export type CurveTone = "pressure" | "fluid" | "wall" | "outer-wall" | "vent" | "ghost" | "second-look";
+export type CurveTone =
+  | ("pressure" | "fluid" | "wall" | "outer-wall" | "vent" | "ghost" | "second-look")
+  // Lines of a phase diagram.
+  | ("bubble" | "dew" | "share" | "hydrate" | "frost");
 
 /**
  * One curve.
  *
  * x[i], y[i]   points in rising x; a y that is not finite leaves a gap
  * label        stands at the curve itself, in its colour; a ghost may go without ("")
+ * quiet        the label is read, not drawn: a further piece of a line that is named already
  */
-export type CurveSeries = { id: string; label: string; tone: CurveTone; x: readonly number[]; y: readonly number[] };
+export type CurveSeries = {
+  id: string;
+  label: string;
+  tone: CurveTone;
+  x: readonly number[];
+  y: readonly number[];
+  quiet?: boolean;
+};
 
 /** A limit, dashed, its words at the line: at a height (`axis: "y"`) or at a moment (`axis: "x"`). */
 export type CurveLimit = { axis: "x" | "y"; at: number; label: string };
@@ -44,7 +55,8 @@ export type Curves = {
 
 export type Ground = "sheet" | "tint";
 
-type Look = { colour: string; width: number; dash: number[]; printDash?: number[] };
+/** `words` is the colour of the label where that of the line is too faint for text. */
+type Look = { colour: string; width: number; dash: number[]; printDash?: number[]; words?: string };
 
 export const curveLooks: Record<CurveTone, Look> = {
   pressure: { colour: "--c-pressure", width: 2.8, dash: [] },
@@ -54,4 +66,9 @@ export const curveLooks: Record<CurveTone, Look> = {
   vent: { colour: "--c-vent", width: 2.4, dash: [] },
   ghost: { colour: "--c-ghost", width: 1.8, dash: [2, 3] },
   "second-look": { colour: "--ink", width: 1.6, dash: [2, 3] },
+  bubble: { colour: "--c-pressure", width: 2.8, dash: [] },
+  dew: { colour: "--c-pressure", width: 2, dash: [9, 3] },
+  share: { colour: "--c-ghost", width: 1.2, dash: [], words: "--ink-3" },
+  hydrate: { colour: "--c-vent", width: 1.8, dash: [2, 3] },
+  frost: { colour: "--c-wall", width: 1.8, dash: [6, 3, 1.5, 3] },
 };
