@@ -25,6 +25,7 @@ import { ConflictDialog } from "./conflict-dialog";
 import { useDraft } from "./draft-context";
 import { FillDialog } from "./fill-dialog";
 import { FormKeys } from "./form-keys";
+import { InventoryFigure, StartSentence } from "./inventory-figure";
 import { lineAddress } from "./line-address";
 import { LineRow } from "./line-row";
 import { partStatuses } from "./part-status";
@@ -118,6 +119,7 @@ export function PartForm({ slug }: { slug: PartSlug }) {
           <SourceKeys />
         </PartHead>
         {part.slug === "scope" && <ScopeFacts />}
+        {part.slug === "inventory" && <InventoryFigure />}
         {groups.map((group) => (
           <section key={group} aria-label={group}>
             <GroupHead>{group}</GroupHead>
@@ -128,6 +130,7 @@ export function PartForm({ slug }: { slug: PartSlug }) {
               ))}
           </section>
         ))}
+        {part.slug === "inventory" && <StartSentence />}
         <ButtonRow>
           {before && (
             <ButtonLink href={pages.part(subject.screeningId, before.slug)}>{`${before.part}\u2002${before.title}`}</ButtonLink>
