@@ -3,10 +3,10 @@ import { describe, expect, it } from "vitest";
 import isentropic from "../../../tests/fixtures/checks/isentropic.json";
 import { fixtureFluid } from "../../../tests/fixtures/fluids";
 import { createFluidModel } from "../eos/create-fluid-model";
-import { flashPQ } from "../flash/flash-quality";
+import { flashPQ, flashTQ } from "../flash/flash-quality";
 import { flashPS } from "../flash/flash-ph";
 import { flashPT } from "../flash/flash-pt";
-import { equilibriumNozzle } from "./equilibrium-nozzle";
+import { createEquilibriumHints, equilibriumNozzle } from "./equilibrium-nozzle";
 import { frozenNozzle } from "./frozen-nozzle";
 import { smallestBetween } from "./smallest-between";
 
@@ -77,6 +77,43 @@ describe("equilibriumNozzle", () => {
         },
       ),
       { numRuns: 40 },
+    );
+  });
+});
+
+describe("equilibriumNozzle of a pure fluid, with places found before", () => {
+  it.each(["propane", "carbon_dioxide", "water"])("is the largest flux on the isentrope: %s", (id) => {
+    const model = createFluidModel({ equation: "peng-robinson-1976", components: [{ id, moleFraction: 1 }] });
+    const Tc = model.criticalTemperaturesK[0] ?? missing();
+    const pc = model.criticalPressuresPa[0] ?? missing();
+    const hints = createEquilibriumHints();
+    fc.assert(
+      fc.property(
+        fc.double({ min: 0.72, max: 1.3, noNaN: true }),
+        fc.double({ min: 0.1, max: 2.4, noNaN: true }),
+        fc.double({ min: 0, max: 1, noNaN: true }),
+        (reducedT, reducedP, quality) => {
+          const saturated = reducedT < 0.93 && reducedP < 0.6;
+          const stagnation = saturated
+            ? flashTQ(model, { temperatureK: reducedT * Tc, vapourMoleFraction: quality })
+            : flashPT(model, { temperatureK: reducedT * Tc, pressurePa: reducedP * pc });
+          const back = 0.03 * stagnation.pressurePa;
+          const near = equilibriumNozzle(model, stagnation, model.feed, back, hints);
+          const fresh = equilibriumNozzle(model, stagnation, model.feed, back);
+          expect(Math.abs(near.massFluxKgPerM2S / fresh.massFluxKgPerM2S - 1)).toBeLessThan(1e-8);
+          for (const part of [0.97, 0.9, 0.75, 0.6, 0.5, 0.4, 0.25, 0.1]) {
+            const at = flashPS(model, {
+              pressurePa: part * stagnation.pressurePa,
+              entropyJPerMolK: stagnation.entropyJPerMolK,
+            });
+            const flux =
+              Math.sqrt(2 * model.mixtureMolarMass(model.feed) * Math.max(stagnation.enthalpyJPerMol - at.enthalpyJPerMol, 0)) /
+              at.molarVolumeM3PerMol;
+            expect(flux).toBeLessThanOrEqual(near.massFluxKgPerM2S * (1 + 1e-7));
+          }
+        },
+      ),
+      { numRuns: 60 },
     );
   });
 });

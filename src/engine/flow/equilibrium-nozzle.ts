@@ -16,11 +16,28 @@ import { createPhaseState, type FluidModel, type PhaseState } from "../eos/fluid
 import { EngineError } from "../errors";
 import type { Equilibrium } from "../flash/equilibrium";
 import { flashPS } from "../flash/flash-ph";
-import { frozenNozzle, type NozzleFlow } from "./frozen-nozzle";
+import { onlyComponent } from "../flash/saturation-pure";
+import { createNozzleHints, frozenNozzle, type NozzleFlow, type NozzleHints } from "./frozen-nozzle";
+import { mixedThroat, type MixedThroat } from "./mixed-throat";
 import { onIsentrope } from "./on-isentrope";
+import { pureEquilibriumNozzle, type DomeHints } from "./pure-equilibrium-nozzle";
 import { smallestBetween } from "./smallest-between";
 
-type Point = { x: number; flux: number; pressurePa: number; temperatureK: number };
+/** Places found for streams near by: seeds only, which change the cost and not the answer. */
+export type EquilibriumHints = {
+  frozen: NozzleHints;
+  dome: DomeHints;
+  throat: MixedThroat | undefined;
+  behind: Equilibrium | undefined;
+};
+export const createEquilibriumHints = (): EquilibriumHints => ({
+  frozen: createNozzleHints(),
+  dome: { entry: 0, throat: 0 },
+  throat: undefined,
+  behind: undefined,
+});
+
+type Point = { x: number; flux: number; state: Equilibrium };
 
 const firstStep = 0.02;
 const growth = 1.45;
@@ -32,51 +49,70 @@ export function equilibriumNozzle(
   stagnation: Equilibrium,
   z: ArrayLike<number>,
   backPressurePa: number,
+  hints: EquilibriumHints = createEquilibriumHints(),
 ): NozzleFlow {
-  const { pressurePa: p0, temperatureK: T0, molarVolumeM3PerMol: v0, enthalpyJPerMol: h0, entropyJPerMolK } = stagnation;
+  const { pressurePa: p0, temperatureK: T0 } = stagnation;
   if (!(backPressurePa < p0)) return { massFluxKgPerM2S: 0, throatPressurePa: p0, throatTemperatureK: T0, choked: false };
+  const component = onlyComponent(z);
+  const quick = component >= 0 && pureEquilibriumNozzle(fluid, stagnation, z, component, backPressurePa, hints);
+  if (quick) return quick;
   const [only, other] = stagnation.phases;
-  if (only && (!other || other.moleFraction < 1e-12)) {
-    const frozen = frozenNozzle(fluid, only.state, z, backPressurePa);
+  if (!hints.throat && only && (!other || other.moleFraction < 1e-12)) {
+    const frozen = frozenNozzle(fluid, only.state, z, backPressurePa, hints.frozen);
     if (staysOnePhase(fluid, only.state, z, frozen)) return frozen;
   }
+  const throat =
+    (hints.throat && mixedThroat(fluid, stagnation, z, hints.throat)) ?? walkedThroat(fluid, stagnation, z, backPressurePa);
+  hints.throat = throat.state.phases.length === 2 ? throat : undefined;
 
   const molarMass = fluid.mixtureMolarMass(z);
-  let seed = stagnation;
-  const fluxOf = ({ enthalpyJPerMol, molarVolumeM3PerMol }: Equilibrium): number =>
-    Math.sqrt(2 * molarMass * Math.max(h0 - enthalpyJPerMol, 0)) / molarVolumeM3PerMol;
-  const at = (x: number): Point => {
-    seed = onIsentrope(fluid, { entropyJPerMolK, molarVolumeM3PerMol: v0 * Math.exp(x) }, z, seed);
-    return { x, flux: fluxOf(seed), pressurePa: seed.pressurePa, temperatureK: seed.temperatureK };
-  };
-
-  const walk: Point[] = [{ x: 0, flux: 0, pressurePa: p0, temperatureK: T0 }];
-  let best = 0;
-  for (let step = firstStep * stiffness(stagnation); walk.length < 60; step *= growth) {
-    const next = at((walk.at(-1)?.x ?? 0) + step);
-    walk.push(next);
-    if (next.flux > (walk[best]?.flux ?? 0)) best = walk.length - 1;
-    if (next.pressurePa <= backPressurePa || next.flux < fallen * (walk[best]?.flux ?? 0)) break;
-  }
-
-  const from = walk[Math.max(best - 1, 0)]?.x ?? 0;
-  const to = walk[Math.min(best + 1, walk.length - 1)]?.x ?? 0;
-  const throat = at(smallestBetween((x) => -at(x).flux, from, to, 1e-7));
-  if (throat.pressurePa > backPressurePa)
+  const fluxOf = (state: Equilibrium): number => fluxAt(stagnation, state, molarMass);
+  if (throat.state.pressurePa > backPressurePa)
     return {
-      massFluxKgPerM2S: throat.flux,
-      throatPressurePa: throat.pressurePa,
-      throatTemperatureK: throat.temperatureK,
+      massFluxKgPerM2S: fluxOf(throat.state),
+      throatPressurePa: throat.state.pressurePa,
+      throatTemperatureK: throat.state.temperatureK,
       choked: true,
     };
 
-  const behind = flashPS(fluid, { pressurePa: backPressurePa, entropyJPerMolK }, z, seed);
+  const { entropyJPerMolK } = stagnation;
+  const behind = flashPS(fluid, { pressurePa: backPressurePa, entropyJPerMolK }, z, hints.behind ?? throat.state);
+  hints.behind = behind;
   return {
     massFluxKgPerM2S: fluxOf(behind),
     throatPressurePa: backPressurePa,
     throatTemperatureK: behind.temperatureK,
     choked: false,
   };
+}
+
+const fluxAt = (stagnation: Equilibrium, state: Equilibrium, molarMass: number): number =>
+  Math.sqrt(2 * molarMass * Math.max(stagnation.enthalpyJPerMol - state.enthalpyJPerMol, 0)) / state.molarVolumeM3PerMol;
+
+/** From stagnation outwards until the flux has passed its maximum or the pressure the one behind; then the best interval is closed. */
+function walkedThroat(fluid: FluidModel, stagnation: Equilibrium, z: ArrayLike<number>, backPressurePa: number): MixedThroat {
+  const { molarVolumeM3PerMol: v0, entropyJPerMolK } = stagnation;
+  const molarMass = fluid.mixtureMolarMass(z);
+  let seed = stagnation;
+  const at = (x: number): Point => {
+    seed = onIsentrope(fluid, { entropyJPerMolK, molarVolumeM3PerMol: v0 * Math.exp(x) }, z, seed);
+    return { x, flux: fluxAt(stagnation, seed, molarMass), state: seed };
+  };
+  const walk: Point[] = [{ x: 0, flux: 0, state: stagnation }];
+  let best = 0;
+  for (let step = firstStep * stiffness(stagnation); walk.length < 60; step *= growth) {
+    const next = at((walk.at(-1)?.x ?? 0) + step);
+    walk.push(next);
+    if (next.flux > (walk[best]?.flux ?? 0)) best = walk.length - 1;
+    if (next.state.pressurePa <= backPressurePa || next.flux < fallen * (walk[best]?.flux ?? 0)) break;
+  }
+  const from = walk[Math.max(best - 1, 0)]?.x ?? 0;
+  const to = walk[Math.min(best + 1, walk.length - 1)]?.x ?? 0;
+  const rough = walk[best]!;
+  const closed = best > 0 ? mixedThroat(fluid, stagnation, z, rough) : undefined;
+  if (closed && closed.x >= from && closed.x <= to && fluxAt(stagnation, closed.state, molarMass) >= rough.flux) return closed;
+  const { x, state } = at(smallestBetween((place) => -at(place).flux, from, to, 1e-7));
+  return { x, state };
 }
 
 const scratch = createPhaseState();

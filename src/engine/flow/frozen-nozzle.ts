@@ -5,16 +5,19 @@
  *
  * The throat is the first root of h0 − h − c²/2 = 0 along the isentrope, walked in x = ln(v/v0), into the metastable region if need be.
  * A fluid that reaches the back pressure first flows at the back pressure (not choked; a liquid in frozen flow always does).
- * The first guess is a function of the stagnation state alone, so that the answer depends on nothing but the arguments.
+ * A gas is tried by Newton steps from the last throat (`isentrope-newton.ts`) and searched for from scratch where they fail. A guess changes the
+ * answer by round-off only.
  *
  * Source   one-dimensional isentropic flow: dG = 0 where the velocity equals the speed of sound (any text on gas dynamics)
  * Holds    steady, isentropic, no discharge coefficient; a throat where the fluid would condense is followed on the metastable branch
  * stagnation  state of the stream at rest; z its composition
+ * hints    throats found before, for streams near by: seeds only
  * Returns  G [kg/(m² s)] and the throat; zero flux where the back pressure is not below the stagnation pressure
  * Throws   EngineError "no-convergence"
  */
 import { createPhaseState, type FluidModel, type PhaseState } from "../eos/fluid-model";
 import { EngineError } from "../errors";
+import { soundTerm, throatByNewton, type FrozenThroat, type ThroatHint } from "./isentrope-newton";
 
 export type NozzleFlow = { massFluxKgPerM2S: number; throatPressurePa: number; throatTemperatureK: number; choked: boolean };
 
@@ -25,15 +28,56 @@ export function frozenNozzle(
   stagnation: PhaseState,
   z: ArrayLike<number>,
   backPressurePa: number,
+  hints: NozzleHints = createNozzleHints(),
 ): NozzleFlow {
   const { pressurePa: p0, temperatureK: T0 } = stagnation;
   if (!(backPressurePa < p0)) return { massFluxKgPerM2S: 0, throatPressurePa: p0, throatTemperatureK: T0, choked: false };
+  const quick = quickly(model, stagnation, z, backPressurePa, hints);
+  if (quick) return quick;
 
   const walk = new Isentrope(model, stagnation, z);
   const sonic = sonicPoint(walk);
   if (sonic !== undefined && walk.at(sonic).pressurePa > backPressurePa) return flowAt(walk, sonic, true);
   return flowAt(walk, pressurePoint(walk, backPressurePa, sonic), false);
 }
+
+export type NozzleHints = { sonic: ThroatHint; subsonic: ThroatHint };
+export const createNozzleHints = (): NozzleHints => ({ sonic: { x: 0, lnT: 0 }, subsonic: { x: 0, lnT: 0 } });
+
+/** Gas-like streams have one throat only; a dense one may have more, of which the first counts. */
+const gasLike = { leastCompressibility: 0.45, least: 0.8, most: 2.2 };
+
+function quickly(
+  model: FluidModel,
+  stagnation: PhaseState,
+  z: ArrayLike<number>,
+  backPressurePa: number,
+  hints: NozzleHints,
+): NozzleFlow | undefined {
+  const { pressurePa: p0, molarVolumeM3PerMol: v0 } = stagnation;
+  const k = soundTerm(stagnation) / (p0 * v0);
+  if (!(stagnation.compressibility > gasLike.leastCompressibility && k > gasLike.least && k < gasLike.most)) return undefined;
+  const gruneisen = (v0 * stagnation.pressureByTemperature) / stagnation.heatCapacityVJPerMolK;
+  const start = (hint: ThroatHint, x: number): void => {
+    if (hint.x > 0 && Math.abs(hint.x - x) < 0.3 * x) return;
+    hint.x = x;
+    hint.lnT = -gruneisen * x;
+  };
+  start(hints.sonic, Math.abs(k - 1) < 1e-6 ? 0.5 : Math.log((k + 1) / 2) / (k - 1));
+  const sonic = throatByNewton(model, stagnation, z, undefined, hints.sonic);
+  if (!sonic) return undefined;
+  if (sonic.pressurePa > backPressurePa) return flowOf(sonic, true);
+  start(hints.subsonic, Math.log(p0 / backPressurePa) / k);
+  const subsonic = throatByNewton(model, stagnation, z, backPressurePa, hints.subsonic);
+  return subsonic && subsonic.x <= sonic.x * (1 + 1e-9) ? flowOf(subsonic, false) : undefined;
+}
+
+const flowOf = ({ fluxKgPerM2S, pressurePa, temperatureK }: FrozenThroat, choked: boolean): NozzleFlow => ({
+  massFluxKgPerM2S: fluxKgPerM2S,
+  throatPressurePa: pressurePa,
+  throatTemperatureK: temperatureK,
+  choked,
+});
 
 /** The isentrope through a stagnation state by x = ln(v/v0); `at` gives undefined-free states or says that none exists. */
 class Isentrope {
@@ -82,17 +126,6 @@ class Isentrope {
       throw error;
     }
   }
-}
-
-/** M c² [J/mol] = −v² (∂p/∂v)_s */
-function soundTerm({
-  temperatureK: T,
-  molarVolumeM3PerMol: v,
-  pressureByTemperature: pT,
-  pressureByVolume: pv,
-  heatCapacityVJPerMolK: cv,
-}: PhaseState): number {
-  return v * v * ((T * pT * pT) / cv - pv);
 }
 
 /** First x at which the velocity reaches the speed of sound, or undefined where the phase ends before that. */

@@ -7,7 +7,7 @@
 import type { FluidModel } from "../../eos/fluid-model";
 import { EngineError } from "../../errors";
 import { valveGasFlow } from "../../flow/control-valve";
-import { equilibriumNozzle } from "../../flow/equilibrium-nozzle";
+import { createEquilibriumHints, equilibriumNozzle } from "../../flow/equilibrium-nozzle";
 import { frozenNozzle } from "../../flow/frozen-nozzle";
 import type { OrificeRelease, ReleaseSpec, ValveRelease } from "../blowdown-case";
 import type { LeavingStream } from "./leaving-stream";
@@ -26,12 +26,15 @@ function orifice(
   { diameterM, dischargeCoefficient, backPressurePa, flowModel, from }: OrificeRelease,
 ): Opening {
   const areaM2 = (dischargeCoefficient * Math.PI * diameterM ** 2) / 4;
+  // Vapour, liquid and mixture each have a throat of their own from which the next search starts.
+  const hints = [createEquilibriumHints(), createEquilibriumHints(), createEquilibriumHints()] as const;
   return (stream) => {
+    const near = stream.phase ? hints[stream.isLiquid ? 1 : 0] : hints[2];
     const frozen = flowModel === "frozen" && stream.phase && !(from !== "vapour" && stream.isLiquid);
     const flow =
       frozen && stream.phase
-        ? frozenNozzle(fluid, stream.phase, stream.composition, backPressurePa)
-        : equilibriumNozzle(fluid, stream.equilibrium(), stream.composition, backPressurePa);
+        ? frozenNozzle(fluid, stream.phase, stream.composition, backPressurePa, near.frozen)
+        : equilibriumNozzle(fluid, stream.equilibrium(), stream.composition, backPressurePa, near);
     const { massFluxKgPerM2S, ...throat } = flow;
     return { rateKgPerS: areaM2 * massFluxKgPerM2S, ...throat };
   };
