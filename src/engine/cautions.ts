@@ -2,7 +2,22 @@
  * The only place of the standing cautions' words. A result carries the ones that apply, with the figures of its run put in; a signature
  * stores them as shown. C4 to C6 are worded here too, for the sheets and records that add them.
  */
-export type CautionId = "C1" | "C2" | "C3" | "C4" | "C5" | "C6" | "C7" | "M-equation" | "M-film" | "M-steel" | "M-opening";
+export type CautionId =
+  | "C1"
+  | "C2"
+  | "C3"
+  | "C4"
+  | "C5"
+  | "C6"
+  | "C7"
+  | "M-equation"
+  | "M-film"
+  | "M-steel"
+  | "M-opening"
+  | "M-settle-out"
+  | "M-restart"
+  | "M-rupture"
+  | "M-study";
 
 export type Caution = { id: CautionId; words: string };
 
@@ -74,6 +89,29 @@ export const steelCaution: Caution = {
 export const openingCaution: Caution = {
   id: "M-opening",
   words: "The opening time lowers the peak load. It must not be credited unless the valve's stroke has been tested.",
+};
+
+export const settleOutCaution: Caution = {
+  id: "M-settle-out",
+  words:
+    "Settle-out assumes that every listed volume equalises and that no running-down machine does work. Use the higher of settle-out and highest normal operating pressure as the initial pressure.",
+};
+
+export const restartCaution: Caution = {
+  id: "M-restart",
+  words:
+    "After blowdown the metal is cold while the pressure is low. Re-pressurising before the metal is above its permitted temperature at that pressure is the classic brittle-fracture route. The screening ends at the stop time; hold, warm-up and restart must be covered by a procedure.",
+};
+
+export const ruptureCaution: Caution = {
+  id: "M-rupture",
+  words: "Rupture time is an order-of-magnitude indicator: plus or minus 30 % in flux changes it by about the same amount.",
+};
+
+export const studyCaution: Caution = {
+  id: "M-study",
+  words:
+    "A percentile does not replace the worst credible case that a rule asks for. Inputs were varied independently of each other, within the bands shown.",
 };
 
 /** "−9 °C", with the true minus sign and a no-break space. */

@@ -72,7 +72,17 @@ export type EnergyAccount = {
   wholeRun: { startJ: number; heatFromWallJ: number; heatFromOutsideJ: number; ventedJ: number; endJ: number; leftOverJ: number };
 };
 
-export type LimitId = "time-to-target" | "minimum-wall-temperature" | "minimum-outlet-temperature" | "peak-vent-rate";
+export type LimitId =
+  | "time-to-target"
+  | "minimum-wall-temperature"
+  | "minimum-liquid-wall-temperature"
+  | "minimum-outlet-temperature"
+  | "peak-vent-rate"
+  | "solids"
+  | "solids-behind-opening"
+  | "hydrate"
+  | "liquid-carry-over"
+  | "least-strength-ratio";
 
 export type AssessedLimit = {
   id: LimitId;
@@ -82,7 +92,9 @@ export type AssessedLimit = {
   /** Absent when none was entered. */
   limit?: number;
   /** SI unit of both. */
-  unit: "s" | "K" | "kg/s";
+  unit: "s" | "K" | "kg/s" | "1";
+  /** Value and limit are differences of temperature, not temperatures. */
+  difference?: true;
   /** Which side of the limit is the right one. */
   sense: "at-most" | "at-least";
   /** Distance left to the limit in its unit; negative past it. */

@@ -17,6 +17,7 @@ export type Figure = {
   value?: number;
   limit?: number;
   note?: string;
+  difference?: true;
   required: boolean;
 };
 

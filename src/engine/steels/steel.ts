@@ -17,6 +17,8 @@ export const steelIds = [
 ] as const;
 export type SteelId = (typeof steelIds)[number];
 
+export const isSteelId = (id: string): id is SteelId => steelIds.some((known) => known === id);
+
 export type Steel = {
   id: SteelId;
   name: string;
@@ -26,6 +28,13 @@ export type Steel = {
   specificHeatRangeK: readonly [number, number];
   specificHeatJPerKgK: (temperatureK: number) => number;
   conductivityWPerMK: (temperatureK: number) => number;
+  /** At 20 °C, the least of typical grades [Pa]. */
+  tensileStrengthPa: number;
+  /**
+   * Hot strength over that at 20 °C. For carbon and nickel steels the published factor is that of the yield at 2 % strain, used as a proxy;
+   * for stainless steel and aluminium that of the tensile strength.
+   */
+  strengthRatio: (temperatureK: number) => number;
   /** ∫ c dT from the first point of the table [J/kg]; the exact integral of the broken line. */
   heatContentJPerKg: (temperatureK: number) => number;
   /** The inverse of `heatContentJPerKg`. */
@@ -41,6 +50,7 @@ export function steelById(id: SteelId): Steel {
   if (!row) throw new RangeError(`there is no steel ${id}`);
   const heat = new BrokenLine(row.specificHeat_J_per_kgK);
   const conductivity = new BrokenLine(row.thermalConductivity_W_per_mK);
+  const strength = new BrokenLine(row.strengthVersusTemperature.yieldRatio_ky ?? row.strengthVersusTemperature.ultimateRatio);
   const steel: Steel = {
     id,
     name: row.name,
@@ -50,6 +60,8 @@ export function steelById(id: SteelId): Steel {
     specificHeatRangeK: heat.range,
     specificHeatJPerKgK: (T) => heat.at(T),
     conductivityWPerMK: (T) => conductivity.at(T),
+    tensileStrengthPa: row.ultimateTensileStrength20C_MPa * 1e6,
+    strengthRatio: (T) => strength.at(T),
     heatContentJPerKg: (T) => heat.integralTo(T),
     temperatureFromHeatContentK: (q) => heat.whereIntegralIs(q),
   };

@@ -73,9 +73,11 @@ export function composeRecord(
   return before ? { ...content, changedSince: changedSince(before, content) } : content;
 }
 
-const lineOfLimit: Record<LimitId, LineNo> = {
+/** Limits that the physics sets, and nobody enters, have no line of their own. */
+const lineOfLimit: Partial<Record<LimitId, LineNo>> = {
   "time-to-target": "7.01",
   "minimum-wall-temperature": "7.02",
+  "minimum-liquid-wall-temperature": "7.02",
   "minimum-outlet-temperature": "7.03",
   "peak-vent-rate": "7.04",
 };
@@ -91,7 +93,7 @@ function recordCase({ letter, marginK, computed, ...hashes }: StoredRun, draft: 
     sentence: runSentence(result, marginK),
     limits: result.limits.map(({ id, title, value, limit, unit, verdict, governs }) => ({
       id,
-      line: lineKey(lineByNo(lineOfLimit[id]), letter),
+      line: lineOf(id, letter),
       title,
       value: value ?? null,
       limit: limit ?? null,
@@ -101,6 +103,11 @@ function recordCase({ letter, marginK, computed, ...hashes }: StoredRun, draft: 
     })),
     warnings: result.warnings.map(({ code, message }) => ({ code, message })),
   };
+}
+
+function lineOf(id: LimitId, letter: string): string {
+  const no = lineOfLimit[id];
+  return no ? lineKey(lineByNo(no), letter) : "–";
 }
 
 function compositionRows(draft: DraftDocument): RecordContent["composition"] {

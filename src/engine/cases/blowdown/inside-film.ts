@@ -43,7 +43,7 @@ function wettedFlux(fluid: FluidModel, vapour: EquilibriumPhase, liquid: Equilib
   return (dT) => (dT <= 0 ? convection(dT) : Math.max(convection(dT), Math.min(boiling(dT), Math.max(limit, 0))));
 }
 
-function surfaceTension(fluid: FluidModel, x: Float64Array, temperatureK: number): number {
+export function surfaceTension(fluid: FluidModel, x: Float64Array, temperatureK: number): number {
   let sum = 0;
   let known = 0;
   fluid.componentIds.forEach((id, i) => {

@@ -1,11 +1,13 @@
 /** A blowdown from case to result: state, balances, integration, series, extremes, account, limits, cautions. */
 import { threeSteps } from "../../account/three-steps";
+import type { EndOfRun } from "../../after/afterwards";
+import { aroundRun } from "../../after/around-run";
 import { EngineError } from "../../errors";
 import { assess } from "../../limits/assess";
 import { blowdownFigures } from "../../limits/blowdown-figures";
 import type { BlowdownCase } from "../blowdown-case";
 import type { BlowdownResult, BlowdownSummary, EnergyAccount } from "../blowdown-result";
-import { Balance } from "./balance";
+import { Balance, type Instant } from "./balance";
 import { cautionsOfRun } from "./cautions-of-run";
 import { highest, lowest, type Extreme } from "./extremes";
 import { integrateRun, type Run } from "./integrate-run";
@@ -53,6 +55,7 @@ export function runBlowdown(given: BlowdownCase, options: BlowdownOptions = {}):
   const run = integrateRun(balance, blowdown, {
     relativeTolerance,
     maxEvaluations,
+    keepSamples: true,
     onProgress: options.onProgress,
     isCancelled: options.isCancelled,
   });
@@ -65,19 +68,26 @@ export function runBlowdown(given: BlowdownCase, options: BlowdownOptions = {}):
     ...summarise(balance, run, rows, found, ends, counted),
     ...(sized ? { sizedDiameterM: sized.diameterM } : {}),
   };
-  const warnings = warningsOf(blowdown, model, run, rows, summary);
-  const assessed = assess(blowdownFigures(blowdown, summary), {
+  const series = seriesOf(balance, rows);
+  const around = aroundRun(
+    blowdown,
+    { model, series, summary, contentsAt: (t) => instantAt(balance, run, t, "last").instant.contents },
+    endOfRun(balance, ends, rows),
+  );
+  const warnings = [...warningsOf(blowdown, model, run, rows, summary), ...around.warnings];
+  const assessed = assess([...blowdownFigures(blowdown, summary, series), ...around.figures], {
     bandK: blowdown.limits?.nearBandK,
     bandFraction: blowdown.limits?.nearBandFraction,
   });
   const closes = closureOf(summary) <= closureLimit;
-  const cautions = cautionsOfRun(blowdown, run, warnings);
+  const cautions = [...cautionsOfRun(blowdown, run, warnings), ...around.cautions];
   return {
     format: "ebbmark-result/1",
     kind: "blowdown",
     summary,
-    series: seriesOf(balance, rows),
+    series,
     energyAccount: accountOf(balance, ends, found.fluid.timeS, run.endTimeS),
+    ...around.parts,
     verdict: closes ? assessed.verdict : "open",
     limits: closes
       ? assessed.limits
@@ -122,15 +132,38 @@ type Ends = { first: RebuiltState; coldest: RebuiltState; last: RebuiltState; la
 
 function endStates(balance: Balance, run: Run, coldest: Extreme): Ends {
   const stateAt = (t: number, side: "first" | "last"): { state: RebuiltState; y: number[] } => {
-    const all = run.segments.flatMap((segment) => segment.dense.steps.map((step) => ({ segment, step })));
-    const inside = all.filter(({ step }) => t >= step.t0 && t <= step.t1);
-    const place = (side === "first" ? inside[0] : inside.at(-1)) ?? all.at(side === "first" ? 0 : -1);
-    if (!place) throw new EngineError("no-convergence", "The run ended before its first step.");
-    const { y, instant } = balance.within(place.segment, place.step, t);
+    const { y, instant } = instantAt(balance, run, t, side);
     return { state: rebuiltState(balance.model.fluid, instant.contents), y };
   };
   const last = stateAt(run.endTimeS, "last");
   return { first: stateAt(0, "first").state, coldest: stateAt(coldest.timeS, "last").state, last: last.state, lastY: last.y };
+}
+
+/** Everything at a time of the run; where a segment ends there, as it was before or after. */
+function instantAt(balance: Balance, run: Run, t: number, side: "first" | "last"): { y: number[]; instant: Instant } {
+  const all = run.segments.flatMap((segment) => segment.dense.steps.map((step) => ({ segment, step })));
+  const inside = all.filter(({ step }) => t >= step.t0 && t <= step.t1);
+  const place = (side === "first" ? inside[0] : inside.at(-1)) ?? all.at(side === "first" ? 0 : -1);
+  if (!place) throw new EngineError("no-convergence", "The run ended before its first step.");
+  return balance.within(place.segment, place.step, t);
+}
+
+function endOfRun(balance: Balance, { last, lastY }: Ends, rows: Row[]): EndOfRun {
+  const { fluid, vessel, wall, start } = balance.model;
+  const totalMolesMol = vessel.volumeM3 / last.molarVolumeM3PerMol;
+  return {
+    fluid,
+    volumeM3: vessel.volumeM3,
+    areaM2: vessel.innerAreaM2,
+    composition: last.composition,
+    totalMolesMol,
+    internalEnergyJ: totalMolesMol * last.internalEnergyJPerMol,
+    temperatureK: last.temperatureK,
+    startTemperatureK: start.temperatureK,
+    wall,
+    wallMeanK: wall?.temperatureAtK(balance.wallEnergyJ(lastY)),
+    coldestSteelK: rows.at(-1)?.wallTemperatureK,
+  };
 }
 
 function summarise(balance: Balance, run: Run, rows: Row[], found: Extremes, ends: Ends, counted: Counted): BlowdownSummary {

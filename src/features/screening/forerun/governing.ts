@@ -9,12 +9,19 @@ const names: Record<LimitId, string> = {
   "minimum-wall-temperature": "wall",
   "minimum-outlet-temperature": "fluid leaving",
   "peak-vent-rate": "vent load",
+  "minimum-liquid-wall-temperature": "liquid-wetted wall",
+  solids: "to solid in the vessel",
+  "solids-behind-opening": "to solid behind the opening",
+  hydrate: "to hydrate",
+  "liquid-carry-over": "swelled liquid",
+  "least-strength-ratio": "hot strength over stress",
 };
 
 const quantities: Record<AssessedLimit["unit"], { value: QuantityId; difference: QuantityId }> = {
   K: { value: "temperature", difference: "temperatureDifference" },
   s: { value: "time", difference: "time" },
   "kg/s": { value: "massRate", difference: "massRate" },
+  "1": { value: "fraction", difference: "fraction" },
 };
 
 /**
@@ -29,7 +36,8 @@ export function governingFigure(
   if (governing?.value === undefined) {
     return { figure: shown("temperature", summary.minimumFluidTemperatureK).text, words: "lowest fluid" };
   }
-  const { value, difference } = quantities[governing.unit];
+  const { value: plain, difference } = quantities[governing.unit];
+  const value = governing.difference ? difference : plain;
   // Where the target was not reached the engine gives the end of the run, so that the line can be judged; it is no arrival.
   const reached = governing.id !== "time-to-target" || summary.timeToTargetPressureS !== undefined;
   const { inHand } = governing;

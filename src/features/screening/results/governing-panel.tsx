@@ -16,6 +16,12 @@ const curveOf: Record<LimitId, keyof RunCurves> = {
   "minimum-wall-temperature": "temperature",
   "minimum-outlet-temperature": "temperature",
   "peak-vent-rate": "ventRate",
+  "minimum-liquid-wall-temperature": "temperature",
+  solids: "temperature",
+  "solids-behind-opening": "temperature",
+  hydrate: "temperature",
+  "liquid-carry-over": "pressure",
+  "least-strength-ratio": "pressure",
 };
 
 /** The one figure that decides the verdict, beside the curve it is read from, in the sentence of the record. */

@@ -17,6 +17,12 @@ export function governingOf(recordCase: RecordContent["cases"][number], { result
     "minimum-wall-temperature": summary.minimumWallTemperatureTimeS,
     "minimum-outlet-temperature": summary.minimumOutletTemperatureTimeS,
     "peak-vent-rate": summary.peakVentRateTimeS,
+    "minimum-liquid-wall-temperature": undefined,
+    solids: undefined,
+    "solids-behind-opening": undefined,
+    hydrate: undefined,
+    "liquid-carry-over": undefined,
+    "least-strength-ratio": result.steelInFire?.items.find((item) => item.governs)?.leastRatioTimeS,
   };
   return { line: recordCase.limits.find(({ id }) => id === limit.id)?.line ?? "–", limit, atS: moments[limit.id] ?? null };
 }
@@ -38,7 +44,7 @@ export function governingWords(
   { system }: Showing,
 ): { value: string; rest: string } {
   if (limit.id === "time-to-target" && targetMissed(result)) return { value: "–", rest: "target not reached" };
-  const quantity = quantityOfLimit[limit.unit];
+  const quantity = quantityOfLimit(limit);
   const { number, unit } = formatQuantity(quantity, limit.value, shownUnit(quantity, system));
   const moment = atS === null ? "" : ` at ${formatQuantity("time", atS, momentUnit(result.summary.endTimeS)).text}`;
   return { value: number, rest: `${unit}${moment}` };

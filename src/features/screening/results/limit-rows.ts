@@ -10,8 +10,22 @@ import { defaultNearBand } from "@/engine/limits/assess";
 
 export type Showing = { system: UnitSystem; barometricPressurePa: number };
 
-export const quantityOfLimit: Record<AssessedLimit["unit"], QuantityId> = { s: "time", K: "temperature", "kg/s": "massRate" };
-const distanceOfLimit: Record<AssessedLimit["unit"], QuantityId> = { s: "time", K: "temperatureDifference", "kg/s": "massRate" };
+const quantities: Record<AssessedLimit["unit"], QuantityId> = {
+  s: "time",
+  K: "temperature",
+  "kg/s": "massRate",
+  "1": "fraction",
+};
+const distanceOfLimit: Record<AssessedLimit["unit"], QuantityId> = {
+  s: "time",
+  K: "temperatureDifference",
+  "kg/s": "massRate",
+  "1": "fraction",
+};
+
+/** What value and limit are. */
+export const quantityOfLimit = ({ unit, difference }: AssessedLimit): QuantityId =>
+  (difference ? distanceOfLimit : quantities)[unit];
 
 /** The target was never reached: the engine then gives the end of the run for its time, so that the line can be judged. */
 export const targetMissed = ({ limits, summary }: CaseRunView["result"]): boolean =>
@@ -32,7 +46,7 @@ export function limitRows(recordCase: RecordContent["cases"][number], run: CaseR
 
 function limitRow(limit: AssessedLimit, no: string, run: CaseRunView, { system, barometricPressurePa }: Showing): LimitRow {
   const { value, limit: allowed, unit, sense, inHand, share, verdict, governs } = limit;
-  const quantity = quantityOfLimit[unit];
+  const quantity = quantityOfLimit(limit);
   const symbol = shownUnit(quantity, system);
   const missed = limit.id === "time-to-target" && targetMissed(run.result);
   const pair =
