@@ -8,6 +8,7 @@ const help = `Usage:
   ebbmark run CASE.json            one result document on standard output
   ebbmark run -                    the case on standard input
   ebbmark run A.json B.json …      one document a line, in order
+  ebbmark methods                  the published methods of the kind "method", one JSON object a line
   ebbmark --help
 
 Exit status: 0 computed; 2 the case is invalid; 3 it is valid but cannot be computed; 1 the command itself went wrong.
@@ -19,12 +20,16 @@ async function main([command, ...files]) {
     process.stderr.write(help);
     return 0;
   }
+  if (command === "methods" && files.length === 0) {
+    const engine = await loadEngine();
+    for (const method of engine.module.describeMethods()) await print(`${JSON.stringify(method)}\n`);
+    return 0;
+  }
   if (command !== "run" || files.length === 0 || files.some((file) => file.startsWith("-") && file !== "-")) {
     process.stderr.write(help);
     return 1;
   }
-  const { file, engineVersion } = await buildEngine();
-  const engine = await import(pathToFileURL(file).href);
+  const { module: engine, engineVersion } = await loadEngine();
   let highest = 0;
   for (const source of files) {
     const outcome = await runOne(engine, source, engineVersion);
@@ -33,6 +38,11 @@ async function main([command, ...files]) {
     await print(`${files.length > 1 ? JSON.stringify(document) : JSON.stringify(document, null, 1)}\n`);
   }
   return highest;
+}
+
+async function loadEngine() {
+  const { file, engineVersion } = await buildEngine();
+  return { module: await import(pathToFileURL(file).href), engineVersion };
 }
 
 async function runOne(engine, source, engineVersion) {

@@ -247,12 +247,20 @@ export const blowdownCaseSchema = z
     for (const { path, message } of blowdownContradictions(document)) context.addIssue({ code: "custom", path, message });
   });
 
+/** The inputs are checked against the method's own fields when it is run. */
+export const methodCaseSchema = z.strictObject({
+  ...head,
+  kind: z.literal("method"),
+  method: text(80),
+  inputs: z.record(z.string(), z.json(), { error: 'Give an object of inputs, such as { "massFlowKgPerS": 2 }.' }).default({}),
+});
+
 export const caseFileSchema = z.discriminatedUnion(
   "kind",
-  [pathCaseSchema, flashCaseSchema, nozzleCaseSchema, blowdownCaseSchema],
+  [pathCaseSchema, flashCaseSchema, nozzleCaseSchema, blowdownCaseSchema, methodCaseSchema],
   {
     error: ({ input }) =>
-      isObject(input) ? 'Use one of "path", "flash", "nozzle", "blowdown".' : "Give one case document, a JSON object.",
+      isObject(input) ? 'Use one of "path", "flash", "nozzle", "blowdown", "method".' : "Give one case document, a JSON object.",
   },
 );
 

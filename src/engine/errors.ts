@@ -13,6 +13,8 @@ export type EngineErrorCode =
   | "cancelled";
 
 export type EngineErrorDetails = Readonly<Record<string, number | string>>;
+/** A place in the case document, and what is wrong there. */
+export type PlacedProblem = { path: string; message: string };
 
 export class EngineError extends Error {
   override readonly name = "EngineError";
@@ -24,6 +26,20 @@ export class EngineError extends Error {
     readonly path?: string,
   ) {
     super(message);
+  }
+
+  /** Several faults of one document; the first speaks for all. */
+  static invalid(problems: readonly PlacedProblem[]): EngineError {
+    const error = new EngineError("invalid-case", problems[0]?.message ?? "The case is invalid.", {}, problems[0]?.path);
+    error.others = problems.slice(1);
+    return error;
+  }
+
+  private others: readonly PlacedProblem[] = [];
+
+  /** Every fault told, at least one. */
+  get problems(): PlacedProblem[] {
+    return [{ path: this.path ?? "", message: this.message }, ...this.others];
   }
 
   /** The same refusal, pinned to a field of the case document. */

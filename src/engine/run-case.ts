@@ -8,10 +8,11 @@ import type { NozzleCase, NozzleResult } from "./cases/nozzle-case";
 import type { PathCase, PathResult } from "./cases/path-case";
 import { runNozzle } from "./cases/nozzle/run-nozzle";
 import { runFlash } from "./flash/run-flash";
+import { runMethod, type MethodCase, type MethodResult } from "./methods/run-method";
 import { runPath } from "./path/run-path";
 
-export type EngineCase = PathCase | FlashCase | NozzleCase | BlowdownCase;
-export type EngineResult = PathResult | FlashResult | NozzleResult | BlowdownResult;
+export type EngineCase = PathCase | FlashCase | NozzleCase | BlowdownCase | MethodCase;
+export type EngineResult = PathResult | FlashResult | NozzleResult | BlowdownResult | MethodResult;
 
 export type RunContext = Pick<BlowdownOptions, "onProgress" | "isCancelled" | "coarse"> & {
   engineVersion: string;
@@ -31,6 +32,8 @@ export function runCase(document: EngineCase, context: RunContext): EngineResult
       return runFlash(document);
     case "nozzle":
       return runNozzle(document);
+    case "method":
+      return runMethod(document);
     case "blowdown":
       return stamp(() => runBlowdown(document, context), context);
   }

@@ -10,6 +10,7 @@ import canonicalize from "canonicalize";
 import { parseCase, parseCaseText, type CaseFile, type CaseProblem, type ParsedCase } from "@/contracts/case-file";
 import type { BlowdownResult, Confirmation } from "@/engine/cases/blowdown-result";
 import { EngineError } from "@/engine/errors";
+import { describeMethods } from "@/engine/methods/run-method";
 import { runCase, runConfirmed, type EngineResult } from "@/engine/run-case";
 
 export type ErrorDocument = { format: "ebbmark-error/1"; code: string; problems: CaseProblem[] };
@@ -71,7 +72,7 @@ export function canonicalCase(document: CaseFile): { caseText: string; caseSha25
   return { caseText, caseSha256: bytesToHex(sha256(utf8ToBytes(caseText))) };
 }
 
-export { parseCase, parseCaseText };
+export { describeMethods, parseCase, parseCaseText };
 
 function run(parsed: ParsedCase, context: EntryContext): Outcome {
   if (!parsed.ok) return invalid(parsed.problems);
@@ -94,10 +95,10 @@ function refusing<T extends Computed>(work: () => T): T | Exclude<Outcome, Compu
     return work();
   } catch (error) {
     if (!(error instanceof EngineError)) throw error;
-    if (error.code === "invalid-case") return invalid([{ path: error.path ?? "", message: error.message }]);
+    if (error.code === "invalid-case") return invalid(error.problems);
     return {
       status: 3,
-      error: { format: "ebbmark-error/1", code: error.code, problems: [{ path: error.path ?? "", message: error.message }] },
+      error: { format: "ebbmark-error/1", code: error.code, problems: error.problems },
     };
   }
 }

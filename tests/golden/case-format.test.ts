@@ -22,7 +22,7 @@ describe("the page of the case format", () => {
 
   it("covers every kind, steel, head and equation", () => {
     expect(new Set(examples.map((text) => (JSON.parse(text) as { kind: string }).kind))).toEqual(
-      new Set(["flash", "path", "nozzle", "blowdown"]),
+      new Set(["flash", "path", "nozzle", "method", "blowdown"]),
     );
     for (const word of [...steelIds, ...headShapes, ...equationIds]) expect(page).toContain(`\`${word}\``);
   });
