@@ -1,0 +1,20 @@
+import type { FitnessVerdict } from "@/engine/eos/fitness";
+import { fitnessWords, isAdmitted } from "./fitness-words";
+
+type Props = { title: string; verdict: FitnessVerdict; notes: readonly string[]; inUse: boolean };
+
+/** Name of an equation, whether it is the one in use, how fit it is and why. */
+export function FitnessCell({ title, verdict, notes, inUse }: Props) {
+  return (
+    <>
+      <b>{title}</b>
+      {inUse && <span className="ml-2 whitespace-nowrap text-label font-semibold text-tide">in use</span>}
+      <span className={`block text-small ${isAdmitted(verdict) ? "text-ink-2" : "text-near"}`}>{fitnessWords[verdict]}</span>
+      {notes.map((note) => (
+        <span key={note} className="block font-serif text-label leading-[1.35] text-ink-3">
+          {note}
+        </span>
+      ))}
+    </>
+  );
+}

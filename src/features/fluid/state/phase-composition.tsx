@@ -1,0 +1,56 @@
+"use client";
+
+import { formatMolePercent, formatNumber } from "@/components/quantity/format";
+import { Power } from "@/components/quantity/quantity";
+import { Cell, HeadCell, Row, Table } from "@/components/table/table";
+import { componentName } from "@/contracts/component-list";
+import type { StateProperties } from "@/engine/properties/state-properties";
+import { phaseWords } from "./phase-words";
+
+/** What each of two phases is made of, and the ratio of vapour to liquid for each component. */
+export function PhaseComposition({ state, stale }: { state: StateProperties; stale: boolean }) {
+  if (state.phases.length < 2) return null;
+  return (
+    <div className={stale ? "text-ink-3" : undefined}>
+      <Table caption="Composition of the phases" settled stack={false}>
+        <thead>
+          <tr>
+            <HeadCell>Component</HeadCell>
+            <HeadCell numeric hideOnPhone>
+              Whole, mol %
+            </HeadCell>
+            {state.phases.map(({ kind }, i) => (
+              <HeadCell key={i} numeric>
+                {phaseWords[kind]}, mol %
+              </HeadCell>
+            ))}
+            <HeadCell numeric>K-value</HeadCell>
+          </tr>
+        </thead>
+        <tbody>
+          {state.components.map(({ id, moleFraction, ratio }, i) => (
+            <Row key={id}>
+              <Cell head>{componentName(id)}</Cell>
+              <Cell numeric hideOnPhone>
+                {formatMolePercent(moleFraction)}
+              </Cell>
+              {state.phases.map(({ composition }, phase) => (
+                <Cell key={phase} numeric>
+                  {formatMolePercent(composition[i] ?? Number.NaN)}
+                </Cell>
+              ))}
+              <Cell numeric strong>
+                <Ratio value={ratio} />
+              </Cell>
+            </Row>
+          ))}
+        </tbody>
+      </Table>
+    </div>
+  );
+}
+
+function Ratio({ value }: { value: number | undefined }) {
+  if (value === undefined || !Number.isFinite(value)) return <>–</>;
+  return value >= 1e-3 && value < 1e5 ? <>{formatNumber(value, { figures: 3 })}</> : <Power value={value} figures={3} />;
+}

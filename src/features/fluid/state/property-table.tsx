@@ -1,0 +1,82 @@
+"use client";
+
+import { formatPercent } from "@/components/quantity/format";
+import { useShown } from "@/components/quantity/quantity";
+import { shownUnit } from "@/components/quantity/shown-units";
+import { Cell, HeadCell, Row, Table } from "@/components/table/table";
+import { useUnits } from "@/components/units/units-provider";
+import type { StateProperties } from "@/engine/properties/state-properties";
+import type { Basis } from "./basis-switch";
+import { phaseWords } from "./phase-words";
+import { propertyRows } from "./property-rows";
+
+/** Every property of a state; of two phases each stands in a column of its own beside the whole. */
+export function PropertyTable({ state, basis, stale }: { state: StateProperties; basis: Basis; stale: boolean }) {
+  const shown = useShown();
+  const { system } = useUnits();
+  const two = state.phases.length > 1;
+  const write = (quantity: Parameters<typeof shown>[0], value: number | undefined) => shown(quantity, value).number;
+  return (
+    <div className={stale ? "text-ink-3" : undefined}>
+      <Table caption="Properties at the state" settled stack={false}>
+        <thead>
+          <tr>
+            <HeadCell>Property</HeadCell>
+            <HeadCell>Unit</HeadCell>
+            {two && <HeadCell numeric>Whole</HeadCell>}
+            {state.phases.map(({ kind }, i) => (
+              <HeadCell key={i} numeric>
+                {phaseWords[kind]}
+              </HeadCell>
+            ))}
+          </tr>
+        </thead>
+        <tbody>
+          {two && (
+            <>
+              <Row>
+                <Cell head>Share by mole</Cell>
+                <Cell muted>%</Cell>
+                <Cell numeric>100</Cell>
+                {state.phases.map(({ moleFraction }, i) => (
+                  <Cell key={i} numeric strong>
+                    {share(moleFraction)}
+                  </Cell>
+                ))}
+              </Row>
+              <Row>
+                <Cell head>Share by mass</Cell>
+                <Cell muted>%</Cell>
+                <Cell numeric>100</Cell>
+                {state.phases.map(({ massFraction }, i) => (
+                  <Cell key={i} numeric strong>
+                    {share(massFraction)}
+                  </Cell>
+                ))}
+              </Row>
+            </>
+          )}
+          {propertyRows(state, basis).map(({ name, note, quantity, overall, phases }) => (
+            <Row key={name}>
+              <Cell head>
+                {name}
+                {note && <span className="block text-label text-ink-3">{note}</span>}
+              </Cell>
+              <Cell muted>{shownUnit(quantity, system)}</Cell>
+              {two && <Cell numeric>{write(quantity, overall)}</Cell>}
+              {phases.map((value, i) => (
+                <Cell key={i} numeric strong>
+                  {write(quantity, value)}
+                </Cell>
+              ))}
+            </Row>
+          ))}
+        </tbody>
+      </Table>
+    </div>
+  );
+}
+
+/** "93.4"; the unit stands in its own column. */
+const share = (fraction: number): string =>
+  fraction > 0.001 && fraction < 0.999 ? (fraction * 100).toFixed(1) : formatPercent(fraction).replace(/\s*%$/, "");
