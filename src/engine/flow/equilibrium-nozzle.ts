@@ -32,7 +32,7 @@ export type EquilibriumHints = {
 };
 export const createEquilibriumHints = (): EquilibriumHints => ({
   frozen: createNozzleHints(),
-  dome: { entry: 0, throat: 0 },
+  dome: { entry: 0, throat: 0, dome: undefined },
   throat: undefined,
   behind: undefined,
 });

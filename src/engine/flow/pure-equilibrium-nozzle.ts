@@ -18,7 +18,7 @@ import { soundTerm } from "./isentrope-newton";
 import { SaturatedIsentrope } from "./saturated-isentrope";
 
 /** Places found before, in parts of the stagnation temperature; zero where there are none. */
-export type DomeHints = { entry: number; throat: number };
+export type DomeHints = { entry: number; throat: number; dome: SaturatedIsentrope | undefined };
 
 const settled = 1e-12;
 const mostSteps = 40;
@@ -51,7 +51,7 @@ function inDome(
   { frozen: frozenHints, dome: hints }: { frozen: NozzleHints; dome: DomeHints },
 ): NozzleFlow | undefined {
   const { temperatureK: T0, enthalpyJPerMol: h0, entropyJPerMolK: s0 } = stagnation;
-  const dome = new SaturatedIsentrope(model, z);
+  const dome = (hints.dome ??= new SaturatedIsentrope(model, Float64Array.from(z)));
   const alone = stagnation.phases.length === 1 ? stagnation.phases[0]!.state : undefined;
   let entryK = T0;
   let entrySide: "vapour" | "liquid" | undefined;

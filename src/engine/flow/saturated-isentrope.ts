@@ -25,6 +25,8 @@ export class SaturatedIsentrope {
   /** ds/dT of each saturated phase [J/(mol K²)]. */
   vapourEntropySlope = 0;
   liquidEntropySlope = 0;
+  private vapourRate = 0;
+  private liquidRate = 0;
 
   constructor(
     private readonly model: FluidModel,
@@ -34,12 +36,11 @@ export class SaturatedIsentrope {
   /** Saturated phases and mixture of entropy s0 at T; throws what the saturation throws. */
   moveTo(T: number, s0: number): void {
     const { model, z, vapour, liquid } = this;
-    const change = T - this.temperatureK;
-    const guess = this.pressurePa + this.slopePaPerK * change;
-    const near = this.pressurePa > 0 && Math.abs(change) < 0.1 * T && guess > 0.3 * this.pressurePa;
-    const saturation = saturationAtTemperature(model, T, z, near ? guess : undefined);
-    model.phaseAtVolume(T, saturation.vapourVolume, z, vapour);
-    model.phaseAtVolume(T, saturation.liquidVolume, z, liquid);
+    if (!this.stepTo(T)) {
+      const saturation = saturationAtTemperature(model, T, z);
+      model.phaseAtVolume(T, saturation.vapourVolume, z, vapour);
+      model.phaseAtVolume(T, saturation.liquidVolume, z, liquid);
+    }
     const spread = vapour.molarVolumeM3PerMol - liquid.molarVolumeM3PerMol;
     const slope = (vapour.entropyJPerMolK - liquid.entropyJPerMolK) / spread;
     const vapourRate = (slope - vapour.pressureByTemperature) / vapour.pressureByVolume;
@@ -52,12 +53,45 @@ export class SaturatedIsentrope {
     const v = liquid.molarVolumeM3PerMol + q * spread;
     const vRate = liquidRate + q * (vapourRate - liquidRate) + qRate * spread;
     this.temperatureK = T;
-    this.pressurePa = saturation.pressurePa;
+    this.pressurePa = vapour.pressurePa;
+    this.vapourRate = vapourRate;
+    this.liquidRate = liquidRate;
     this.slopePaPerK = slope;
     this.quality = q;
     this.molarVolumeM3PerMol = v;
     this.enthalpyJPerMol = liquid.enthalpyJPerMol + q * (vapour.enthalpyJPerMol - liquid.enthalpyJPerMol);
     this.soundTerm = (-v * v * slope) / vRate;
+  }
+
+  /**
+   * Newton on p_v = p_l, g_v = g_l in the two volumes, from those of the last temperature carried along the saturation line:
+   *
+   *   dp_v = (v_l Δp − Δg)/(v_v − v_l),  dp_l = dp_v + Δp,  dv = dp/p_v  for each phase
+   */
+  private stepTo(T: number): boolean {
+    const { model, z, vapour, liquid } = this;
+    const change = T - this.temperatureK;
+    if (!(this.pressurePa > 0 && Math.abs(change) < 0.05 * T)) return false;
+    // A vapour's volume goes with 1/p nearly, a liquid's in a straight line.
+    let light = vapour.molarVolumeM3PerMol * Math.exp((this.vapourRate * change) / vapour.molarVolumeM3PerMol);
+    let dense = liquid.molarVolumeM3PerMol + this.liquidRate * change;
+    for (let i = 0; i < 8; i++) {
+      if (!(light > 1.02 * dense && dense > 0)) return false;
+      model.phaseAtVolume(T, light, z, vapour);
+      model.phaseAtVolume(T, dense, z, liquid);
+      if (!(vapour.pressureByVolume < 0 && liquid.pressureByVolume < 0)) return false;
+      const pressureGap = vapour.pressurePa - liquid.pressurePa;
+      const gibbsGap = vapour.enthalpyJPerMol - liquid.enthalpyJPerMol - T * (vapour.entropyJPerMolK - liquid.entropyJPerMolK);
+      const rise = (dense * pressureGap - gibbsGap) / (light - dense);
+      const lightStep = rise / vapour.pressureByVolume;
+      const denseStep = (rise + pressureGap) / liquid.pressureByVolume;
+      const largest = Math.max(Math.abs(lightStep / light), Math.abs(denseStep / dense));
+      if (!(largest < 0.3)) return false;
+      if (largest < 1e-11) return true;
+      light += lightStep;
+      dense += denseStep;
+    }
+    return false;
   }
 
   /** The saturated phase that one phase of the isentrope meets, and how far its entropy is from s0. */

@@ -35,8 +35,10 @@ export type IntegrateOptions = {
   timeScaleS: number;
   maxEvaluations: number;
   events?: readonly IntegrationEvent[];
-  /** Places inside each step, evenly spaced, at which events are looked at. */
-  samplesPerStep?: number;
+  /** Places inside each step at which events are looked at, rising from above 0 to 1, its end. */
+  places?: readonly number[];
+  /** Called after the events were looked at there, with what they were given. A step that an event ends has had places beyond its end. */
+  onSample?: (t: number, y: number[]) => void;
   onStep?: (step: AcceptedStep) => void;
   isCancelled?: () => boolean;
 };
@@ -52,13 +54,25 @@ export type Integration = {
 
 const untenable = 1e15;
 const untenableInARow = 400;
+const sevenths: readonly number[] = Array.from({ length: 7 }, (_, k) => (k + 1) / 7);
 
 /**
  * Throws "cancelled"; "no-convergence" when the budget is spent, a derivative or an accepted state is not finite, or the solver gives up;
  * RangeError for arguments that fit no problem (a fault of the caller).
  */
 export function integrate(options: IntegrateOptions): Integration {
-  const { derivative, t0, tEnd, timeScaleS, maxEvaluations, events = [], samplesPerStep = 6, onStep, isCancelled } = options;
+  const {
+    derivative,
+    t0,
+    tEnd,
+    timeScaleS,
+    maxEvaluations,
+    events = [],
+    places = sevenths,
+    onSample,
+    onStep,
+    isCancelled,
+  } = options;
   const n = options.y0.length;
   checkArguments(options);
 
@@ -116,7 +130,7 @@ export function integrate(options: IntegrateOptions): Integration {
       const place = Math.min(Math.max((time - t0) / timeScaleS, xOld), x);
       return Array.from({ length: n }, (_, i) => dense(i, place));
     };
-    const stop = watch.look({ told, t, at, samples: samplesPerStep });
+    const stop = watch.look({ told, t, at, places, onSample });
     const end = stop ? { t: stop.t, y: stop.y } : { t, y: [...y] };
     steps++;
     onStep?.({ t0: told, y0: accepted.y, t1: end.t, y1: end.y, at });
@@ -187,17 +201,19 @@ class EventWatch {
     told,
     t,
     at,
-    samples,
+    places,
+    onSample,
   }: {
     told: number;
     t: number;
     at: (t: number) => number[];
-    samples: number;
+    places: readonly number[];
+    onSample: ((t: number, y: number[]) => void) | undefined;
   }): { id: string; t: number; y: number[] } | undefined {
     if (this.events.length === 0) return undefined;
     let from = told;
-    for (let k = 1; k <= samples + 1; k++) {
-      const to = k === samples + 1 ? t : told + ((t - told) * k) / (samples + 1);
+    for (const place of places) {
+      const to = place === 1 ? t : told + (t - told) * place;
       const y = at(to);
       const found: { event: IntegrationEvent; t: number }[] = [];
       this.events.forEach((event, i) => {
@@ -215,9 +231,10 @@ class EventWatch {
         }
         this.last[i] = now;
       });
+      if (found.length === 0) onSample?.(to, y);
       found.sort((p, q) => p.t - q.t);
-      for (const { event, t: place } of found) {
-        const hit = { id: event.id, t: place, y: at(place) };
+      for (const { event, t: when } of found) {
+        const hit = { id: event.id, t: when, y: at(when) };
         if (event.stops) return hit;
         this.marks.push(hit);
         this.done.add(event.id);

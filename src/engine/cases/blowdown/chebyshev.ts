@@ -42,6 +42,34 @@ export function valueAt(values: ArrayLike<number>, place: number): number {
   return sum / total;
 }
 
+const shares = new Float64Array(fineCount);
+
+/** What each point contributes to the value at a place: shared scratch, overwritten by the next call. */
+export function cardinal(count: number, place: number): Float64Array {
+  const { places, weights } = pointSet(count);
+  shares.fill(0);
+  let total = 0;
+  for (let j = 0; j < count; j++) {
+    const distance = place - places[j]!;
+    if (distance === 0) {
+      shares.fill(0);
+      shares[j] = 1;
+      return shares;
+    }
+    shares[j] = weights[j]! / distance;
+    total += shares[j]!;
+  }
+  for (let j = 0; j < count; j++) shares[j] = shares[j]! / total;
+  return shares;
+}
+
+export function nearestPlace(count: number, place: number): number {
+  const { places } = pointSet(count);
+  let nearest = 0;
+  for (let j = 1; j < count; j++) if (Math.abs(places[j]! - place) < Math.abs(places[nearest]! - place)) nearest = j;
+  return nearest;
+}
+
 /** Integral over the interval from 0 to 1. */
 export function integralOf(values: ArrayLike<number>): number {
   const { count, quadrature } = pointSet(values.length);

@@ -11,16 +11,23 @@ const nodes = Array.from({ length: points }, (_, j) => (1 - Math.cos((Math.PI * 
 const weights = nodes.map((_, j) => (j % 2 === 0 ? 1 : -1) * (j === 0 || j === points - 1 ? 0.5 : 1));
 
 /** With the fluid's temperature at both ends, from which searches inside the step start. */
-export type KeptStep = { t0: number; t1: number; values: number[][]; temperaturesK: [number, number] };
+export type KeptStep = {
+  t0: number;
+  t1: number;
+  values: number[][];
+  temperaturesK: [number, number];
+  /** What was evaluated at the coarse Chebyshev points while events were looked for (`run-fit.ts`). */
+  samples: Float64Array[] | undefined;
+};
 
 export class DenseRun {
   readonly steps: KeptStep[] = [];
 
-  keep({ t0, y0, t1, y1, at }: AcceptedStep, temperaturesK: [number, number]): void {
+  keep({ t0, y0, t1, y1, at }: AcceptedStep, temperaturesK: [number, number], samples?: Float64Array[]): void {
     // An event at the very start of a segment leaves a step without length.
     if (!(t1 > t0)) return;
     const values = nodes.map((s, j) => (j === 0 ? [...y0] : j === points - 1 ? y1 : at(t0 + s * (t1 - t0))));
-    this.steps.push({ t0, t1, values, temperaturesK });
+    this.steps.push({ t0, t1, values, temperaturesK, samples });
   }
 
   get endTimeS(): number {

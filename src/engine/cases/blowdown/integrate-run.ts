@@ -10,8 +10,10 @@ import type { BlowdownCase } from "../blowdown-case";
 import type { EndedBy } from "../blowdown-result";
 import type { Balance } from "./balance";
 import type { PhaseMode } from "./contents";
+import { coarse, coarseCount } from "./chebyshev";
 import { DenseRun } from "./dense-run";
 import { isStableAlone } from "./phase-check";
+import { quantitiesOf } from "./run-fit";
 import { solidMargin, type SolidCurve } from "./solid-check";
 
 export type Segment = { mode: PhaseMode; dense: DenseRun };
@@ -31,9 +33,12 @@ export type RunOptions = {
   maxEvaluations: number;
   onProgress?: (part: number) => void;
   isCancelled?: () => boolean;
+  /** Keep what is evaluated along the way for the series; needless where only times are asked for. */
+  keepSamples?: boolean;
 };
 
 const maxSegments = 60;
+const places = Array.from(coarse.places.subarray(1));
 /** A fresh start at the sonic limit spares steps; where the throat's place is noise, more of them would only chatter. */
 const subsonicRestarts = 2;
 /** The flow stops where the pressure meets the back pressure; so near it, nothing is left to leave. */
@@ -69,6 +74,10 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
     const segment: Segment = { mode, dense: new DenseRun() };
     run.segments.push(segment);
     balance.beginSegment();
+    let samples: Float64Array[] = [];
+    const sample = (time: number, state: number[]): void =>
+      void samples.push(quantitiesOf(balance, state, balance.at(time, state, segment.mode)));
+    if (options.keepSamples) sample(t, y);
     const until = t < openingTimeS && openingTimeS < stopTimeS ? openingTimeS : stopTimeS;
     const result = integrate({
       derivative: (time, state) => balance.derivative(time, state, segment.mode),
@@ -101,9 +110,15 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
             value: (time, state) => balance.at(time, state, segment.mode).contents.pressurePa / pressurePa - 1,
           })),
       ],
+      places,
+      onSample: options.keepSamples ? sample : undefined,
       onStep: (step) => {
         const { temperatureK, pressurePa } = balance.at(step.t1, step.y1, segment.mode).contents;
-        segment.dense.keep(step, [lastK, temperatureK]);
+        // A step that an event has cut is evaluated again at its own points.
+        const whole = samples.length === coarseCount;
+        segment.dense.keep(step, [lastK, temperatureK], whole ? samples : undefined);
+        samples = whole ? samples.slice(-1) : [];
+        if (options.keepSamples && !whole) sample(step.t1, step.y1);
         lastK = temperatureK;
         options.onProgress?.(progress(step.t1 / stopTimeS, pressurePa, start.pressurePa, stopAt));
       },

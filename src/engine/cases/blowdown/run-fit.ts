@@ -5,8 +5,8 @@
  * A kink inside a step stops the halving after a few times; the row next to it is then as good as the last halving.
  */
 import { throttleTemperature } from "../../flow/throttle";
-import type { Balance } from "./balance";
-import { coarse, coarseCount, fine, integralOf, unresolved, valueAt } from "./chebyshev";
+import type { Balance, Instant } from "./balance";
+import { cardinal, coarse, fine, integralOf, nearestPlace, unresolved, valueAt } from "./chebyshev";
 import type { KeptStep } from "./dense-run";
 import type { Run, Segment } from "./integrate-run";
 
@@ -56,7 +56,8 @@ function fitPart(balance: Balance, part: Part, looseness: number, depth: number,
   const { t0, t1 } = part;
   const span = t1 - t0;
   const at = (place: number): Float64Array => evaluate(balance, part, place === 1 ? t1 : t0 + place * span);
-  const rough = Array.from(coarse.places, at);
+  const kept = depth === 0 ? part.step.samples : undefined;
+  const rough = kept ?? Array.from(coarse.places, at);
   const first = transposed(rough);
   if (isResolved(first, looseness)) return void into.push({ ...part, values: first });
   const rows = Array.from(fine.places, (place, j) => (j % 2 === 0 ? rough[j / 2]! : at(place)));
@@ -84,6 +85,11 @@ function isResolved(values: Float64Array[], looseness: number): boolean {
 
 function evaluate(balance: Balance, { segment, step }: Part, t: number): Float64Array {
   const { y, instant } = balance.within(segment, step, t);
+  return quantitiesOf(balance, y, instant);
+}
+
+/** The quantities of one instant, in their order. */
+export function quantitiesOf(balance: Balance, y: readonly number[], instant: Instant): Float64Array {
   const { contents, flow, stroke, ventRateKgPerS, heat } = instant;
   const { fluid, backPressurePa } = balance.model;
   return Float64Array.of(
@@ -107,16 +113,29 @@ function evaluate(balance: Balance, { segment, step }: Part, t: number): Float64
 /** Labels jump where a dense fluid begins to count as vapour: they are those of the nearest point while one phase is there. */
 const labels = [indexOf.vapourMoleFraction, indexOf.liquidVolumeM3];
 
+/** All quantities at one time of a piece. */
+export function readPiece(piece: FitPiece, t: number, out: Float64Array): Float64Array {
+  const count = piece.values[0]!.length;
+  const place = t === piece.t1 ? 1 : (t - piece.t0) / (piece.t1 - piece.t0);
+  const shares = cardinal(count, place);
+  for (let q = 0; q < quantities.length; q++) {
+    const values = piece.values[q]!;
+    let sum = 0;
+    for (let j = 0; j < count; j++) sum += shares[j]! * values[j]!;
+    out[q] = sum;
+  }
+  if (piece.segment.mode === "one-phase") {
+    const nearest = nearestPlace(count, place);
+    for (const label of labels) out[label] = piece.values[label]![nearest]!;
+  }
+  return out;
+}
+
 export function pieceAt(piece: FitPiece, quantity: number, t: number): number {
   const values = piece.values[quantity]!;
-  const place = (t - piece.t0) / (piece.t1 - piece.t0);
-  if (piece.segment.mode === "one-phase" && labels.includes(quantity)) {
-    const { places } = values.length === coarseCount ? coarse : fine;
-    let nearest = 0;
-    for (let j = 1; j < places.length; j++) if (Math.abs(places[j]! - place) < Math.abs(places[nearest]! - place)) nearest = j;
-    return values[nearest]!;
-  }
-  return valueAt(values, t === piece.t1 ? 1 : place);
+  const place = t === piece.t1 ? 1 : (t - piece.t0) / (piece.t1 - piece.t0);
+  if (piece.segment.mode === "one-phase" && labels.includes(quantity)) return values[nearestPlace(values.length, place)]!;
+  return valueAt(values, place);
 }
 
 export type Counted = { massKg: number; energyJ: number; fromWallJ: number; fromOutsideJ: number };

@@ -1,7 +1,7 @@
 /** One row of the series, read off the fitted run. */
 import { levelAtVolume } from "../../vessel/geometry";
 import type { Balance } from "./balance";
-import { indexOf, pieceAt, type FitPiece, type Quantity } from "./run-fit";
+import { indexOf, quantities, readPiece, type FitPiece } from "./run-fit";
 
 export type Sample = {
   timeS: number;
@@ -19,21 +19,23 @@ export type Sample = {
   outletTemperatureK: number;
 };
 
+const scratch = new Float64Array(quantities.length);
+
 export function sampleOf(piece: FitPiece, t: number, hasWall: boolean): Sample {
-  const read = (quantity: Quantity): number => pieceAt(piece, indexOf[quantity], t);
+  const read = readPiece(piece, t, scratch);
   return {
     timeS: t,
-    pressurePa: read("pressurePa"),
-    temperatureK: read("temperatureK"),
-    wallTemperatureK: hasWall ? read("wallTemperatureK") : undefined,
-    massKg: read("massKg"),
-    ventRateKgPerS: read("ventRateKgPerS"),
-    ventedMassKg: read("ventedMassKg"),
-    ventedEnergyJ: read("ventedEnergyJ"),
-    vapourMoleFraction: Math.min(Math.max(read("vapourMoleFraction"), 0), 1),
-    liquidVolumeM3: Math.max(read("liquidVolumeM3"), 0),
-    throatTemperatureK: read("throatTemperatureK"),
-    outletTemperatureK: read("outletTemperatureK"),
+    pressurePa: read[indexOf.pressurePa]!,
+    temperatureK: read[indexOf.temperatureK]!,
+    wallTemperatureK: hasWall ? read[indexOf.wallTemperatureK]! : undefined,
+    massKg: read[indexOf.massKg]!,
+    ventRateKgPerS: read[indexOf.ventRateKgPerS]!,
+    ventedMassKg: read[indexOf.ventedMassKg]!,
+    ventedEnergyJ: read[indexOf.ventedEnergyJ]!,
+    vapourMoleFraction: Math.min(Math.max(read[indexOf.vapourMoleFraction]!, 0), 1),
+    liquidVolumeM3: Math.max(read[indexOf.liquidVolumeM3]!, 0),
+    throatTemperatureK: read[indexOf.throatTemperatureK]!,
+    outletTemperatureK: read[indexOf.outletTemperatureK]!,
   };
 }
 
