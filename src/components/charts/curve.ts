@@ -2,7 +2,7 @@
 
 /** The job of a curve: sets colour, weight and dash on screen and on paper. */
 export type CurveTone =
-  | ("pressure" | "fluid" | "wall" | "outer-wall" | "vent" | "ghost" | "second-look")
+  | ("pressure" | "fluid" | "liquid" | "wall" | "liquid-wall" | "outer-wall" | "vent" | "ghost" | "second-look")
   // Lines of a phase diagram.
   | ("bubble" | "dew" | "share" | "hydrate" | "frost");
 
@@ -61,7 +61,9 @@ type Look = { colour: string; width: number; dash: number[]; printDash?: number[
 export const curveLooks: Record<CurveTone, Look> = {
   pressure: { colour: "--c-pressure", width: 2.8, dash: [] },
   fluid: { colour: "--c-fluid", width: 2.4, dash: [], printDash: [8, 3, 2, 3] },
+  liquid: { colour: "--c-fluid", width: 2.4, dash: [9, 4] },
   wall: { colour: "--c-wall", width: 2.8, dash: [] },
+  "liquid-wall": { colour: "--c-wall", width: 2.8, dash: [9, 4] },
   "outer-wall": { colour: "--c-wall", width: 1.6, dash: [2, 3] },
   vent: { colour: "--c-vent", width: 2.4, dash: [] },
   ghost: { colour: "--c-ghost", width: 1.8, dash: [2, 3] },

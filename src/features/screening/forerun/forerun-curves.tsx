@@ -10,6 +10,7 @@ import { useUnits } from "@/components/units/units-provider";
 import type { BlowdownCase } from "@/engine/cases/blowdown-case";
 import type { BlowdownResult } from "@/engine/cases/blowdown-result";
 import { fromSi, type QuantityId } from "@/engine/units";
+import { temperatureColumns } from "../results/temperature-columns";
 
 export type ForerunRun = { result: BlowdownResult; document: BlowdownCase; before: BlowdownResult | null; stale: boolean };
 
@@ -40,7 +41,7 @@ export function ForerunCurves({ result, document, before, stale }: ForerunRun) {
       x: run.series.timeS.map((time) => time / 60),
       y: values.map((si) => inUnit(quantity, si)),
     });
-    const { pressurePa, fluidTemperatureK, gasWallTemperatureK } = result.series;
+    const { pressurePa, gasWallTemperatureK } = result.series;
     const ghostOf = gasWallTemperatureK ? before?.series.gasWallTemperatureK : before?.series.fluidTemperatureK;
 
     const pressure: CurveSeries[] = [{ id: "pressure", label: "", tone: "pressure", ...curve(result, "pressure", pressurePa) }];
@@ -48,10 +49,10 @@ export function ForerunCurves({ result, document, before, stale }: ForerunRun) {
       ...(before && ghostOf
         ? [{ id: "ghost", label: "", tone: "ghost" as const, ...curve(before, "temperature", ghostOf) }]
         : []),
-      { id: "fluid", label: "fluid", tone: "fluid", ...curve(result, "temperature", fluidTemperatureK) },
-      ...(gasWallTemperatureK
-        ? [{ id: "wall", label: "wall", tone: "wall" as const, ...curve(result, "temperature", gasWallTemperatureK) }]
-        : []),
+      ...temperatureColumns(result.series).map(({ valuesK, ...column }) => ({
+        ...column,
+        ...curve(result, "temperature", valuesK),
+      })),
     ];
     const reached = result.summary.timeToTargetPressureS;
     const marks: CurveMark[] =

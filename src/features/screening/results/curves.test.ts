@@ -34,10 +34,27 @@ describe("the curves of a run", () => {
     expect(runCurves(bare, si).temperature).toMatchObject({ series: [{ id: "fluid" }], limits: [] });
   });
 
-  it("draw what leaves the opening where a limit is set on it", () => {
+  it("draw what leaves the opening, with the limit where one is set", () => {
     const run = madeRun();
+    expect(runCurves(run, si).outlet).toMatchObject({ series: [{ id: "outlet" }], limits: [] });
     run.document.limits = { ...run.document.limits, minimumOutletTemperatureK: 169.15 };
-    expect(runCurves(run, si).temperature.series.map(({ id }) => id)).toEqual(["fluid", "wall", "outlet"]);
+    expect(runCurves(run, si).outlet.limits).toMatchObject([{ axis: "y", label: "not below −104.0\u00a0°C" }]);
+  });
+
+  it("tell the wall that gas wets from the one that liquid wets, where they differ", () => {
+    const run = madeRun();
+    const { series } = run.result;
+    series.liquidWallTemperatureK = (series.gasWallTemperatureK ?? []).map((value) => value - 5);
+    expect(runCurves(run, si).temperature.series.map(({ id }) => id)).toEqual(["fluid", "gas-wall", "liquid-wall"]);
+  });
+
+  it("draw mass and energy always, and the level where there was liquid", () => {
+    const run = madeRun();
+    expect(runCurves(run, si)).toMatchObject({ mass: { series: [{ id: "mass" }] }, energy: { series: [{ id: "energy" }] } });
+    expect(runCurves(run, si).level).toBeUndefined();
+    run.result.series.liquidLevelM = run.result.series.timeS.map((_, row) => Math.max(0, 0.5 - row / 10));
+    expect(runCurves(run, si).level).toMatchObject({ y: { unit: "m", fromZero: true } });
+    expect(runCurves(run, { ...si, system: "US" }).level?.series[0]?.y[0]).toBeCloseTo(1.6404, 4);
   });
 
   it("follow the units shown", () => {

@@ -7,8 +7,19 @@ import type { CaseRunView } from "@/contracts/views";
 import { fromSi, type QuantityId } from "@/engine/units";
 import { momentUnit } from "./governing";
 import type { Showing } from "./limit-rows";
+import { runEvents } from "./run-events";
+import { temperatureColumns } from "./temperature-columns";
 
-export type RunCurves = { pressure: Curves; ventRate: Curves; temperature: Curves };
+export type RunCurves = {
+  pressure: Curves;
+  ventRate: Curves;
+  temperature: Curves;
+  outlet: Curves;
+  mass: Curves;
+  energy: Curves;
+  /** Only where the vessel has a shape and held liquid. */
+  level?: Curves;
+};
 
 export function runCurves({ document, result }: CaseRunView, showing: Showing): RunCurves {
   const { series, summary } = result;
@@ -82,6 +93,62 @@ export function runCurves({ document, result }: CaseRunView, showing: Showing): 
       ],
     },
     temperature: temperatureCurves({ document, result }, { x, curve, mark, text, moment, of }),
+    outlet: outletCurves({ document, result }, { x, curve, mark, text, moment, of }),
+    mass: {
+      x,
+      y: { ...of("mass").axis, name: "mass inside", fromZero: true },
+      series: [curve("mass", "mass inside", "pressure", "mass", series.massKg)],
+      marks: [mark("mass", summary.finalMassKg, summary.endTimeS, `${text("mass", summary.finalMassKg)} left`)],
+    },
+    energy: {
+      x,
+      y: { ...of("energy").axis, name: "energy vented" },
+      series: [curve("energy", "energy vented", "second-look", "energy", series.ventedEnergyJ)],
+      marks: [mark("energy", summary.energyVentedJ, summary.endTimeS, text("energy", summary.energyVentedJ))],
+    },
+    ...(series.liquidLevelM?.some((level) => level > 0)
+      ? { level: levelCurves(series.liquidLevelM, { x, times, showing }) }
+      : {}),
+  };
+}
+
+function levelCurves(
+  levelM: readonly number[],
+  { x, times, showing: { system } }: { x: CurveAxis; times: number[]; showing: Showing },
+): Curves {
+  const unit = system === "SI" ? "m" : "ft";
+  const shown = levelM.map((level) => fromSi("length", level, unit));
+  const axis: CurveAxis = {
+    name: "liquid level",
+    unit,
+    fromZero: true,
+    format: (value) => formatNumber(value, precisionOf("length", unit)),
+  };
+  return { x, y: axis, series: [{ id: "level", label: "liquid level", tone: "liquid", x: times, y: shown }] };
+}
+
+/** What leaves, behind the opening, at the back pressure. */
+function outletCurves(
+  { document, result: { series, summary } }: Pick<CaseRunView, "document" | "result">,
+  { x, curve, mark, text, of }: Tools,
+): Curves {
+  const limit = document.limits?.minimumOutletTemperatureK;
+  return {
+    x,
+    y: { ...of("temperature").axis, name: "temperature behind the opening" },
+    series: [curve("outlet", "behind the opening", "second-look", "temperature", series.outletTemperatureK)],
+    limits:
+      limit === undefined
+        ? []
+        : [{ axis: "y", at: of("temperature").convert(limit), label: `not below ${text("temperature", limit)}` }],
+    marks: [
+      mark(
+        "temperature",
+        summary.minimumOutletTemperatureK,
+        summary.minimumOutletTemperatureTimeS,
+        `lowest ${text("temperature", summary.minimumOutletTemperatureK)}`,
+      ),
+    ],
   };
 }
 
@@ -94,28 +161,24 @@ type Tools = {
   of: (quantity: QuantityId) => Scale;
 };
 
-/** Fluid and wall; what leaves the opening only where a limit is set on it, as it would flatten the rest. */
+/** Fluid and steel; changes of phase stand on the fluid's curve. */
 function temperatureCurves(
-  { document, result: { series, summary } }: Pick<CaseRunView, "document" | "result">,
+  { document, result }: Pick<CaseRunView, "document" | "result">,
   { x, curve, mark, text, moment, of }: Tools,
 ): Curves {
-  const wall = series.gasWallTemperatureK;
+  const { series, summary } = result;
   const rated = document.vessel.wall?.minimumDesignMetalTemperatureK;
   const margin = document.limits?.minimumMetalMarginK ?? 0;
-  const outlet = document.limits?.minimumOutletTemperatureK;
-  const curves: CurveSeries[] = [curve("fluid", "fluid", "fluid", "temperature", series.fluidTemperatureK)];
-  if (wall) curves.push(curve("wall", "wall", "wall", "temperature", wall));
-  if (outlet !== undefined)
-    curves.push(curve("outlet", "behind the opening", "second-look", "temperature", series.outletTemperatureK));
+  const columns = temperatureColumns(series);
+  const curves = columns.map(({ id, label, tone, valuesK }) => curve(id, label, tone, "temperature", valuesK));
+  const walled = series.gasWallTemperatureK !== undefined;
 
   const limits: CurveLimit[] = [];
   const at = of("temperature").convert;
-  if (wall && rated !== undefined) {
+  if (walled && rated !== undefined) {
     const words = margin > 0 ? "rated temperature plus margin" : "minimum design metal temperature";
     limits.push({ axis: "y", at: at(rated + margin), label: `${words} ${text("temperature", rated + margin)}` });
   }
-  if (outlet !== undefined)
-    limits.push({ axis: "y", at: at(outlet), label: `behind the opening not below ${text("temperature", outlet)}` });
 
   const marks = [
     mark(
@@ -126,10 +189,15 @@ function temperatureCurves(
     ),
   ];
   const { minimumWallTemperatureK: lowest, minimumWallTemperatureTimeS: when } = summary;
-  if (wall && lowest !== undefined && when !== undefined)
+  if (walled && lowest !== undefined && when !== undefined && when > 0)
     marks.push(mark("temperature", lowest, when, `${text("temperature", lowest)} at ${moment(when)}`));
+  for (const { timeS, row, words } of runEvents(result).slice(0, eventsDrawn))
+    marks.push(mark("temperature", series.fluidTemperatureK[row] ?? Number.NaN, timeS, `${words}, ${moment(timeS)}`));
   return { x, y: { ...of("temperature").axis, name: "temperature" }, series: curves, limits, marks };
 }
+
+/** More would crowd the chart; the list beneath names all. */
+const eventsDrawn = 3;
 
 type Scale = { convert: (si: number) => number; axis: Omit<CurveAxis, "name"> };
 

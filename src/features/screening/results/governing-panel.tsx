@@ -11,10 +11,10 @@ import { decidingCase, governingOf, governingWords } from "./governing";
 import { limitRows } from "./limit-rows";
 import { useShowing } from "./use-showing";
 
-const curveOf: Record<LimitId, keyof RunCurves> = {
+const curveOf: Partial<Record<LimitId, Exclude<keyof RunCurves, "level">>> = {
   "time-to-target": "pressure",
   "minimum-wall-temperature": "temperature",
-  "minimum-outlet-temperature": "temperature",
+  "minimum-outlet-temperature": "outlet",
   "peak-vent-rate": "ventRate",
   "minimum-liquid-wall-temperature": "temperature",
   solids: "temperature",
@@ -49,7 +49,7 @@ export function GoverningPanel({ prepared }: { prepared: PreparedView }) {
               {row?.limit && <>, {row.limit}</>}
             </p>
           </div>
-          <CurveChart {...curves[curveOf[governing.limit.id]]} height="panel" summary={content.sentence} />
+          <CurveChart {...curves[curveOf[governing.limit.id] ?? "temperature"]} height="panel" summary={content.sentence} />
         </div>
       )}
     </>

@@ -6,15 +6,7 @@ import { Power, useShown } from "@/components/quantity/quantity";
 import { MarginHead, MarginNote } from "@/components/shell/margin";
 import { Digest } from "@/components/sign/sign-panel";
 import type { PreparedView } from "@/contracts/views";
-import type { EndedBy } from "@/engine/cases/blowdown-result";
-
-const endings: Record<EndedBy, string> = {
-  pressure: "It ended at the pressure of line 7.11.",
-  time: "It ended at the time of line 7.10.",
-  "solid-phase": "It ended where solid begins to form.",
-  "back-pressure": "It ended at the back pressure.",
-  "too-hot": "It ended where the fluid became too hot to go on.",
-};
+import { endingWords } from "./run-events";
 
 /** How the figures were computed, and the names of the stored bytes. */
 export function RunFacts({ prepared }: { prepared: PreparedView }) {
@@ -27,7 +19,8 @@ export function RunFacts({ prepared }: { prepared: PreparedView }) {
           {shown("time", summary.endTimeS, { unit: { SI: "s", US: "s" } }).text} integrated in{" "}
           {formatNumber(numerics.steps, { decimals: 0 })} steps and {formatNumber(numerics.evaluations, { decimals: 0 })}{" "}
           evaluations, relative tolerance <Power value={numerics.relativeTolerance} figures={1} />. Energy closes to{" "}
-          {summary.energyClosure === 0 ? "0" : <Power value={summary.energyClosure} figures={1} />}. {endings[summary.endedBy]}
+          {summary.energyClosure === 0 ? "0" : <Power value={summary.energyClosure} figures={1} />}.{" "}
+          {endingWords[summary.endedBy]}
         </MarginNote>
       ))}
       <MarginNote no="Engine">{prepared.content.engineVersion}</MarginNote>
