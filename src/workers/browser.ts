@@ -1,7 +1,7 @@
 /**
  * The browser's own engine, for the preview while typing and for the pages of fluids. Nothing computed here is stored.
  *
- * asks      WorkerRequest; of each kind a newer one replaces the older one that has not begun (latest wins), and kinds take turns
+ * asks      WorkerRequest; in each lane a newer one replaces the older one that has not begun (latest wins), and lanes take turns
  * answers   PreviewAnswer with the id of the request; a replaced request is answered "replaced"
  *
  * A run cannot be broken off from outside: an owner that will not wait terminates the worker and starts another.
@@ -16,7 +16,8 @@ export type PreviewRequest = {
   document: unknown;
   /** A loose tolerance and a thinner series; the default. */ coarse?: boolean;
 };
-export type FluidRequest = { id: number; ask: FluidAsk };
+/** `lane` names who asks, where two ask for the same kind. */
+export type FluidRequest = { id: number; ask: FluidAsk; lane?: string };
 export type WorkerRequest = PreviewRequest | FluidRequest;
 
 export type PreviewAnswer =
@@ -32,12 +33,12 @@ const waiting = new Map<string, WorkerRequest>();
 let turnIsSet = false;
 
 const say = (answer: PreviewAnswer): void => self.postMessage(answer);
-const kindOf = (request: WorkerRequest): string => ("ask" in request ? request.ask.kind : "case");
+const laneOf = (request: WorkerRequest): string => ("ask" in request ? (request.lane ?? request.ask.kind) : "case");
 
 self.addEventListener("message", ({ data }: MessageEvent<WorkerRequest>) => {
-  const replaced = waiting.get(kindOf(data));
+  const replaced = waiting.get(laneOf(data));
   if (replaced) say({ type: "replaced", id: replaced.id });
-  waiting.set(kindOf(data), data);
+  waiting.set(laneOf(data), data);
   setTurn();
 });
 

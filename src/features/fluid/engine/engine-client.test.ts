@@ -39,21 +39,21 @@ beforeEach(() => {
 afterEach(() => void vi.useRealTimers());
 
 describe("the engine's client", () => {
-  it("tells the answer to the newest ask of a kind, and only that", () => {
+  it("tells the answer to the newest ask of a lane, and only that", () => {
     const told: Record<string, Told[]> = { old: [], new: [] };
     const engine = client();
-    engine.ask(equations(300), (one) => told.old?.push(one));
-    engine.ask(equations(310), (one) => told.new?.push(one));
+    engine.ask("table", equations(300), (one) => told.old?.push(one));
+    engine.ask("table", equations(310), (one) => told.new?.push(one));
     workers[0]?.say({ type: "fluid", id: 1, answer });
     workers[0]?.say({ type: "fluid", id: 2, answer });
     expect(told).toEqual({ old: [], new: [{ answer }] });
   });
 
-  it("lets asks of different kinds stand side by side", () => {
+  it("lets lanes stand side by side", () => {
     const told: string[] = [];
     const engine = client();
-    engine.ask(envelope, () => told.push("envelope"));
-    engine.ask(equations(300), () => told.push("equations"));
+    engine.ask("diagram", envelope, () => told.push("envelope"));
+    engine.ask("table", equations(300), () => told.push("equations"));
     workers[0]?.say({ type: "fluid", id: 2, answer });
     workers[0]?.say({ type: "failed", id: 1, message: "a fault" });
     expect(told).toEqual(["equations", "envelope"]);
@@ -61,9 +61,9 @@ describe("the engine's client", () => {
 
   it("ends a worker that is in the way, and asks it again for what still waits", () => {
     const engine = client();
-    engine.ask(envelope, () => undefined);
+    engine.ask("diagram", envelope, () => undefined);
     vi.advanceTimersByTime(1500);
-    engine.ask(equations(300), () => undefined);
+    engine.ask("table", equations(300), () => undefined);
     expect(workers.map(({ ended }) => ended)).toEqual([true, false]);
     expect(workers[1]?.asked.map((request) => "ask" in request && request.ask.kind)).toEqual(["equations", "envelope"]);
   });
@@ -71,10 +71,10 @@ describe("the engine's client", () => {
   it("makes a sentence of a refusal, and says so when it takes too long", () => {
     const told: Told[] = [];
     const engine = client();
-    engine.ask(equations(1), (one) => told.push(one));
+    engine.ask("table", equations(1), (one) => told.push(one));
     const problems = [{ path: "from", message: "temperature must be above 10 K" }];
     workers[0]?.say({ type: "refused", id: 1, error: { format: "ebbmark-error/1", code: "outside-validity", problems } });
-    engine.ask(envelope, (one) => told.push(one));
+    engine.ask("diagram", envelope, (one) => told.push(one));
     vi.advanceTimersByTime(31_000);
     expect(told).toEqual([
       { problem: "Temperature must be above 10 K." },
@@ -85,7 +85,7 @@ describe("the engine's client", () => {
 
   it("tells nothing once an ask is taken back", () => {
     const told: Told[] = [];
-    const back = client().ask(equations(300), (one) => told.push(one));
+    const back = client().ask("table", equations(300), (one) => told.push(one));
     back();
     workers[0]?.say({ type: "fluid", id: 1, answer });
     vi.advanceTimersByTime(60_000);

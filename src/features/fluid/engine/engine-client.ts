@@ -1,5 +1,5 @@
 import type { PreviewAnswer, WorkerRequest } from "@/workers/browser";
-import type { FluidAnswer, FluidAsk, FluidAskKind } from "@/workers/fluid-asks";
+import type { FluidAnswer, FluidAsk } from "@/workers/fluid-asks";
 
 export type Told = { answer: FluidAnswer } | { problem: string };
 
@@ -11,7 +11,7 @@ export type EngineWorker = {
   onerror: ((event: ErrorEvent) => void) | null;
 };
 
-type Live = { id: number; ask: FluidAsk; tell: (told: Told) => void; patience: ReturnType<typeof setTimeout> };
+type Live = { id: number; lane: string; ask: FluidAsk; tell: (told: Told) => void; patience: ReturnType<typeof setTimeout> };
 
 /** How long older work may stand in the way of a new ask. Starting a worker anew costs less than that. */
 const inTheWayMs = 1_000;
@@ -22,52 +22,55 @@ const notStarted = "The engine could not be started in this browser. Load the pa
 const tooLong = "This takes too long with the equation chosen. Choose another equation or fewer components.";
 
 /**
- * Asks the browser's engine and tells the answer to the newest ask of each kind. Older ones are dropped; work that stands in the way for
+ * Asks the browser's engine and tells the answer to the newest ask in each lane. Older ones are dropped; work that stands in the way for
  * long is ended with its worker, as it can't be broken off from outside.
  *
  * start   makes the worker; called again after one was ended
  */
 export class EngineClient {
   private worker: EngineWorker | undefined;
-  private readonly live = new Map<FluidAskKind, Live>();
+  private readonly live = new Map<string, Live>();
   private busySince: number | undefined;
   private newest = 0;
 
   constructor(private readonly start: () => EngineWorker) {}
 
-  /** Returns a function that takes the ask back. */
-  ask(ask: FluidAsk, tell: (told: Told) => void): () => void {
+  /**
+   * lane      names who asks: a newer ask in a lane takes the place of the older one
+   * Returns   a function that takes the ask back
+   */
+  ask(lane: string, ask: FluidAsk, tell: (told: Told) => void): () => void {
     const id = (this.newest += 1);
-    const one: Live = { id, ask, tell, patience: setTimeout(() => this.giveUp(id), patienceMs) };
-    this.forget(ask.kind);
-    this.live.set(ask.kind, one);
+    const one: Live = { id, lane, ask, tell, patience: setTimeout(() => this.giveUp(id), patienceMs) };
+    this.forget(lane);
+    this.live.set(lane, one);
     if (this.busySince !== undefined && performance.now() - this.busySince > inTheWayMs) this.restart();
     else this.post(one);
     return () => {
-      if (this.live.get(ask.kind) === one) this.forget(ask.kind);
+      if (this.live.get(lane) === one) this.forget(lane);
     };
   }
 
   end(): void {
-    for (const kind of [...this.live.keys()]) this.forget(kind);
+    for (const lane of [...this.live.keys()]) this.forget(lane);
     this.stop();
   }
 
-  private post({ id, ask }: Live): void {
+  private post({ id, ask, lane }: Live): void {
     if (!this.worker) {
       this.worker = this.start();
       this.worker.onmessage = ({ data }) => this.hear(data);
       this.worker.onerror = () => this.failAll(notStarted);
     }
     this.busySince ??= performance.now();
-    this.worker.postMessage({ id, ask });
+    this.worker.postMessage({ id, ask, lane });
   }
 
   private hear(answer: PreviewAnswer): void {
     if (answer.type === "progress" || answer.type === "result") return;
     if (answer.type === "replaced") return;
     const found = [...this.live.values()].find(({ id }) => id === answer.id);
-    if (found) this.forget(found.ask.kind);
+    if (found) this.forget(found.lane);
     this.busySince = this.live.size > 0 ? performance.now() : undefined;
     found?.tell(toldOf(answer));
   }
@@ -75,7 +78,7 @@ export class EngineClient {
   private giveUp(id: number): void {
     const found = [...this.live.values()].find((one) => one.id === id);
     if (!found) return;
-    this.forget(found.ask.kind);
+    this.forget(found.lane);
     this.restart();
     found.tell({ problem: tooLong });
   }
@@ -98,9 +101,9 @@ export class EngineClient {
     this.busySince = undefined;
   }
 
-  private forget(kind: FluidAskKind): void {
-    clearTimeout(this.live.get(kind)?.patience);
-    this.live.delete(kind);
+  private forget(lane: string): void {
+    clearTimeout(this.live.get(lane)?.patience);
+    this.live.delete(lane);
   }
 }
 

@@ -1,6 +1,6 @@
 "use client";
 
-import { createContext, useContext, useEffect, useMemo, useState, type ReactNode } from "react";
+import { createContext, useContext, useEffect, useId, useMemo, useState, type ReactNode } from "react";
 import type { FluidAnswer, FluidAnswers, FluidAsk, FluidAskKind } from "@/workers/fluid-asks";
 import { EngineClient, type Told } from "./engine-client";
 
@@ -48,6 +48,7 @@ type Held<K extends FluidAskKind> = { key: string; value: FluidAnswers[K] | null
 export function useFluidAnswer<K extends FluidAskKind>(ask: Extract<FluidAsk, { kind: K }> | undefined): FluidAnswered<K> {
   const clients = useContext(EngineContext);
   if (!clients) throw new Error("a page asks of a fluid outside its engine");
+  const lane = useId();
   const [held, setHeld] = useState<Held<K> | null>(null);
   const key = ask ? JSON.stringify(ask) : undefined;
 
@@ -57,13 +58,13 @@ export function useFluidAnswer<K extends FluidAskKind>(ask: Extract<FluidAsk, { 
     let takeBack = () => {};
     const rest = setTimeout(() => {
       const client = slow.has(asked.kind) ? clients.slow : clients.quick;
-      takeBack = client.ask(asked, (told) => setHeld((before) => heldOf(key, told, before)));
+      takeBack = client.ask(lane, asked, (told) => setHeld((before) => heldOf(key, told, before)));
     }, restMs);
     return () => {
       clearTimeout(rest);
       takeBack();
     };
-  }, [clients, key]);
+  }, [clients, key, lane]);
 
   const isCurrent = held !== null && held.key === key;
   return {
