@@ -128,7 +128,7 @@ export const inventoryLines: Line[] = [
     sourceFree: true,
     asked: both(startsWithLevel, not(plainVolume)),
     options: [
-      { value: "height", label: "Level above the lowest point" },
+      { value: "height", label: "Height of the level" },
       { value: "part", label: "Part of the volume" },
     ],
     initial: "height",

@@ -12,7 +12,8 @@ import { fromSi } from "@/engine/units";
 export function WholeRun({ run }: { run: CaseRunView }) {
   const shown = useShown();
   const { wholeRun } = run.result.energyAccount;
-  const { energyClosure, massClosure, ventedMassKg } = run.result.summary;
+  const { energyClosure, massClosure, ventedMassKg, heatFromOutsideJ } = run.result.summary;
+  const walled = run.document.heat.wall.model !== "none";
   const unit = shownUnit("energy", useUnits().system);
   const energy = (si: number, signed = true) => shown("energy", si, { signed }).text;
   return (
@@ -25,13 +26,15 @@ export function WholeRun({ run }: { run: CaseRunView }) {
             <Cell numeric>{energy(wholeRun.startJ, false)}</Cell>
           </Row>
           <Row>
-            <Cell head>Heat taken from the wall</Cell>
+            <Cell head>{walled ? "Heat from the wall, with what came through it" : "Heat taken from the wall"}</Cell>
             <Cell numeric>{energy(wholeRun.heatFromWallJ)}</Cell>
           </Row>
-          <Row>
-            <Cell head>Heat from outside</Cell>
-            <Cell numeric>{energy(wholeRun.heatFromOutsideJ)}</Cell>
-          </Row>
+          {!walled && (
+            <Row>
+              <Cell head>Heat from outside</Cell>
+              <Cell numeric>{energy(wholeRun.heatFromOutsideJ)}</Cell>
+            </Row>
+          )}
           <Row>
             <Cell head>Less enthalpy of the {shown("mass", ventedMassKg).text} vented</Cell>
             <Cell numeric>{energy(-wholeRun.ventedJ)}</Cell>
@@ -49,6 +52,7 @@ export function WholeRun({ run }: { run: CaseRunView }) {
         </tbody>
       </Table>
       <p className="pt-1.5 text-label text-ink-3">
+        {walled && heatFromOutsideJ !== 0 && `${energy(heatFromOutsideJ, false)} went from outside into the wall. `}
         The share is of all energy that moved. Mass closes to <Share value={massClosure} />. Reference: ideal gas at 25 °C, so
         dense cold gas stands below zero.
       </p>
