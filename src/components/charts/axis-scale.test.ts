@@ -71,3 +71,19 @@ it("names an axis with its unit, a pure number without", () => {
   expect(axisTitle({ name: "pressure", unit: "bar(g)" })).toBe("pressure, bar(g)");
   expect(axisTitle({ name: "compressibility", unit: "–" })).toBe("compressibility");
 });
+
+describe("a log scale", () => {
+  const scale = (y: number[]) =>
+    valueScale({
+      x: { name: "t", unit: "s" },
+      y: { name: "stress", unit: "MPa", log: true },
+      series: [{ id: "a", label: "a", tone: "wall", x: y.map((_, i) => i), y }],
+    });
+
+  it("spans whole steps of ten", () => {
+    expect(scale([1.2, 410])).toEqual({ min: 1, max: 1000, ticks: [1, 10, 100, 1000] });
+    expect(scale([0.02, 0.9]).ticks).toEqual([0.01, 0.1, 1]);
+  });
+
+  it("is drawn for values that are not above zero too", () => expect(scale([0, -3]).max).toBeGreaterThan(scale([0, -3]).min));
+});

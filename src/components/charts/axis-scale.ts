@@ -42,12 +42,21 @@ export function valueScale({ y, series, limits = [], marks = [] }: Curves, most 
     ...marks.map((mark) => mark.y),
     ...limits.filter((limit) => limit.axis === "y").map((limit) => limit.at),
   ]);
+  if (y.log) return decades(low, high);
   const bottom = y.min ?? (y.fromZero ? Math.min(0, low) : low);
   const top = y.max ?? (high > bottom ? high : bottom + 1);
   const step = roundStep(top - bottom, most);
   const min = y.min ?? Math.floor(bottom / step + 1e-9) * step;
   const max = y.max ?? Math.ceil(top / step - 1e-9) * step;
   return { min, max, ticks: roundTicks(min, max, most + 1) };
+}
+
+/** Whole steps of ten around the values. */
+function decades(low: number, high: number): AxisScale {
+  const first = Math.floor(Math.log10(low > 0 ? low : 0.1) + 1e-9);
+  const last = Math.max(Math.ceil(Math.log10(high > 0 ? high : 1) - 1e-9), first + 1);
+  const ticks = Array.from({ length: last - first + 1 }, (_, i) => Number((10 ** (first + i)).toPrecision(1)));
+  return { min: ticks[0] ?? 0.1, max: ticks.at(-1) ?? 1, ticks };
 }
 
 /** Lowest and highest finite value; 0 and 1 where there is none, so that empty axes can be drawn. */
@@ -63,4 +72,5 @@ function extent(values: readonly (number | undefined)[]): [number, number] {
 }
 
 /** "pressure, bar(g)"; a pure number has no unit. */
-export const axisTitle = ({ name, unit }: CurveAxis): string => (unit && unit !== "–" ? `${name}, ${unit}` : name);
+export const axisTitle = ({ name, unit, log }: CurveAxis): string =>
+  `${unit && unit !== "–" ? `${name}, ${unit}` : name}${log ? ", log scale" : ""}`;

@@ -1,6 +1,14 @@
 "use client";
 
-import { Chart as ChartJs, LinearScale, LineController, LineElement, PointElement, type ChartOptions } from "chart.js";
+import {
+  Chart as ChartJs,
+  LinearScale,
+  LogarithmicScale,
+  LineController,
+  LineElement,
+  PointElement,
+  type ChartOptions,
+} from "chart.js";
 import { useEffect, useMemo, useRef } from "react";
 import { Chart } from "react-chartjs-2";
 import { timeScale, valueScale } from "./axis-scale";
@@ -9,7 +17,7 @@ import { curveLooks, type Curves, type Ground } from "./curve";
 import { curvePlugin, setCurveDrawing } from "./curve-plugin";
 import { formatNumber } from "../quantity/format";
 
-ChartJs.register(LineController, LineElement, PointElement, LinearScale);
+ChartJs.register(LineController, LineElement, PointElement, LinearScale, LogarithmicScale);
 
 /** Room for the axis names: the y name above, the x name at the right end beneath. */
 const padding = { top: 24, right: 14, bottom: 18, left: 0 };
@@ -111,7 +119,7 @@ function optionsOf(curves: Curves, low: boolean): ChartOptions<"line"> {
         ticks: { ...ticks, callback: tickWriter(x.ticks) },
       },
       y: {
-        type: "linear",
+        type: curves.y.log ? "logarithmic" : "linear",
         min: y.min,
         max: y.max,
         afterBuildTicks: (scale) => {

@@ -34,6 +34,7 @@ export type CurveMark = { x: number; y: number; label: string };
  * name, unit   "pressure" and "bar(g)"
  * min, max     fixed ends; two panels that share time are given the same
  * fromZero     starts at zero, as pressure does
+ * log          steps of ten take the same height; values must be above zero
  * format       writes a value at reading precision; three figures unless said
  */
 export type CurveAxis = {
@@ -42,6 +43,7 @@ export type CurveAxis = {
   min?: number;
   max?: number;
   fromZero?: boolean;
+  log?: boolean;
   format?: (value: number) => string;
 };
 

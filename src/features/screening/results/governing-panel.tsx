@@ -20,7 +20,7 @@ const curveOf: Partial<Record<LimitId, Exclude<keyof RunCurves, "level">>> = {
   solids: "temperature",
   "solids-behind-opening": "temperature",
   hydrate: "temperature",
-  "liquid-carry-over": "pressure",
+  "liquid-carry-over": "ventRate",
   "least-strength-ratio": "pressure",
 };
 

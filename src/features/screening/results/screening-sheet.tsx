@@ -3,6 +3,7 @@ import { SitePressure } from "@/components/units/units-provider";
 import { SheetWithMargin } from "@/components/shell/sheet";
 import { caseKindWords } from "@/contracts/draft";
 import type { PreparedView, ScreeningView } from "@/contracts/views";
+import { AfterBlowdown } from "./after-blowdown";
 import { AssumedMargin } from "./assumed-margin";
 import { Charts } from "./charts";
 import { EnergyLedger } from "./energy-ledger";
@@ -13,10 +14,12 @@ import { RecordTitleBlock } from "./record-title-block";
 import { Revisions } from "./revisions";
 import { RunFacts } from "./run-facts";
 import { SecondRun } from "./second-run";
+import { SettleOut } from "./settle-out";
 import { SheetActions } from "./sheet-actions";
 import { Signatures } from "./signatures";
 import { Standing } from "./standing";
 import { StandingCautions } from "./standing-cautions";
+import { SteelFire } from "./steel-fire";
 import { VerdictHead } from "./verdict-head";
 import { Warnings } from "./warnings";
 import { WholeRun } from "./whole-run";
@@ -79,11 +82,14 @@ function Computed({ prepared, edits }: { prepared: PreparedView; edits: string |
           <section key={recordCase.letter} aria-label={`Run of case ${recordCase.letter}`}>
             {content.cases.length > 1 && <h2 className="mt-6">Case {recordCase.letter}</h2>}
             <Charts run={run} stale={stale} />
+            <SettleOut run={run} />
+            <SteelFire run={run} />
             <div className="mt-7 grid grid-cols-2 items-start gap-9 rail:grid-cols-1 rail:gap-6">
               <EnergyLedger run={run} />
               <div className="grid gap-7">
                 <WholeRun run={run} />
                 <SecondRun recordCase={recordCase} run={run} />
+                <AfterBlowdown run={run} />
               </div>
             </div>
           </section>
