@@ -164,7 +164,7 @@ function randomFlashes(count: number): void {
     const pressurePa = 5e4 * 700 ** random();
     try {
       const found = flashPT(model, { temperatureK, pressurePa });
-      if (found.thirdPhase) outcome.third++;
+      if (found.missingPhase) outcome.third++;
       else if (found.phases.length === 2) outcome.two++;
       else outcome.one++;
       if (k % 100 === 0) {

@@ -15,13 +15,13 @@ const liquidPacking = 1.9;
 /** An `Equilibrium` from the temperature, the pressure and the phases that a flash has found. */
 export function assemble(model: FluidModel, T: number, p: number, inputs: readonly PhaseInput[]): Equilibrium {
   const phases = inputs.map((input) => assemblePhase(model, T, p, input));
-  if (phases.length === 2) {
+  if (phases.length > 1) {
     phases.sort((a, b) => b.state.molarVolumeM3PerMol - a.state.molarVolumeM3PerMol);
-    const [light, dense] = phases as [EquilibriumPhase, EquilibriumPhase];
+    const [light, ...dense] = phases as [EquilibriumPhase, ...EquilibriumPhase[]];
     model.residual.setComposition(light.composition);
     const packed = light.state.molarVolumeM3PerMol < liquidPacking * model.residual.minimumVolume();
     light.kind = packed ? "liquid" : "vapour";
-    dense.kind = "liquid";
+    for (const phase of dense) phase.kind = "liquid";
   }
   const result: Equilibrium = {
     temperatureK: T,
@@ -31,7 +31,7 @@ export function assemble(model: FluidModel, T: number, p: number, inputs: readon
     enthalpyJPerMol: 0,
     entropyJPerMolK: 0,
     vapourMoleFraction: 0,
-    phase: phases.length === 2 ? "two-phase" : phases[0]!.kind,
+    phase: phases.length > 1 ? "two-phase" : phases[0]!.kind,
     phases,
   };
   for (const { moleFraction, state, kind } of phases) {

@@ -11,8 +11,9 @@ export interface EquilibriumPhase {
 }
 
 /**
- * The answer of every flash. `phases` holds one phase, or two with the vapour first. Overall molar properties are the
- * mole-weighted sums. `vapourMoleFraction` is 1 for a vapour or supercritical fluid, 0 for a liquid.
+ * The answer of every flash. `phases` holds one phase, or two or three with the lightest first; a third is liquid water beside a
+ * hydrocarbon liquid, or a second such liquid. Overall molar properties are the mole-weighted sums. `vapourMoleFraction` is 1 for a
+ * vapour or supercritical fluid, 0 for a liquid. `phase` is "two-phase" for three phases too: the word of the result format.
  *
  * An `Equilibrium` is also the seed of the next flash near by (`flashUV(…, seed)`): it changes the cost, not the answer.
  */
@@ -26,9 +27,6 @@ export interface Equilibrium {
   vapourMoleFraction: number;
   phase: PhaseKind | "two-phase";
   phases: EquilibriumPhase[];
-  /**
-   * Set when one of the two phases would split again: a third phase (free water, a second liquid) exists and is not in the
-   * answer. `verifyPhases` makes the same test for an equilibrium from any flash.
-   */
-  thirdPhase?: boolean;
+  /** Set when the answer is known to leave a phase out: one of its phases would split again. `verifyPhases` makes the same test. */
+  missingPhase?: boolean;
 }

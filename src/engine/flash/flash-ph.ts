@@ -4,6 +4,8 @@ import { assemble } from "./assemble";
 import { bracketedRoot } from "./bracketed-root";
 import type { Equilibrium } from "./equilibrium";
 import { flashPT } from "./flash-pt";
+import { lever, type Sides } from "./lever";
+import { mayHoldWater } from "./third-phase";
 import { onlyComponent, saturationAtPressure } from "./saturation-pure";
 
 /**
@@ -51,29 +53,75 @@ function flashAtPressure(
 
   const [coldest, hottest] = model.temperatureRangeK;
   let latest = seed;
+  const sides: Sides = {};
   const excess = (T: number): number => {
     latest = flashPT(model, { temperatureK: T, pressurePa: p }, z, latest);
-    return read(target, latest) - target.value;
+    const difference = read(target, latest) - target.value;
+    if (difference < 0) sides.below = latest;
+    else sides.above = latest;
+    return difference;
   };
-  let a = seed?.temperatureK ?? onePhaseGuess(model, p, target, z);
-  let fa = excess(a);
+  // A one-phase guess may lie where no flash can follow (deep in the cold), above all where most of the water would really be liquid:
+  // then the search comes down from room temperature.
+  const guess = onePhaseGuess(model, p, target, z);
+  const starts = [seed?.temperatureK, mayHoldWater(model, z) ? Math.max(guess, 300) : guess, 300];
+  const start = firstEvaluated(starts, excess);
+  let { at: a, value: fa } = start;
   let b = a;
   let fb = fa;
-  for (let k = 0; k < 80 && fa * fb > 0; k++) {
-    a = b;
-    fa = fb;
+  for (let k = 0, shrink = 1; k < 120 && fa * fb > 0; k++) {
     const heatCapacity = Math.max(40, latest!.phases[0]!.state.heatCapacityPJPerMolK);
     const slope = target.of === "enthalpy" ? heatCapacity : heatCapacity / b;
-    const jump = Math.max(0.5, Math.min(0.25 * b, (1.2 * Math.abs(fb)) / slope));
-    b = fb > 0 ? Math.max(b - jump, coldest) : Math.min(b + jump, hottest);
-    if (b === a) break;
-    fb = excess(b);
+    const jump = shrink * Math.max(0.5, Math.min(0.25 * b, (1.2 * Math.abs(fb)) / slope));
+    const next = fb > 0 ? Math.max(b - jump, coldest) : Math.min(b + jump, hottest);
+    if (next === b) break;
+    let value: number;
+    try {
+      value = excess(next);
+    } catch (error) {
+      if (!(error instanceof EngineError) || shrink < 1e-3) throw error;
+      shrink *= 0.25;
+      continue;
+    }
+    a = b;
+    fa = fb;
+    b = next;
+    fb = value;
   }
   const scale = target.of === "enthalpy" ? model.gasConstantJPerMolK * a : model.gasConstantJPerMolK;
   const what = `temperature of given ${target.of} and pressure`;
   const T = bracketedRoot(excess, { a, fa, b, fb }, { within: 1e-14 * a, accept: 1e-14 * scale, what });
-  excess(T);
-  return latest!;
+  const left = excess(T);
+  if (Math.abs(left) <= 1e-7 * scale) return latest!;
+  return between(model, target, sides, T);
+}
+
+/** At a jump of the energy: water and a hydrocarbon that boil together do so at one temperature. */
+function between(model: FluidModel, target: PressureTarget, { below, above }: Sides, T: number): Equilibrium {
+  if (below && above) {
+    const [low, high] = [read(target, below), read(target, above)];
+    const merged = lever(model, below, above, (target.value - low) / (high - low));
+    if (merged) return merged;
+  }
+  throw new EngineError("no-convergence", `no temperature has the given ${target.of}; the search closed without reaching it`, {
+    temperatureK: T,
+    value: target.value,
+  });
+}
+
+/** The first of several temperatures at which the flash answers. */
+function firstEvaluated(temperatures: readonly (number | undefined)[], excess: (T: number) => number) {
+  let refusal: unknown;
+  for (const at of temperatures) {
+    if (at === undefined) continue;
+    try {
+      return { at, value: excess(at) };
+    } catch (error) {
+      if (!(error instanceof EngineError)) throw error;
+      refusal = error;
+    }
+  }
+  throw refusal;
 }
 
 function onePhaseGuess(model: FluidModel, p: number, target: PressureTarget, z: ArrayLike<number>): number {

@@ -4,17 +4,22 @@ import { assemble } from "./assemble";
 import { bracketedRoot } from "./bracketed-root";
 import type { Equilibrium } from "./equilibrium";
 import { flashPT } from "./flash-pt";
+import { lever, type Sides } from "./lever";
 import { insideDome, saturatedMix } from "./pure-volume";
 import { onlyComponent } from "./saturation-pure";
 import { solveAtVolume, type TwoPhaseVolumes, type VolumeTarget } from "./two-phase-volume";
-import { createTwoPhaseVolumes, seedFrom } from "./volume-seed";
+import { createThreePhaseVolumes, solveThreeAtVolume, type ThreePhaseVolumes } from "./three-phase-volume";
+import { mayHoldWater, splitsFurther } from "./third-phase";
+import { verifyPhases } from "./verify-phases";
+import { createTwoPhaseVolumes, seedFrom, seedThreeFrom } from "./volume-seed";
 
 /**
  * Equilibrium of a closed rigid volume: given molar internal energy and molar volume (kind "UV"), or molar entropy and molar
  * volume. Of all states with that energy and volume the answer is the one of highest entropy.
  *
- * Order of attempts: two phases from the seed; one phase, accepted only if a stability test passes; two phases from the PT flash
- * at the one-phase state; nested one-dimensional searches, which always close.
+ * Order of attempts: two or three phases from the seed; one phase, accepted only if a stability test passes; two phases from the PT
+ * flash at the one-phase state; nested one-dimensional searches, which always close. Two phases found without a seed are tested for a
+ * third; those found from a seed only where the fluid holds water.
  *
  * z        mole fractions; defaults to the feed
  * seed     an equilibrium near by; changes the cost, not the answer
@@ -61,8 +66,13 @@ function flashAtVolume(model: FluidModel, target: HeldTarget, z: ArrayLike<numbe
     });
   }
   const state = volumesFor(z.length);
+  if (seed?.phases.length === 3) {
+    const three = fromThree(model, z, target, seed);
+    if (three) return three;
+  }
   if (seed && seed.phases.length === 2 && seedFrom(seed, z, v, state) && solveAtVolume(model, z, target, state)) {
-    return assembleTwo(model, state);
+    const found = assembleTwo(model, state);
+    return mayHoldWater(model, z) ? completed(model, found, z, target, seed) : found;
   }
 
   const only = onlyComponent(z);
@@ -72,15 +82,58 @@ function flashAtVolume(model: FluidModel, target: HeldTarget, z: ArrayLike<numbe
   if (single && single.pressurePa > 0 && single.pressureByVolume < 0) {
     if (isStable(model, single, z)) return assembleOne(model, single, z);
     const near = attempted(() => flashPT(model, single, z));
-    if (near && seedFrom(near, z, v, state) && solveAtVolume(model, z, target, state)) return assembleTwo(model, state);
+    const found = near && fromNear(model, z, target, near, state);
+    if (found) return found;
   }
   const guess = single && single.pressurePa > 0 ? single.temperatureK : undefined;
   for (const T of [guess, single?.temperatureK, 0.8 * meanCriticalTemperature(model, z)]) {
     if (T === undefined || T < 0.35 * meanCriticalTemperature(model, z)) continue;
     const near = attempted(() => equilibriumAtVolume(model, T, v, z));
-    if (near && seedFrom(near, z, v, state) && solveAtVolume(model, z, target, state)) return assembleTwo(model, state);
+    const found = near && fromNear(model, z, target, near, state);
+    if (found) return found;
   }
   return nested(model, target, z, single, state, seed);
+}
+
+/** Two or three phases by Newton from an equilibrium near by; undefined where that fails or leaves a phase out. */
+function fromNear(
+  model: FluidModel,
+  z: ArrayLike<number>,
+  target: VolumeTarget,
+  near: Equilibrium,
+  state: TwoPhaseVolumes,
+): Equilibrium | undefined {
+  if (near.phases.length === 3) return fromThree(model, z, target, near);
+  if (!seedFrom(near, z, target.molarVolume, state) || !solveAtVolume(model, z, target, state)) return undefined;
+  const found = assembleTwo(model, state);
+  return splitsFurther(model, found) ? withThird(model, z, target, found) : found;
+}
+
+/** Two phases that came from a seed, or three where a test finds one more. */
+function completed(
+  model: FluidModel,
+  found: Equilibrium,
+  z: ArrayLike<number>,
+  target: HeldTarget,
+  seed: Equilibrium,
+): Equilibrium {
+  if (!splitsFurther(model, found)) return found;
+  const three = withThird(model, z, target, found);
+  return three ?? nested(model, target, z, undefined, volumesFor(z.length), seed);
+}
+
+function withThird(model: FluidModel, z: ArrayLike<number>, target: VolumeTarget, found: Equilibrium): Equilibrium | undefined {
+  const near = attempted(() => flashPT(model, found, z, found));
+  return near && fromThree(model, z, target, near);
+}
+
+function fromThree(model: FluidModel, z: ArrayLike<number>, target: VolumeTarget, near: Equilibrium): Equilibrium | undefined {
+  const state = threeFor(z.length);
+  if (!seedThreeFrom(near, z, target.molarVolume, state)) return undefined;
+  if (target.hold === "temperature") state.temperatureK = target.value;
+  if (!solveThreeAtVolume(model, z, target, state)) return undefined;
+  const found = assembleThree(model, state);
+  return attempted(() => verifyPhases(model, found)) === "sound" ? found : undefined;
 }
 
 /** The root of lowest Gibbs energy at its own pressure, and no split there. */
@@ -176,8 +229,9 @@ function nested(
     const have = target.hold === "energy" ? latest.internalEnergyJPerMol : latest.entropyJPerMolK;
     return have - target.value;
   };
-  // A one-phase state in tension says nothing of the equilibrium temperature.
-  const hint = seed?.temperatureK ?? (single && single.pressurePa > 0 ? single.temperatureK : undefined);
+  // A one-phase state in tension says nothing of the equilibrium temperature; nor does one that holds as vapour what is really water.
+  const alone = single && single.pressurePa > 0 ? single.temperatureK : undefined;
+  const hint = seed?.temperatureK ?? (alone !== undefined && mayHoldWater(model, z) ? Math.max(alone, 300) : alone);
   let a = Math.min(Math.max(hint ?? 0.8 * meanCriticalTemperature(model, z), coldest * 1.01), hottest * 0.99);
   let fa = excess(a);
   let b = a;
@@ -192,9 +246,8 @@ function nested(
   const T = bracketedRoot(excess, { a, fa, b, fb }, { within: 1e-12 * a, what: "temperature at given energy and volume" });
   excess(T);
   const found = latest!;
-  if (found.phases.length === 2 && seedFrom(found, z, v, state) && solveAtVolume(model, z, target, state)) {
-    return assembleTwo(model, state);
-  }
+  const near = found.phases.length > 1 ? fromNear(model, z, target, found, state) : undefined;
+  if (near) return near;
   const polished = found.phases.length === 1 ? onePhase(model, target, z, T) : undefined;
   return polished && isStable(model, polished, z) ? assembleOne(model, polished, z) : found;
 }
@@ -219,12 +272,23 @@ export function equilibriumAtVolume(
   const target: VolumeTarget = { hold: "temperature", value: T, molarVolume: v };
   if (seed?.phases.length === 2 && seedFrom(seed, z, v, state)) {
     state.temperatureK = T;
-    if (solveAtVolume(model, z, target, state)) return assembleTwo(model, state);
+    if (solveAtVolume(model, z, target, state)) {
+      const found = assembleTwo(model, state);
+      if (!splitsFurther(model, found)) return found;
+    }
+  }
+  if (seed?.phases.length === 3) {
+    const found = fromThree(model, z, target, seed);
+    if (found) return found;
   }
   let latest: Equilibrium | undefined;
+  const sides: Sides = {};
   const excess = (lnP: number): number => {
     latest = flashPT(model, { temperatureK: T, pressurePa: Math.exp(lnP) }, z, latest);
-    return Math.log(latest.molarVolumeM3PerMol / v);
+    const difference = Math.log(latest.molarVolumeM3PerMol / v);
+    if (difference < 0) sides.below = latest;
+    else sides.above = latest;
+    return difference;
   };
   const start = single.pressurePa > 1e3 ? single.pressurePa : (0.5 * model.gasConstantJPerMolK * T) / v;
   let a = Math.log(start);
@@ -238,13 +302,24 @@ export function equilibriumAtVolume(
     fb = excess(b);
   }
   const lnP = bracketedRoot(excess, { a, fa, b, fb }, { within: 1e-13, what: "pressure at given temperature and volume" });
-  excess(lnP);
-  const found = latest!;
+  const left = excess(lnP);
+  const found = (Math.abs(left) > 1e-7 && between(model, v, sides)) || latest!;
+  if (found.phases.length === 3) return fromThree(model, z, target, found) ?? found;
   if (found.phases.length === 2 && seedFrom(found, z, v, state)) {
     state.temperatureK = T;
-    if (solveAtVolume(model, z, target, state)) return assembleTwo(model, state);
+    if (solveAtVolume(model, z, target, state)) {
+      const polished = assembleTwo(model, state);
+      if (!splitsFurther(model, polished)) return polished;
+    }
   }
   return found;
+}
+
+/** At a jump of the volume: the two sides together. */
+function between(model: FluidModel, v: number, { below, above }: Sides): Equilibrium | undefined {
+  if (!below || !above) return undefined;
+  const [low, high] = [below.molarVolumeM3PerMol, above.molarVolumeM3PerMol];
+  return lever(model, below, above, (v - low) / (high - low));
 }
 
 function assembleOne(model: FluidModel, single: PhaseState, z: ArrayLike<number>): Equilibrium {
@@ -266,6 +341,22 @@ function assembleTwo(model: FluidModel, state: TwoPhaseVolumes): Equilibrium {
     { moleFraction: nv, composition: share(v, nv), molarVolume: vapourVolume / nv },
     { moleFraction: nl, composition: share(l, nl), molarVolume: liquidVolume / nl },
   ]);
+}
+
+function assembleThree(model: FluidModel, { moles, volumes, temperatureK, pressurePa }: ThreePhaseVolumes): Equilibrium {
+  const phases = moles.map((amounts, k) => {
+    const total = amounts.reduce((sum, amount) => sum + amount, 0);
+    return { moleFraction: total, composition: amounts.map((amount) => amount / total), molarVolume: volumes[k]! / total };
+  });
+  return assemble(model, temperatureK, pressurePa, phases);
+}
+
+const threes = new Map<number, ThreePhaseVolumes>();
+
+function threeFor(count: number): ThreePhaseVolumes {
+  let state = threes.get(count);
+  if (!state) threes.set(count, (state = createThreePhaseVolumes(count)));
+  return state;
 }
 
 const states = new Map<number, TwoPhaseVolumes>();

@@ -6,6 +6,8 @@ import { wilsonLnK } from "./wilson";
 
 /** Below this a negative tangent-plane distance is a split and not round-off. */
 const negativeDistance = -1e-10;
+/** A search ends the test only where it is beyond doubt: a phase in equilibrium has its partners at zero, give or take their round-off. */
+const certainDistance = -1e-6;
 const substitutions = 4;
 const pureSearches = 3;
 const newtonSteps = 60;
@@ -70,16 +72,16 @@ export function testStability(
       best.set(trial.composition);
       lightest = trial.molarVolume > feed.molarVolume;
     }
-    return distance < negativeDistance && !trivial;
+    return distance < certainDistance && !trivial;
   };
 
-  const unstable =
+  const found =
     consider((i) => z[i]! * Math.exp(lnK[i]!)) ||
     consider((i) => z[i]! * Math.exp(-lnK[i]!)) ||
     likeliestPure(model, T, p, z, work, searches).some((pure) => consider((i) => (i === pure ? 0.999 : 0.001 * z[i]!)));
 
   return {
-    stable: !unstable,
+    stable: !found && lowest >= negativeDistance,
     tangentPlaneDistance: lowest === Infinity ? 0 : lowest,
     trialComposition: Float64Array.from(lowest === Infinity ? z : best),
     trialIsVapour: lightest,

@@ -26,6 +26,7 @@ export interface TwoPhaseWork {
 export type TwoPhaseOutcome = "converged" | "one-phase" | "failed";
 
 const substitutions = 30;
+const leastShare = 1e-13;
 
 /**
  * Two phases of feed z at (T, p) from a first guess of ln K: accelerated successive substitution, each phase on its own root,
@@ -116,6 +117,22 @@ export function splitOffTrial(
   return outcome;
 }
 
+/** Two phases, started from one component nearly pure and the rest of the feed. */
+export function splitOffComponent(
+  model: FluidModel,
+  T: number,
+  p: number,
+  z: ArrayLike<number>,
+  component: number,
+  work: TwoPhaseWork,
+): TwoPhaseOutcome {
+  for (let i = 0; i < z.length; i++) {
+    work.v[i] = z[i]! * (i === component ? 0.99 : 1e-8);
+    work.l[i] = z[i]! - work.v[i]!;
+  }
+  return minimiseGibbs(model, T, p, z, work, 1e-5);
+}
+
 function gibbsOf(model: FluidModel, T: number, p: number, z: ArrayLike<number>, work: TwoPhaseWork, root: Root): number {
   const { v, l, vapour, liquid } = work;
   let V = 0;
@@ -154,8 +171,9 @@ function split(z: ArrayLike<number>, work: TwoPhaseWork): void {
     vapourSum += z[i]! * K[i]!;
     liquidSum += z[i]! / K[i]!;
   }
-  if (vapourSum > 1 && liquidSum > 1) {
-    const beta = rachfordRice(z, K, work.beta);
+  const beta = vapourSum > 1 && liquidSum > 1 ? rachfordRice(z, K, work.beta) : 0;
+  // So near an end, 1 − β is round-off and a component of extreme K (a hydrocarbon against cold water) would have no composition.
+  if (beta > leastShare && beta < 1 - leastShare) {
     work.beta = beta;
     for (let i = 0; i < count; i++) {
       const x = z[i]! > 0 ? z[i]! / (1 + beta * (K[i]! - 1)) : 0;
@@ -166,7 +184,7 @@ function split(z: ArrayLike<number>, work: TwoPhaseWork): void {
     }
     return;
   }
-  const bubble = vapourSum <= 1;
+  const bubble = vapourSum <= 1 || (liquidSum > 1 && beta < 0.5);
   work.beta = bubble ? 0 : 1;
   for (let i = 0; i < count; i++) {
     const present = z[i]! > 0;

@@ -1,4 +1,4 @@
-import type { FluidModel, ResidualDerivatives } from "../eos/fluid-model";
+import type { FluidModel, ResidualDerivatives, Root } from "../eos/fluid-model";
 import { createResidualDerivatives } from "../eos/residual-derivatives";
 import { referencePressurePa } from "../gas-constant";
 import { solveBordered, solveLinear } from "./linear-solve";
@@ -128,7 +128,7 @@ export function solveAtVolume(model: FluidModel, z: ArrayLike<number>, target: V
     const stable = pv > 0 && pl > 0 && nv / (Vv * Vv) + light.FVV > 0 && nl / (Vl * Vl) + dense.FVV > 0;
     if (settled) {
       state.pressurePa = R * T * pv;
-      return stable && distinct(state, nv, nl) && onOuterRoots(model, work, state, nv, nl);
+      return stable && distinct(state, nv, nl) && onRightRoots(model, work, state, active === 1);
     }
     previous = error;
     kept.set(step);
@@ -224,21 +224,46 @@ function addEntropyTerms(work: VolumeWork, active: number, size: number, scaleV:
   matrix[rowT * size + active] = matrix[rowT * size + active]! + scaleV * pressureGap;
 }
 
+/** A root may lie this far above another in G/(R T) before it counts as the wrong one: azeotropes hold two roots that are equal. */
+const equalRoots = 1e-8;
+
 /**
- * Is each phase on the least or the most dense root at its pressure? Reference equations have false, stable-looking branches between them,
- * where a second "liquid" meets every condition of equilibrium.
+ * Is each phase on its root of lowest Gibbs energy? A supersaturated vapour meets every condition of equilibrium with free water, say, and
+ * is none. A pure fluid has its two roots equal; there it is asked that they be the outer ones, because reference equations have false,
+ * stable-looking branches between them.
  */
-function onOuterRoots(model: FluidModel, { trial }: VolumeWork, state: TwoPhaseVolumes, nv: number, nl: number): boolean {
-  if (!model.residual.hasFalseBranches) return true;
-  const { temperatureK: T, pressurePa: p } = state;
-  const isOuter = (moles: Float64Array, total: number, volume: number): boolean => {
-    for (let i = 0; i < moles.length; i++) trial[i] = moles[i]! / total;
-    model.residual.setComposition(trial);
-    const own = volume / total;
-    const is = (root: "liquid" | "vapour") => Math.abs(model.residual.volumeAtPressure(T, p, root) / own - 1) < 1e-5;
-    return is("liquid") || is("vapour");
+function onRightRoots(model: FluidModel, work: VolumeWork, { v, l, ...state }: TwoPhaseVolumes, isPure: boolean): boolean {
+  return (
+    isOnRightRoot(model, work, v, state.vapourVolume, state, isPure) &&
+    isOnRightRoot(model, work, l, state.liquidVolume, state, isPure)
+  );
+}
+
+function isOnRightRoot(
+  model: FluidModel,
+  { trial, light: F }: VolumeWork,
+  moles: Float64Array,
+  volume: number,
+  { temperatureK: T, pressurePa: p }: { temperatureK: number; pressurePa: number },
+  isPure: boolean,
+): boolean {
+  const { residual, gasConstantJPerMolK: R } = model;
+  if (isPure && !residual.hasFalseBranches) return true;
+  let total = 0;
+  for (let i = 0; i < moles.length; i++) total += moles[i]!;
+  for (let i = 0; i < moles.length; i++) trial[i] = moles[i]! / total;
+  residual.setComposition(trial);
+  const own = volume / total;
+  const is = (root: Root) => Math.abs(residual.volumeAtPressure(T, p, root) / own - 1) < 1e-5;
+  if (isPure) return is("liquid") || is("vapour");
+  const stable = residual.volumeAtPressure(T, p, "stable");
+  if (Math.abs(stable / own - 1) < 1e-5) return true;
+  const gibbs = (molarVolume: number) => {
+    residual.evaluate(T, molarVolume, 0, F);
+    const Z = (p * molarVolume) / (R * T);
+    return F.F + Z - Math.log(Z);
   };
-  return isOuter(state.l, nl, state.liquidVolume) && isOuter(state.v, nv, state.vapourVolume);
+  return gibbs(own) - gibbs(stable) < equalRoots && (!residual.hasFalseBranches || is("liquid") || is("vapour"));
 }
 
 function distinct(state: TwoPhaseVolumes, nv: number, nl: number): boolean {

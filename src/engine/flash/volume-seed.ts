@@ -1,4 +1,5 @@
 import type { Equilibrium } from "./equilibrium";
+import type { ThreePhaseVolumes } from "./three-phase-volume";
 import type { TwoPhaseVolumes } from "./two-phase-volume";
 
 export function createTwoPhaseVolumes(count: number): TwoPhaseVolumes {
@@ -17,8 +18,8 @@ export function createTwoPhaseVolumes(count: number): TwoPhaseVolumes {
  * vapour fraction, molar volume of the liquid), so a feed that has since lost a third of its moles still fits.
  */
 export function seedFrom(near: Equilibrium, z: ArrayLike<number>, molarVolume: number, out: TwoPhaseVolumes): boolean {
-  const [light, dense] = near.phases;
-  if (!light || !dense) return false;
+  const [light, dense, third] = near.phases;
+  if (!light || !dense || third) return false;
   let beta = light.moleFraction;
   const liquidVolume = dense.state.molarVolumeM3PerMol;
   const vapourVolume = light.state.molarVolumeM3PerMol;
@@ -47,4 +48,31 @@ export function seedFrom(near: Equilibrium, z: ArrayLike<number>, molarVolume: n
   out.liquidVolume = nl * liquidVolume;
   out.vapourVolume = molarVolume - out.liquidVolume;
   return out.vapourVolume > 0;
+}
+
+/** As `seedFrom`, from an equilibrium of three phases: each component shared out as it was, the liquids at their molar volumes. */
+export function seedThreeFrom(near: Equilibrium, z: ArrayLike<number>, molarVolume: number, out: ThreePhaseVolumes): boolean {
+  const { phases } = near;
+  if (phases.length !== 3) return false;
+  const totals = [0, 0, 0];
+  for (let i = 0; i < z.length; i++) {
+    let held = 0;
+    for (const { moleFraction, composition } of phases) held += moleFraction * composition[i]!;
+    for (let k = 0; k < 3; k++) {
+      const share = held > 0 ? (phases[k]!.moleFraction * phases[k]!.composition[i]!) / held : 1 / 3;
+      out.moles[k]![i] = z[i]! > 0 ? Math.max(z[i]! * share, 1e-290) : 0;
+      totals[k] = totals[k]! + out.moles[k]![i]!;
+    }
+  }
+  out.temperatureK = near.temperatureK;
+  out.pressurePa = near.pressurePa;
+  let sum = 0;
+  for (let k = 0; k < 3; k++) {
+    out.volumes[k] = totals[k]! * phases[k]!.state.molarVolumeM3PerMol;
+    sum += out.volumes[k]!;
+  }
+  const light = molarVolume - (sum - out.volumes[0]!);
+  if (light > 0.2 * out.volumes[0]!) out.volumes[0] = light;
+  else for (let k = 0; k < 3; k++) out.volumes[k] = (out.volumes[k]! * molarVolume) / sum;
+  return true;
 }
