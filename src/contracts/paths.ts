@@ -17,6 +17,9 @@ export const pages = {
   screening: (screeningId: string, rev?: number) => `/screenings/${screeningId}${rev ? `?rev=${rev}` : ""}`,
   part: (screeningId: string, part: PartSlug, line?: string) =>
     `/screenings/${screeningId}/form/${part}${line ? `#line-${line}` : ""}`,
+  fluid: (screeningId: string, rev?: number) => `/screenings/${screeningId}/fluid${rev ? `?rev=${rev}` : ""}`,
+  /** What is typed there stands in the fragment of the address. */
+  changeOfState: "/change-of-state",
   sign: (screeningId: string) => `/screenings/${screeningId}/sign`,
   decide: (screeningId: string) => `/screenings/${screeningId}/decide`,
   log: "/log",

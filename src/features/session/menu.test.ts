@@ -5,9 +5,9 @@ const words = (role: Parameters<typeof menuFor>[0]) => menuFor(role, "/desk").ma
 
 describe("the menu", () => {
   it("offers each role what it may open", () => {
-    expect(words("engineer")).toEqual(["Desk", "Screenings", "Sections", "Log"]);
-    expect(words("approver")).toEqual(["Desk", "Screenings", "Sections", "Log"]);
-    expect(words("auditor")).toEqual(["Desk", "Log"]);
+    expect(words("engineer")).toEqual(["Desk", "Screenings", "Sections", "Change of state", "Log"]);
+    expect(words("approver")).toEqual(["Desk", "Screenings", "Sections", "Change of state", "Log"]);
+    expect(words("auditor")).toEqual(["Desk", "Change of state", "Log"]);
     expect(words("administrator")).toEqual(["Desk", "People", "Facilities", "Log"]);
   });
 

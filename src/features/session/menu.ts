@@ -5,13 +5,14 @@ type Item = { label: string; href: string };
 
 const desk = { label: "Desk", href: pages.desk };
 const log = { label: "Log", href: pages.log };
-const plant = [desk, { label: "Screenings", href: pages.screenings }, { label: "Sections", href: pages.sections }, log];
+const change = { label: "Change of state", href: pages.changeOfState };
+const plant = [desk, { label: "Screenings", href: pages.screenings }, { label: "Sections", href: pages.sections }, change, log];
 
 /** Words of the strip by role. What a role may not open is not offered. */
 const menus: Record<Role, readonly Item[]> = {
   engineer: plant,
   approver: plant,
-  auditor: [desk, log],
+  auditor: [desk, change, log],
   administrator: [desk, { label: "People", href: pages.people }, { label: "Facilities", href: pages.facilities }, log],
 };
 

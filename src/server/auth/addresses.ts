@@ -60,8 +60,10 @@ export const pageAddresses: Record<string, "open" | "signed-in"> = {
   "/screenings/new": "signed-in",
   "/screenings/[screeningId]": "signed-in",
   "/screenings/[screeningId]/form/[part]": "signed-in",
+  "/screenings/[screeningId]/fluid": "signed-in",
   "/screenings/[screeningId]/sign": "signed-in",
   "/screenings/[screeningId]/decide": "signed-in",
+  "/change-of-state": "signed-in",
   "/log": "signed-in",
   "/people": "signed-in",
 };

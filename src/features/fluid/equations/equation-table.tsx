@@ -5,6 +5,7 @@ import { useShown } from "@/components/quantity/quantity";
 import { shownUnit } from "@/components/quantity/shown-units";
 import { Cell, HeadCell, Row, Table } from "@/components/table/table";
 import { useUnits } from "@/components/units/units-provider";
+import { equationTitles } from "@/contracts/equation-titles";
 import type { EquationId } from "@/engine/cases/fluid-spec";
 import type { Fitness, FitnessDeviation } from "@/engine/eos/fitness";
 import type { QuantityId } from "@/engine/units";
@@ -19,7 +20,7 @@ export function EquationTable({ entries, inUse, stale }: Props) {
   const { system } = useUnits();
   const shown = useShown();
   const from = entries.find(({ deviation }) => deviation)?.deviation?.from;
-  const best = entries.find(({ equation }) => equation === from)?.title;
+  const best = from && equationTitles[from];
   const write = (quantity: QuantityId, si: number | undefined) => shown(quantity, si).number;
   const density = `Density, ${shownUnit("density", system)}`;
   const departure = `Enthalpy departure, ${shownUnit("molarEnergy", system)}`;
@@ -41,10 +42,10 @@ export function EquationTable({ entries, inUse, stale }: Props) {
           </tr>
         </thead>
         <tbody>
-          {entries.map(({ equation, title, verdict, notes, values, deviation }) => (
+          {entries.map(({ equation, verdict, notes, values, deviation }) => (
             <Row key={equation} chosen={equation === inUse}>
               <Cell wholeRow>
-                <FitnessCell title={title} verdict={verdict} notes={notes} inUse={equation === inUse} />
+                <FitnessCell title={equationTitles[equation]} verdict={verdict} notes={notes} inUse={equation === inUse} />
               </Cell>
               <Cell label="Phases" wholeRow>
                 {values ? stateWords(values) : "–"}
