@@ -2,6 +2,9 @@
  * Heat from the wall's inner surface to the contents [W], by published correlations: natural convection on the dry part, natural convection
  * or nucleate boiling, whichever is more, on the wetted part.
  *
+ * Both come in by degrees: a pool thinner than a film of 5 mm wets in proportion to its volume, and boiling grows with the vapour in a vessel
+ * that is almost full. A film that jumped with the first droplet or bubble would make it vanish again, and so for ever.
+ *
  * Without a known shape there is no wetted area, and the whole inside counts as dry (a warning says so).
  */
 import type { FluidModel } from "../../eos/fluid-model";
@@ -13,6 +16,10 @@ import { findLibraryRow } from "../../substances/library";
 import { levelAtVolume, type MeasuredVessel } from "../../vessel/geometry";
 import type { Contents } from "./contents";
 
+const poolFilmM = 0.005;
+/** Vapour's share of the volume. */
+const boilsFullyAt = 0.02;
+
 /** Where no component's boiling point is held, as for constants of the user's own. */
 const typicalSurfaceTensionNPerM = 0.01;
 
@@ -22,12 +29,14 @@ export function correlatedFilmW(fluid: FluidModel, vessel: MeasuredVessel, conte
   const [vapour, liquid] = contents.equilibrium?.phases ?? [];
   if (!vapour || !liquid || !vessel.below) return (dT) => area * light(dT);
 
-  const wetted = vessel.below(levelAtVolume(vessel, contents.liquidVolumeM3) ?? 0).areaM2;
-  const wet = wettedFlux(fluid, vapour, liquid);
+  const under = vessel.below(levelAtVolume(vessel, contents.liquidVolumeM3) ?? 0).areaM2;
+  const wetted = Math.min(under, contents.liquidVolumeM3 / poolFilmM);
+  const boils = Math.min((1 - contents.liquidVolumeM3 / vessel.volumeM3) / boilsFullyAt, 1);
+  const wet = wettedFlux(fluid, vapour, liquid, boils);
   return (dT) => (area - wetted) * light(dT) + wetted * wet(dT);
 }
 
-function wettedFlux(fluid: FluidModel, vapour: EquilibriumPhase, liquid: EquilibriumPhase): FilmFlux {
+function wettedFlux(fluid: FluidModel, vapour: EquilibriumPhase, liquid: EquilibriumPhase, boils: number): FilmFlux {
   const { state, composition } = liquid;
   const convection = naturalConvection(fluid, state, composition);
   const molarMass = fluid.mixtureMolarMass(composition);
@@ -40,7 +49,10 @@ function wettedFlux(fluid: FluidModel, vapour: EquilibriumPhase, liquid: Equilib
     liquidDensityKgPerM3: state.densityKgPerM3,
     surfaceTensionNPerM: surfaceTension(fluid, composition, state.temperatureK),
   });
-  return (dT) => (dT <= 0 ? convection(dT) : Math.max(convection(dT), Math.min(boiling(dT), Math.max(limit, 0))));
+  return (dT) => {
+    const still = convection(dT);
+    return dT <= 0 ? still : still + boils * Math.max(Math.min(boiling(dT), Math.max(limit, 0)) - still, 0);
+  };
 }
 
 export function surfaceTension(fluid: FluidModel, x: Float64Array, temperatureK: number): number {

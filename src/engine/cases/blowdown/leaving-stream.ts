@@ -1,8 +1,9 @@
 /**
  * The streams that leave, at rest before the opening: vapour, liquid, or everything as it is mixed in the vessel.
  *
- * A liquid outlet uncovers as the last hundredth of the vessel's volume of liquid goes: the opening is then shared between liquid and vapour
- * in proportion. Switching at once from one to the other would chatter for ever, because saturated vapour that expands makes a little liquid.
+ * A liquid outlet uncovers as the last hundredth of the vessel's volume of liquid goes, and a vapour outlet is still splashed while vapour
+ * fills less than a ten-thousandth: the opening is then shared between liquid and vapour in proportion. Switching at once from one to the other
+ * would chatter for ever, because saturated vapour that expands makes a little liquid, and a full vessel that vents vapour is warmed full again.
  */
 import type { FluidModel, PhaseState } from "../../eos/fluid-model";
 import { assemble } from "../../flash/assemble";
@@ -25,6 +26,7 @@ export type LeavingStream = {
 };
 
 const uncoveredBelow = 0.01;
+const splashedBelow = 1e-4;
 
 export function leavingStreams(fluid: FluidModel, contents: Contents, from: OutletPlace, volumeM3: number): LeavingStream[] {
   const { equilibrium, lightest, lightestComposition, isLiquidFull, liquidVolumeM3 } = contents;
@@ -35,7 +37,7 @@ export function leavingStreams(fluid: FluidModel, contents: Contents, from: Outl
     isLiquid: isLiquidFull,
     share: 1,
   });
-  if (!equilibrium || !dense || from === "vapour") return [light];
+  if (!equilibrium || !dense) return [light];
   if (from === "whole") {
     const { temperatureK, pressurePa, composition } = contents;
     const { enthalpyJPerMol } = equilibrium;
@@ -52,7 +54,11 @@ export function leavingStreams(fluid: FluidModel, contents: Contents, from: Outl
       },
     ];
   }
-  const covered = Math.min(liquidVolumeM3 / (uncoveredBelow * volumeM3), 1);
+  const covered =
+    from === "liquid"
+      ? Math.min(liquidVolumeM3 / (uncoveredBelow * volumeM3), 1)
+      : Math.max(1 - (volumeM3 - liquidVolumeM3) / (splashedBelow * volumeM3), 0);
+  if (covered <= 0) return [light];
   const liquid = onePhase(fluid, contents, {
     phase: dense.state,
     composition: dense.composition,
