@@ -11,6 +11,7 @@ import { classifyPhase } from "../../flash/classify-phase";
 import type { Equilibrium } from "../../flash/equilibrium";
 import { flashUV } from "../../flash/flash-uv";
 import { onlyComponent } from "../../flash/saturation-pure";
+import { mayHoldWater } from "../../flash/third-phase";
 import { solveAtVolume } from "../../flash/two-phase-volume";
 import { createTwoPhaseVolumes, seedFrom } from "../../flash/volume-seed";
 import { assembleVolumes, incipientSplit } from "../../flow/incipient-split";
@@ -27,11 +28,11 @@ export type Contents = {
   /** Overall mole fractions and amount. */
   composition: Float64Array;
   totalMolesMol: number;
-  /** How many phases were found. */
+  /** One phase, or more: liquid water beside a hydrocarbon liquid counts as liquid. */
   phases: 1 | 2;
   vapourMoleFraction: number;
   liquidVolumeM3: number;
-  /** The one phase there is, or the lighter of two. */
+  /** The one phase there is, or the lightest. */
   lightest: PhaseState;
   lightestComposition: Float64Array;
   /** One phase, and that a liquid. */
@@ -100,6 +101,9 @@ export class ContentsFinder {
     const found = this.fromSeed(u, v) ?? this.split(total, u, v, effort);
     if (!found) return this.homogeneous(total, u, v);
     const [light, dense] = found.phases;
+    const liquidVolume = found.phases
+      .slice(1)
+      .reduce((sum, { moleFraction, state }) => sum + moleFraction * state.molarVolumeM3PerMol, 0);
     if (!light) throw new RangeError("an equilibrium without a phase");
     if (dense) this.seed = found;
     return {
@@ -109,11 +113,7 @@ export class ContentsFinder {
       totalMolesMol: total,
       phases: dense ? 2 : 1,
       vapourMoleFraction: found.vapourMoleFraction,
-      liquidVolumeM3: dense
-        ? total * dense.moleFraction * dense.state.molarVolumeM3PerMol
-        : found.phase === "liquid"
-          ? this.volumeM3
-          : 0,
+      liquidVolumeM3: dense ? total * liquidVolume : found.phase === "liquid" ? this.volumeM3 : 0,
       lightest: light.state,
       lightestComposition: light.composition,
       isLiquidFull: !dense && found.phase === "liquid",
@@ -121,9 +121,17 @@ export class ContentsFinder {
     };
   }
 
-  /** Two phases from those of the last call, which is where they nearly always are. */
+  /** Two phases from those of the last call, which is where they nearly always are; with water in the fluid a third may come or go. */
   private fromSeed(u: number, v: number): Equilibrium | undefined {
     const { seed, fluid, z, volumes } = this;
+    if (seed && onlyComponent(z) < 0 && (seed.phases.length > 2 || mayHoldWater(fluid, z))) {
+      try {
+        return flashUV(fluid, { internalEnergyJPerMol: u, molarVolumeM3PerMol: v }, z, seed);
+      } catch (error) {
+        if (!isRefusal(error)) throw error;
+        return undefined;
+      }
+    }
     if (
       !seed ||
       !seedFrom(seed, z, v, volumes) ||

@@ -60,7 +60,7 @@ function filling(fluid: FluidModel, found: Equilibrium, volumeM3: number): Start
     molesMol: fluid.feed.map((z) => z * total),
     totalMolesMol: total,
     internalEnergyJ: total * found.internalEnergyJPerMol,
-    twoPhase: found.phases.length === 2,
+    twoPhase: found.phases.length > 1,
   };
 }
 

@@ -6,6 +6,7 @@ import type { Run } from "./integrate-run";
 import type { Row } from "./series";
 import { carbonDioxideSublimationPa, solidCurves } from "./solid-check";
 import type { VesselModel } from "./vessel-model";
+import { waterWarnings } from "./water-warnings";
 
 export const closureLimit = 1e-4;
 
@@ -25,6 +26,7 @@ export function warningsOf(
     ...dataRange(blowdown, summary),
     ...nearCritical(blowdown, model, rows),
     ...solids(blowdown, run, rows, summary),
+    ...waterWarnings(blowdown, model),
     ...wallTable(model, summary),
     ...wallProfile(blowdown, model, summary),
     ...unknownLevel(blowdown, model, run),
