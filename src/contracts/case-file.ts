@@ -114,23 +114,44 @@ const outlet = {
   backPressurePa: pressure.default(101325),
   openingTimeS: quantity({ unit: "s", min: 0, max: 1e6 }).default(0),
   flowModel: choice(["frozen", "equilibrium"]).default("frozen"),
+  opensAtS: quantity({ unit: "s", min: 0, max: 1e7 }).optional(),
+  closesAtS: quantity({ unit: "s", above: 0, max: 1e8 }).optional(),
+  tailPipe: z
+    .strictObject({
+      lengthM: quantity({ unit: "m", min: 0, max: 1e4 }),
+      diameterM: quantity({ unit: "m", above: 0, max: 10 }),
+      roughnessM: quantity({ unit: "m", above: 0, max: 0.01 }).default(4.5e-5),
+      lossCoefficient: quantity({ unit: "", min: 0, max: 1e4 }).default(0),
+    })
+    .optional(),
 };
 const dischargeCoefficient = quantity({ unit: "", above: 0, max: 1 });
+const openings = [
+  z.strictObject({
+    path: z.literal("orifice"),
+    diameterM: quantity({ unit: "m", above: 0, max: 10 }),
+    dischargeCoefficient,
+    ...outlet,
+  }),
+  z.strictObject({
+    path: z.literal("valve"),
+    cv: quantity({ unit: "", above: 0, max: 1e6 }),
+    xt: quantity({ unit: "", above: 0, max: 1 }),
+    ...outlet,
+  }),
+  z.strictObject({
+    path: z.literal("relief"),
+    areaM2: quantity({ unit: "m²", above: 0, max: 10 }),
+    setPressurePa: pressure,
+    reseatPressurePa: pressure,
+    dischargeCoefficient,
+    ...outlet,
+  }),
+] as const;
 const release = z.discriminatedUnion(
   "path",
   [
-    z.strictObject({
-      path: z.literal("orifice"),
-      diameterM: quantity({ unit: "m", above: 0, max: 10 }),
-      dischargeCoefficient,
-      ...outlet,
-    }),
-    z.strictObject({
-      path: z.literal("valve"),
-      cv: quantity({ unit: "", above: 0, max: 1e6 }),
-      xt: quantity({ unit: "", above: 0, max: 1 }),
-      ...outlet,
-    }),
+    ...openings,
     z.strictObject({
       path: z.literal("sized"),
       targetPressurePa: pressure,
@@ -139,8 +160,13 @@ const release = z.discriminatedUnion(
       ...outlet,
     }),
   ],
-  { error: 'Use one of "orifice", "valve", "sized".' },
+  { error: 'Use one of "orifice", "valve", "sized", "relief".' },
 );
+
+const furtherReleases = z
+  .array(z.discriminatedUnion("path", [...openings], { error: 'Use one of "orifice", "valve", "relief".' }))
+  .min(1, "There is no further release. Add one, or leave the key out.")
+  .max(8, "There are more than 8 further releases. Join the smallest.");
 
 const coefficient = quantity({ unit: "W/(m² K)", min: 0, max: 1e6 });
 const none = z.strictObject({ model: z.literal("none") });
@@ -222,6 +248,7 @@ export const blowdownCaseSchema = z
     vessels: z.array(sectionPart).min(1, "Give at least one vessel.").max(50, "There are more than 50 vessels.").optional(),
     start: start.optional(),
     release,
+    releases: furtherReleases.optional(),
     heat: z
       .strictObject({
         inside: inside.default({ model: "none" }),

@@ -1,4 +1,5 @@
 /** One blowdown of one vessel, as plain types of the case document. Meanings in docs/case-format.md. */
+import type { TailPipe } from "../flow/tail-pipe";
 import type { FireBasis } from "../heat/surface-fire";
 import type { VesselShape } from "../vessel/geometry";
 import type { FluidSpec } from "./fluid-spec";
@@ -48,15 +49,26 @@ export type OutletPlace = "vapour" | "liquid" | "whole";
 
 type ReleaseCommon = {
   from: OutletPlace;
+  /** Behind the opening, or behind the tail pipe. */
   backPressurePa: number;
   openingTimeS: number;
   flowModel: FlowModel;
   dischargeCoefficient: number;
+  opensAtS?: number;
+  closesAtS?: number;
+  tailPipe?: TailPipe;
 };
 export type OrificeRelease = ReleaseCommon & { path: "orifice"; diameterM: number };
 export type ValveRelease = Omit<ReleaseCommon, "dischargeCoefficient"> & { path: "valve"; cv: number; xt: number };
 export type SizedRelease = ReleaseCommon & { path: "sized"; targetPressurePa: number; targetTimeS: number };
-export type ReleaseSpec = OrificeRelease | ValveRelease | SizedRelease;
+/** Opens at the set pressure, shuts at the reseating pressure. */
+export type ReliefRelease = ReleaseCommon & {
+  path: "relief";
+  areaM2: number;
+  setPressurePa: number;
+  reseatPressurePa: number;
+};
+export type ReleaseSpec = OrificeRelease | ValveRelease | SizedRelease | ReliefRelease;
 
 export type InsideFilm = { model: "none" } | { model: "constant"; coefficientWPerM2K: number } | { model: "correlations" };
 export type WallModel = { model: "none" } | { model: "lumped" } | { model: "conduction" };
@@ -109,6 +121,8 @@ export type BlowdownCase = {
   vessels?: SectionPart[];
   start: StartSpec;
   release: ReleaseSpec;
+  /** Further ways out beside `release`. */
+  releases?: Exclude<ReleaseSpec, SizedRelease>[];
   heat: { inside: InsideFilm; wall: WallModel; outside: Outside };
   run: RunSpec;
   limits?: LimitSpec;

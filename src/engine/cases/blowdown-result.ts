@@ -54,6 +54,8 @@ export type BlowdownSeries = {
   vapourMoleFraction: number[];
   liquidLevelM?: number[];
   outletTemperatureK: number[];
+  /** Directly behind the opening, where a tail pipe follows it. */
+  backPressurePa?: number[];
 };
 
 /** Three steps between the first state and another, J/mol of the fluid that is there, and the balance of the whole run. */

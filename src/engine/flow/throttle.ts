@@ -11,32 +11,72 @@
  */
 import { createPhaseState, type FluidModel } from "../eos/fluid-model";
 import { EngineError } from "../errors";
+import type { Equilibrium } from "../flash/equilibrium";
 import { flashPH } from "../flash/flash-ph";
+import { flashPQ } from "../flash/flash-quality";
+import { onlyComponent } from "../flash/saturation-pure";
 
 export type Stream = { temperatureK: number; pressurePa: number; enthalpyJPerMol: number };
 
 const scratch = createPhaseState();
 
 export function throttleTemperature(fluid: FluidModel, stream: Stream, z: ArrayLike<number>, pressurePa: number): number {
-  if (pressurePa >= stream.pressurePa) return stream.temperatureK;
-  return (
-    asOnePhase(fluid, stream, z, pressurePa) ??
-    flashPH(fluid, { pressurePa, enthalpyJPerMol: stream.enthalpyJPerMol }, z).temperatureK
-  );
+  return new Throttle(fluid, pressurePa).temperatureK(stream, z);
 }
 
-function asOnePhase(
-  fluid: FluidModel,
-  { enthalpyJPerMol, temperatureK: guessK }: Stream,
-  z: ArrayLike<number>,
-  pressurePa: number,
-): number | undefined {
+/** Throttling of one stream after another to the same pressure: what was found before is where the next search starts. */
+export class Throttle {
+  private lastK: number | undefined;
+  private seed: Equilibrium | undefined;
+  private readonly dome: { temperatureK: number; liquid: number; vapour: number } | undefined;
+
+  constructor(
+    private readonly fluid: FluidModel,
+    private readonly pressurePa: number,
+  ) {
+    this.dome = domeOf(fluid, pressurePa);
+  }
+
+  temperatureK(stream: Stream, z: ArrayLike<number>): number {
+    const { fluid, pressurePa, dome } = this;
+    const { enthalpyJPerMol: h } = stream;
+    if (pressurePa >= stream.pressurePa) return stream.temperatureK;
+    if (dome && h >= dome.liquid && h <= dome.vapour) return dome.temperatureK;
+    const alone = this.asOnePhase(stream, z);
+    if (alone !== undefined) {
+      this.lastK = alone;
+      return alone;
+    }
+    this.seed = flashPH(fluid, { pressurePa, enthalpyJPerMol: h }, z, this.seed);
+    return this.seed.temperatureK;
+  }
+
+  private asOnePhase({ enthalpyJPerMol, temperatureK }: Stream, z: ArrayLike<number>): number | undefined {
+    const { fluid, pressurePa, dome, lastK } = this;
+    const root = !dome ? "stable" : enthalpyJPerMol > dome.vapour ? "vapour" : "liquid";
+    try {
+      const found = fluid.phaseFromEnthalpy(enthalpyJPerMol, pressurePa, z, lastK ?? temperatureK, root, scratch);
+      const T = found.temperatureK;
+      return dome || fluid.stability(T, pressurePa, z).stable ? T : undefined;
+    } catch (error) {
+      // Between a boiling liquid and its vapour no single phase has this enthalpy.
+      if (error instanceof EngineError && error.code === "no-convergence") return undefined;
+      throw error;
+    }
+  }
+}
+
+/** Saturated enthalpies of a pure fluid at a pressure; undefined for mixtures, and where the fluid has no saturation there. */
+function domeOf(fluid: FluidModel, pressurePa: number): { temperatureK: number; liquid: number; vapour: number } | undefined {
+  if (onlyComponent(fluid.feed) < 0) return undefined;
   try {
-    const { temperatureK } = fluid.phaseFromEnthalpy(enthalpyJPerMol, pressurePa, z, guessK, "stable", scratch);
-    return fluid.stability(temperatureK, pressurePa, z).stable ? temperatureK : undefined;
+    const [vapour, liquid] = [
+      flashPQ(fluid, { pressurePa, vapourMoleFraction: 1 }),
+      flashPQ(fluid, { pressurePa, vapourMoleFraction: 0 }),
+    ];
+    return { temperatureK: vapour.temperatureK, liquid: liquid.enthalpyJPerMol, vapour: vapour.enthalpyJPerMol };
   } catch (error) {
-    // Between a boiling liquid and its vapour no single phase has this enthalpy.
-    if (error instanceof EngineError && error.code === "no-convergence") return undefined;
+    if (error instanceof EngineError && error.code !== "cancelled") return undefined;
     throw error;
   }
 }

@@ -1,10 +1,10 @@
 /**
- * The balances of a rigid vessel with one outlet, as the right-hand side of dy/dt.
+ * The balances of a rigid vessel with its ways out, as the right-hand side of dy/dt.
  *
  *   dn_i/dt = −ṅ y_i        dU/dt = −ṅ h + Q_wall (+ Q_out without a wall)        dE_wall/dt = Q_out − Q_wall
- *   ṅ = stroke(t) W / M       Q_wall = h_f S (T_w − T)
+ *   ṅ = Σ stroke(t) W / M     Q_wall = h_f S (T_w − T)
  *
- * with y_i, h, M of the stream that leaves (h its stagnation enthalpy) and W from the opening. Kinetic energy inside is neglected.
+ * with y_i, h, M of the stream that leaves (h its stagnation enthalpy) and W from the opening, summed over the paths that are open. Kinetic energy inside is neglected.
  * Carried along: mass vented, enthalpy vented, heat from the wall, heat from outside.
  *
  * Scales   amounts by n0, every energy by n0 R T0
@@ -15,16 +15,20 @@ import { DenseRun, type KeptStep } from "./dense-run";
 import { heatFlows, type HeatFlows } from "./heat-flows";
 import { leavingStreams } from "./leaving-stream";
 import { outflow, type Outflow } from "./outflow";
+import { strokeAt, type ReleasePath } from "./release-path";
 import type { VesselModel } from "./vessel-model";
 
 /** Everything about one instant that a series, an event or a limit may ask for. */
 export type Instant = {
   contents: Contents;
-  /** Through the opening, fully open. */
+  /** Through each path fully open; undefined where it is shut. */
+  flows: (Outflow | undefined)[];
+  /** That of the path that passes most; where all are shut, what the first would pass. */
   flow: Outflow;
-  /** Part of the stroke that the valve has made. */
-  stroke: number;
+  /** What leaves with the strokes that the paths have made. */
   ventRateKgPerS: number;
+  enthalpyW: number;
+  molesPerS: Float64Array;
   heat: HeatFlows;
 };
 
@@ -40,7 +44,8 @@ export class Balance {
   private readonly moles: Float64Array;
   /** A segment starts with the long search allowed: its first state has no neighbour to start from. */
   private refusedInARow = quickRefusals;
-  private last: { y: readonly number[]; mode: PhaseMode; t: number; instant: Instant } | undefined;
+  private open: readonly boolean[];
+  private last: { open: readonly boolean[]; y: readonly number[]; mode: PhaseMode; t: number; instant: Instant } | undefined;
 
   constructor(readonly model: VesselModel) {
     const { fluid, start, vessel } = model;
@@ -50,21 +55,33 @@ export class Balance {
     this.energyScaleJ = start.totalMolesMol * fluid.gasConstantJPerMolK * start.temperatureK;
     this.finder = new ContentsFinder(fluid, vessel.volumeM3, start.temperatureK);
     this.moles = new Float64Array(this.count);
+    this.open = this.allOpen();
   }
+
+  private allOpen = (): boolean[] => this.model.paths.map(() => true);
 
   /** Tight for amounts: a component that is all but gone must not swing below nothing. */
   absoluteTolerances(relativeTolerance: number): number[] {
     return Array.from({ length: this.size }, (_, i) => (i < this.count ? 1e-4 : 1e-2) * relativeTolerance);
   }
 
-  beginSegment(): void {
+  /** Which paths are open from here on. */
+  beginSegment(open: readonly boolean[] = this.allOpen()): void {
     this.refusedInARow = quickRefusals;
+    this.open = open;
+  }
+
+  /** Rate [kg/s] at the start with every path fully open, whatever the clock says. */
+  fullRateKgPerS(mode: PhaseMode): number {
+    this.open = this.allOpen();
+    return this.at(0, this.startState(), mode).flows.reduce((sum, flow) => sum + (flow?.rateKgPerS ?? 0), 0);
   }
 
   /** Everything at a time of a kept step, searched for from the temperature that the run had there. */
-  within(segment: { mode: PhaseMode }, step: KeptStep, t: number): { y: number[]; instant: Instant } {
+  within(segment: { mode: PhaseMode; open: readonly boolean[] }, step: KeptStep, t: number): { y: number[]; instant: Instant } {
     const y = DenseRun.inside(step, t);
     this.finder.startFrom(DenseRun.guessK(step, t));
+    this.open = segment.open;
     return { y, instant: this.at(t, y, segment.mode) };
   }
 
@@ -87,17 +104,36 @@ export class Balance {
 
   /** State of everything at (t, y). Kept for the same arguments, because events and output ask for the same point in turn. */
   at(t: number, y: readonly number[], mode: PhaseMode, effort: Effort = "thorough"): Instant {
-    const { last } = this;
-    if (last && last.y === y && last.mode === mode && last.t === t) return last.instant;
-    const { fluid, vessel, wall, opening, openingTimeS, from } = this.model;
+    const { last, open } = this;
+    if (last && last.y === y && last.mode === mode && last.t === t && last.open === open) return last.instant;
+    const { wall } = this.model;
     const contents = this.finder.find(mode, this.molesOf(y), this.internalEnergyJ(y), effort);
-    const flow = outflow(fluid, opening, leavingStreams(fluid, contents, from, vessel.volumeM3));
-    const stroke = openingTimeS > 0 ? Math.min(t / openingTimeS, 1) : 1;
     const wallMeanK = wall?.temperatureAtK(this.wallEnergyJ(y));
     const heat = heatFlows(this.model, contents, wallMeanK);
-    const instant: Instant = { contents, flow, stroke, ventRateKgPerS: stroke * flow.rateKgPerS, heat };
-    this.last = { y, mode, t, instant };
+    const instant: Instant = { contents, ...this.leaving(t, contents), heat };
+    this.last = { open, y, mode, t, instant };
     return instant;
+  }
+
+  private leaving(t: number, contents: Contents): Omit<Instant, "contents" | "heat"> {
+    const { fluid, vessel, paths } = this.model;
+    const { open } = this;
+    const pass = (path: ReleasePath): Outflow =>
+      outflow(fluid, path.opening, leavingStreams(fluid, contents, path.from, vessel.volumeM3));
+    const flows = paths.map((path, i) => (open[i] ? pass(path) : undefined));
+    const molesPerS = new Float64Array(this.count);
+    let ventRateKgPerS = 0;
+    let enthalpyW = 0;
+    let main: Outflow | undefined;
+    flows.forEach((flow, k) => {
+      if (!flow) return;
+      const stroke = strokeAt(paths[k]!, t);
+      ventRateKgPerS += stroke * flow.rateKgPerS;
+      enthalpyW += stroke * flow.enthalpyW;
+      for (let i = 0; i < molesPerS.length; i++) molesPerS[i] = molesPerS[i]! + stroke * flow.molesPerS[i]!;
+      if (!main || flow.rateKgPerS > main.rateKgPerS) main = flow;
+    });
+    return { flows, flow: main ?? pass(paths[0]!), ventRateKgPerS, enthalpyW, molesPerS };
   }
 
   /** dy/dt, or undefined for a trial state that no fluid can be in. */
@@ -111,14 +147,13 @@ export class Balance {
       return undefined;
     }
     this.refusedInARow = 0;
-    const { contents, flow, stroke, ventRateKgPerS, heat } = instant;
+    const { contents, enthalpyW, molesPerS, ventRateKgPerS, heat } = instant;
     if (!(contents.pressurePa > 0)) return undefined;
     const { wall, start } = this.model;
-    const enthalpyW = stroke * flow.enthalpyW;
     const intoFluidW = wall ? heat.fromWallW : heat.fromOutsideW;
 
     const rates = new Array<number>(this.size);
-    for (let i = 0; i < this.count; i++) rates[i] = (-stroke * (flow.molesPerS[i] ?? 0)) / start.totalMolesMol;
+    for (let i = 0; i < this.count; i++) rates[i] = -molesPerS[i]! / start.totalMolesMol;
     rates[this.count] = (intoFluidW - enthalpyW) / this.energyScaleJ;
     rates[this.count + 1] = wall ? (heat.fromOutsideW - heat.fromWallW) / this.energyScaleJ : 0;
     rates[this.count + 2] = ventRateKgPerS / this.massScaleKg;

@@ -13,10 +13,11 @@ import type { PhaseMode } from "./contents";
 import { coarse, coarseCount } from "./chebyshev";
 import { DenseRun } from "./dense-run";
 import { isStableAlone } from "./phase-check";
+import { nextChangeS, openPaths } from "./release-path";
 import { quantitiesOf } from "./run-fit";
 import { solidMargin, type SolidCurve } from "./solid-check";
 
-export type Segment = { mode: PhaseMode; dense: DenseRun };
+export type Segment = { mode: PhaseMode; open: readonly boolean[]; dense: DenseRun };
 export type PhaseChange = { timeS: number; to: PhaseMode; temperatureK: number; pressurePa: number };
 export type Run = {
   segments: Segment[];
@@ -38,6 +39,7 @@ export type RunOptions = {
 };
 
 const maxSegments = 60;
+const maxSegmentsWithRelief = 400;
 const places = Array.from(coarse.places.subarray(1));
 /** A fresh start at the sonic limit spares steps; where the throat's place is noise, more of them would only chatter. */
 const subsonicRestarts = 2;
@@ -49,7 +51,7 @@ const hottestK = 1000;
 
 export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: RunOptions): Run {
   const { model } = balance;
-  const { start, backPressurePa, openingTimeS } = model;
+  const { start, backPressurePa, paths } = model;
   const { stopTimeS, stopPressurePa } = blowdown.run;
   const lowest = backPressurePa * (1 + backPressureReached);
   const stopAt = Math.max(stopPressurePa, lowest);
@@ -61,24 +63,31 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
   let lastK = start.temperatureK;
   let subsonicSeen = 0;
   let mode: PhaseMode = start.twoPhase ? "two-phase" : "one-phase";
-  const emptyingTimeS = Math.max(balance.massScaleKg / Math.max(fullRate(balance, y, mode), 1e-300), 1e-9);
+  const lifted = paths.map(({ relief }) => relief !== undefined && start.pressurePa >= relief.setPressurePa);
+  const hasRelief = paths.some(({ relief }) => relief !== undefined);
+  const emptyingTimeS = Math.min(Math.max(balance.massScaleKg / Math.max(balance.fullRateKgPerS(mode), 1e-300), 1e-9), stopTimeS);
 
   while (t < stopTimeS) {
-    if (run.segments.length >= maxSegments) {
+    if (run.segments.length >= (hasRelief ? maxSegmentsWithRelief : maxSegments)) {
       throw new EngineError(
         "no-convergence",
-        `The fluid changed between one and two phases ${maxSegments} times by ${t.toPrecision(4)} s, and the run was given up. Check the pressure near the critical point.`,
+        hasRelief
+          ? `The relief device opened and shut ${maxSegmentsWithRelief / 2} times by ${t.toPrecision(4)} s, and the run was given up. End the run earlier, or widen the gap to its reseating pressure.`
+          : `The fluid changed between one and two phases ${maxSegments} times by ${t.toPrecision(4)} s, and the run was given up. Check the pressure near the critical point.`,
         { timeS: t },
       );
     }
-    const segment: Segment = { mode, dense: new DenseRun() };
+    const open = openPaths(paths, t, lifted);
+    const segment: Segment = { mode, open, dense: new DenseRun() };
     run.segments.push(segment);
-    balance.beginSegment();
+    balance.beginSegment(open);
     let samples: Float64Array[] = [];
     const sample = (time: number, state: number[]): void =>
       void samples.push(quantitiesOf(balance, state, balance.at(time, state, segment.mode)));
     if (options.keepSamples) sample(t, y);
-    const until = t < openingTimeS && openingTimeS < stopTimeS ? openingTimeS : stopTimeS;
+    const until = Math.min(nextChangeS(paths, t), stopTimeS);
+    const stroking = paths.filter(({ opensAtS, openingTimeS }) => t >= opensAtS && t < opensAtS + openingTimeS);
+    const shortestStrokeS = Math.min(emptyingTimeS, ...stroking.map(({ openingTimeS }) => openingTimeS));
     const result = integrate({
       derivative: (time, state) => balance.derivative(time, state, segment.mode),
       t0: t,
@@ -86,7 +95,7 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
       y0: y,
       relativeTolerance: options.relativeTolerance,
       absoluteTolerance: balance.absoluteTolerances(options.relativeTolerance),
-      timeScaleS: t < openingTimeS ? Math.sqrt(emptyingTimeS * Math.min(openingTimeS, emptyingTimeS)) : emptyingTimeS,
+      timeScaleS: Math.sqrt(emptyingTimeS * shortestStrokeS),
       maxEvaluations: options.maxEvaluations - run.evaluations,
       events: [
         {
@@ -95,7 +104,10 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
           value: (time, state) => balance.at(time, state, segment.mode).contents.pressurePa / stopAt - 1,
         },
         phaseEvent(balance, segment.mode),
-        ...(subsonicSeen < subsonicRestarts ? [subsonicEvent(balance, segment.mode)] : []),
+        ...(subsonicSeen < subsonicRestarts * paths.length
+          ? paths.flatMap((_, i) => (open[i] ? [subsonicEvent(balance, segment.mode, i)] : []))
+          : []),
+        ...paths.flatMap(({ relief }, i) => (relief ? [reliefEvent(balance, segment.mode, relief, lifted[i]!, i)] : [])),
         {
           id: "too-hot",
           stops: true,
@@ -139,6 +151,8 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
       break;
     }
     if (result.stoppedBy === "subsonic") subsonicSeen++;
+    const moved = paths.findIndex((_, i) => result.stoppedBy === reliefId(i));
+    if (moved >= 0) lifted[moved] = !lifted[moved];
     if (result.stoppedBy === "phase") {
       mode = mode === "one-phase" ? "two-phase" : "one-phase";
       const { temperatureK, pressurePa } = balance.at(t, y, mode).contents;
@@ -175,15 +189,34 @@ function phaseEvent(balance: Balance, mode: PhaseMode): IntegrationEvent {
 }
 
 /** Where the throat stops being sonic the rate has a kink; the integrator starts afresh there. Armed only while the flow is choked. */
-function subsonicEvent(balance: Balance, mode: PhaseMode): IntegrationEvent {
-  const { backPressurePa } = balance.model;
+function subsonicEvent(balance: Balance, mode: PhaseMode, path: number): IntegrationEvent {
   return {
     id: "subsonic",
     stops: true,
     value: (time, state) => {
-      const { flow } = balance.at(time, state, mode);
+      const flow = balance.at(time, state, mode).flows[path];
       // The throat's place is known to about 1e-7 of its pressure; nearer than ten times that the flow counts as subsonic.
-      return flow.choked ? flow.throatPressurePa / backPressurePa - 1 - 1e-6 : -1;
+      return flow?.choked ? flow.throatPressurePa / flow.backPressurePa - 1 - 1e-6 : -1;
+    },
+  };
+}
+
+const reliefId = (path: number): string => `relief-${path}`;
+
+/** Shut: the pressure rises to the set pressure. Open: it falls to the reseating pressure. */
+function reliefEvent(
+  balance: Balance,
+  mode: PhaseMode,
+  { setPressurePa, reseatPressurePa }: { setPressurePa: number; reseatPressurePa: number },
+  isOpen: boolean,
+  path: number,
+): IntegrationEvent {
+  return {
+    id: reliefId(path),
+    stops: true,
+    value: (time, state) => {
+      const { pressurePa } = balance.at(time, state, mode).contents;
+      return isOpen ? pressurePa / reseatPressurePa - 1 : 1 - pressurePa / setPressurePa;
     },
   };
 }
@@ -198,8 +231,6 @@ function solidEvent(balance: Balance, mode: PhaseMode, curves: readonly SolidCur
     },
   ];
 }
-
-const fullRate = (balance: Balance, y: number[], mode: PhaseMode): number => balance.at(0, y, mode).flow.rateKgPerS;
 
 function progress(timePart: number, pressurePa: number, startPa: number, stopPa: number): number {
   const fallen = Math.log(startPa / pressurePa) / Math.log(startPa / stopPa);

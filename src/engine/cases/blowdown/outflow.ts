@@ -18,6 +18,8 @@ export type Outflow = {
   throatPressurePa: number;
   throatTemperatureK: number;
   choked: boolean;
+  /** Directly behind the opening. */
+  backPressurePa: number;
 };
 
 export function outflow(fluid: FluidModel, opening: Opening, streams: LeavingStream[]): Outflow {
@@ -50,5 +52,6 @@ export function outflow(fluid: FluidModel, opening: Opening, streams: LeavingStr
     throatPressurePa: passed.throatPressurePa,
     throatTemperatureK: passed.throatTemperatureK,
     choked: passed.choked,
+    backPressurePa: passed.backPressurePa,
   };
 }

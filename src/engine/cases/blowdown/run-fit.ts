@@ -4,7 +4,6 @@
  *
  * A kink inside a step stops the halving after a few times; the row next to it is then as good as the last halving.
  */
-import { throttleTemperature } from "../../flow/throttle";
 import type { Balance, Instant } from "./balance";
 import { cardinal, coarse, fine, integralOf, nearestPlace, unresolved, valueAt } from "./chebyshev";
 import type { KeptStep } from "./dense-run";
@@ -25,6 +24,7 @@ export const quantities = [
   "enthalpyW",
   "fromWallW",
   "fromOutsideW",
+  "backPressurePa",
 ] as const;
 export type Quantity = (typeof quantities)[number];
 export const indexOf = Object.fromEntries(quantities.map((name, i) => [name, i])) as Record<Quantity, number>;
@@ -90,8 +90,8 @@ function evaluate(balance: Balance, { segment, step }: Part, t: number): Float64
 
 /** The quantities of one instant, in their order. */
 export function quantitiesOf(balance: Balance, y: readonly number[], instant: Instant): Float64Array {
-  const { contents, flow, stroke, ventRateKgPerS, heat } = instant;
-  const { fluid, backPressurePa } = balance.model;
+  const { contents, flow, ventRateKgPerS, enthalpyW, heat } = instant;
+  const { fluid } = balance.model;
   return Float64Array.of(
     contents.pressurePa,
     contents.temperatureK,
@@ -103,11 +103,21 @@ export function quantitiesOf(balance: Balance, y: readonly number[], instant: In
     contents.vapourMoleFraction,
     contents.liquidVolumeM3,
     flow.throatTemperatureK,
-    throttleTemperature(fluid, flow, flow.composition, backPressurePa),
-    stroke * flow.enthalpyW,
+    coldestOutletK(balance, instant),
+    enthalpyW,
     heat.fromWallW,
     heat.fromOutsideW,
+    flow.backPressurePa,
   );
+}
+
+/** Behind the coldest of the openings that pass something; where all are shut, behind the first. */
+function coldestOutletK({ model }: Balance, { flow, flows }: Instant): number {
+  let coldest = Number.POSITIVE_INFINITY;
+  flows.forEach((one, i) => {
+    if (one) coldest = Math.min(coldest, model.paths[i]!.throttle.temperatureK(one, one.composition));
+  });
+  return Number.isFinite(coldest) ? coldest : model.paths[0]!.throttle.temperatureK(flow, flow.composition);
 }
 
 /** Labels jump where a dense fluid begins to count as vapour: they are those of the nearest point while one phase is there. */

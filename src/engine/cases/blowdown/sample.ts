@@ -17,6 +17,8 @@ export type Sample = {
   throatTemperatureK: number;
   /** Behind the opening, at the back pressure. */
   outletTemperatureK: number;
+  /** Directly behind the opening that passes most. */
+  backPressurePa: number;
 };
 
 const scratch = new Float64Array(quantities.length);
@@ -36,6 +38,7 @@ export function sampleOf(piece: FitPiece, t: number, hasWall: boolean): Sample {
     liquidVolumeM3: Math.max(read[indexOf.liquidVolumeM3]!, 0),
     throatTemperatureK: read[indexOf.throatTemperatureK]!,
     outletTemperatureK: read[indexOf.outletTemperatureK]!,
+    backPressurePa: read[indexOf.backPressurePa]!,
   };
 }
 

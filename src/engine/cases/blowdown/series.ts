@@ -4,6 +4,7 @@
  */
 import type { BlowdownSeries } from "../blowdown-result";
 import type { Balance } from "./balance";
+import type { Segment } from "./integrate-run";
 import type { FitPiece } from "./run-fit";
 import { levelOf, sampleOf, type Sample } from "./sample";
 
@@ -19,8 +20,8 @@ export function sampleRows(balance: Balance, pieces: readonly FitPiece[], coarse
   for (const piece of pieces) {
     const take = (t: number): Row => ({ ...sampleOf(piece, t, hasWall), piece });
     const before = rows.at(-1);
-    // Only a phase change gives its time twice; steps and restarts for another reason join smoothly.
-    const joins = before && (before.piece.segment === piece.segment || before.piece.segment.mode === piece.segment.mode);
+    // Only a jump gives its time twice: a phase change, a path that opens or shuts. Steps and other restarts join smoothly.
+    const joins = before && joinsSmoothly(before.piece.segment, piece.segment);
     const first = joins ? before : take(piece.t0);
     if (!joins) rows.push(first);
     const last = take(piece.t1);
@@ -30,6 +31,9 @@ export function sampleRows(balance: Balance, pieces: readonly FitPiece[], coarse
   }
   return rows;
 }
+
+const joinsSmoothly = (before: Segment, after: Segment): boolean =>
+  before === after || (before.mode === after.mode && before.open.every((open, i) => open === after.open[i]));
 
 /** How many times the allowed gap lies between two samples. */
 function gapOf(a: Sample, b: Sample, startMassKg: number, durationS: number): number {
@@ -81,5 +85,6 @@ export function seriesOf(balance: Balance, rows: Row[]): BlowdownSeries {
     vapourMoleFraction: column((row) => row.vapourMoleFraction),
     ...(twoPhase && levels.every((level): level is number => level !== undefined) ? { liquidLevelM: levels } : {}),
     outletTemperatureK: column((row) => row.outletTemperatureK),
+    ...(balance.model.paths.some((path) => path.hasTailPipe) ? { backPressurePa: column((row) => row.backPressurePa) } : {}),
   };
 }

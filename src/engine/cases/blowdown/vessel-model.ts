@@ -4,7 +4,7 @@ import { EngineError } from "../../errors";
 import { measureVessel, type MeasuredVessel } from "../../vessel/geometry";
 import { outsideHeat, type OutsideHeat } from "../../heat/outside-heat";
 import type { BlowdownCase, OutletPlace } from "../blowdown-case";
-import { makeOpening, type Opening } from "./opening";
+import { makeReleasePath, type ReleasePath } from "./release-path";
 import { solidCurves, type SolidCurve } from "./solid-check";
 import type { Settled } from "../../start/settle-out";
 import { startOf, type StartState } from "./start-state";
@@ -20,15 +20,17 @@ export type VesselModel = {
   film: "none" | "correlations" | { coefficientWPerM2K: number };
   insideAreaM2: number;
   outside: OutsideHeat;
-  opening: Opening;
-  openingTimeS: number;
+  /** The first is the case's `release`. */
+  paths: ReleasePath[];
+  /** The lowest of all paths. */
   backPressurePa: number;
+  /** Where the first path starts. */
   from: OutletPlace;
   solids: SolidCurve[];
 };
 
 export function makeVesselModel(blowdown: BlowdownCase): VesselModel {
-  const { release, heat, vessel: given } = blowdown;
+  const { release, releases: others = [], heat, vessel: given } = blowdown;
   const vessel = measureVessel(given.geometry);
   const { fluid, spec, start, settled } = startOf(blowdown, vessel.volumeM3);
   if (!(release.backPressurePa < start.pressurePa)) {
@@ -49,9 +51,8 @@ export function makeVesselModel(blowdown: BlowdownCase): VesselModel {
     film: !walled ? "none" : heat.inside.model === "constant" ? heat.inside : heat.inside.model,
     insideAreaM2: vessel.innerAreaM2 ?? 0,
     outside: outsideHeat(blowdown, vessel),
-    opening: makeOpening(fluid, release),
-    openingTimeS: release.openingTimeS,
-    backPressurePa: release.backPressurePa,
+    paths: [makeReleasePath(fluid, release, "release"), ...others.map((one, i) => makeReleasePath(fluid, one, `releases[${i}]`))],
+    backPressurePa: Math.min(release.backPressurePa, ...others.map((one) => one.backPressurePa)),
     from: release.from,
     solids: solidCurves(spec),
   };
