@@ -5,12 +5,11 @@
  * but nobody said where it comes from; it blocks signing, not computing).
  */
 import type { BlowdownCase } from "@/engine/cases/blowdown-case";
-import { askedKeys, withInitials, type DraftDocument, type LineValue } from "./draft";
+import { askedKeysOf, withInitials, type DraftDocument, type LineValue } from "./draft";
 import { assembleCase } from "./draft-assemble";
 import { compositionSum } from "./draft-composition";
 import { crossProblems } from "./draft-cross-checks";
 import type { LineKey, QuantityLine } from "./lines/line";
-import { partByNumber } from "./lines/parts";
 import type { LimitPolicy } from "./policy";
 
 export { compositionSum, moleFractions } from "./draft-composition";
@@ -39,7 +38,7 @@ export const compositionSlackPercent = 5;
  */
 export function caseFromDraft(given: DraftDocument, letter: string, site: SiteFacts): CaseFromDraft {
   const draft = withInitials(given);
-  const asked = askedKeys(draft).filter((entry) => entry.letter === letter || !partByNumber(entry.line.part).perCase);
+  const asked = askedKeysOf(draft, letter);
   const missing: LineKey[] = [];
   const problems: LineProblem[] = [];
   const withoutSource: LineKey[] = [];

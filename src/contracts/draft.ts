@@ -38,16 +38,17 @@ export const compositionSchema = z.strictObject({
   source: sourceSchema.nullable(),
 });
 
-export const caseKinds = ["cold-blowdown"] as const;
+export const caseKinds = ["cold-blowdown", "fire-blowdown"] as const;
 export type CaseKind = (typeof caseKinds)[number];
-export const caseKindWords: Record<CaseKind, string> = { "cold-blowdown": "Cold blowdown" };
+export const caseKindWords: Record<CaseKind, string> = { "cold-blowdown": "Cold blowdown", "fire-blowdown": "Fire blowdown" };
+export const mostCases = 12;
 
 export const draftDocumentSchema = z.strictObject({
   format: z.literal("ebbmark-draft/1"),
   cases: z
     .array(z.strictObject({ letter: z.string().regex(/^[A-Z]$/), kind: z.enum(caseKinds) }))
     .min(1)
-    .max(12),
+    .max(mostCases),
   lines: z.record(
     z.string().refine((key) => parseLineKey(key) !== undefined, "there is no such line"),
     lineValueSchema,
@@ -117,3 +118,7 @@ function everyKey(draft: DraftDocument): LinePlace[] {
 /** Keys of all lines a draft asks for now. */
 export const askedKeys = (draft: DraftDocument): LinePlace[] =>
   everyKey(draft).filter(({ line, letter, item }) => isAsked(line, draft, letter, item));
+
+/** Those of one case: its own lines of parts 5 to 7, and the lines that stand for all cases. */
+export const askedKeysOf = (draft: DraftDocument, letter: string): LinePlace[] =>
+  askedKeys(draft).filter((place) => place.letter === letter || !partByNumber(place.line.part).perCase);

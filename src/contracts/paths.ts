@@ -15,8 +15,11 @@ export const pages = {
   screenings: "/screenings",
   newScreening: (sectionId?: string) => (sectionId ? `/screenings/new?section=${sectionId}` : "/screenings/new"),
   screening: (screeningId: string, rev?: number) => `/screenings/${screeningId}${rev ? `?rev=${rev}` : ""}`,
-  part: (screeningId: string, part: PartSlug, line?: string) =>
-    `/screenings/${screeningId}/form/${part}${line ? `#line-${line}` : ""}`,
+  /** A line of a case other than A opens that case; `letter` opens one without going to a line. */
+  part: (screeningId: string, part: PartSlug, line?: string, letter: string | undefined = /^[A-Z]/.exec(line ?? "")?.[0]) =>
+    `/screenings/${screeningId}/form/${part}${letter && letter !== "A" ? `?case=${letter}` : ""}${line ? `#line-${line}` : ""}`,
+  /** The bores between too slow in the fire case and too cold in the cold one. */
+  window: (screeningId: string) => `/screenings/${screeningId}/form/window`,
   fluid: (screeningId: string, rev?: number) => `/screenings/${screeningId}/fluid${rev ? `?rev=${rev}` : ""}`,
   /** What is typed there stands in the fragment of the address. */
   changeOfState: "/change-of-state",

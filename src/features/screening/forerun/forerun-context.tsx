@@ -8,8 +8,8 @@ const ForerunContext = createContext<ForerunState | null>(null);
 
 /** Runs the draft for all parts of the form at once: going from part to part starts nothing again and keeps the ghost. */
 export function ForerunProvider({ children }: { children: ReactNode }) {
-  const { made } = useDraft();
-  return <ForerunContext.Provider value={useForerun(made.document)}>{children}</ForerunContext.Provider>;
+  const { made, letter } = useDraft();
+  return <ForerunContext.Provider value={useForerun(made.document, letter)}>{children}</ForerunContext.Provider>;
 }
 
 export function useForerunState(): ForerunState {

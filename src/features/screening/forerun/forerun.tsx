@@ -12,11 +12,11 @@ import { ForerunFigures } from "./forerun-figures";
 
 /** Live coarse run of the lines as they stand, beside the form. Never stored, never signed. */
 export function Forerun() {
-  const { made, subject } = useDraft();
+  const { made, letter, cases, subject } = useDraft();
   const { result, document, before, running, problem, problemPath, seconds } = useForerunState();
   const inTheWay = [...made.problems.map(({ line }) => line), ...made.missing];
   const first = inTheWay[0];
-  const cited = problemPath === null ? undefined : lineKeyOfPath(problemPath, "A");
+  const cited = problemPath === null ? undefined : lineKeyOfPath(problemPath, letter);
   const stale = result !== null && (first !== undefined || problem !== null);
 
   return (
@@ -24,6 +24,7 @@ export function Forerun() {
       <div className="mb-1 flex flex-wrap items-baseline justify-between gap-x-3">
         <h2 className="text-sub">Forerun</h2>
         <span className="text-small text-ink-3">
+          {cases.length > 1 && `case ${letter}, `}
           {running
             ? "running…"
             : seconds === null

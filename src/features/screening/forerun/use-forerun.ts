@@ -2,7 +2,7 @@
 
 import { useEffect, useRef, useState } from "react";
 import type { BlowdownCase } from "@/engine/cases/blowdown-case";
-import type { BlowdownResult } from "@/engine/cases/blowdown-result";
+import type { BlowdownResult, Verdict } from "@/engine/cases/blowdown-result";
 import type { PreviewAnswer, PreviewRequest } from "@/workers/browser";
 
 /** A pause short enough that curves follow the typing, long enough that a figure is finished. */
@@ -17,6 +17,9 @@ export type ForerunState = {
   result: BlowdownResult | null;
   /** The case that `result` answers. */
   document: BlowdownCase | null;
+  /** Letter of the case that `result` is of, and the verdict of each case that has been run. */
+  letter: string | null;
+  verdicts: Readonly<Record<string, Verdict>>;
   /** The answer before the last edit, for the ghost. */
   before: BlowdownResult | null;
   running: boolean;
@@ -29,6 +32,8 @@ export type ForerunState = {
 const nothing: ForerunState = {
   result: null,
   document: null,
+  letter: null,
+  verdicts: {},
   before: null,
   running: false,
   problem: null,
@@ -37,7 +42,7 @@ const nothing: ForerunState = {
 };
 
 /** Runs the case in the browser's own worker after every change: latest wins, nothing is stored. */
-export function useForerun(document: BlowdownCase | undefined): ForerunState {
+export function useForerun(document: BlowdownCase | undefined, letter: string): ForerunState {
   const [state, setState] = useState(nothing);
   const worker = useRef<Worker>(undefined);
   const newest = useRef(0);
@@ -76,7 +81,7 @@ export function useForerun(document: BlowdownCase | undefined): ForerunState {
         if (data.id !== newest.current) return;
         clearTimeout(patience);
         const seconds = (performance.now() - started) / 1000;
-        setState((before) => answered(before, data, asked, seconds));
+        setState((before) => answered(before, data, { document: asked, letter }, seconds));
       };
       busySince.current ??= started;
       setState((before) => ({ ...before, running: true }));
@@ -87,7 +92,7 @@ export function useForerun(document: BlowdownCase | undefined): ForerunState {
       clearTimeout(rest);
       clearTimeout(patience);
     };
-  }, [text]);
+  }, [text, letter]);
 
   return state;
 }
@@ -100,9 +105,25 @@ function stop(worker: Box<Worker>, busySince: Box<number>): void {
   busySince.current = undefined;
 }
 
-function answered(before: ForerunState, answer: PreviewAnswer, document: BlowdownCase, seconds: number): ForerunState {
+function answered(
+  before: ForerunState,
+  answer: PreviewAnswer,
+  { document, letter }: { document: BlowdownCase; letter: string },
+  seconds: number,
+): ForerunState {
   if (answer.type === "result" && answer.result.kind === "blowdown") {
-    return { result: answer.result, document, before: before.result, running: false, problem: null, problemPath: null, seconds };
+    return {
+      result: answer.result,
+      document,
+      letter,
+      verdicts: { ...before.verdicts, [letter]: answer.result.verdict },
+      // Another case's curve is no ghost of this one.
+      before: before.letter === letter ? before.result : null,
+      running: false,
+      problem: null,
+      problemPath: null,
+      seconds,
+    };
   }
   if (answer.type === "refused") {
     const { error } = answer;

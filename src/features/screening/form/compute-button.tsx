@@ -15,12 +15,12 @@ import { firstInTheWay } from "./part-status";
 
 /** Runs the case on the server, twice, and goes to its sheet. Says which line it waits for; can be cancelled while it runs. */
 export function ComputeButton({ main }: { main: boolean }) {
-  const { made, keeper, subject, editable } = useDraft();
+  const { cases, keeper, subject, editable } = useDraft();
   const router = useRouter();
   const [busy, setBusy] = useState(false);
   const [problem, setProblem] = useState<{ words: string; lines: { path: string; message: string }[] } | null>(null);
   const abort = useRef<AbortController>(undefined);
-  const waits = firstInTheWay(made);
+  const waits = firstInTheWay(cases);
 
   async function compute() {
     setBusy(true);

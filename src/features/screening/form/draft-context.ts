@@ -1,7 +1,7 @@
 "use client";
 
 import { createContext, useContext } from "react";
-import type { DraftDocument, LineValue } from "@/contracts/draft";
+import type { CaseKind, DraftDocument, LineValue } from "@/contracts/draft";
 import type { CaseFromDraft, SiteFacts } from "@/contracts/draft-to-case";
 import type { LineKey, QuantityLine } from "@/contracts/lines/line";
 import type { DraftView } from "@/contracts/views";
@@ -25,10 +25,15 @@ export type DraftInHand = {
   draft: DraftDocument;
   editable: boolean;
   errors: LineErrors;
-  /** The case of the draft as it stands, or what is in its way. */
+  /** Letter of the case in hand; parts 5 to 7 and the forerun are of this one. */
+  letter: string;
+  /** The case in hand as it stands, or what is in its way. */
   made: CaseFromDraft;
+  /** Every case of the draft, in their order. */
+  cases: { letter: string; kind: CaseKind; made: CaseFromDraft }[];
   keeper: Keeper;
   setLine: (key: LineKey, change: Partial<LineValue>) => void;
+  setCases: (change: (before: DraftDocument) => DraftDocument) => void;
   setComposition: (change: Partial<DraftDocument["composition"]>) => void;
   unitOf: (key: LineKey, line: QuantityLine) => string;
   chooseUnit: (key: LineKey, unit: string) => void;

@@ -1,6 +1,7 @@
 "use client";
 
 import { Formik, useFormikContext } from "formik";
+import { useSearchParams } from "next/navigation";
 import { useCallback, useEffect, useMemo, useState, type ReactNode } from "react";
 import { SitePressure, useUnits } from "@/components/units/units-provider";
 import { withInitials, type DraftDocument, type LineValue } from "@/contracts/draft";
@@ -79,12 +80,38 @@ function Held({ subject, start, children }: { subject: FormSubject; start: Draft
   );
 
   const errors = useMemo(() => lineErrors(draft, site, unitOf), [draft, site, unitOf]);
-  const made = useMemo(() => caseFromDraft(draft, "A", site), [draft, site]);
+  const cases = useMemo(
+    () => draft.cases.map((one) => ({ ...one, made: caseFromDraft(draft, one.letter, site) })),
+    [draft, site],
+  );
+  const asked = useSearchParams().get("case");
+  const inHand = cases.find(({ letter: one }) => one === asked) ?? cases[0];
+  if (!inHand) throw new Error("a draft has no case");
+  const { letter, made } = inHand;
+  const setCases = useCallback(
+    (change: (before: DraftDocument) => DraftDocument) => void setValues((before) => deriveSi(change(before), baro), false),
+    [setValues, baro],
+  );
   const editable = start.editable;
 
   const held = useMemo(
-    () => ({ subject, start, draft, editable, errors, made, keeper, setLine, setComposition, unitOf, chooseUnit }),
-    [subject, start, draft, editable, errors, made, keeper, setLine, setComposition, unitOf, chooseUnit],
+    () => ({
+      subject,
+      start,
+      draft,
+      editable,
+      errors,
+      letter,
+      made,
+      cases,
+      keeper,
+      setLine,
+      setCases,
+      setComposition,
+      unitOf,
+      chooseUnit,
+    }),
+    [subject, start, draft, editable, errors, letter, made, cases, keeper, setLine, setCases, setComposition, unitOf, chooseUnit],
   );
 
   // Text and figures that are not yet with the server are lost only if this page and the browser's store both go.

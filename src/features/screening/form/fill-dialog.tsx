@@ -2,7 +2,7 @@
 
 import { Button } from "@/components/button/button";
 import { Dialog } from "@/components/dialog/dialog";
-import { askedKeys } from "@/contracts/draft";
+import { askedKeysOf } from "@/contracts/draft";
 import { siOf } from "@/contracts/derive-si";
 import type { LineKey, QuantityLine } from "@/contracts/lines/line";
 import { useDraft } from "./draft-context";
@@ -10,9 +10,9 @@ import { unitTyped } from "./shown-unit";
 
 /** A pasted column fills the lines downwards from where it was pasted: shown first, counted only when taken over. */
 export function FillDialog({ from, cells, onClose }: { from: LineKey; cells: string[]; onClose: () => void }) {
-  const { draft, setLine, unitOf, chooseUnit, subject } = useDraft();
+  const { draft, letter, setLine, unitOf, chooseUnit, subject } = useDraft();
   const baro = subject.site.barometricPressurePa;
-  const all = askedKeys(draft);
+  const all = askedKeysOf(draft, letter);
   const start = all.find(({ key }) => key === from);
   const lines = all.filter(({ line }) => line.kind === "quantity" && line.part === start?.line.part);
   const first = lines.findIndex(({ key }) => key === from);

@@ -4,13 +4,13 @@ import { useRouter } from "next/navigation";
 import { useEffect } from "react";
 import { LineJump } from "@/components/line/line-jump";
 import { focusLine } from "@/components/line/next-line";
-import { askedKeys } from "@/contracts/draft";
+import { askedKeys, askedKeysOf } from "@/contracts/draft";
 import { useDraft } from "./draft-context";
 import { lineAddress } from "./line-address";
 
 /** Keys of the form: "/" goes to a line by its number, Alt+S opens the source of the line in hand. Named at the foot of the form. */
 export function FormKeys() {
-  const { draft, subject } = useDraft();
+  const { draft, letter, subject } = useDraft();
   const router = useRouter();
 
   useEffect(() => {
@@ -33,7 +33,10 @@ export function FormKeys() {
 
   /** "4.03", "A5.02" or "5.02", "2.04-1" or "2.04": the letter and the item may be left out. */
   const jump = (no: string): boolean => {
-    const found = askedKeys(draft).find(({ key }) => [key, key.replace(/^[A-Z]/, ""), key.replace(/-\d+$/, "")].includes(no));
+    // The case in hand first, so that "5.02" is its own line.
+    const found = [...askedKeysOf(draft, letter), ...askedKeys(draft)].find(({ key }) =>
+      [key, key.replace(/^[A-Z]/, ""), key.replace(/-\d+$/, "")].includes(no),
+    );
     if (!found) return false;
     if (!focusLine(found.key)) router.push(lineAddress(subject.screeningId, found.key));
     return true;

@@ -17,10 +17,10 @@ import { useDraft } from "./draft-context";
  * the forerun found.
  */
 export function InventoryFigure() {
-  const { draft } = useDraft();
+  const { draft, letter } = useDraft();
   const { result } = useForerunState();
   const geometry = shapeGeometry(draft);
-  const { choice, si, asked } = valuesOf(draft, "A");
+  const { choice, si, asked } = valuesOf(draft, letter);
   if (!geometry || geometry.document.shape === "volume") return null;
   const typed = liquidAtStart(draft, geometry)?.levelM;
   const found = result?.series.liquidLevelM?.[0];

@@ -58,7 +58,12 @@ export function mergeDrafts(
     sent.map(({ composition }) => composition),
   );
   return {
-    merged: { ...mine, lines, composition: compositionSide === "theirs" ? theirs.composition : mine.composition },
+    merged: {
+      ...mine,
+      cases: mergeCases(base.cases, mine.cases, theirs.cases),
+      lines,
+      composition: compositionSide === "theirs" ? theirs.composition : mine.composition,
+    },
     conflicts,
     taken,
   };
@@ -73,6 +78,16 @@ export function mergeDrafts(
     return "mine";
   }
 }
+
+/** Cases added on either side are there; one that either side removed is gone, as long as one is left. */
+function mergeCases(base: Cases, mine: Cases, theirs: Cases): Cases {
+  const has = (cases: Cases, letter: string) => cases.some((one) => one.letter === letter);
+  const all = [...mine, ...theirs.filter(({ letter }) => !has(mine, letter))].sort((a, b) => (a.letter < b.letter ? -1 : 1));
+  const kept = all.filter(({ letter }) => !has(base, letter) || (has(mine, letter) && has(theirs, letter)));
+  return kept.length > 0 ? kept : mine;
+}
+
+type Cases = DraftDocument["cases"];
 
 /** The merged draft with the choices made at the conflicts. */
 export function applyChoices(merge: Merge, theirs: DraftDocument, choices: Record<LineKey, Choice>): DraftDocument {

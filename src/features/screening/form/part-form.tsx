@@ -1,7 +1,7 @@
 "use client";
 
 import Link from "next/link";
-import { useId, useMemo, useState } from "react";
+import { useId, useMemo, useState, type ReactNode } from "react";
 import { Button } from "@/components/button/button";
 import { ButtonLink } from "@/components/button/button-link";
 import { Notice } from "@/components/caution/notice";
@@ -13,13 +13,14 @@ import { SourceKeys } from "@/components/line/source-note";
 import { PartList } from "@/components/parts/part-list";
 import { KeptWord } from "@/components/parts/kept-word";
 import { StateWord } from "@/components/verdict/state-word";
-import { askedKeys, caseKindWords } from "@/contracts/draft";
+import { askedKeysOf, caseKindWords } from "@/contracts/draft";
 import type { LineKey } from "@/contracts/lines/line";
 import { parts, partBySlug, type PartSlug } from "@/contracts/lines/parts";
 import { pages } from "@/contracts/paths";
 import { Forerun } from "../forerun/forerun";
 import { ForerunBar } from "../forerun/forerun-bar";
 import { ForerunSaid } from "../forerun/forerun-said";
+import { CaseTabs } from "./case-tabs";
 import { ComputeButton } from "./compute-button";
 import { ConflictDialog } from "./conflict-dialog";
 import { useDraft } from "./draft-context";
@@ -32,21 +33,28 @@ import { partStatuses } from "./part-status";
 import { ScopeFacts } from "./scope-facts";
 import { PasteContext } from "./use-paste-column";
 
-/** One part of the form: its lines in groups, the part list at the left, the Forerun at the right. */
-export function PartForm({ slug }: { slug: PartSlug }) {
+/**
+ * One part of the form: its lines in groups, the part list at the left, the Forerun at the right.
+ *
+ * below   stands under the lines of the part
+ */
+export function PartForm({ slug, below }: { slug: PartSlug; below?: ReactNode }) {
   const held = useDraft();
-  const { draft, made, subject, start, keeper, editable } = held;
+  const { draft, letter, made, cases, subject, start, keeper, editable } = held;
   const [pasted, setPasted] = useState<{ from: LineKey; cells: string[] } | null>(null);
   const [forerunOpen, setForerunOpen] = useState(false);
   const forerunId = useId();
   const part = partBySlug(slug) ?? parts[0];
-  const statuses = useMemo(() => partStatuses(draft, made), [draft, made]);
-  const asked = askedKeys(draft).filter(({ line }) => line.part === part.part);
+  const statuses = useMemo(() => partStatuses(draft, letter, made), [draft, letter, made]);
+  const asked = askedKeysOf(draft, letter).filter(({ line }) => line.part === part.part);
   const groups = [...new Set(asked.map(({ line }) => line.group))];
   const at = parts.indexOf(part);
   const [before, after] = [parts[at - 1], parts[at + 1]];
   const offerColumn = useMemo(() => (from: LineKey, cells: string[]) => setPasted({ from, cells }), []);
 
+  const casesWords = part.perCase
+    ? `${letter} ${caseKindWords[cases.find((one) => one.letter === letter)?.kind ?? "cold-blowdown"]}`
+    : cases.map((one) => `${one.letter} ${caseKindWords[one.kind]}`).join(", ");
   const listed = (perCase: boolean) =>
     parts
       .filter((one) => one.perCase === perCase)
@@ -55,7 +63,7 @@ export function PartForm({ slug }: { slug: PartSlug }) {
         return {
           no: one.part,
           name: one.title,
-          href: pages.part(subject.screeningId, one.slug),
+          href: pages.part(subject.screeningId, one.slug, undefined, letter),
           note: status?.note ?? "",
           state: status?.state ?? ("untouched" as const),
           current: one === part,
@@ -71,7 +79,7 @@ export function PartForm({ slug }: { slug: PartSlug }) {
               { label: "Record", value: subject.record },
               { label: "Rev", value: start.rev },
               { label: "Section", value: `${subject.section.tag} ${subject.section.name}`, wide: true },
-              { label: "Case", value: `A ${caseKindWords["cold-blowdown"]}`, wide: true },
+              { label: cases.length > 1 ? "Cases" : "Case", value: casesWords, wide: true },
               { label: "Prepared by", value: subject.author },
               { label: "State", value: <StateWord state="draft" /> },
               { label: "Kept", value: <KeptWord keeping={keeper.keeping} /> },
@@ -82,7 +90,7 @@ export function PartForm({ slug }: { slug: PartSlug }) {
           <PartList
             groups={[
               { head: "For all cases", parts: listed(false) },
-              { head: "For case A", parts: listed(true) },
+              { head: `For case ${letter}`, parts: listed(true) },
             ]}
           />
         }
@@ -115,6 +123,7 @@ export function PartForm({ slug }: { slug: PartSlug }) {
             {remark.by} remarked: “{remark.text}”
           </MarginNote>
         ))}
+        {part.perCase && <CaseTabs slug={part.slug} />}
         <PartHead no={part.part} title={part.title}>
           <SourceKeys />
         </PartHead>
@@ -131,12 +140,15 @@ export function PartForm({ slug }: { slug: PartSlug }) {
           </section>
         ))}
         {part.slug === "inventory" && <StartSentence />}
+        {below}
         <ButtonRow>
           {before && (
-            <ButtonLink href={pages.part(subject.screeningId, before.slug)}>{`${before.part}\u2002${before.title}`}</ButtonLink>
+            <ButtonLink
+              href={pages.part(subject.screeningId, before.slug, undefined, letter)}
+            >{`${before.part}\u2002${before.title}`}</ButtonLink>
           )}
           {after && (
-            <ButtonLink kind="main" href={pages.part(subject.screeningId, after.slug)}>
+            <ButtonLink kind="main" href={pages.part(subject.screeningId, after.slug, undefined, letter)}>
               {`${after.part}\u2002${after.title}`}
             </ButtonLink>
           )}

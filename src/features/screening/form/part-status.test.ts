@@ -6,7 +6,7 @@ import { firstInTheWay, partStatuses } from "./part-status";
 
 const site = { barometricPressurePa: 101325, policy: defaultPolicy };
 const statusOf = (draft: ReturnType<typeof newDraft>, part: number) =>
-  partStatuses(draft, caseFromDraft(draft, "A", site)).find((status) => status.part === part);
+  partStatuses(draft, "A", caseFromDraft(draft, "A", site)).find((status) => status.part === part);
 
 describe("the parts of a draft", () => {
   it("of a new draft: scope and limits settled, the rest begun", () => {
@@ -14,14 +14,14 @@ describe("the parts of a draft", () => {
     expect(statusOf(draft, 1)?.state).toBe("settled");
     expect(statusOf(draft, 2)).toMatchObject({ state: "started", firstOpen: "2.01-1" });
     expect(statusOf(draft, 7)?.state).toBe("settled");
-    expect(firstInTheWay(caseFromDraft(draft, "A", site))).toBe("2.01-1");
+    expect(firstInTheWay([{ made: caseFromDraft(draft, "A", site) }])).toBe("2.01-1");
   });
 
   it("name what is wrong before what is missing", () => {
     const draft = newDraft("t");
     draft.lines["2.09"] = { typed: "abc", unit: "bar(g)", si: null, source: null };
     expect(statusOf(draft, 2)).toMatchObject({ state: "to-fix", note: "1 line to fix", firstOpen: "2.09" });
-    expect(firstInTheWay(caseFromDraft(draft, "A", site))).toBe("2.09");
+    expect(firstInTheWay([{ made: caseFromDraft(draft, "A", site) }])).toBe("2.09");
   });
 
   it("say what has no source once all else is there", () => {

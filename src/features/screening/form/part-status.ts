@@ -1,6 +1,6 @@
 /** How far each part of the form is, for the part list and the buttons. */
 import type { PartState } from "@/components/parts/part-sign";
-import { askedKeys, type DraftDocument } from "@/contracts/draft";
+import { askedKeysOf, type DraftDocument } from "@/contracts/draft";
 import type { CaseFromDraft } from "@/contracts/draft-to-case";
 import type { LineKey } from "@/contracts/lines/line";
 import { parseLineKey } from "@/contracts/lines/registry";
@@ -11,8 +11,8 @@ export type PartStatus = { part: PartNumber; state: PartState; note: string; fir
 /** Keys that stand in the way of a part, in the order of the form. */
 const ofPart = (keys: readonly LineKey[], part: PartNumber) => keys.filter((key) => parseLineKey(key)?.line.part === part);
 
-export function partStatuses(draft: DraftDocument, made: CaseFromDraft): PartStatus[] {
-  const asked = askedKeys(draft).filter(({ line }) => line.kind !== "derived");
+export function partStatuses(draft: DraftDocument, letter: string, made: CaseFromDraft): PartStatus[] {
+  const asked = askedKeysOf(draft, letter).filter(({ line }) => line.kind !== "derived");
   return parts.map(({ part }) => {
     const total = asked.filter(({ line }) => line.part === part).length;
     const toFix = ofPart(
@@ -36,5 +36,6 @@ function wordsFor(total: number, toFix: number, missing: number, unsourced: numb
 
 const count = (n: number, noun: string) => `${n} ${noun}${n === 1 ? "" : "s"}`;
 
-/** The line a button waits for: first what is wrong, then what is missing. */
-export const firstInTheWay = (made: CaseFromDraft): LineKey | undefined => made.problems[0]?.line ?? made.missing[0];
+/** The line a button waits for: in the first case that has one, first what is wrong, then what is missing. */
+export const firstInTheWay = (cases: readonly { made: CaseFromDraft }[]): LineKey | undefined =>
+  cases.flatMap(({ made }) => made.problems[0]?.line ?? made.missing[0] ?? [])[0];

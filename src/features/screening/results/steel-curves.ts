@@ -4,10 +4,11 @@ import { formatNumber, formatQuantity } from "@/components/quantity/format";
 import { precisionOf } from "@/components/quantity/precision";
 import { shownUnit } from "@/components/quantity/shown-units";
 import type { SteelInFire, SteelInFireItem } from "@/engine/cases/blowdown-result";
-import { fromSi } from "@/engine/units";
+import { fromSi, standardAtmospherePa } from "@/engine/units";
 import type { Showing } from "./limit-rows";
 
-export function steelCurves(item: SteelInFireItem, { shutInPressurePa }: SteelInFire, { system }: Showing) {
+/** initialPressurePa   at which the stress of the first row stands; the held one follows from it by the gauge pressures */
+export function steelCurves(item: SteelInFireItem, fire: SteelInFire, initialPressurePa: number, { system }: Showing) {
   const { timeS, wallTemperatureK, stressPa, strengthPa } = item.series;
   const minutes = (seconds: number) => fromSi("time", seconds, "min");
   const x = {
@@ -18,8 +19,8 @@ export function steelCurves(item: SteelInFireItem, { shutInPressurePa }: SteelIn
     format: (value: number) => formatNumber(value, { decimals: 1 }),
   };
   const stress = (pa: number) => (system === "SI" ? fromSi("pressure", pa, "MPa") : fromSi("pressureDifference", pa, "psi"));
-  // Thin-walled hoop stress on the mean diameter, as in the run, at the pressure held in the comparison.
-  const heldPa = (shutInPressurePa * (item.insideDiameterM + item.thicknessM)) / (2 * item.thicknessM);
+  const heldPa =
+    ((stressPa[0] ?? Number.NaN) * (fire.shutInPressurePa - standardAtmospherePa)) / (initialPressurePa - standardAtmospherePa);
   const times = timeS.map(minutes);
   const moment = (seconds: number) => formatQuantity("time", seconds, "min").text;
   const strengthAt = (seconds: number) => {

@@ -18,10 +18,11 @@ export function SteelFire({ run: { result } }: { run: CaseRunView }) {
   const shown = useShown();
   const showing = useShowing();
   const fire = result.steelInFire;
+  const { initialPressurePa } = result.summary;
   const governing = fire?.items.find(({ governs }) => governs) ?? fire?.items[0];
   const curves = useMemo(
-    () => (fire && governing ? steelCurves(governing, fire, showing) : undefined),
-    [fire, governing, showing],
+    () => (fire && governing ? steelCurves(governing, fire, initialPressurePa, showing) : undefined),
+    [fire, governing, initialPressurePa, showing],
   );
   if (!fire || !governing || !curves) return null;
   const minutes = (seconds: number | undefined) =>
