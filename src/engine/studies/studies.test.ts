@@ -85,11 +85,16 @@ describe("percentiles", () => {
   });
 
   it("name and count the samples that cannot be computed", () => {
-    const study = sampled({ samples: 10, inputs: [{ input: "start-pressure", distribution: "uniform", low: 0.01, high: 1 }] });
+    // From 0.05 to 2 bar: the lower half starts below the pressure outside, and nothing leaves.
+    const study = sampled({
+      of: { ...gas, run: { ...gas.run, stopPressurePa: 102000 } },
+      samples: 10,
+      inputs: [{ input: "start-pressure", distribution: "uniform", low: 0.001, high: 0.0395 }],
+    });
     const { samples, warnings, verdicts } = runStudy(study) as PercentileResult;
-    // Below 1.01325 bar at the start nothing leaves: the two lowest samples of ten start below 0.2 × 50 bar; only those under 2 % fail.
     expect(samples.computed + samples.failed.length).toBe(10);
-    expect(samples.failed.length).toBeGreaterThan(0);
+    expect(samples.failed.length).toBeGreaterThanOrEqual(5);
+    expect(samples.computed).toBeGreaterThanOrEqual(3);
     for (const failure of samples.failed) {
       expect(failure.message.length).toBeGreaterThan(10);
       expect(failure.inputs["start-pressure"]).toBeDefined();
