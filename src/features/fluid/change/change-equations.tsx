@@ -8,7 +8,7 @@ import { equationTitles } from "@/contracts/equation-titles";
 import type { EquationId } from "@/engine/cases/fluid-spec";
 import type { ComparedChange } from "@/engine/properties/compare-changes";
 import { spreadOf } from "../equations/equation-rows";
-import { FitnessCell } from "../equations/fitness-cell";
+import { FitnessCell, wideFirst } from "../equations/fitness-cell";
 import { stateWords } from "../state/phase-words";
 import { properties } from "./step-words";
 
@@ -30,7 +30,7 @@ export function ChangeEquations({
     head: `Δ${symbol}, ${shownUnit(quantity, system)}`,
   }));
   return (
-    <div className={stale ? "text-ink-3" : undefined}>
+    <div className={`${wideFirst} ${stale ? "text-ink-3" : ""}`}>
       <Table caption="Equations of state side by side" settled>
         <thead>
           <tr>

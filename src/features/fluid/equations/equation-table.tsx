@@ -1,6 +1,6 @@
 "use client";
 
-import { formatNumber } from "@/components/quantity/format";
+import { formatNumber, withUnit } from "@/components/quantity/format";
 import { useShown } from "@/components/quantity/quantity";
 import { shownUnit } from "@/components/quantity/shown-units";
 import { Cell, HeadCell, Row, Table } from "@/components/table/table";
@@ -8,10 +8,10 @@ import { useUnits } from "@/components/units/units-provider";
 import { equationTitles } from "@/contracts/equation-titles";
 import type { EquationId } from "@/engine/cases/fluid-spec";
 import type { Fitness, FitnessDeviation } from "@/engine/eos/fitness";
-import type { QuantityId } from "@/engine/units";
+import { fromSi, type QuantityId } from "@/engine/units";
 import { stateWords } from "../state/phase-words";
 import { spreadOf, type Ends } from "./equation-rows";
-import { FitnessCell } from "./fitness-cell";
+import { FitnessCell, wideFirst } from "./fitness-cell";
 
 type Props = { entries: readonly Fitness[]; inUse: EquationId; stale: boolean };
 
@@ -28,7 +28,7 @@ export function EquationTable({ entries, inUse, stale }: Props) {
   const against = best ? `Against ${best}` : "Against the best";
 
   return (
-    <div className={stale ? "text-ink-3" : undefined}>
+    <div className={`${wideFirst} ${stale ? "text-ink-3" : ""}`}>
       <Table caption="Equations of state side by side" settled>
         <thead>
           <tr>
@@ -89,15 +89,19 @@ export function EquationTable({ entries, inUse, stale }: Props) {
 }
 
 function Deviation({ deviation }: { deviation: FitnessDeviation }) {
-  const shown = useShown();
+  const { system } = useUnits();
+  const unit = shownUnit("molarEnergy", system);
+  const energy = formatNumber(
+    fromSi("molarEnergy", deviation.enthalpyJPerMol, unit),
+    { decimals: system === "SI" ? 3 : 0 },
+    { signed: true },
+  );
   if (deviation.otherPhase) return <span className="text-near">finds other phases</span>;
   const percent = formatNumber(deviation.densityPercent, { decimals: 1 }, { signed: true });
   return (
     <>
       <span className="block whitespace-nowrap">density {percent}&nbsp;%</span>
-      <span className="block whitespace-nowrap">
-        enthalpy {shown("molarEnergy", deviation.enthalpyJPerMol, { signed: true }).text}
-      </span>
+      <span className="block whitespace-nowrap">enthalpy {withUnit(energy, unit)}</span>
     </>
   );
 }

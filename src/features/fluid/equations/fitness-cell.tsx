@@ -1,6 +1,9 @@
 import type { FitnessVerdict } from "@/engine/eos/fitness";
 import { fitnessWords, isAdmitted } from "./fitness-words";
 
+/** Room for the words of the first column of a table, off phones. */
+export const wideFirst = "[&_thead_th:first-child]:w-[36%]";
+
 type Props = { title: string; verdict: FitnessVerdict; notes: readonly string[]; inUse: boolean };
 
 /** Name of an equation, whether it is the one in use, how fit it is and why. */

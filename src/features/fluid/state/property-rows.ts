@@ -8,7 +8,8 @@ export type PropertyRow = {
   quantity: QuantityId;
   /** Small type under the name. */
   note?: string;
-  signed?: boolean;
+  /** Decimals of a pure number, where the usual three figures are too few. */
+  decimals?: number;
   /** Of the whole; absent where only a phase has it. */
   overall?: number;
   phases: (number | undefined)[];
@@ -18,10 +19,9 @@ type Of = {
   name: string;
   quantity: QuantityId;
   note?: string;
+  decimals?: number;
   bulk?: (one: BulkProperties) => number;
   phase: (one: PhaseProperties) => number | undefined;
-  /** The whole has it too, where it is one phase. */
-  onePhase?: boolean;
 };
 
 /** Energies and heat capacities stand per mole or per mass; a molar value over the molar mass of its own phase. */
@@ -51,7 +51,7 @@ export function propertyRows({ overall, phases }: StateProperties, basis: Basis)
   const rows: Of[] = [
     both("Density", "density", (one) => one.densityKgPerM3),
     both("Molar volume", "molarVolume", (one) => one.molarVolumeM3PerMol),
-    both("Compressibility factor", "fraction", (one) => one.compressibility),
+    { ...both("Compressibility factor", "fraction", (one) => one.compressibility), decimals: 4 },
     both("Molar mass", "molarMass", (one) => one.molarMassKgPerMol),
     ...energies.map(({ key, name, of }) => both(name, of[basis], (one) => one[key] / per(one))),
     ...heatCapacities.map(({ key, name }): Of => ({
@@ -59,7 +59,7 @@ export function propertyRows({ overall, phases }: StateProperties, basis: Basis)
       quantity: basis === "mole" ? "molarEntropy" : "specificHeat",
       phase: (one) => one[key] / per(one),
     })),
-    { name: "Ratio of heat capacities", quantity: "fraction", phase: (one) => one.heatCapacityRatio },
+    { name: "Ratio of heat capacities", quantity: "fraction", decimals: 3, phase: (one) => one.heatCapacityRatio },
     { name: "Speed of sound", quantity: "speed", phase: (one) => one.soundSpeedMPerS },
     {
       name: "Joule-Thomson coefficient",
@@ -83,10 +83,11 @@ export function propertyRows({ overall, phases }: StateProperties, basis: Basis)
     },
   ];
   return rows
-    .map(({ name, quantity, note, bulk, phase }): PropertyRow => ({
+    .map(({ name, quantity, note, decimals, bulk, phase }): PropertyRow => ({
       name,
       quantity,
       ...(note === undefined ? {} : { note }),
+      ...(decimals === undefined ? {} : { decimals }),
       ...(bulk ? { overall: bulk(overall) } : {}),
       phases: phases.map(phase),
     }))

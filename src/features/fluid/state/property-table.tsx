@@ -1,6 +1,6 @@
 "use client";
 
-import { formatPercent } from "@/components/quantity/format";
+import { formatNumber, formatPercent } from "@/components/quantity/format";
 import { useShown } from "@/components/quantity/quantity";
 import { shownUnit } from "@/components/quantity/shown-units";
 import { Cell, HeadCell, Row, Table } from "@/components/table/table";
@@ -8,16 +8,17 @@ import { useUnits } from "@/components/units/units-provider";
 import type { StateProperties } from "@/engine/properties/state-properties";
 import type { Basis } from "./basis-switch";
 import { phaseWords } from "./phase-words";
-import { propertyRows } from "./property-rows";
+import { propertyRows, type PropertyRow } from "./property-rows";
 
 /** Every property of a state; of two phases each stands in a column of its own beside the whole. */
 export function PropertyTable({ state, basis, stale }: { state: StateProperties; basis: Basis; stale: boolean }) {
   const shown = useShown();
   const { system } = useUnits();
   const two = state.phases.length > 1;
-  const write = (quantity: Parameters<typeof shown>[0], value: number | undefined) => shown(quantity, value).number;
+  const write = ({ quantity, decimals }: PropertyRow, value: number | undefined) =>
+    decimals === undefined ? shown(quantity, value).number : formatNumber(value, { decimals });
   return (
-    <div className={stale ? "text-ink-3" : undefined}>
+    <div className={`${two ? "" : "max-w-[760px]"} ${stale ? "text-ink-3" : ""}`}>
       <Table caption="Properties at the state" settled stack={false}>
         <thead>
           <tr>
@@ -56,17 +57,17 @@ export function PropertyTable({ state, basis, stale }: { state: StateProperties;
               </Row>
             </>
           )}
-          {propertyRows(state, basis).map(({ name, note, quantity, overall, phases }) => (
-            <Row key={name}>
+          {propertyRows(state, basis).map((row) => (
+            <Row key={row.name}>
               <Cell head>
-                {name}
-                {note && <span className="block text-label text-ink-3">{note}</span>}
+                {row.name}
+                {row.note && <span className="block text-label text-ink-3">{row.note}</span>}
               </Cell>
-              <Cell muted>{shownUnit(quantity, system)}</Cell>
-              {two && <Cell numeric>{write(quantity, overall)}</Cell>}
-              {phases.map((value, i) => (
+              <Cell muted>{shownUnit(row.quantity, system)}</Cell>
+              {two && <Cell numeric>{write(row, row.overall)}</Cell>}
+              {row.phases.map((value, i) => (
                 <Cell key={i} numeric strong>
-                  {write(quantity, value)}
+                  {write(row, value)}
                 </Cell>
               ))}
             </Row>

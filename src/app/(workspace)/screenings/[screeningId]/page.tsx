@@ -1,5 +1,7 @@
 import type { Metadata } from "next";
 import { notFound } from "next/navigation";
+import { ButtonLink } from "@/components/button/button-link";
+import { pages } from "@/contracts/paths";
 import { WithdrawButton } from "@/features/approval/withdraw-button";
 import { ScreeningSheet } from "@/features/screening/results/screening-sheet";
 import { requireViewer } from "@/server/auth/viewer";
@@ -15,7 +17,12 @@ export default async function ScreeningPage({ params, searchParams }: Props) {
   const [{ screeningId }, { rev }] = await Promise.all([params, searchParams]);
   const screening = await getScreening(viewer, screeningId, revisionAsked(rev));
   if (!screening) notFound();
-  const { prepared, may } = screening;
-  const acts = may.withdraw && prepared && <WithdrawButton screeningId={screening.id} prepared={prepared} />;
+  const { prepared, may, rev: shown, revisions } = screening;
+  const acts = (
+    <>
+      <ButtonLink href={pages.fluid(screening.id, shown === revisions[0]?.rev ? undefined : shown)}>Fluid</ButtonLink>
+      {may.withdraw && prepared && <WithdrawButton screeningId={screening.id} prepared={prepared} />}
+    </>
+  );
   return <ScreeningSheet screening={screening} acts={acts} />;
 }

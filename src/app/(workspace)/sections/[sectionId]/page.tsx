@@ -19,6 +19,7 @@ export default async function SectionPage({ params }: { params: Promise<{ sectio
   if (!section) notFound();
   const { id, tag, name, description, facility, screenings } = section;
   const mayCreate = viewer.role === "engineer";
+  const [newest] = screenings;
 
   return (
     <Sheet>
@@ -31,6 +32,7 @@ export default async function SectionPage({ params }: { params: Promise<{ sectio
       />
       <SheetBody>
         <PageHead title={`${tag} ${name}`}>
+          {newest && <ButtonLink href={pages.fluid(newest.id)}>{`Fluid of ${newest.record}`}</ButtonLink>}
           {mayCreate && (
             <ButtonLink kind="main" href={pages.newScreening(id)}>
               New screening

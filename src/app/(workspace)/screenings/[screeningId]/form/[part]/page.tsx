@@ -3,6 +3,7 @@ import { notFound } from "next/navigation";
 import { partBySlug } from "@/contracts/lines/parts";
 import { PartForm } from "@/features/screening/form/part-form";
 import { requireViewer } from "@/server/auth/viewer";
+import { FluidOfDraft } from "../fluid-of-draft";
 
 type Props = { params: Promise<{ screeningId: string; part: string }> };
 
@@ -14,5 +15,5 @@ export default async function PartPage({ params }: Props) {
   await requireViewer();
   const part = partBySlug((await params).part);
   if (!part) notFound();
-  return <PartForm slug={part.slug} />;
+  return <PartForm slug={part.slug} below={part.slug === "fluid" && <FluidOfDraft />} />;
 }
