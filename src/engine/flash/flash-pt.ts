@@ -132,6 +132,7 @@ function keepTwo(z: ArrayLike<number>, { moles, totals }: ReturnType<typeof thre
 
 /** A tangent-plane distance this small is the round-off of two phases that have just been found equal. */
 const thirdPhaseDistance = -1e-7;
+const onTheBoundary = -1e-8;
 
 function convergedSplit(
   model: FluidModel,
@@ -171,6 +172,8 @@ function convergedSplit(
   for (let alone = z.length - 1; alone >= 0; alone--) {
     if (z[alone]! > 1e-9 && accepted(splitOffComponent(model, T, p, z, alone, work))) return true;
   }
+  // On the boundary itself the second phase is too little to be found, and too little to matter.
+  if (test.tangentPlaneDistance > onTheBoundary) return false;
   throw new EngineError("no-convergence", "the feed is unstable, but the two phases could not be found", {
     temperatureK: T,
     pressurePa: p,
