@@ -132,7 +132,7 @@ function keepTwo(z: ArrayLike<number>, { moles, totals }: ReturnType<typeof thre
 
 /** A tangent-plane distance this small is the round-off of two phases that have just been found equal. */
 const thirdPhaseDistance = -1e-7;
-const onTheBoundary = -1e-8;
+const onTheBoundary = -1e-7;
 
 function convergedSplit(
   model: FluidModel,
