@@ -18,6 +18,8 @@ export const pages = {
   /** A line of a case other than A opens that case; `letter` opens one without going to a line. */
   part: (screeningId: string, part: PartSlug, line?: string, letter: string | undefined = /^[A-Z]/.exec(line ?? "")?.[0]) =>
     `/screenings/${screeningId}/form/${part}${letter && letter !== "A" ? `?case=${letter}` : ""}${line ? `#line-${line}` : ""}`,
+  /** Two computed cases or revisions side by side. */
+  compare: (screeningId: string) => `/screenings/${screeningId}/compare`,
   /** The bores between too slow in the fire case and too cold in the cold one. */
   window: (screeningId: string) => `/screenings/${screeningId}/form/window`,
   fluid: (screeningId: string, rev?: number) => `/screenings/${screeningId}/fluid${rev ? `?rev=${rev}` : ""}`,

@@ -27,6 +27,9 @@ const distanceOfLimit: Record<AssessedLimit["unit"], QuantityId> = {
 export const quantityOfLimit = ({ unit, difference }: AssessedLimit): QuantityId =>
   (difference ? distanceOfLimit : quantities)[unit];
 
+/** What lies between value and limit. */
+export const distanceQuantity = ({ unit }: AssessedLimit): QuantityId => distanceOfLimit[unit];
+
 /** The target was never reached: the engine then gives the end of the run for its time, so that the line can be judged. */
 export const targetMissed = ({ limits, summary }: CaseRunView["result"]): boolean =>
   summary.timeToTargetPressureS === undefined &&
@@ -59,7 +62,7 @@ function limitRow(limit: AssessedLimit, no: string, run: CaseRunView, { system, 
 
   return {
     no,
-    title: titleOf(limit, run, { system, barometricPressurePa }),
+    title: limitTitle(limit, run, { system, barometricPressurePa }),
     computed: missed ? "not reached" : (pair?.value.text ?? one(value)),
     limit: limitText && `${sense === "at-most" ? "at most" : "not below"} ${limitText}`,
     inHand:
@@ -80,7 +83,11 @@ function limitRow(limit: AssessedLimit, no: string, run: CaseRunView, { system, 
   };
 }
 
-function titleOf({ id, title }: AssessedLimit, { document }: CaseRunView, { system, barometricPressurePa }: Showing): string {
+export function limitTitle(
+  { id, title }: AssessedLimit,
+  { document }: CaseRunView,
+  { system, barometricPressurePa }: Showing,
+): string {
   const target = document.limits?.targetPressurePa;
   if (id !== "time-to-target" || target === undefined) return title;
   return `Time to ${formatQuantity("pressure", target, shownUnit("pressure", system), { barometricPressurePa }).text}`;

@@ -29,6 +29,9 @@ export function SheetActions({ screening, more }: { screening: ScreeningView; mo
       {may.revise && <NewRevisionButton screeningId={id} rev={rev} returned={state === "returned"} />}
       {draft && prepared && may.edit && <ButtonLink href={pages.part(id, "scope")}>Back to the lines</ButtonLink>}
       {draft && may.compute && prepared && !prepared.stale && <ComputeButton draft={draft}>Compute again</ComputeButton>}
+      {prepared && (prepared.content.cases.length > 1 || screening.revisions.length > 1) && (
+        <ButtonLink href={pages.compare(id)}>Side by side</ButtonLink>
+      )}
       {prepared && <DataButton prepared={prepared} />}
       {more}
     </ButtonRow>
