@@ -10,6 +10,7 @@ import { equationIds } from "@/engine/cases/fluid-spec";
 import type { NozzleCase } from "@/engine/cases/nozzle-case";
 import { steelIds } from "@/engine/steels/steel";
 import { choice, describe, fraction, pressure, quantity, sumToOne, temperature, text } from "./case-fields";
+import { sizingCase, studyCase } from "./case-studies";
 import { diameter, geometry, sectionPart, start, wall } from "./case-vessel";
 import { readJsonText } from "./json-text";
 import { withVesselsJoined } from "./joined-vessels";
@@ -284,10 +285,20 @@ export const methodCaseSchema = z.strictObject({
 
 export const caseFileSchema = z.discriminatedUnion(
   "kind",
-  [pathCaseSchema, flashCaseSchema, nozzleCaseSchema, blowdownCaseSchema, methodCaseSchema],
+  [
+    pathCaseSchema,
+    flashCaseSchema,
+    nozzleCaseSchema,
+    blowdownCaseSchema,
+    methodCaseSchema,
+    sizingCase(blowdownCaseSchema),
+    studyCase(blowdownCaseSchema),
+  ],
   {
     error: ({ input }) =>
-      isObject(input) ? 'Use one of "path", "flash", "nozzle", "blowdown", "method".' : "Give one case document, a JSON object.",
+      isObject(input)
+        ? 'Use one of "path", "flash", "nozzle", "blowdown", "method", "sizing", "study".'
+        : "Give one case document, a JSON object.",
   },
 );
 

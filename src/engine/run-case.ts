@@ -6,13 +6,17 @@ import { confirm } from "./cases/blowdown/confirm";
 import type { FlashCase, FlashResult } from "./cases/flash-case";
 import type { NozzleCase, NozzleResult } from "./cases/nozzle-case";
 import type { PathCase, PathResult } from "./cases/path-case";
+import type { SizingCase, SizingResult } from "./cases/sizing-case";
+import type { StudyCase, StudyResult } from "./cases/study-case";
 import { runNozzle } from "./cases/nozzle/run-nozzle";
 import { runFlash } from "./flash/run-flash";
 import { runMethod, type MethodCase, type MethodResult } from "./methods/run-method";
 import { runPath } from "./path/run-path";
+import { runSizing } from "./sizing/run-sizing";
+import { runStudy } from "./studies/run-study";
 
-export type EngineCase = PathCase | FlashCase | NozzleCase | BlowdownCase | MethodCase;
-export type EngineResult = PathResult | FlashResult | NozzleResult | BlowdownResult | MethodResult;
+export type EngineCase = PathCase | FlashCase | NozzleCase | BlowdownCase | MethodCase | SizingCase | StudyCase;
+export type EngineResult = PathResult | FlashResult | NozzleResult | BlowdownResult | MethodResult | SizingResult | StudyResult;
 
 export type RunContext = Pick<BlowdownOptions, "onProgress" | "isCancelled" | "coarse"> & {
   engineVersion: string;
@@ -35,7 +39,11 @@ export function runCase(document: EngineCase, context: RunContext): EngineResult
     case "method":
       return runMethod(document);
     case "blowdown":
-      return stamp(() => runBlowdown(document, context), context);
+      return stamp<BlowdownResult>(() => runBlowdown(document, context), context);
+    case "sizing":
+      return stamp<SizingResult>(() => runSizing(document, context), context);
+    case "study":
+      return stamp<StudyResult>(() => runStudy(document, context), context);
   }
 }
 
@@ -45,14 +53,25 @@ export function runConfirmed(
   context: RunContext,
 ): { result: BlowdownResult; confirmation: Confirmation } {
   const half = (from: number) => (part: number) => context.onProgress?.(from + part / 2);
-  const result = stamp(() => runBlowdown(document, { ...context, onProgress: half(0) }), context);
+  const result = stamp<BlowdownResult>(() => runBlowdown(document, { ...context, onProgress: half(0) }), context);
   const relativeTolerance = result.numerics.relativeTolerance / 10;
-  const tighter = stamp(() => runBlowdown(document, { ...context, relativeTolerance, onProgress: half(0.5) }), context);
+  const tighter = stamp<BlowdownResult>(
+    () => runBlowdown(document, { ...context, relativeTolerance, onProgress: half(0.5) }),
+    context,
+  );
   return { result, confirmation: confirm(result, tighter) };
 }
 
-function stamp(work: () => ReturnType<typeof runBlowdown>, { engineVersion, caseSha256, now }: RunContext): BlowdownResult {
+type Timed = { format: string; kind: string; engineVersion: string; caseSha256: string; numerics: { wallClockMs: number } };
+/** A result before it is stamped; each of several kinds by itself. */
+type Unstamped<Result extends Timed> = Result extends Timed
+  ? Omit<Result, "engineVersion" | "caseSha256" | "numerics"> & { numerics: Omit<Result["numerics"], "wallClockMs"> }
+  : never;
+
+function stamp<Result extends Timed>(work: () => Unstamped<Result>, { engineVersion, caseSha256, now }: RunContext): Result {
   const started = now?.() ?? 0;
-  const { format, kind, numerics, ...body } = work();
-  return { format, kind, engineVersion, caseSha256, ...body, numerics: { ...numerics, wallClockMs: (now?.() ?? 0) - started } };
+  const { format, kind, numerics, ...body } = work() as Unstamped<Timed>;
+  const wallClockMs = (now?.() ?? 0) - started;
+  const stamped: unknown = { format, kind, engineVersion, caseSha256, ...body, numerics: { ...numerics, wallClockMs } };
+  return stamped as Result; // exactly what `Unstamped` had left out is put back
 }

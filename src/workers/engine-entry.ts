@@ -103,9 +103,9 @@ function refusing<T extends Computed>(work: () => T): T | Exclude<Outcome, Compu
   }
 }
 
-const hashable = (result: EngineResult): string => canonicalText(result.kind === "blowdown" ? withoutClock(result) : result);
+const hashable = (result: EngineResult): string => canonicalText("numerics" in result ? withoutClock(result) : result);
 
-function withoutClock({ numerics, ...rest }: BlowdownResult) {
+function withoutClock({ numerics, ...rest }: Extract<EngineResult, { numerics: unknown }>) {
   const { wallClockMs: _wallClockMs, ...counted } = numerics;
   return { ...rest, numerics: counted };
 }

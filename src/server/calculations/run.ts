@@ -12,5 +12,5 @@ export type CalculationAnswer = { caseSha256: string; result: EngineResult; caut
 export async function calculate(viewer: Viewer, document: unknown): Promise<CalculationAnswer> {
   authorise(viewer, "calculation.run");
   const { caseSha256, result } = await runOnce(document);
-  return { caseSha256, result, cautions: result.kind === "blowdown" ? result.cautions : [screeningCaution.words] };
+  return { caseSha256, result, cautions: "cautions" in result ? result.cautions : [screeningCaution.words] };
 }
