@@ -10,12 +10,12 @@ import { fitness, type Fitness } from "@/engine/eos/fitness";
 import { phaseEnvelope, type PhaseEnvelope } from "@/engine/flash/phase-envelope";
 import { runPath } from "@/engine/path/run-path";
 import { compareChanges, type ComparedChange } from "@/engine/properties/compare-changes";
-import { diagramLines, type DiagramLines } from "@/engine/properties/diagram-lines";
+import { diagramLines, type DiagramLines, type KnownEnvelope } from "@/engine/properties/diagram-lines";
 import { stateProperties, type StateProperties } from "@/engine/properties/state-properties";
 
 export type FluidAsk =
   | { kind: "envelope"; fluid: FluidSpec }
-  | { kind: "lines"; fluid: FluidSpec; known: Pick<PhaseEnvelope, "critical" | "cricondenbar"> }
+  | { kind: "lines"; fluid: FluidSpec; known: KnownEnvelope }
   | { kind: "state"; fluid: FluidSpec; point: StatePoint }
   | { kind: "equations"; fluid: FluidSpec; point: StatePoint }
   | { kind: "change"; document: PathCase }

@@ -37,19 +37,21 @@ interface Node {
 }
 
 /**
- * The phase envelope of a mixture, traced from its dew point at 1 bar: at each point the unknown that changes fastest is the one
+ * The phase envelope of a mixture, or the line of another vapour share inside it, traced from 1 bar: at each point the unknown that changes fastest is the one
  * that is set, so the trace runs through temperature and pressure maxima, and over the critical point by changing the sign of ln K.
  *
+ * share    vapour mole fraction Q of the line, above 0. Past the critical point the phases have changed places: the line named "bubble" is
+ *          then that of 1 − Q. A pure fluid has one line for every share
  * Source   Michelsen, Fluid Phase Equilib. 4 (1980) 1-10.
- * Throws   EngineError "no-convergence" when no first dew point is found
+ * Throws   EngineError "no-convergence" when no first point is found
  */
-export function phaseEnvelope(model: FluidModel, z: ArrayLike<number> = model.feed): PhaseEnvelope {
+export function phaseEnvelope(model: FluidModel, z: ArrayLike<number> = model.feed, share = 1): PhaseEnvelope {
   if (onlyComponent(z) >= 0) return pureEnvelope(model, z);
   const count = z.length;
   const size = count + 2;
   const work = createSaturationWork(count);
-  const first = saturationPoint(model, z, 1, { lnP: Math.log(startPressurePa) }, work);
-  let node = nodeAt(model, z, pack(first), work);
+  const first = saturationPoint(model, z, share, { lnP: Math.log(startPressurePa) }, work);
+  let node = nodeAt(model, z, share, pack(first), work);
   const nodes: Node[] = [node];
   let direction = Math.sign(node.tangent[count + 1]!) || 1; // up in pressure
   let step = 0.1;
@@ -66,7 +68,7 @@ export function phaseEnvelope(model: FluidModel, z: ArrayLike<number> = model.fe
     for (let i = 0; i < count; i++) point.lnK[i] = x[i]! + along * tangent[i]!;
     point.lnT = x[count]! + along * tangent[count]!;
     point.lnP = x[count + 1]! + along * tangent[count + 1]!;
-    const iterations = solveSaturation(model, z, 1, point, specified, value, work, 10);
+    const iterations = solveSaturation(model, z, share, point, specified, value, work, 10);
     const next = pack(point);
     if (iterations < 0 || jumped(x, next, size)) {
       step *= 0.4;
@@ -78,7 +80,7 @@ export function phaseEnvelope(model: FluidModel, z: ArrayLike<number> = model.fe
     }
     if (isRatio && x[specified]! * value < 0) crossed = nodes.length;
     const previous = node;
-    node = nodeAt(model, z, next, work);
+    node = nodeAt(model, z, share, next, work);
     // Keep going the same way when the specified unknown changes.
     direction = Math.sign(dot(node.tangent, difference(next, previous.x)));
     nodes.push(node);
@@ -130,10 +132,16 @@ function jumped(from: Float64Array, to: Float64Array, size: number): boolean {
 }
 
 /** Tangent at a converged point, scaled to the unknown that changes fastest. */
-function nodeAt(model: FluidModel, z: ArrayLike<number>, x: Float64Array, work: ReturnType<typeof createSaturationWork>): Node {
+function nodeAt(
+  model: FluidModel,
+  z: ArrayLike<number>,
+  share: number,
+  x: Float64Array,
+  work: ReturnType<typeof createSaturationWork>,
+): Node {
   const count = z.length;
   const size = count + 2;
-  evaluateSaturation(model, z, 1, unpack(x, count), work);
+  evaluateSaturation(model, z, share, unpack(x, count), work);
   // Any independent row fixes the tangent's length; ln p − ln T is one that never stalls at a maximum of either.
   work.jacobian[(count + 1) * size + count + 1] = 1;
   work.jacobian[(count + 1) * size + count] = -0.37;

@@ -1,8 +1,7 @@
 import type { StatePoint } from "../cases/path-case";
 import { EngineError } from "../errors";
 import type { FluidModel } from "../eos/fluid-model";
-import { flashPQ } from "../flash/flash-quality";
-import type { PhaseEnvelope } from "../flash/phase-envelope";
+import { phaseEnvelope } from "../flash/phase-envelope";
 import { onlyComponent } from "../flash/saturation-pure";
 import { carbonDioxideTriple } from "../solids/solid-lines";
 import { carbonDioxideFrostLine } from "./carbon-dioxide-frost";
@@ -11,10 +10,7 @@ import { hydrateLine } from "./hydrate-line";
 const lowestPa = 1e5;
 /** Hydrate and frost are drawn at least this high [Pa], where the envelope is lower. */
 const leastTopPa = 1.5e7;
-const qualitySteps = 16;
-/** A step along a line of constant vapour share is smaller than this [K], or it is another branch. */
-const largestStepK = 25;
-/** Lines of constant vapour share inside the envelope [mol/mol]. */
+/** Lines of constant vapour share inside the envelope [mol/mol]; each trace gives the opposite share as well. */
 const shares = [0.9, 0.5] as const;
 
 /** What is drawn into the pressure-temperature diagram of a fluid beside its bubble and dew line. */
@@ -30,45 +26,41 @@ export interface DiagramLines {
   triple?: StatePoint;
 }
 
+/** What is known of the envelope before the other lines are asked for. */
+export type KnownEnvelope = { traced: boolean; cricondenbarPa?: number };
+
 /**
  * Lines of constant vapour share inside an envelope, and where hydrate and solid carbon dioxide start. The envelope itself comes from
  * `phaseEnvelope` and is drawn first, as it is ready long before.
  *
- * known   the points that the trace of the envelope found; without one the lines of vapour share are left out
+ * known   what the trace of the envelope found; where it failed the lines of vapour share are left out
  */
-export function diagramLines(model: FluidModel, known: Pick<PhaseEnvelope, "critical" | "cricondenbar">): DiagramLines {
+export function diagramLines(model: FluidModel, known: KnownEnvelope): DiagramLines {
   const only = onlyComponent(model.feed);
-  const topPa = Math.max(leastTopPa, known.cricondenbar?.pressurePa ?? 0);
+  const topPa = Math.max(leastTopPa, known.cricondenbarPa ?? 0);
   const hydrate = hydrateLine(model, lowestPa, topPa);
   return {
-    shares: only < 0 ? shares.map((share) => shareLine(model, share, known)) : [],
+    shares: only < 0 && known.traced ? shares.flatMap((share) => shareLines(model, share)) : [],
     ...("points" in hydrate ? { hydrate } : { withoutHydrate: hydrate.refused }),
     solidCarbonDioxide: carbonDioxideFrostLine(model, lowestPa, topPa),
     ...(model.componentIds[only] === "carbon_dioxide" ? { triple: carbonDioxideTriple } : {}),
   };
 }
 
-/** From 1 bar to the critical pressure; the line ends where a point is not found or lies on another branch. */
-function shareLine(model: FluidModel, vapourMoleFraction: number, known: Pick<PhaseEnvelope, "critical" | "cricondenbar">) {
-  const points: StatePoint[] = [];
-  const topPa = (known.critical ?? known.cricondenbar)?.pressurePa;
-  if (topPa === undefined || topPa <= lowestPa) return { vapourMoleFraction, points };
-  for (let k = 0; k < qualitySteps; k++) {
-    const pressurePa = lowestPa * (topPa / lowestPa) ** (k / qualitySteps);
-    const temperatureK = temperatureAt(model, vapourMoleFraction, pressurePa);
-    const last = points.at(-1);
-    if (temperatureK === undefined || (last && Math.abs(temperatureK - last.temperatureK) > largestStepK)) break;
-    points.push({ temperatureK, pressurePa });
-  }
-  if (known.critical && points.length === qualitySteps) points.push(known.critical);
-  return { vapourMoleFraction, points };
-}
-
-function temperatureAt(model: FluidModel, vapourMoleFraction: number, pressurePa: number): number | undefined {
+/** Two lines of one trace: the share itself up to the critical point, and beyond it the opposite one. Empty where it can't be traced. */
+function shareLines(model: FluidModel, share: number): DiagramLines["shares"] {
   try {
-    return flashPQ(model, { pressurePa, vapourMoleFraction }).temperatureK;
+    const { points, critical } = phaseEnvelope(model, model.feed, share);
+    const of = (line: "dew" | "bubble") => points.filter((point) => point.line === line);
+    const end = critical ? [critical] : [];
+    return [
+      { vapourMoleFraction: share, points: [...of("dew"), ...end] },
+      ...(share === 0.5 || of("bubble").length === 0
+        ? []
+        : [{ vapourMoleFraction: 1 - share, points: [...end, ...of("bubble")] }]),
+    ];
   } catch (error) {
-    if (error instanceof EngineError) return undefined;
+    if (error instanceof EngineError) return [];
     throw error;
   }
 }

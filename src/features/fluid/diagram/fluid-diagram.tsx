@@ -37,8 +37,8 @@ export function FluidDiagram({ envelope, ...props }: DiagramProps & { envelope: 
   const shown = useShown();
   const known = envelope.current ? envelope.value : null;
   // Without an envelope the other lines are asked for all the same: they do not rest on it.
-  const knownPoints = known ? pointsOf(known) : envelope.problem ? {} : undefined;
-  const lines = useFluidAnswer<"lines">(fluid && knownPoints && { kind: "lines", fluid, known: knownPoints });
+  const before = known ? knownOf(known) : envelope.problem ? { traced: false } : undefined;
+  const lines = useFluidAnswer<"lines">(fluid && before && { kind: "lines", fluid, known: before });
   const pure = fluid?.components.filter(({ moleFraction }) => moleFraction > 0).length === 1;
 
   const write = useMemo(
@@ -96,7 +96,7 @@ export function FluidDiagram({ envelope, ...props }: DiagramProps & { envelope: 
   );
 }
 
-const pointsOf = ({ critical, cricondenbar }: PhaseEnvelope) => ({
-  ...(critical ? { critical } : {}),
-  ...(cricondenbar ? { cricondenbar } : {}),
+const knownOf = ({ cricondenbar }: PhaseEnvelope) => ({
+  traced: true,
+  ...(cricondenbar ? { cricondenbarPa: cricondenbar.pressurePa } : {}),
 });
