@@ -3,6 +3,7 @@ import { readFileSync } from "node:fs";
 import { describe, expect, it } from "vitest";
 import { equationIds } from "@/engine/cases/fluid-spec";
 import { steelIds } from "@/engine/steels/steel";
+import { inputIds } from "@/engine/studies/inputs";
 import { headShapes } from "@/engine/vessel/head";
 import { runText } from "@/workers/engine-entry";
 
@@ -22,8 +23,8 @@ describe("the page of the case format", () => {
 
   it("covers every kind, steel, head and equation", () => {
     expect(new Set(examples.map((text) => (JSON.parse(text) as { kind: string }).kind))).toEqual(
-      new Set(["flash", "path", "nozzle", "method", "blowdown"]),
+      new Set(["flash", "path", "nozzle", "method", "blowdown", "sizing", "study"]),
     );
-    for (const word of [...steelIds, ...headShapes, ...equationIds]) expect(page).toContain(`\`${word}\``);
+    for (const word of [...steelIds, ...headShapes, ...equationIds, ...inputIds]) expect(page).toContain(`\`${word}\``);
   });
 });
