@@ -55,6 +55,37 @@ export function thinRoot(
   return newton(evaluate, point, p, rho, rho, ceiling, subcritical);
 }
 
+const scanSteps = 160;
+
+/**
+ * The rising places where p(ρ) crosses p, least dense first, from a walk over all densities: for isotherms so crooked that neither end leads
+ * to a root (GERG-2008 for very unlike components, far from what it was fitted to).
+ */
+export function scannedRoots(evaluate: (rho: number) => void, point: PressurePoint, p: number, ceiling: number): number[] {
+  const roots: number[] = [];
+  let before = 0;
+  let below = true;
+  for (let k = 1; k <= scanSteps; k++) {
+    const rho = ceiling * (k / scanSteps) ** 1.5;
+    evaluate(rho);
+    const isBelow = point.pressure < p;
+    if (below && !isBelow) {
+      let [low, high] = [before, rho];
+      for (let half = 0; half < 200 && high - low > 1e-15 * high; half++) {
+        const middle = 0.5 * (low + high);
+        evaluate(middle);
+        if (point.pressure < p) low = middle;
+        else high = middle;
+      }
+      evaluate(high);
+      if (point.slope > 0) roots.push(high);
+    }
+    below = isBelow;
+    before = rho;
+  }
+  return roots;
+}
+
 function newton(
   evaluate: (rho: number) => void,
   point: PressurePoint,

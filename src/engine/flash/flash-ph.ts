@@ -6,7 +6,7 @@ import type { Equilibrium } from "./equilibrium";
 import { flashPT } from "./flash-pt";
 import { lever, type Sides } from "./lever";
 import { mayHoldWater } from "./third-phase";
-import { onlyComponent, saturationAtPressure } from "./saturation-pure";
+import { onlyComponent, saturationAtPressure, type PureSaturation } from "./saturation-pure";
 
 /**
  * Equilibrium at given pressure and molar enthalpy. Enthalpy rises with temperature at constant pressure through every phase
@@ -141,8 +141,8 @@ function onePhase(model: FluidModel, p: number, target: PressureTarget, z: Array
 
 function pure(model: FluidModel, p: number, target: PressureTarget, z: ArrayLike<number>, guess: number): Equilibrium {
   const pc = model.criticalPressuresPa[onlyComponent(z)]!;
-  if (p < pc) {
-    const saturation = saturationAtPressure(model, p, z);
+  const saturation = p < pc ? boilingIfAny(model, p, z) : undefined;
+  if (saturation) {
     const vapour = model.phaseAtVolume(saturation.temperatureK, saturation.vapourVolume, z, createPhaseState());
     const liquid = model.phaseAtVolume(saturation.temperatureK, saturation.liquidVolume, z, createPhaseState());
     const quality = (target.value - read(target, liquid)) / (read(target, vapour) - read(target, liquid));
@@ -157,6 +157,16 @@ function pure(model: FluidModel, p: number, target: PressureTarget, z: ArrayLike
     return single(model, p, z, onePhase(model, p, target, z, start));
   }
   return single(model, p, z, onePhase(model, p, target, z, guess));
+}
+
+/** The boiling point at a pressure, or undefined where the fluid has none by its equation. */
+function boilingIfAny(model: FluidModel, p: number, z: ArrayLike<number>): PureSaturation | undefined {
+  try {
+    return saturationAtPressure(model, p, z);
+  } catch (error) {
+    if (error instanceof EngineError && error.code === "not-applicable") return undefined;
+    throw error;
+  }
 }
 
 function single(model: FluidModel, p: number, z: ArrayLike<number>, state: PhaseState): Equilibrium {

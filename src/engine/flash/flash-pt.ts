@@ -13,7 +13,7 @@ import {
   type TwoPhaseOutcome,
   type TwoPhaseWork,
 } from "./two-phase-pt";
-import { mostMixed } from "./verify-phases";
+import { furtherSearches, mostMixed } from "./verify-phases";
 import { wilsonLnK } from "./wilson";
 
 /**
@@ -73,7 +73,7 @@ function findSplit(model: FluidModel, T: number, p: number, z: ArrayLike<number>
 function furtherPhase(model: FluidModel, T: number, p: number, { vapour, liquid }: TwoPhaseWork): Float64Array | undefined {
   const tested = mostMixed([liquid.composition, vapour.composition]);
   const partner = tested === liquid.composition ? vapour.composition : liquid.composition;
-  const test = testStability(model, T, p, tested, { partner });
+  const test = testStability(model, T, p, tested, { partner, searches: furtherSearches(model, tested) });
   return test.tangentPlaneDistance > thirdPhaseDistance ? undefined : test.trialComposition;
 }
 
@@ -104,7 +104,8 @@ function withThirdPhase(
       three.phases.map(({ composition, molarVolume }, k) => ({ moleFraction: three.totals[k]!, composition, molarVolume })),
     );
     const composition = mostMixed(three.phases.map((phase) => phase.composition));
-    const complete = model.stability(T, p, composition).tangentPlaneDistance > thirdPhaseDistance;
+    const test = testStability(model, T, p, composition, { searches: furtherSearches(model, composition) });
+    const complete = test.tangentPlaneDistance > thirdPhaseDistance;
     return complete ? found : { ...found, missingPhase: true };
   }
   if (outcome === "vanished" && keepTwo(z, three, work) && minimiseGibbs(model, T, p, z, work) === "converged") {

@@ -174,8 +174,9 @@ function pure(
   state: TwoPhaseVolumes,
 ): Equilibrium {
   const v = target.molarVolume;
-  // A one-phase state in tension is no answer, and at its temperature the saturation pressure may be beyond all numbers.
-  if (single && single.pressurePa > 0 && !insideDome(model, single.temperatureK, v, z)) return assembleOne(model, single, z);
+  // A one-phase state in tension is no answer; nor is one so cold that its saturation pressure is beyond all numbers.
+  const outside = single && single.pressurePa > 0 && attempted(() => insideDome(model, single.temperatureK, v, z) === undefined);
+  if (outside) return assembleOne(model, single, z);
   const start = domeStart(model, v, z, single?.temperatureK);
   if (start === undefined) {
     throw new EngineError("no-convergence", "no equilibrium state has this energy at this volume", {

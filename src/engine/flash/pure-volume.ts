@@ -1,7 +1,7 @@
 import { createPhaseState, type FluidModel } from "../eos/fluid-model";
 import { EngineError } from "../errors";
 import { bracketedRoot } from "./bracketed-root";
-import { saturationAtTemperature, type PureSaturation } from "./saturation-pure";
+import { saturationAtTemperature, saturationIfAny, type PureSaturation } from "./saturation-pure";
 
 export type PureTarget = "energy" | "entropy";
 
@@ -15,8 +15,8 @@ const liquid = createPhaseState();
 export function insideDome(model: FluidModel, T: number, v: number, z: ArrayLike<number>): PureSaturation | undefined {
   const Tc = Math.max(...Array.from(z, (fraction, i) => (fraction > 0 ? model.criticalTemperaturesK[i]! : 0)));
   if (!(T < Tc)) return undefined;
-  const saturation = saturationAtTemperature(model, T, z);
-  return v > saturation.liquidVolume && v < saturation.vapourVolume ? saturation : undefined;
+  const saturation = saturationIfAny(model, T, z);
+  return saturation && v > saturation.liquidVolume && v < saturation.vapourVolume ? saturation : undefined;
 }
 
 /**

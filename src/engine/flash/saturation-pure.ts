@@ -69,7 +69,7 @@ export function saturationAtTemperature(model: FluidModel, T: number, z: ArrayLi
       const difference = lnPhi(liquid, p) - lnPhi(vapour, p);
       const slope = (p * (liquid - vapour)) / (R * T);
       const step = difference / slope;
-      if (Math.abs(step) <= 2e-16 || (Math.abs(step) < 1e-12 && Math.abs(step) >= 0.5 * previous)) {
+      if (Math.abs(step) <= 4e-15 || (Math.abs(step) < 1e-12 && Math.abs(step) >= 0.5 * previous)) {
         return { temperatureK: T, pressurePa: p, vapourVolume: vapour, liquidVolume: liquid };
       }
       // The liquid has the lower fugacity: the pressure is above saturation.
@@ -101,6 +101,12 @@ export function saturationAtPressure(model: FluidModel, p: number, z: ArrayLike<
       criticalPressurePa: pc,
     });
   }
+  if (!(Tc > model.temperatureRangeK[0])) {
+    throw new EngineError("not-applicable", "this fluid boils only below the temperatures at which its equation is evaluated", {
+      criticalTemperatureK: Tc,
+      minimumK: model.temperatureRangeK[0],
+    });
+  }
   const { residual, gasConstantJPerMolK: R } = model;
   const F = createResidualDerivatives(z.length);
   const internalEnergy = (T: number, v: number) => {
@@ -117,7 +123,14 @@ export function saturationAtPressure(model: FluidModel, p: number, z: ArrayLike<
   let previous = Infinity;
   for (let iteration = 0; iteration < 100; iteration++) {
     const T = 1 / y;
-    const found = saturationAtTemperature(model, T, z, iteration > 0 ? p : undefined);
+    const found = saturationIfAny(model, T, z, iteration > 0 ? p : undefined);
+    if (!found) {
+      // The equation's own critical temperature lies a little below the published one: nothing boils up here.
+      low = y;
+      if (high - low < 1e-13 * y) break;
+      y = Math.min(y * (1 + 1e-5), 0.5 * (low + high));
+      continue;
+    }
     const difference = Math.log(found.pressurePa) - lnTarget;
     const volume = found.vapourVolume - found.liquidVolume;
     const heat = internalEnergy(T, found.vapourVolume) - internalEnergy(T, found.liquidVolume) + found.pressurePa * volume;
@@ -134,4 +147,19 @@ export function saturationAtPressure(model: FluidModel, p: number, z: ArrayLike<
     y = next;
   }
   throw new EngineError("no-convergence", "the saturation temperature did not converge", { pressurePa: p });
+}
+
+/** Saturation at a temperature, or undefined where the fluid has none there. Throws "no-convergence". */
+export function saturationIfAny(
+  model: FluidModel,
+  T: number,
+  z: ArrayLike<number>,
+  guessPa?: number,
+): PureSaturation | undefined {
+  try {
+    return saturationAtTemperature(model, T, z, guessPa);
+  } catch (error) {
+    if (error instanceof EngineError && error.code === "not-applicable") return undefined;
+    throw error;
+  }
 }

@@ -1,7 +1,7 @@
 import type { FluidModel } from "../eos/fluid-model";
 import type { Equilibrium } from "./equilibrium";
 import { testStability } from "./stability";
-import { mostMixed } from "./verify-phases";
+import { furtherSearches, mostMixed } from "./verify-phases";
 
 /** A tangent-plane distance this small is the round-off of phases that have just been found equal. */
 const missing = -1e-7;
@@ -12,7 +12,8 @@ export function splitsFurther(model: FluidModel, { temperatureK, pressurePa, pha
   if (!light || !dense) return false;
   const tested = mostMixed([dense.composition, light.composition]);
   const partner = tested === dense.composition ? light.composition : dense.composition;
-  return testStability(model, temperatureK, pressurePa, tested, { partner }).tangentPlaneDistance < missing;
+  const searches = furtherSearches(model, tested);
+  return testStability(model, temperatureK, pressurePa, tested, { partner, searches }).tangentPlaneDistance < missing;
 }
 
 /** Water is what makes a third phase out of ordinary fluids. */

@@ -72,6 +72,7 @@ interface Work {
 function prepare(work: Work, z: ArrayLike<number>): { active: number; size: number } {
   let active = 0;
   for (let i = 0; i < z.length; i++) if (z[i]! > 0) work.index[active++] = i;
+  for (const amounts of work.trial) amounts.fill(0); // what is absent stays absent, whatever fluid was here before
   return { active, size: 2 * active + 3 };
 }
 

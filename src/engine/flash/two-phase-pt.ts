@@ -27,6 +27,8 @@ export type TwoPhaseOutcome = "converged" | "one-phase" | "failed";
 
 const substitutions = 30;
 const leastShare = 1e-13;
+/** ln K beyond which a component is in one phase alone for all that numbers can tell. */
+const extreme = 300;
 
 /**
  * Two phases of feed z at (T, p) from a first guess of ln K: accelerated successive substitution, each phase on its own root,
@@ -64,6 +66,7 @@ export function solveTwoPhase(
       lnK[i] = lnK[i]! + change;
       distinct = Math.max(distinct, Math.abs(lnK[i]!));
     }
+    if (!Number.isFinite(error)) return "failed";
     if (distinct < 1e-5) return "one-phase";
     const inside = work.beta > 0 && work.beta < 1;
     if (error < 1e-18 && !inside) return "one-phase";
@@ -167,6 +170,7 @@ function split(z: ArrayLike<number>, work: TwoPhaseWork): void {
   let liquidSum = 0;
   for (let i = 0; i < count; i++) {
     if (!(z[i]! > 0)) continue;
+    lnK[i] = Math.max(-extreme, Math.min(extreme, lnK[i]!));
     K[i] = Math.exp(lnK[i]!);
     vapourSum += z[i]! * K[i]!;
     liquidSum += z[i]! / K[i]!;

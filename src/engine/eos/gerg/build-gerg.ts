@@ -4,7 +4,8 @@ import type { Substance } from "../../substances/substance";
 import { deriveFluidModel } from "../derive-fluid-model";
 import type { FluidModel } from "../fluid-model";
 import { createIdealGasModel } from "../ideal-gas";
-import { gergComponents, gergConstants, gergHeatCapacity, gergValidity } from "./gerg-data";
+import { ReducedTerms } from "../reference/reduced-terms";
+import { gergComponents, gergConstants, gergHeatCapacity, gergResidualTerms, gergValidity } from "./gerg-data";
 import { GergResidual } from "./gerg-residual";
 
 /** A mixture of the 21 components of GERG-2008. Interaction parameters belong to the equation: `interaction` has no effect. */
@@ -32,6 +33,7 @@ export function buildGerg(fluid: FluidSpec, substances: readonly Substance[], fe
       ...substance,
       molarMassKgPerMol: row.molarMass_kg_per_mol,
       criticalTemperatureK: row.Tc_K,
+      criticalPressurePa: criticalPressure(substance.id),
       heatCapacity: gergHeatCapacity(substance.id),
       heatCapacityRangeK: gergValidity.extended.T_K,
     };
@@ -50,4 +52,19 @@ export function buildGerg(fluid: FluidSpec, substances: readonly Substance[], fe
       gergConstants.R,
     ),
   });
+}
+
+const criticalPressures = new Map<string, number>();
+
+/** p = ρc R Tc (1 + δ αr_δ) at δ = τ = 1: the pressure that the equation itself has at its critical temperature and density. */
+function criticalPressure(id: string): number {
+  let found = criticalPressures.get(id);
+  if (found === undefined) {
+    const { Tc_K, rhoc_mol_per_m3 } = gergComponents.get(id)!;
+    const terms = new ReducedTerms([gergResidualTerms(id)]);
+    terms.evaluate(1, 1);
+    found = rhoc_mol_per_m3 * gergConstants.R * Tc_K * (1 + terms.sums[1]!);
+    criticalPressures.set(id, found);
+  }
+  return found;
 }

@@ -1,13 +1,16 @@
 import { EngineError } from "../../errors";
-import { denseRoot, thinRoot, type PressurePoint } from "../density-roots";
-import type { ResidualDerivatives, ResidualModel, Root } from "../fluid-model";
+import { denseRoot, scannedRoots, thinRoot, type PressurePoint } from "../density-roots";
+import type { ResidualDerivatives, ResidualModel, Root, SaturationVolumes } from "../fluid-model";
 import { ReducedTerms, sumsPerGroup } from "../reference/reduced-terms";
 import { gergComponents, gergConstants, gergPair, gergResidualTerms } from "./gerg-data";
+import { saturationBySpinodals } from "../saturation-by-spinodals";
 import { ReducingFunction } from "./reducing-function";
 
 const densestReduced = 4.2;
 /** Above this reduced temperature no mixture of the 21 components has two density roots at one pressure. */
 const singleRootTemperature = 1.6;
+/** Reduced temperature above which a pure component's saturation is found between its spinodals. */
+const nearCritical = 0.97;
 
 /**
  * F = Σ n_i α_i(δ, τ) + ΣΣ_{i<j} n_i n_j F_ij α_ij(δ, τ)/n of GERG-2008, with δ = v_r(n)/(V n) and τ = T_r(n)/(n² T) as functions
@@ -238,9 +241,37 @@ export class GergResidual implements ResidualModel {
     else if (root === "liquid") rho = dense() ?? thin();
     else rho = this.lowerGibbs(thin(), dense(), p);
     if (rho === undefined) {
+      const roots = scannedRoots(this.pressureAt, this.point, p, ceiling);
+      const [first, last] = [roots[0], roots.at(-1)];
+      rho = root === "vapour" ? first : root === "liquid" ? last : this.lowerGibbs(first, last, p);
+    }
+    if (rho === undefined) {
       throw new EngineError("no-convergence", "no density satisfies GERG-2008", { temperatureK: T, pressurePa: p });
     }
     return 1 / rho;
+  }
+
+  /** Of a pure component above 0.97 of its critical temperature, where the general search for equal fugacities loses the two roots. */
+  saturation(T: number): SaturationVolumes | undefined {
+    const tau = this.temperature.value / T;
+    if (tau > 1 / nearCritical) return undefined;
+    const RT = gergConstants.R * T;
+    const isotherm = { pressure: 0, slope: 0, gibbs: 0 };
+    const evaluate = (rho: number) => {
+      const mix = this.mixSums(rho * this.volume.value, tau);
+      isotherm.pressure = rho * RT * (1 + mix[1]!);
+      isotherm.slope = RT * (1 + 2 * mix[1]! + mix[3]!);
+      isotherm.gibbs = mix[0]! + mix[1]! + Math.log(rho);
+    };
+    const found = saturationBySpinodals(evaluate, isotherm, 1 / this.volume.value, RT);
+    if (found) return found;
+    throw new EngineError(
+      "not-applicable",
+      "this fluid's isotherm has no loop: by its equation it is above its critical temperature",
+      {
+        temperatureK: T,
+      },
+    );
   }
 
   private lowerGibbs(thin: number | undefined, dense: number | undefined, p: number): number | undefined {
