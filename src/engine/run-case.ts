@@ -7,13 +7,13 @@ import type { FlashCase, FlashResult } from "./cases/flash-case";
 import type { NozzleCase, NozzleResult } from "./cases/nozzle-case";
 import type { PathCase, PathResult } from "./cases/path-case";
 import type { SizingCase, SizingResult } from "./cases/sizing-case";
-import type { StudyCase, StudyResult } from "./cases/study-case";
+import type { Outcome, StudyCase, StudyResult } from "./cases/study-case";
 import { runNozzle } from "./cases/nozzle/run-nozzle";
 import { runFlash } from "./flash/run-flash";
 import { runMethod, type MethodCase, type MethodResult } from "./methods/run-method";
 import { runPath } from "./path/run-path";
 import { runSizing } from "./sizing/run-sizing";
-import { runStudy } from "./studies/run-study";
+import { assembleStudy, runStudy } from "./studies/run-study";
 
 export type EngineCase = PathCase | FlashCase | NozzleCase | BlowdownCase | MethodCase | SizingCase | StudyCase;
 export type EngineResult = PathResult | FlashResult | NozzleResult | BlowdownResult | MethodResult | SizingResult | StudyResult;
@@ -60,6 +60,11 @@ export function runConfirmed(
     context,
   );
   return { result, confirmation: confirm(result, tighter) };
+}
+
+/** A study from the outcomes of its parts. */
+export function assembleParts(study: StudyCase, outcomes: readonly Outcome[], context: RunContext): StudyResult {
+  return stamp<StudyResult>(() => assembleStudy(study, outcomes), context);
 }
 
 type Timed = { format: string; kind: string; engineVersion: string; caseSha256: string; numerics: { wallClockMs: number } };

@@ -11,12 +11,16 @@ import { parseCase, parseCaseText, type CaseFile, type CaseProblem, type ParsedC
 import type { BlowdownResult, Confirmation } from "@/engine/cases/blowdown-result";
 import { EngineError } from "@/engine/errors";
 import { describeMethods } from "@/engine/methods/run-method";
-import { runCase, runConfirmed, type EngineResult } from "@/engine/run-case";
+import type { Outcome as RunOutcome, StudyCase } from "@/engine/cases/study-case";
+import { assembleParts, runCase, runConfirmed, type EngineResult } from "@/engine/run-case";
+import { planOf } from "@/engine/studies/plan";
+import { runPart } from "@/engine/studies/run-study";
 
 export type ErrorDocument = { format: "ebbmark-error/1"; code: string; problems: CaseProblem[] };
 
 /** `status` is the exit status of the command line: 0 computed, 2 invalid case, 3 valid but cannot be computed. */
-export type Outcome = Computed | { status: 2 | 3; error: ErrorDocument };
+export type Refused = { status: 2 | 3; error: ErrorDocument };
+export type Outcome = Computed | Refused;
 export type Computed = {
   status: 0;
   document: CaseFile;
@@ -46,7 +50,7 @@ export function runDocument(document: unknown, context: EntryContext): Outcome {
 }
 
 /** A blowdown and the same again at a tenfold tighter tolerance. */
-export function runDocumentTwice(document: unknown, context: EntryContext): ComputedTwice | Exclude<Outcome, Computed> {
+export function runDocumentTwice(document: unknown, context: EntryContext): ComputedTwice | Refused {
   const parsed = parseCase(document);
   if (!parsed.ok) return invalid(parsed.problems);
   const { document: complete } = parsed;
@@ -65,6 +69,37 @@ export function runDocumentTwice(document: unknown, context: EntryContext): Comp
       confirmationText: canonicalText({ ...confirmation, result: withoutClock(confirmation.result) }),
     };
   });
+}
+
+/** How many runs a study has; they do not depend on each other, and several workers may share them. */
+export function countStudyRuns(document: unknown): { status: 0; runs: number } | Refused {
+  return withStudy(document, (study) => ({ status: 0, runs: planOf(study).runs }));
+}
+
+/** Runs `from` up to, not including, `to` of a study. */
+export function runStudyPart(
+  document: unknown,
+  { from, to }: { from: number; to: number },
+  context: EntryContext,
+): { status: 0; outcomes: RunOutcome[] } | Refused {
+  return withStudy(document, (study) => ({ status: 0, outcomes: runPart(study, from, to, context) }));
+}
+
+/** The result of a study from what its parts left, in any order; also of one that was stopped before all were done. */
+export function assembleStudyParts(document: unknown, outcomes: readonly RunOutcome[], context: EntryContext): Outcome {
+  return withStudy(document, (study): Computed => {
+    const hashed = canonicalCase(study);
+    const result = assembleParts(study, outcomes, { ...context, caseSha256: hashed.caseSha256 });
+    return { status: 0, document: study, ...hashed, result, resultText: hashable(result) };
+  });
+}
+
+function withStudy<Answer extends { status: 0 }>(document: unknown, work: (study: StudyCase) => Answer): Answer | Refused {
+  const parsed = parseCase(document);
+  if (!parsed.ok) return invalid(parsed.problems);
+  const { document: complete } = parsed;
+  if (complete.kind !== "study") return invalid([{ path: "kind", message: "Only a study has parts. Run this kind as a whole." }]);
+  return refusing(() => work(complete));
 }
 
 export function canonicalCase(document: CaseFile): { caseText: string; caseSha256: string } {
@@ -90,7 +125,7 @@ const invalid = (problems: CaseProblem[]) => ({
 });
 
 /** A refusal of the engine becomes an error document; any other error is a fault of ours and goes on up. */
-function refusing<T extends Computed>(work: () => T): T | Exclude<Outcome, Computed> {
+function refusing<T extends { status: 0 }>(work: () => T): T | Refused {
   try {
     return work();
   } catch (error) {
