@@ -74,6 +74,18 @@ describe("the properties of a state", () => {
   });
 });
 
+describe("liquid water beside a hydrocarbon liquid", () => {
+  it("is named, and the ratios are those of vapour to the other liquid", () => {
+    const wet = stateProperties(model({ methane: 0.6, propane: 0.1, n_heptane: 0.2, water: 0.1 }), {
+      temperatureK: 300,
+      pressurePa: 30e5,
+    });
+    expect(wet.phases.map(({ kind, aqueous }) => (aqueous ? "water" : kind))).toEqual(["vapour", "liquid", "water"]);
+    const heptane = wet.components.findIndex(({ id }) => id === "n_heptane");
+    expect(wet.components[heptane]?.ratio).toBe(wet.phases[0]!.composition[heptane]! / wet.phases[1]!.composition[heptane]!);
+  });
+});
+
 describe("the lines of a diagram", () => {
   it("of vapour share are found again by a flash, and meet in the critical point", () => {
     const rich = model(richGas);

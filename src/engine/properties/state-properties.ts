@@ -22,6 +22,8 @@ export interface BulkProperties {
 
 export interface PhaseProperties extends BulkProperties {
   kind: PhaseKind;
+  /** A liquid that is mostly water, beside other components. */
+  aqueous: boolean;
   moleFraction: number;
   massFraction: number;
   heatCapacityVJPerMolK: number;
@@ -42,15 +44,16 @@ export interface StateProperties extends StatePoint {
   phase: PhaseKind | "two-phase";
   vapourMoleFraction: number;
   overall: BulkProperties;
-  /** One, or two with the vapour first. */
+  /** One, or up to three with the lightest first. */
   phases: PhaseProperties[];
+  /** `ratio` of a mole fraction in the lightest phase to that in the next one, the liquid without the water where there is one. */
   components: { id: string; moleFraction: number; ratio?: number }[];
   warnings: Warning[];
 }
 
 /**
  * Everything that is known of a fluid at (T, p): its phases with caloric, volumetric and transport properties, and the ratios
- * K_i = y_i/x_i where there are two.
+ * K_i = y_i/x_i where there are several.
  *
  * Source   docs/methods/equations-of-state.md, docs/methods/transport-properties.md
  * Throws   EngineError
@@ -63,7 +66,9 @@ export function stateProperties(model: FluidModel, point: StatePoint): StateProp
 export function propertiesOf(model: FluidModel, state: Equilibrium): StateProperties {
   const { temperatureK, pressurePa, phase, vapourMoleFraction } = state;
   const molarMass = model.mixtureMolarMass(model.feed);
-  const [vapour, liquid] = state.phases;
+  const phases = state.phases.map((one) => phaseProperties(model, one, molarMass));
+  const [lightest, ...others] = phases;
+  const beside = others.find(({ aqueous }) => !aqueous) ?? others[0];
   return {
     temperatureK,
     pressurePa,
@@ -78,9 +83,9 @@ export function propertiesOf(model: FluidModel, state: Equilibrium): StateProper
       enthalpyJPerMol: state.enthalpyJPerMol,
       entropyJPerMolK: state.entropyJPerMolK,
     },
-    phases: state.phases.map((one) => phaseProperties(model, one, molarMass)),
+    phases,
     components: model.componentIds.map((id, i) => {
-      const [y, x] = [vapour?.composition[i], liquid?.composition[i]];
+      const [y, x] = [lightest?.composition[i], beside?.composition[i]];
       const base = { id, moleFraction: model.feed[i]! };
       return y !== undefined && x !== undefined && x > 0 ? { ...base, ratio: y / x } : base;
     }),
@@ -91,9 +96,11 @@ export function propertiesOf(model: FluidModel, state: Equilibrium): StateProper
 function phaseProperties(model: FluidModel, phase: EquilibriumPhase, overallMolarMass: number): PhaseProperties {
   const { kind, moleFraction, composition, state } = phase;
   const molarMass = model.mixtureMolarMass(composition);
+  const water = model.componentIds.indexOf("water");
   const tension = kind === "liquid" ? liquidSurfaceTension(model, composition, state.temperatureK) : undefined;
   return {
     kind,
+    aqueous: kind === "liquid" && model.componentIds.length > 1 && (composition[water] ?? 0) > 0.5,
     moleFraction,
     massFraction: (moleFraction * molarMass) / overallMolarMass,
     molarMassKgPerMol: molarMass,

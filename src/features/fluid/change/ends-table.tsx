@@ -5,17 +5,19 @@ import { useShown } from "@/components/quantity/quantity";
 import { shownAbsolutePressure } from "@/components/quantity/shown-units";
 import { Cell, HeadCell, Row, Table } from "@/components/table/table";
 import type { PhaseProperties, StateProperties } from "@/engine/properties/state-properties";
-import { phaseWords, stateWords } from "../state/phase-words";
+import { phaseNames, stateWords } from "../state/phase-words";
 
 type Fact = { name: string; of: (state: StateProperties) => string };
 
 /** The phases at either end, side by side. */
 export function EndsTable({ from, to, stale }: { from: StateProperties; to: StateProperties; stale: boolean }) {
   const shown = useShown();
-  const each = (write: (phase: PhaseProperties) => string) => (state: StateProperties) =>
-    state.phases
-      .map((phase) => (state.phases.length > 1 ? `${phaseWords[phase.kind].toLowerCase()} ${write(phase)}` : write(phase)))
+  const each = (write: (phase: PhaseProperties) => string) => (state: StateProperties) => {
+    const names = phaseNames(state.phases);
+    return state.phases
+      .map((phase, i) => (names.length > 1 ? `${names[i]?.toLowerCase() ?? ""} ${write(phase)}` : write(phase)))
       .join(", ");
+  };
   const facts: Fact[] = [
     { name: "Pressure", of: ({ pressurePa }) => shown("pressure", pressurePa, { unit: shownAbsolutePressure }).text },
     { name: "Temperature", of: ({ temperatureK }) => shown("temperature", temperatureK).text },

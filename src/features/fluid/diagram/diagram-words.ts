@@ -4,10 +4,14 @@ import type { DiagramInput, RunPath } from "./phase-curves";
 
 type Write = { temperature: (si: number) => string; pressure: (si: number) => string };
 
-export function diagramNotes({ envelope, lines, pure, path }: DiagramInput, write: Write): string[] {
+export function diagramNotes({ envelope, lines, pure, wet, path }: DiagramInput, write: Write): string[] {
   const notes: string[] = [];
   const ended = envelope && endNote(envelope, pure, write);
   if (ended) notes.push(ended);
+  if (envelope && wet)
+    notes.push(
+      "The lines follow one new phase. With water in the composition, liquid water can stand outside them: the table of properties finds it.",
+    );
   if (path) notes.push(pathNote(path));
   if (lines?.hydrate) {
     notes.push(

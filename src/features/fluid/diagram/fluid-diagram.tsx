@@ -39,7 +39,8 @@ export function FluidDiagram({ envelope, ...props }: DiagramProps & { envelope: 
   // Without an envelope the other lines are asked for all the same: they do not rest on it.
   const before = known ? knownOf(known) : envelope.problem ? { traced: false } : undefined;
   const lines = useFluidAnswer<"lines">(fluid && before && { kind: "lines", fluid, known: before });
-  const pure = fluid?.components.filter(({ moleFraction }) => moleFraction > 0).length === 1;
+  const pure = isPure(fluid);
+  const wet = !pure && (fluid?.components.some(({ id, moleFraction }) => id === "water" && moleFraction > 0) ?? false);
 
   const write = useMemo(
     () => ({
@@ -52,9 +53,9 @@ export function FluidDiagram({ envelope, ...props }: DiagramProps & { envelope: 
     () => ({
       envelope: envelope.problem ? null : envelope.value,
       lines: lines.current ? lines.value : null,
-      ...{ pure, start, path, state },
+      ...{ pure, wet, start, path, state },
     }),
-    [envelope, lines, pure, start, path, state],
+    [envelope, lines, pure, wet, start, path, state],
   );
   const drawn = useMemo(() => drawDiagram(input, system), [input, system]);
   const notes = useMemo(() => diagramNotes(input, write), [input, write]);
@@ -95,6 +96,9 @@ export function FluidDiagram({ envelope, ...props }: DiagramProps & { envelope: 
     </div>
   );
 }
+
+export const isPure = (fluid: FluidSpec | undefined): boolean =>
+  fluid?.components.filter(({ moleFraction }) => moleFraction > 0).length === 1;
 
 const knownOf = ({ cricondenbar }: PhaseEnvelope) => ({
   traced: true,

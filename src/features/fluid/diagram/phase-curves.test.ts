@@ -62,6 +62,11 @@ describe("the words beside it", () => {
     expect(diagramNotes({ ...input, path: { ...path, vapourMoleFraction: [1, 1, 1] } }, write)[0]).toMatch(/stays one phase/);
   });
 
+  it("say that liquid water can stand outside the lines", () => {
+    expect(diagramNotes({ ...input, wet: true }, write).join(" ")).toMatch(/liquid water can stand outside/);
+    expect(diagramNotes(input, write).join(" ")).not.toMatch(/water/);
+  });
+
   it("never let a line that was lost pass for its end", () => {
     const lost: PhaseEnvelope = { ...envelope, endedBy: "lost" };
     expect(diagramNotes({ ...input, envelope: lost }, write)[0]).toMatch(/the next point was not found/);

@@ -17,6 +17,8 @@ export type DiagramInput = {
   envelope: PhaseEnvelope | null;
   lines: DiagramLines | null;
   pure: boolean;
+  /** Water is present beside other components. */
+  wet?: boolean;
   start?: StatePoint | undefined;
   path?: RunPath | undefined;
   /** Another state to be marked. */

@@ -1,8 +1,8 @@
 import type { FitnessVerdict } from "@/engine/eos/fitness";
 import { fitnessWords, isAdmitted } from "./fitness-words";
 
-/** Room for the words of the first column of a table, off phones. */
-export const wideFirst = "[&_thead_th:first-child]:w-[36%]";
+/** Room for the words of the first two columns of a table, off phones. */
+export const wideFirst = "[&_thead_th:first-child]:w-[34%] [&_thead_th:nth-child(2)]:w-[14%]";
 
 type Props = { title: string; verdict: FitnessVerdict; notes: readonly string[]; inUse: boolean };
 

@@ -10,7 +10,7 @@ import { SheetWithMargin } from "@/components/shell/sheet";
 import { WaitingLines } from "@/components/states/waiting";
 import { useUnits } from "@/components/units/units-provider";
 import type { FluidSpec } from "@/engine/cases/fluid-spec";
-import { FluidDiagram, useEnvelope } from "../diagram/fluid-diagram";
+import { FluidDiagram, isPure, useEnvelope } from "../diagram/fluid-diagram";
 import { FluidEngine, useFluidAnswer } from "../engine/fluid-engine";
 import { EquationTable } from "../equations/equation-table";
 import { stateFromText, stateToText } from "../keep/state-text";
@@ -67,14 +67,18 @@ function FluidPage({ titleBlock, subject, equationTitle, edits, changeHref }: Pr
   const [typed, setTyped] = useKept<TypedState>(stateCodec, () => typedState(start ?? ambient, system));
   const envelope = useEnvelope(fluid);
   const atStart = useFluidAnswer<"state">(fluid && { kind: "state", fluid, point: start ?? ambient });
-  const pure = fluid?.components.filter(({ moleFraction }) => moleFraction > 0).length === 1;
 
   return (
     <SheetWithMargin
       titleBlock={titleBlock}
       margin={
         <>
-          <WhatItIs atStart={atStart.value} start={start} envelope={envelope.current ? envelope.value : null} pure={pure} />
+          <WhatItIs
+            atStart={atStart.value}
+            start={start}
+            envelope={envelope.current ? envelope.value : null}
+            pure={isPure(fluid)}
+          />
           <MarginHead>Equation in use</MarginHead>
           <MarginNote no="3.02">{equationTitle}.</MarginNote>
           <MarginNote no="3.03">

@@ -5,9 +5,9 @@ import { Power } from "@/components/quantity/quantity";
 import { Cell, HeadCell, Row, Table } from "@/components/table/table";
 import { componentName } from "@/contracts/component-list";
 import type { StateProperties } from "@/engine/properties/state-properties";
-import { phaseWords } from "./phase-words";
+import { phaseNames } from "./phase-words";
 
-/** What each of two phases is made of, and the ratio of vapour to liquid for each component. */
+/** What each of several phases is made of, and the ratio of vapour to liquid for each component. */
 export function PhaseComposition({ state, stale }: { state: StateProperties; stale: boolean }) {
   if (state.phases.length < 2) return null;
   return (
@@ -19,9 +19,9 @@ export function PhaseComposition({ state, stale }: { state: StateProperties; sta
             <HeadCell numeric hideOnPhone>
               Whole, mol %
             </HeadCell>
-            {state.phases.map(({ kind }, i) => (
-              <HeadCell key={i} numeric>
-                {phaseWords[kind]}, mol %
+            {phaseNames(state.phases).map((name) => (
+              <HeadCell key={name} numeric>
+                {name}, mol %
               </HeadCell>
             ))}
             <HeadCell numeric>K-value</HeadCell>

@@ -1,21 +1,35 @@
 import type { PhaseKind } from "@/engine/flash/equilibrium";
 
-export const phaseWords: Record<PhaseKind, string> = {
-  vapour: "Vapour",
-  liquid: "Liquid",
-  supercritical: "Supercritical",
-};
+const words: Record<PhaseKind, string> = { vapour: "Vapour", liquid: "Liquid", supercritical: "Supercritical" };
 
-/** "Vapour", or "Two phases, 93.4 % vapour by mole". */
-export function stateWords({
-  phase,
-  vapourMoleFraction,
-}: {
-  phase: PhaseKind | "two-phase";
-  vapourMoleFraction: number;
-}): string {
-  if (phase !== "two-phase") return phaseWords[phase];
+type NamedPhase = { kind: PhaseKind; aqueous: boolean };
+
+/** A name for each phase of a state: liquid water is called so, and of two other liquids the denser is the second. */
+export function phaseNames(phases: readonly NamedPhase[]): string[] {
+  let liquids = 0;
+  return phases.map(({ kind, aqueous }) => {
+    if (aqueous) return "Water";
+    if (kind !== "liquid") return words[kind];
+    liquids += 1;
+    return liquids > 1 ? "Second liquid" : words.liquid;
+  });
+}
+
+type Described = { phase: PhaseKind | "two-phase"; vapourMoleFraction: number; phases?: readonly NamedPhase[] };
+
+/** "Vapour", or "Vapour and liquid, 93.4 % vapour by mole". Where the phases are not listed, liquid may be more than one. */
+export function stateWords({ phase, vapourMoleFraction, phases }: Described): string {
+  if (phase !== "two-phase") return words[phase];
+  if (!(vapourMoleFraction > 0)) return phases ? listed(phaseNames(phases)) : "Two liquids";
   const percent = vapourMoleFraction * 100;
   const figure = percent < 0.05 ? "below 0.1" : percent > 99.95 ? "above 99.9" : percent.toFixed(1);
-  return `Two phases, ${figure}\u00a0% vapour by mole`;
+  return `${phases ? listed(phaseNames(phases)) : "Vapour and liquid"}, ${figure}\u00a0% vapour by mole`;
+}
+
+function listed(names: readonly string[]): string {
+  const [first = "", ...rest] = names;
+  const others = rest.map((name) => name.toLowerCase());
+  return others.length < 2
+    ? [first, ...others].join(" and ")
+    : `${[first, ...others.slice(0, -1)].join(", ")} and ${others.at(-1) ?? ""}`;
 }

@@ -1,7 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { createFluidModel } from "@/engine/eos/create-fluid-model";
 import { stateProperties } from "@/engine/properties/state-properties";
-import { stateWords } from "./phase-words";
+import { phaseNames, stateWords } from "./phase-words";
 import { propertyRows } from "./property-rows";
 
 const model = createFluidModel({
@@ -38,8 +38,22 @@ describe("the property table", () => {
   });
 });
 
-it("says which phases there are, and never that a trace is nothing", () => {
-  expect(stateWords({ phase: "vapour", vapourMoleFraction: 1 })).toBe("Vapour");
-  expect(stateWords({ phase: "two-phase", vapourMoleFraction: 0.934 })).toBe("Two phases, 93.4\u00a0% vapour by mole");
-  expect(stateWords({ phase: "two-phase", vapourMoleFraction: 0.99999 })).toContain("above 99.9");
+describe("the words for a state", () => {
+  const vapour = { kind: "vapour" as const, aqueous: false };
+  const liquid = { kind: "liquid" as const, aqueous: false };
+  const water = { kind: "liquid" as const, aqueous: true };
+
+  it("name each phase, water and a second liquid too", () => {
+    expect(phaseNames([vapour, liquid, water])).toEqual(["Vapour", "Liquid", "Water"]);
+    expect(phaseNames([liquid, liquid])).toEqual(["Liquid", "Second liquid"]);
+  });
+
+  it("never say that a trace is nothing", () => {
+    expect(stateWords({ phase: "vapour", vapourMoleFraction: 1 })).toBe("Vapour");
+    expect(stateWords({ phase: "two-phase", vapourMoleFraction: 0.934 })).toBe("Vapour and liquid, 93.4\u00a0% vapour by mole");
+    expect(stateWords({ phase: "two-phase", vapourMoleFraction: 0.99999, phases: [vapour, liquid, water] })).toBe(
+      "Vapour, liquid and water, above 99.9\u00a0% vapour by mole",
+    );
+    expect(stateWords({ phase: "two-phase", vapourMoleFraction: 0, phases: [liquid, water] })).toBe("Liquid and water");
+  });
 });

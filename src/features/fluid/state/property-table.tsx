@@ -7,10 +7,10 @@ import { Cell, HeadCell, Row, Table } from "@/components/table/table";
 import { useUnits } from "@/components/units/units-provider";
 import type { StateProperties } from "@/engine/properties/state-properties";
 import type { Basis } from "./basis-switch";
-import { phaseWords } from "./phase-words";
+import { phaseNames } from "./phase-words";
 import { propertyRows, type PropertyRow } from "./property-rows";
 
-/** Every property of a state; of two phases each stands in a column of its own beside the whole. */
+/** Every property of a state; of several phases each stands in a column of its own beside the whole. */
 export function PropertyTable({ state, basis, stale }: { state: StateProperties; basis: Basis; stale: boolean }) {
   const shown = useShown();
   const { system } = useUnits();
@@ -25,9 +25,9 @@ export function PropertyTable({ state, basis, stale }: { state: StateProperties;
             <HeadCell>Property</HeadCell>
             <HeadCell>Unit</HeadCell>
             {two && <HeadCell numeric>Whole</HeadCell>}
-            {state.phases.map(({ kind }, i) => (
-              <HeadCell key={i} numeric>
-                {phaseWords[kind]}
+            {phaseNames(state.phases).map((name) => (
+              <HeadCell key={name} numeric>
+                {name}
               </HeadCell>
             ))}
           </tr>
