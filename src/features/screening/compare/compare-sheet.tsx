@@ -18,7 +18,7 @@ import { lineWords } from "../results/line-words";
 import { useShowing } from "../results/use-showing";
 import { compareCurves } from "./compare-curves";
 import { ShareMove } from "./share-move";
-import { changedLines, compareTitle, movedLimits, sameFluid, type Moved, type Side } from "./sides";
+import { changedLines, compareTitle, linesOf, movedLimits, sameFluid, type Moved, type Side } from "./sides";
 
 export type SideChoice = { value: string; label: string };
 
@@ -232,7 +232,7 @@ function Overlay({ from, to, showing }: TableProps) {
 
 /** What did not change, and the engines that computed both. */
 export function CompareMargin({ from, to }: { from: Side; to: Side }) {
-  const same = to.content.lines.length - changedLines(from, to).length;
+  const same = linesOf(to).size - changedLines(from, to).filter(({ to: other }) => other).length;
   return (
     <>
       <MarginHead>Unchanged</MarginHead>

@@ -34,7 +34,8 @@ export function changedLines(from: Side, to: Side): ChangedLine[] {
     .sort((a, b) => a.no.localeCompare(b.no, "en", { numeric: true }));
 }
 
-function linesOf({ content, recordCase }: Side): Map<string, RecordLine> {
+/** Lines of a side under their bare numbers. */
+export function linesOf({ content, recordCase }: Side): Map<string, RecordLine> {
   const own = content.lines.flatMap((line): [string, RecordLine][] => {
     const letter = parseLineKey(line.line)?.letter;
     // The title of the sheet says nothing about the run.

@@ -33,8 +33,11 @@ export default async function ComparePage({ params, searchParams }: Props) {
       label: `Rev ${rev}, ${letter} ${caseKindWords[kind]}`,
     })),
   );
-  const to = asked(query.to, choices) ?? choices[0];
-  const from = asked(query.from, choices) ?? choices.find((one) => one !== to);
+  const [first] = choices;
+  const earlier = choices.find(({ value }) => value.split("-")[0] !== first?.value.split("-")[0]);
+  // Left open: the revision before against the newest, or the first case against the second.
+  const to = asked(query.to, choices) ?? (earlier ? first : choices[1]);
+  const from = asked(query.from, choices) ?? earlier ?? first;
   const sides = [from, to].map((choice) => {
     const { rev, letter } = sideAsked(choice?.value);
     const view = computed.find((one) => one.rev === rev);
