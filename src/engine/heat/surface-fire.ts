@@ -9,6 +9,8 @@
  * Returns  q [W/m²] into the surface at T_s
  * Checks   fire.test.ts
  */
+import { surfaceBalanceWPerM2 } from "./fire-laws";
+
 export type FireBasis = "open-pool" | "confined-pool" | "jet";
 
 export type FireSet = {
@@ -19,8 +21,6 @@ export type FireSet = {
   flameTemperatureK: number;
   gasTemperatureK: number;
 };
-
-const stefanBoltzmann = 5.670374e-8;
 
 const surface = { surfaceAbsorptivity: 0.75, surfaceEmissivity: 0.75 };
 export const fireSets: Record<FireBasis, FireSet> = {
@@ -36,8 +36,5 @@ export const fireSets: Record<FireBasis, FireSet> = {
 };
 
 export function fireFluxWPerM2(basis: FireBasis, surfaceTemperatureK: number): number {
-  const { flameEmissivity, surfaceAbsorptivity, surfaceEmissivity, coefficientWPerM2K, flameTemperatureK, gasTemperatureK } =
-    fireSets[basis];
-  const radiation = surfaceAbsorptivity * flameEmissivity * flameTemperatureK ** 4 - surfaceEmissivity * surfaceTemperatureK ** 4;
-  return stefanBoltzmann * radiation + coefficientWPerM2K * (gasTemperatureK - surfaceTemperatureK);
+  return surfaceBalanceWPerM2(fireSets[basis], surfaceTemperatureK);
 }
