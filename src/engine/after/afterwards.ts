@@ -7,6 +7,7 @@
  *
  * Source   energy balance of one lump; methods for restart after blowdown, screening only
  * Holds    an indication: the outside film is known to ±50 %, and so is the time. No leak, no sun, no frost
+ * Throws   EngineError "no-convergence" where the fluid has no state at a temperature that is asked for
  * Checks   afterwards.test.ts
  */
 import type { Wall } from "../cases/blowdown/wall";
@@ -41,17 +42,11 @@ const pieces = 16;
 
 type Given = Pick<BlowdownCase, "afterwards" | "heat" | "vessel">;
 
-/** Undefined where the fluid has no state at the temperature of the surroundings that could be found. */
-export function afterwards(given: Given, end: EndOfRun): Afterwards | undefined {
+export function afterwards(given: Given, end: EndOfRun): Afterwards {
   const { surroundings, assumed } = surroundingsOf(given, end);
-  try {
-    const closedIn = closedInPressure(given, end, surroundings.temperatureK);
-    const rewarm = rewarming(given, end, surroundings);
-    return { assumed, surroundings, ...(rewarm ? { rewarm } : {}), closedIn };
-  } catch (error) {
-    if (error instanceof EngineError && error.code !== "cancelled") return undefined;
-    throw error;
-  }
+  const closedIn = closedInPressure(given, end, surroundings.temperatureK);
+  const rewarm = rewarming(given, end, surroundings);
+  return { assumed, surroundings, ...(rewarm ? { rewarm } : {}), closedIn };
 }
 
 function surroundingsOf({ afterwards: stated = {}, heat: { outside } }: Given, { startTemperatureK }: EndOfRun) {

@@ -2,6 +2,7 @@
 import { restartCaution, ruptureCaution, settleOutCaution, type Caution } from "../cautions";
 import type { BlowdownCase } from "../cases/blowdown-case";
 import type { BlowdownResult, Warning } from "../cases/blowdown-result";
+import { EngineError } from "../errors";
 import { steelInFire } from "../fire-steel/steel-in-fire";
 import type { Figure } from "../limits/assess";
 import { furtherFigures, type LookedAt } from "../limits/further-figures";
@@ -17,10 +18,13 @@ export type AroundRun = {
 
 export function aroundRun(blowdown: BlowdownCase, looked: LookedAt, end: EndOfRun): AroundRun {
   const { model, series, summary } = looked;
+  const missed: Warning[] = [];
   const settleOut = model.settled && settleOutReport(model.fluid, model.settled, blowdown.start);
-  const after = afterwards(blowdown, end);
-  const fire = steelInFire(blowdown, { fluid: model.fluid, series, summary });
-  const further = furtherFigures(blowdown, looked);
+  const after = orNothing("What follows the blowdown", missed, () => afterwards(blowdown, end));
+  const fire = orNothing("Steel in the fire", missed, () => steelInFire(blowdown, { fluid: model.fluid, series, summary }));
+  const further = orNothing("Distance to solid and hydrate, and liquid carried over,", missed, () =>
+    furtherFigures(blowdown, looked),
+  );
   const ratio = fire?.items.find((item) => item.governs);
   return {
     parts: {
@@ -28,8 +32,8 @@ export function aroundRun(blowdown: BlowdownCase, looked: LookedAt, end: EndOfRu
       ...(after ? { afterwards: after } : {}),
       ...(fire ? { steelInFire: fire } : {}),
     },
-    figures: [...further.figures, ...(ratio ? [strengthFigure(ratio)] : [])],
-    warnings: [...further.warnings, ...(after ? [] : [noAfterwards]), ...thinWall(blowdown)],
+    figures: [...(further?.figures ?? []), ...(ratio ? [strengthFigure(ratio)] : [])],
+    warnings: [...(further?.warnings ?? []), ...missed, ...thinWall(blowdown)],
     cautions: [...(settleOut ? [settleOutCaution] : []), ...(after ? [restartCaution] : []), ...(fire ? [ruptureCaution] : [])],
   };
 }
@@ -49,11 +53,16 @@ const strengthFigure = (item: NonNullable<BlowdownResult["steelInFire"]>["items"
   }.`,
 });
 
-const noAfterwards: Warning = {
-  code: "no-afterwards",
-  message:
-    "The closed-in pressure and the time to warm up could not be computed: no state of the fluid was found at the temperature of the surroundings.",
-};
+/** What stands beside a run must not take the run away: it is left out, and a warning says so. */
+function orNothing<Part>(what: string, missed: Warning[], work: () => Part): Part | undefined {
+  try {
+    return work();
+  } catch (error) {
+    if (!(error instanceof EngineError) || error.code === "cancelled" || error.code === "invalid-case") throw error;
+    missed.push({ code: "not-computed-beside", message: `${what} could not be computed: ${error.message}` });
+    return undefined;
+  }
+}
 
 const ruleThicknessM = 0.025;
 const ruleTimeS = 900;

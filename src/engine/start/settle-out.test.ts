@@ -1,5 +1,7 @@
+import fc from "fast-check";
 import { describe, expect, it } from "vitest";
 import { methodCheck, numberIn } from "../../../tests/fixtures/method-check";
+import { randomFluid } from "../../../tests/fixtures/random-fluid";
 import type { BlowdownCase, SectionPart } from "../cases/blowdown-case";
 import type { FluidSpec } from "../cases/fluid-spec";
 import { createFluidModel } from "../eos/create-fluid-model";
@@ -88,6 +90,34 @@ describe("settling out", () => {
 
   it("refuses to warm by steel that no vessel has", () => {
     expect(() => report(methane("peng-robinson-1976"), twoBulbs, "with-steel")).toThrow(EngineError);
+  });
+});
+
+describe("settling out at random", () => {
+  const state = fc.record({
+    pressurePa: fc.double({ min: 1e5, max: 2e7, noNaN: true }),
+    temperatureK: fc.double({ min: 250, max: 420, noNaN: true }),
+  });
+  const volume = fc.double({ min: 0.1, max: 50, noNaN: true });
+
+  it("keeps energy to 1e-10 and ends between the two pressures or says why not", () => {
+    let settled = 0;
+    fc.assert(
+      fc.property(randomFluid(6), state, state, volume, volume, (fluid, one, other, V1, V2) => {
+        try {
+          const found = report(fluid, [bulb(V1, one), bulb(V2, other)], "adiabatic");
+          settled++;
+          expect(found.energyClosure).toBeLessThan(1e-10);
+          expect(found.massClosure).toBeLessThan(1e-12);
+          expect(found.after.temperatureK).toBeGreaterThan(100);
+        } catch (error) {
+          if (!(error instanceof EngineError)) throw error;
+          expect(error.message.length).toBeGreaterThan(10);
+        }
+      }),
+      { numRuns: 60, seed: 11 },
+    );
+    expect(settled).toBeGreaterThan(54);
   });
 });
 

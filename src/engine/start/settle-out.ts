@@ -100,6 +100,8 @@ function risingRoot(f: (T: number) => number, low: number, high: number): number
   let [fa, fb] = [f(a), f(b)];
   for (let i = 0; i < 30 && fa > 0; i++) fa = f((a *= 0.95));
   for (let i = 0; i < 30 && fb < 0; i++) fb = f((b *= 1.05));
+  if (!(fa <= 0 && fb >= 0))
+    throw new EngineError("no-convergence", "Fluid and steel were not found to come to one temperature.", {}, "start.settleOut");
   return bracketedRoot(f, { a, fa, b, fb }, 1e-14 * b);
 }
 
