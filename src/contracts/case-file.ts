@@ -225,6 +225,7 @@ const steelInFire = z.strictObject({
   heatFluxWPerM2: quantity({ unit: "W/m²", above: 0, max: 1e6 }).optional(),
   strengthFraction: quantity({ unit: "", above: 0, max: 1 }).optional(),
   tensileStrengthPa: quantity({ unit: "Pa", above: 1e7, max: 3e9 }).optional(),
+  lateByS: z.array(quantity({ unit: "s", min: 0, max: 1e5 })).max(8, "There are more than 8 delays. Keep the ones that matter.").optional(),
   items: z
     .array(
       z.strictObject({
@@ -257,6 +258,13 @@ export const blowdownCaseSchema = z
         outside: outside.default({ model: "adiabatic" }),
       })
       .default({ inside: { model: "none" }, wall: { model: "none" }, outside: { model: "adiabatic" } }),
+    zones: choice(["equilibrium", "separate"]).optional(),
+    zoneExchange: z
+      .strictObject({
+        coefficientWPerM2K: quantity({ unit: "W/(m² K)", min: 0, max: 1e6 }).optional(),
+        relaxationTimeS: quantity({ unit: "s", min: 0.01, max: 1e4 }).optional(),
+      })
+      .optional(),
     run: z.strictObject({
       stopTimeS: quantity({ unit: "s", above: 0, max: 1e8 }),
       stopPressurePa: pressure,

@@ -30,7 +30,16 @@ export const screeningCaution: Caution = {
 };
 
 /** C2, worded by the wall model in use. */
-export function oneTemperatureCaution(wall: WallModelInUse): Caution {
+export function oneTemperatureCaution(wall: WallModelInUse, zones: "one" | "separate" = "one"): Caution {
+  if (zones === "separate") {
+    return {
+      id: "C2",
+      words:
+        wall === "none"
+          ? "Vapour and liquid have one temperature each, and no wall is in the balance: nothing here says how cold the steel gets. Nozzles, supports and dead legs can be colder than the fluid shown here."
+          : "Vapour and liquid have one temperature each, and so has the steel that each touches. How fast heat passes between them is known to a factor of two at best. Nozzles, supports and dead legs can be colder than the wall shown here.",
+    };
+  }
   const words: Record<WallModelInUse, string> = {
     none: "One gas temperature stands for the whole vessel, and no wall is in the balance: nothing here says how cold the steel gets. Nozzles, supports, dead legs and the liquid space can be colder than the fluid shown here.",
     lumped:

@@ -93,6 +93,8 @@ export type SteelInFireSpec = {
   strengthFraction?: number;
   /** At 20 °C; left out, the steel's table. */
   tensileStrengthPa?: number;
+  /** Delays of the opening that are looked at besides [s]. */
+  lateByS?: number[];
   /** Besides the vessel itself: pipes at the vessel's pressure. */
   items?: { name: string; steel: string; insideDiameterM: number; thicknessM: number }[];
 };
@@ -124,6 +126,10 @@ export type BlowdownCase = {
   /** Further ways out beside `release`. */
   releases?: Exclude<ReleaseSpec, SizedRelease>[];
   heat: { inside: InsideFilm; wall: WallModel; outside: Outside };
+  /** "separate": vapour and liquid have a temperature each. Left out: in equilibrium. */
+  zones?: "equilibrium" | "separate";
+  /** Film at the surface between them, and the time within which a phase past its boundary boils or rains. */
+  zoneExchange?: { coefficientWPerM2K?: number; relaxationTimeS?: number };
   run: RunSpec;
   limits?: LimitSpec;
   afterwards?: AfterwardsSpec;

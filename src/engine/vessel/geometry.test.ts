@@ -1,6 +1,7 @@
 import fc from "fast-check";
 import { describe, expect, it } from "vitest";
 import { levelAtVolume, measureVessel, type VesselShape } from "./geometry";
+import { levelTable } from "./level-table";
 import { headShapes, makeHead, wholeHead, type HeadShape } from "./head";
 
 const lying = (heads: HeadShape, D = 2, L = 6): VesselShape => ({
@@ -125,5 +126,27 @@ describe("measureVessel", () => {
       }),
       { numRuns: 200 },
     );
+  });
+});
+
+describe("levelTable", () => {
+  it("gives level and wetted area of a volume as the shape itself does", () => {
+    for (const orientation of ["horizontal", "vertical"] as const) {
+      const vessel = measureVessel({
+        shape: "cylinder",
+        orientation,
+        insideDiameterM: 2,
+        tangentLengthM: 6,
+        heads: "torispherical-kloepper",
+      });
+      const table = levelTable(vessel);
+      for (const part of [1e-4, 0.01, 0.1, 0.37, 0.5, 0.83, 0.99, 0.9999]) {
+        const { levelM, areaM2 } = table?.at(part * vessel.volumeM3) ?? { levelM: NaN, areaM2: NaN };
+        const exact = levelAtVolume(vessel, part * vessel.volumeM3) ?? NaN;
+        expect(Math.abs(levelM - exact)).toBeLessThan(1e-4 * (vessel.heightM ?? 0));
+        expect(Math.abs(areaM2 - (vessel.below?.(exact).areaM2 ?? 0))).toBeLessThan(1e-4 * (vessel.innerAreaM2 ?? 0));
+      }
+    }
+    expect(levelTable(measureVessel({ shape: "volume", volumeM3: 1 }))).toBeUndefined();
   });
 });

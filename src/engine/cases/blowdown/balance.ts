@@ -29,6 +29,9 @@ export type Instant = {
   ventRateKgPerS: number;
   enthalpyW: number;
   molesPerS: Float64Array;
+  /** The part of both that comes out of the vapour. */
+  vapourMolesPerS: Float64Array;
+  vapourEnthalpyW: number;
   heat: HeatFlows;
 };
 
@@ -39,7 +42,7 @@ export class Balance {
   readonly size: number;
   readonly massScaleKg: number;
   readonly energyScaleJ: number;
-  private readonly count: number;
+  protected readonly count: number;
   private readonly finder: ContentsFinder;
   private readonly moles: Float64Array;
   /** A segment starts with the long search allowed: its first state has no neighbour to start from. */
@@ -61,7 +64,7 @@ export class Balance {
   private allOpen = (): boolean[] => this.model.paths.map(() => true);
 
   /** Tight for amounts: a component that is all but gone must not swing below nothing. */
-  absoluteTolerances(relativeTolerance: number): number[] {
+  absoluteTolerances(relativeTolerance: number, _mode: PhaseMode): number[] {
     return Array.from({ length: this.size }, (_, i) => (i < this.count ? 1e-4 : 1e-2) * relativeTolerance);
   }
 
@@ -97,31 +100,39 @@ export class Balance {
 
   internalEnergyJ = (y: readonly number[]): number => (y[this.count] ?? 0) * this.energyScaleJ;
   wallEnergyJ = (y: readonly number[]): number => (y[this.count + 1] ?? 0) * this.energyScaleJ;
-  ventedMassKg = (y: readonly number[]): number => (y[this.count + 2] ?? 0) * this.massScaleKg;
-  ventedEnergyJ = (y: readonly number[]): number => (y[this.count + 3] ?? 0) * this.energyScaleJ;
-  heatFromWallJ = (y: readonly number[]): number => (y[this.count + 4] ?? 0) * this.energyScaleJ;
-  heatFromOutsideJ = (y: readonly number[]): number => (y[this.count + 5] ?? 0) * this.energyScaleJ;
+  ventedMassKg = (y: readonly number[]): number => (y[y.length - 4] ?? 0) * this.massScaleKg;
+  ventedEnergyJ = (y: readonly number[]): number => (y[y.length - 3] ?? 0) * this.energyScaleJ;
+  heatFromWallJ = (y: readonly number[]): number => (y[y.length - 2] ?? 0) * this.energyScaleJ;
+  heatFromOutsideJ = (y: readonly number[]): number => (y[y.length - 1] ?? 0) * this.energyScaleJ;
 
   /** State of everything at (t, y). Kept for the same arguments, because events and output ask for the same point in turn. */
   at(t: number, y: readonly number[], mode: PhaseMode, effort: Effort = "thorough"): Instant {
+    return this.remembered(t, y, mode, () => {
+      const { wall } = this.model;
+      const contents = this.finder.find(mode, this.molesOf(y), this.internalEnergyJ(y), effort);
+      const wallMeanK = wall?.temperatureAtK(this.wallEnergyJ(y));
+      const heat = heatFlows(this.model, contents, wallMeanK);
+      return { contents, ...this.leaving(t, contents), heat };
+    });
+  }
+
+  protected remembered(t: number, y: readonly number[], mode: PhaseMode, make: () => Instant): Instant {
     const { last, open } = this;
     if (last && last.y === y && last.mode === mode && last.t === t && last.open === open) return last.instant;
-    const { wall } = this.model;
-    const contents = this.finder.find(mode, this.molesOf(y), this.internalEnergyJ(y), effort);
-    const wallMeanK = wall?.temperatureAtK(this.wallEnergyJ(y));
-    const heat = heatFlows(this.model, contents, wallMeanK);
-    const instant: Instant = { contents, ...this.leaving(t, contents), heat };
+    const instant = make();
     this.last = { open, y, mode, t, instant };
     return instant;
   }
 
-  private leaving(t: number, contents: Contents): Omit<Instant, "contents" | "heat"> {
+  protected leaving(t: number, contents: Contents): Omit<Instant, "contents" | "heat"> {
     const { fluid, vessel, paths } = this.model;
     const { open } = this;
     const pass = (path: ReleasePath): Outflow =>
       outflow(fluid, path.opening, leavingStreams(fluid, contents, path.from, vessel.volumeM3));
     const flows = paths.map((path, i) => (open[i] ? pass(path) : undefined));
     const molesPerS = new Float64Array(this.count);
+    const vapourMolesPerS = new Float64Array(this.count);
+    let vapourEnthalpyW = 0;
     let ventRateKgPerS = 0;
     let enthalpyW = 0;
     let main: Outflow | undefined;
@@ -130,10 +141,14 @@ export class Balance {
       const stroke = strokeAt(paths[k]!, t);
       ventRateKgPerS += stroke * flow.rateKgPerS;
       enthalpyW += stroke * flow.enthalpyW;
-      for (let i = 0; i < molesPerS.length; i++) molesPerS[i] = molesPerS[i]! + stroke * flow.molesPerS[i]!;
+      vapourEnthalpyW += stroke * flow.vapourEnthalpyW;
+      for (let i = 0; i < molesPerS.length; i++) {
+        molesPerS[i] = molesPerS[i]! + stroke * flow.molesPerS[i]!;
+        vapourMolesPerS[i] = vapourMolesPerS[i]! + stroke * flow.vapourMolesPerS[i]!;
+      }
       if (!main || flow.rateKgPerS > main.rateKgPerS) main = flow;
     });
-    return { flows, flow: main ?? pass(paths[0]!), ventRateKgPerS, enthalpyW, molesPerS };
+    return { flows, flow: main ?? pass(paths[0]!), ventRateKgPerS, enthalpyW, molesPerS, vapourMolesPerS, vapourEnthalpyW };
   }
 
   /** dy/dt, or undefined for a trial state that no fluid can be in. */

@@ -17,10 +17,10 @@ import type { Run } from "./integrate-run";
 
 const cubic = ["van-der-waals", "redlich-kwong", "soave-redlich-kwong", "peng-robinson-1976", "peng-robinson-1978"];
 
-export function cautionsOfRun({ fluid, heat, release, vessel }: BlowdownCase, run: Run, warnings: Warning[]): Caution[] {
-  const cautions = [screeningCaution, oneTemperatureCaution(heat.wall.model)];
+export function cautionsOfRun({ fluid, heat, release, vessel, zones }: BlowdownCase, run: Run, warnings: Warning[]): Caution[] {
+  const cautions = [screeningCaution, oneTemperatureCaution(heat.wall.model, zones === "separate" ? "separate" : "one")];
   const dew = run.phaseChanges.find((change) => change.to === "two-phase");
-  const startsWet = run.segments[0]?.mode === "two-phase";
+  const startsWet = run.segments[0]?.mode !== "one-phase";
   if (dew && !startsWet) cautions.push(liquidCaution(dew.temperatureK));
   if (warnings.some((warning) => warning.code === "outside-data-range")) cautions.push(outsideDataCaution);
   if (cubic.includes(fluid.equation)) cautions.push(equationCaution);

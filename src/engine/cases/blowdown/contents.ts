@@ -17,7 +17,8 @@ import { createTwoPhaseVolumes, seedFrom } from "../../flash/volume-seed";
 import { assembleVolumes, incipientSplit } from "../../flow/incipient-split";
 import { isStableAlone } from "./phase-check";
 
-export type PhaseMode = "one-phase" | "two-phase";
+/** "zones": vapour and liquid with a temperature each (`zones/zoned-balance.ts`). */
+export type PhaseMode = "one-phase" | "two-phase" | "zones";
 
 /** "quick" gives up where only a long search could help: right for a trial state that the integrator may as well shorten its step for. */
 export type Effort = "quick" | "thorough";

@@ -17,6 +17,8 @@ export type HeatFlows = {
   fromOutsideW: number;
   /** Inner surface [K]; undefined without a wall. */
   innerSurfaceK: number | undefined;
+  /** That of the wetted part, where it has one of its own. */
+  liquidSurfaceK?: number;
 };
 
 export function heatFlows(model: VesselModel, contents: Contents, wallMeanK: number | undefined): HeatFlows {
@@ -38,7 +40,7 @@ export function heatFlows(model: VesselModel, contents: Contents, wallMeanK: num
 }
 
 /** T_s + R Q(T_s − T_fluid) = T_still: the left side rises, and T_s lies between the two temperatures. */
-function surfaceTemperature(
+export function surfaceTemperature(
   heatAt: (dT: number) => number,
   { stillK, fluidK, resistanceKPerW }: { stillK: number; fluidK: number; resistanceKPerW: number },
 ): number {

@@ -13,7 +13,8 @@ import { cooperFlux, zuberLimitWPerM2 } from "../../heat/boiling";
 import { naturalConvection, type FilmFlux } from "../../heat/natural-convection";
 import { brockBirdSurfaceTension } from "../../transport/surface-tension";
 import { findLibraryRow } from "../../substances/library";
-import { levelAtVolume, type MeasuredVessel } from "../../vessel/geometry";
+import type { MeasuredVessel } from "../../vessel/geometry";
+import { levelTable } from "../../vessel/level-table";
 import type { Contents } from "./contents";
 
 const poolFilmM = 0.005;
@@ -29,11 +30,20 @@ export function correlatedFilmW(fluid: FluidModel, vessel: MeasuredVessel, conte
   const [vapour, liquid] = contents.equilibrium?.phases ?? [];
   if (!vapour || !liquid || !vessel.below) return (dT) => area * light(dT);
 
-  const under = vessel.below(levelAtVolume(vessel, contents.liquidVolumeM3) ?? 0).areaM2;
+  const under = levelTable(vessel)?.at(contents.liquidVolumeM3).areaM2 ?? 0;
   const wetted = Math.min(under, contents.liquidVolumeM3 / poolFilmM);
   const boils = Math.min((1 - contents.liquidVolumeM3 / vessel.volumeM3) / boilsFullyAt, 1);
   const wet = wettedFlux(fluid, vapour, liquid, boils);
   return (dT) => (area - wetted) * light(dT) + wetted * wet(dT);
+}
+
+/** Fluxes on the dry and on the wetted part [W/m²], each by the state of the fluid that touches it. */
+export function insideFilms(fluid: FluidModel, vessel: MeasuredVessel, contents: Contents): { dry: FilmFlux; wet: FilmFlux } {
+  const dry = naturalConvection(fluid, contents.lightest, contents.lightestComposition);
+  const [vapour, liquid] = contents.equilibrium?.phases ?? [];
+  if (!vapour || !liquid) return { dry, wet: dry };
+  const boils = Math.min((1 - contents.liquidVolumeM3 / vessel.volumeM3) / boilsFullyAt, 1);
+  return { dry, wet: wettedFlux(fluid, vapour, liquid, boils) };
 }
 
 function wettedFlux(fluid: FluidModel, vapour: EquilibriumPhase, liquid: EquilibriumPhase, boils: number): FilmFlux {

@@ -13,8 +13,10 @@ import type { PhaseMode } from "./contents";
 import { coarse, coarseCount } from "./chebyshev";
 import { DenseRun } from "./dense-run";
 import { isStableAlone } from "./phase-check";
+import { PhaseFooting } from "./phase-footing";
 import { nextChangeS, openPaths } from "./release-path";
 import { quantitiesOf } from "./run-fit";
+import { zonesBegin, zonesEnd, ZonedBalance } from "./zones/zoned-balance";
 import { solidMargin, type SolidCurve } from "./solid-check";
 
 export type Segment = { mode: PhaseMode; open: readonly boolean[]; dense: DenseRun };
@@ -66,6 +68,12 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
   const lifted = paths.map(({ relief }) => relief !== undefined && start.pressurePa >= relief.setPressurePa);
   const hasRelief = paths.some(({ relief }) => relief !== undefined);
   const emptyingTimeS = Math.min(Math.max(balance.massScaleKg / Math.max(balance.fullRateKgPerS(mode), 1e-300), 1e-9), stopTimeS);
+  const footing = new PhaseFooting(balance, emptyingTimeS);
+
+  if (balance instanceof ZonedBalance && start.twoPhase && smallerShare(balance, t, y, mode) > zonesBegin) {
+    y = balance.zonesFrom(t, y);
+    mode = "zones";
+  }
 
   while (t < stopTimeS) {
     if (run.segments.length >= (hasRelief ? maxSegmentsWithRelief : maxSegments)) {
@@ -78,14 +86,15 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
       );
     }
     const open = openPaths(paths, t, lifted);
-    const segment: Segment = { mode, open, dense: new DenseRun() };
-    run.segments.push(segment);
     balance.beginSegment(open);
+    const freeForS = mode === "zones" ? undefined : footing.freeForS(t, y, mode, run.phaseChanges);
+    const segment: Segment = { mode: freeForS === undefined ? mode : "two-phase", open, dense: new DenseRun() };
+    run.segments.push(segment);
     let samples: Float64Array[] = [];
     const sample = (time: number, state: number[]): void =>
       void samples.push(quantitiesOf(balance, state, balance.at(time, state, segment.mode)));
     if (options.keepSamples) sample(t, y);
-    const until = Math.min(nextChangeS(paths, t), stopTimeS);
+    const until = Math.min(nextChangeS(paths, t), stopTimeS, t + (freeForS ?? Infinity));
     const stroking = paths.filter(({ opensAtS, openingTimeS }) => t >= opensAtS && t < opensAtS + openingTimeS);
     const shortestStrokeS = Math.min(emptyingTimeS, ...stroking.map(({ openingTimeS }) => openingTimeS));
     const result = integrate({
@@ -94,8 +103,9 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
       tEnd: until,
       y0: y,
       relativeTolerance: options.relativeTolerance,
-      absoluteTolerance: balance.absoluteTolerances(options.relativeTolerance),
-      timeScaleS: Math.sqrt(emptyingTimeS * shortestStrokeS),
+      absoluteTolerance: balance.absoluteTolerances(options.relativeTolerance, segment.mode),
+      // Boiling and rain settle within a fraction of their relaxation time: the first step must not jump over that.
+      timeScaleS: Math.sqrt(emptyingTimeS * shortestStrokeS) * (segment.mode === "zones" ? 0.01 : 1),
       maxEvaluations: options.maxEvaluations - run.evaluations,
       events: [
         {
@@ -103,7 +113,8 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
           stops: true,
           value: (time, state) => balance.at(time, state, segment.mode).contents.pressurePa / stopAt - 1,
         },
-        phaseEvent(balance, segment.mode),
+        ...(freeForS !== undefined ? [] : segment.mode === "zones" ? [mergeEvent(balance)] : [phaseEvent(balance, segment.mode)]),
+        ...(segment.mode === "two-phase" && balance instanceof ZonedBalance ? [partEvent(balance)] : []),
         ...(subsonicSeen < subsonicRestarts * paths.length
           ? paths.flatMap((_, i) => (open[i] ? [subsonicEvent(balance, segment.mode, i)] : []))
           : []),
@@ -153,9 +164,16 @@ export function integrateRun(balance: Balance, blowdown: BlowdownCase, options: 
     if (result.stoppedBy === "subsonic") subsonicSeen++;
     const moved = paths.findIndex((_, i) => result.stoppedBy === reliefId(i));
     if (moved >= 0) lifted[moved] = !lifted[moved];
-    if (result.stoppedBy === "phase") {
+    if (balance instanceof ZonedBalance && (result.stoppedBy === "part" || result.stoppedBy === "merge")) {
+      y = result.stoppedBy === "part" ? balance.zonesFrom(t, y) : balance.mergedFrom(y);
+      mode = result.stoppedBy === "part" ? "zones" : "two-phase";
+      continue;
+    }
+    const found = freeForS === undefined ? undefined : balance.at(t, y, segment.mode).contents.phases;
+    const changed = found === undefined ? result.stoppedBy === "phase" : (found === 2) !== (mode === "two-phase");
+    if (changed) {
       mode = mode === "one-phase" ? "two-phase" : "one-phase";
-      const { temperatureK, pressurePa } = balance.at(t, y, mode).contents;
+      const { temperatureK, pressurePa } = balance.at(t, y, found === undefined ? mode : segment.mode).contents;
       run.phaseChanges.push({ timeS: t, to: mode, temperatureK, pressurePa });
     }
   }
@@ -187,6 +205,27 @@ function phaseEvent(balance: Balance, mode: PhaseMode): IntegrationEvent {
     },
   };
 }
+
+/** Share of the volume of the smaller of two phases. */
+function smallerShare(balance: Balance, t: number, y: number[], mode: PhaseMode): number {
+  const { liquidVolumeM3 } = balance.at(t, y, mode).contents;
+  const share = liquidVolumeM3 / balance.model.vessel.volumeM3;
+  return Math.min(share, 1 - share);
+}
+
+/** Two phases have grown large enough for a temperature each. */
+const partEvent = (balance: Balance): IntegrationEvent => ({
+  id: "part",
+  stops: true,
+  value: (time, state) => zonesBegin - smallerShare(balance, time, state, "two-phase"),
+});
+
+/** One of two zones is all but gone. */
+const mergeEvent = (balance: Balance): IntegrationEvent => ({
+  id: "merge",
+  stops: true,
+  value: (time, state) => smallerShare(balance, time, state, "zones") / zonesEnd - 1,
+});
 
 /** Where the throat stops being sonic the rate has a kink; the integrator starts afresh there. Armed only while the flow is choked. */
 function subsonicEvent(balance: Balance, mode: PhaseMode, path: number): IntegrationEvent {

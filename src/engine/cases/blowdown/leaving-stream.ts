@@ -70,11 +70,8 @@ export function leavingStreams(fluid: FluidModel, contents: Contents, from: Outl
 
 type OnePhase = { phase: PhaseState; composition: Float64Array; isLiquid: boolean; share: number };
 
-function onePhase(
-  fluid: FluidModel,
-  { temperatureK, pressurePa }: Contents,
-  { phase, composition, isLiquid, share }: OnePhase,
-): LeavingStream {
+function onePhase(fluid: FluidModel, { pressurePa }: Contents, { phase, composition, isLiquid, share }: OnePhase): LeavingStream {
+  const { temperatureK } = phase;
   return {
     share,
     composition,

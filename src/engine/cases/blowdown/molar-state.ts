@@ -17,12 +17,14 @@ export function rebuiltState(fluid: FluidModel, contents: Contents): RebuiltStat
     ? equilibrium.phases.map(({ moleFraction, composition: z, state }) => ({
         share: moleFraction,
         z,
-        v: volumeAgain(fluid, temperatureK, pressurePa, z, state.molarVolumeM3PerMol),
+        T: state.temperatureK,
+        v: volumeAgain(fluid, state.temperatureK, pressurePa, z, state.molarVolumeM3PerMol),
       }))
     : [
         {
           share: 1,
           z: composition,
+          T: temperatureK,
           v: volumeAgain(fluid, temperatureK, pressurePa, composition, contents.lightest.molarVolumeM3PerMol),
         },
       ];
@@ -35,9 +37,9 @@ export function rebuiltState(fluid: FluidModel, contents: Contents): RebuiltStat
     entropyJPerMolK: 0,
     molarVolumeM3PerMol: 0,
   };
-  for (const { share, z, v } of parts) {
-    const ideal = fluid.idealGas(temperatureK, pressurePa, z);
-    const departure = fluid.departures(temperatureK, v, z);
+  for (const { share, z, T, v } of parts) {
+    const ideal = fluid.idealGas(T, pressurePa, z);
+    const departure = fluid.departures(T, v, z);
     sum.internalEnergyJPerMol += share * (ideal.internalEnergyJPerMol + departure.internalEnergyJPerMol);
     sum.enthalpyJPerMol += share * (ideal.enthalpyJPerMol + departure.enthalpyJPerMol);
     sum.entropyJPerMolK += share * (ideal.entropyJPerMolK + departure.entropyJPerMolK);

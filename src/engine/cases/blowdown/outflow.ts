@@ -9,6 +9,9 @@ export type Outflow = {
   molesPerS: Float64Array;
   /** Stagnation enthalpy that leaves [W]. */
   enthalpyW: number;
+  /** The part of both that is vapour where it leaves the vessel. */
+  vapourMolesPerS: Float64Array;
+  vapourEnthalpyW: number;
   /** State before the opening, mixed: for the temperature behind it. */
   temperatureK: number;
   pressurePa: number;
@@ -24,6 +27,8 @@ export type Outflow = {
 
 export function outflow(fluid: FluidModel, opening: Opening, streams: LeavingStream[]): Outflow {
   const molesPerS = new Float64Array(fluid.componentIds.length);
+  const vapourMolesPerS = new Float64Array(fluid.componentIds.length);
+  let vapourEnthalpyW = 0;
   let rateKgPerS = 0;
   let enthalpyW = 0;
   let total = 0;
@@ -35,7 +40,13 @@ export function outflow(fluid: FluidModel, opening: Opening, streams: LeavingStr
     rateKgPerS += rate;
     enthalpyW += moles * stream.enthalpyJPerMol;
     total += moles;
-    for (let i = 0; i < molesPerS.length; i++) molesPerS[i] = (molesPerS[i] ?? 0) + moles * (stream.composition[i] ?? 0);
+    const isVapour = stream.phase !== undefined && !stream.isLiquid;
+    if (isVapour) vapourEnthalpyW += moles * stream.enthalpyJPerMol;
+    for (let i = 0; i < molesPerS.length; i++) {
+      const amount = moles * stream.composition[i]!;
+      molesPerS[i] = molesPerS[i]! + amount;
+      if (isVapour) vapourMolesPerS[i] = vapourMolesPerS[i]! + amount;
+    }
     if (!main || stream.share > main.stream.share) main = { stream, passed };
   }
   if (!main) throw new RangeError("nothing leaves");
@@ -45,6 +56,8 @@ export function outflow(fluid: FluidModel, opening: Opening, streams: LeavingStr
     rateKgPerS,
     molesPerS,
     enthalpyW,
+    vapourMolesPerS,
+    vapourEnthalpyW,
     temperatureK: stream.temperatureK,
     pressurePa: stream.pressurePa,
     enthalpyJPerMol: flows ? enthalpyW / total : stream.enthalpyJPerMol,

@@ -7,12 +7,13 @@ import { assess } from "../../limits/assess";
 import { blowdownFigures } from "../../limits/blowdown-figures";
 import type { BlowdownCase } from "../blowdown-case";
 import type { BlowdownResult, BlowdownSummary, EnergyAccount } from "../blowdown-result";
-import { Balance, type Instant } from "./balance";
+import type { Balance, Instant } from "./balance";
 import { cautionsOfRun } from "./cautions-of-run";
 import { highest, lowest, type Extreme } from "./extremes";
 import { integrateRun, type Run } from "./integrate-run";
 import { rebuiltState, type RebuiltState } from "./molar-state";
 import { fitRun, indexOf, pieceAt, recount, type Counted, type Quantity } from "./run-fit";
+import { makeBalance } from "./make-balance";
 import { sizeBore } from "./size-bore";
 import { sampleRows, seriesOf, type Row } from "./series";
 import { solidMargin } from "./solid-check";
@@ -46,7 +47,7 @@ export function runBlowdown(given: BlowdownCase, options: BlowdownOptions = {}):
       : undefined;
   const blowdown = sized?.document ?? given;
   const model = makeVesselModel(blowdown);
-  const balance = new Balance(model);
+  const balance = makeBalance(model);
   refuseSolidStart(balance);
 
   const relativeTolerance =
@@ -71,7 +72,13 @@ export function runBlowdown(given: BlowdownCase, options: BlowdownOptions = {}):
   const series = seriesOf(balance, rows);
   const around = aroundRun(
     blowdown,
-    { model, series, summary, contentsAt: (t) => instantAt(balance, run, t, "last").instant.contents },
+    {
+      model,
+      series,
+      summary,
+      contentsAt: (t) => instantAt(balance, run, t, "last").instant.contents,
+      rerun: (other) => runBlowdown(other, { coarse: true, ...(options.isCancelled ? { isCancelled: options.isCancelled } : {}) }),
+    },
     endOfRun(balance, ends, rows),
   );
   const warnings = [...warningsOf(blowdown, model, run, rows, summary), ...around.warnings];
@@ -121,11 +128,15 @@ function extremesOf(balance: Balance, rows: Row[]): Extremes {
   });
   return {
     fluid: lowest(rows, of("temperatureK")),
-    wall: balance.model.wall ? lowest(rows, of("wallTemperatureK")) : undefined,
+    wall: balance.model.wall
+      ? colder(lowest(rows, of("wallTemperatureK")), lowest(rows, of("liquidWallTemperatureK")))
+      : undefined,
     outlet: lowest(rows, of("outletTemperatureK")),
     ventRate: highest(rows, of("ventRateKgPerS")),
   };
 }
+
+const colder = (a: Extreme, b: Extreme): Extreme => (b.value < a.value ? b : a);
 
 /** First, coldest and last state, each rebuilt from its temperature and pressure. */
 type Ends = { first: RebuiltState; coldest: RebuiltState; last: RebuiltState; lastY: number[] };

@@ -25,6 +25,9 @@ export const quantities = [
   "fromWallW",
   "fromOutsideW",
   "backPressurePa",
+  "vapourTemperatureK",
+  "liquidTemperatureK",
+  "liquidWallTemperatureK",
 ] as const;
 export type Quantity = (typeof quantities)[number];
 export const indexOf = Object.fromEntries(quantities.map((name, i) => [name, i])) as Record<Quantity, number>;
@@ -33,7 +36,13 @@ export const indexOf = Object.fromEntries(quantities.map((name, i) => [name, i])
 export type FitPiece = { t0: number; t1: number; segment: Segment; step: KeptStep; values: Float64Array[] };
 
 /** Unresolved parts that are let pass: absolute [K], or relative to the largest value in the piece. */
-const absolute: Partial<Record<Quantity, number>> = { temperatureK: 1e-3, wallTemperatureK: 1e-3, outletTemperatureK: 5e-3 };
+const absolute: Partial<Record<Quantity, number>> = {
+  vapourTemperatureK: 1e-3,
+  liquidTemperatureK: 1e-3,
+  liquidWallTemperatureK: 1e-3,
+  wallTemperatureK: 1e-3,
+  outletTemperatureK: 5e-3,
+};
 const relative: Partial<Record<Quantity, number>> = {
   pressurePa: 1e-6,
   ventRateKgPerS: 1e-6,
@@ -108,6 +117,9 @@ export function quantitiesOf(balance: Balance, y: readonly number[], instant: In
     heat.fromWallW,
     heat.fromOutsideW,
     flow.backPressurePa,
+    contents.lightest.temperatureK,
+    contents.equilibrium?.phases[1]?.state.temperatureK ?? contents.temperatureK,
+    heat.liquidSurfaceK ?? heat.innerSurfaceK ?? 0,
   );
 }
 

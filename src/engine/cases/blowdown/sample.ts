@@ -6,8 +6,13 @@ import { indexOf, quantities, readPiece, type FitPiece } from "./run-fit";
 export type Sample = {
   timeS: number;
   pressurePa: number;
+  /** Of vapour and liquid the colder, where they differ. */
   temperatureK: number;
+  vapourTemperatureK: number;
+  liquidTemperatureK: number;
+  /** Inner surface that the vapour touches, and that the liquid touches. */
   wallTemperatureK: number | undefined;
+  liquidWallTemperatureK: number | undefined;
   massKg: number;
   ventRateKgPerS: number;
   ventedMassKg: number;
@@ -29,6 +34,9 @@ export function sampleOf(piece: FitPiece, t: number, hasWall: boolean): Sample {
     timeS: t,
     pressurePa: read[indexOf.pressurePa]!,
     temperatureK: read[indexOf.temperatureK]!,
+    vapourTemperatureK: read[indexOf.vapourTemperatureK]!,
+    liquidTemperatureK: read[indexOf.liquidTemperatureK]!,
+    liquidWallTemperatureK: hasWall ? read[indexOf.liquidWallTemperatureK]! : undefined,
     wallTemperatureK: hasWall ? read[indexOf.wallTemperatureK]! : undefined,
     massKg: read[indexOf.massKg]!,
     ventRateKgPerS: read[indexOf.ventRateKgPerS]!,

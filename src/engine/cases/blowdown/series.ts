@@ -40,7 +40,10 @@ function gapOf(a: Sample, b: Sample, startMassKg: number, durationS: number): nu
   return Math.max(
     Math.abs(a.pressurePa - b.pressurePa) / (0.02 * Math.min(a.pressurePa, b.pressurePa)),
     Math.abs(a.temperatureK - b.temperatureK),
+    Math.abs(a.vapourTemperatureK - b.vapourTemperatureK),
+    Math.abs(a.liquidTemperatureK - b.liquidTemperatureK),
     Math.abs((a.wallTemperatureK ?? 0) - (b.wallTemperatureK ?? 0)),
+    Math.abs((a.liquidWallTemperatureK ?? 0) - (b.liquidWallTemperatureK ?? 0)),
     Math.abs(a.massKg - b.massKg) / (0.01 * startMassKg),
     Math.abs(a.timeS - b.timeS) / (0.01 * durationS),
   );
@@ -62,12 +65,12 @@ function fill(a: Row, b: Row, filling: Filling): void {
 
 export function seriesOf(balance: Balance, rows: Row[]): BlowdownSeries {
   const { wall } = balance.model;
-  const twoPhase = rows.some((row) => row.piece.segment.mode === "two-phase");
+  const twoPhase = rows.some((row) => row.piece.segment.mode !== "one-phase");
   const column = (pick: (row: Row) => number): number[] => rows.map(pick);
   const wallColumn = wall
     ? {
         gasWallTemperatureK: column((row) => row.wallTemperatureK ?? 0),
-        liquidWallTemperatureK: column((row) => row.wallTemperatureK ?? 0),
+        liquidWallTemperatureK: column((row) => row.liquidWallTemperatureK ?? 0),
       }
     : {};
   const levels = twoPhase ? rows.map((row) => levelOf(balance, row)) : [];
@@ -75,8 +78,8 @@ export function seriesOf(balance: Balance, rows: Row[]): BlowdownSeries {
     timeS: column((row) => row.timeS),
     pressurePa: column((row) => row.pressurePa),
     fluidTemperatureK: column((row) => row.temperatureK),
-    vapourTemperatureK: column((row) => row.temperatureK),
-    ...(twoPhase ? { liquidTemperatureK: column((row) => row.temperatureK) } : {}),
+    vapourTemperatureK: column((row) => row.vapourTemperatureK),
+    ...(twoPhase ? { liquidTemperatureK: column((row) => row.liquidTemperatureK) } : {}),
     ...wallColumn,
     massKg: column((row) => row.massKg),
     ventRateKgPerS: column((row) => row.ventRateKgPerS),

@@ -9,6 +9,10 @@ import { solidCurves, type SolidCurve } from "./solid-check";
 import type { Settled } from "../../start/settle-out";
 import { startOf, type StartState } from "./start-state";
 import { makeWall, type Wall } from "./wall";
+import type { ZoneExchange } from "./zones/zoned-balance";
+
+/** Still vapour over still liquid; boiling and rain within a second. */
+const defaultExchange: ZoneExchange = { coefficientWPerM2K: 20, relaxationTimeS: 1 };
 
 export type VesselModel = {
   fluid: FluidModel;
@@ -20,6 +24,10 @@ export type VesselModel = {
   film: "none" | "correlations" | { coefficientWPerM2K: number };
   insideAreaM2: number;
   outside: OutsideHeat;
+  /** Which part of the inside the outside heats. */
+  outsideActsOn: "wetted" | "all";
+  /** Vapour and liquid with a temperature each. */
+  zones: ZoneExchange | undefined;
   /** The first is the case's `release`. */
   paths: ReleasePath[];
   /** The lowest of all paths. */
@@ -51,6 +59,8 @@ export function makeVesselModel(blowdown: BlowdownCase): VesselModel {
     film: !walled ? "none" : heat.inside.model === "constant" ? heat.inside : heat.inside.model,
     insideAreaM2: vessel.innerAreaM2 ?? 0,
     outside: outsideHeat(blowdown, vessel),
+    outsideActsOn: heat.outside.model === "pool-fire" ? "wetted" : "all",
+    zones: blowdown.zones === "separate" ? { ...defaultExchange, ...blowdown.zoneExchange } : undefined,
     paths: [makeReleasePath(fluid, release, "release"), ...others.map((one, i) => makeReleasePath(fluid, one, `releases[${i}]`))],
     backPressurePa: Math.min(release.backPressurePa, ...others.map((one) => one.backPressurePa)),
     from: release.from,

@@ -138,7 +138,7 @@ function wallProfile({ heat, vessel }: BlowdownCase, { wall, start }: VesselMode
 
 /** Correlations need to know what the liquid wets. */
 function unknownLevel({ heat }: BlowdownCase, { vessel }: VesselModel, run: Run): Warning[] {
-  if (heat.inside.model !== "correlations" || vessel.below || !run.segments.some((segment) => segment.mode === "two-phase"))
+  if (heat.inside.model !== "correlations" || vessel.below || !run.segments.some((segment) => segment.mode !== "one-phase"))
     return [];
   return [
     {
@@ -152,7 +152,7 @@ function unknownLevel({ heat }: BlowdownCase, { vessel }: VesselModel, run: Run)
 /** Frozen flow means a vapour that stays vapour; anything else was taken in equilibrium. */
 function outletPhase({ release }: BlowdownCase, run: Run, rows: Row[]): Warning[] {
   if (release.flowModel !== "frozen" || release.from === "vapour") return [];
-  const wet = run.segments.some((segment) => segment.mode === "two-phase") || rows.some((row) => row.vapourMoleFraction === 0);
+  const wet = run.segments.some((segment) => segment.mode !== "one-phase") || rows.some((row) => row.vapourMoleFraction === 0);
   return wet
     ? [
         {
