@@ -3,6 +3,7 @@ import { restartCaution, ruptureCaution, settleOutCaution, type Caution } from "
 import type { BlowdownCase } from "../cases/blowdown-case";
 import type { BlowdownResult, Warning } from "../cases/blowdown-result";
 import { EngineError } from "../errors";
+import { lateOpenings } from "../fire-steel/late-opening";
 import { steelInFire } from "../fire-steel/steel-in-fire";
 import type { Figure } from "../limits/assess";
 import { furtherFigures, type LookedAt } from "../limits/further-figures";
@@ -21,7 +22,11 @@ export function aroundRun(blowdown: BlowdownCase, looked: LookedAt, end: EndOfRu
   const missed: Warning[] = [];
   const settleOut = model.settled && settleOutReport(model.fluid, model.settled, blowdown.start);
   const after = orNothing("What follows the blowdown", missed, () => afterwards(blowdown, end));
-  const fire = orNothing("Steel in the fire", missed, () => steelInFire(blowdown, { fluid: model.fluid, series, summary }));
+  const fire = orNothing("Steel in the fire", missed, () => {
+    const found = steelInFire(blowdown, { fluid: model.fluid, series, summary });
+    const late = found && blowdown.steelInFire?.lateByS ? lateOpenings(blowdown, model.fluid, looked.rerun) : undefined;
+    return found && late ? { ...found, late } : found;
+  });
   const further = orNothing("Distance to solid and hydrate, and liquid carried over,", missed, () =>
     furtherFigures(blowdown, looked),
   );

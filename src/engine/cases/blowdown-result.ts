@@ -175,6 +175,11 @@ export type SteelInFireItem = {
   series: { timeS: number[]; wallTemperatureK: number[]; stressPa: number[]; strengthPa: number[] };
 };
 
+/** The same fire with every valve shut until a delay. */
+export type LateOpening =
+  | { delayS: number; itemId: string; leastRatio: number; verdict: Verdict; ruptureTimeS?: number }
+  | { delayS: number; refused: string };
+
 /** Steel in the flames against the falling pressure. */
 export type SteelInFire = {
   fire: { basis: "open-pool" | "confined-pool" | "jet"; initialFluxWPerM2: number; fixedFluxWPerM2?: number };
@@ -185,6 +190,8 @@ export type SteelInFire = {
   shutInPressurePa: number;
   items: SteelInFireItem[];
   depressurisationWins: boolean;
+  /** Where the case asks for delays. */
+  late?: LateOpening[];
   verdict: Verdict;
   sentence: string;
 };

@@ -89,6 +89,15 @@ describe("steel in a fire", () => {
     expect(dry?.hottestWallK).toBeGreaterThan(wet?.hottestWallK ?? 0);
   });
 
+  it("gets worse with every minute that the valve opens late", () => {
+    const { steelInFire } = run({ steelInFire: { lateByS: [0, 180, 420] } });
+    const ratios = (steelInFire?.late ?? []).map((late) => ("leastRatio" in late ? late.leastRatio : Number.NaN));
+    expect(ratios).toHaveLength(3);
+    expect(ratios[0]).toBeCloseTo(steelInFire?.items[0]?.leastRatio ?? 0, 2);
+    expect(ratios[1]).toBeLessThan(ratios[0] ?? 0);
+    expect(ratios[2]).toBeLessThan(ratios[1] ?? 0);
+  });
+
   it("is left out without a fire and for a plain volume, whose diameter nobody knows", () => {
     expect(run({ heat: { ...base.heat, outside: { model: "adiabatic" } } }).steelInFire).toBeUndefined();
     const plain = {

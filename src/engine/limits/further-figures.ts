@@ -16,6 +16,8 @@ export type LookedAt = {
   summary: BlowdownSummary;
   /** Copy what has to survive the next call. */
   contentsAt: (timeS: number) => Contents;
+  /** Another case, coarsely. */
+  rerun: (blowdown: BlowdownCase) => { series: BlowdownSeries; summary: BlowdownSummary };
 };
 
 /** Moments that are looked at besides the coldest. */
