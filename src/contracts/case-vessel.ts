@@ -51,7 +51,7 @@ export const wall = z.strictObject({
     .optional(),
 });
 
-const statePair = z
+export const statePair = z
   .strictObject({
     pressurePa: pressure.optional(),
     temperatureK: temperature.optional(),

@@ -11,6 +11,13 @@ export function freeAirOverpressurePa(z: number): number {
   return (atmospherePa * rise) / fall;
 }
 
+/** Scaled distance at which the free-air curve gives this overpressure [Pa]; it falls all the way. */
+export function freeAirScaledDistance(overpressurePa: number): number {
+  const f = (lnZ: number): number => Math.log(freeAirOverpressurePa(Math.exp(lnZ)) / overpressurePa);
+  const [a, b] = [Math.log(1e-3), Math.log(1e5)];
+  return Math.exp(bracketedRoot(f, { a, fa: f(a), b, fb: f(b) }, { within: 1e-12, what: "scaled distance" }));
+}
+
 /** Swisdak 1994: the Kingery and Bulmash curves for a hemispherical charge on the ground, simplified; ln p [kPa] in powers of ln Z. */
 const surfaceRanges = [
   { upTo: 2.9, c: [7.2106, -2.1069, -0.3229, 0.1117, 0.0685] },
