@@ -10,6 +10,7 @@ import { equationIds } from "@/engine/cases/fluid-spec";
 import type { NozzleCase } from "@/engine/cases/nozzle-case";
 import { steelIds } from "@/engine/steels/steel";
 import { choice, describe, fraction, pressure, quantity, sumToOne, temperature, text } from "./case-fields";
+import { energyCase } from "./case-energy";
 import { sizingCase, studyCase } from "./case-studies";
 import { diameter, geometry, sectionPart, start, wall } from "./case-vessel";
 import { readJsonText } from "./json-text";
@@ -225,7 +226,10 @@ const steelInFire = z.strictObject({
   heatFluxWPerM2: quantity({ unit: "W/m²", above: 0, max: 1e6 }).optional(),
   strengthFraction: quantity({ unit: "", above: 0, max: 1 }).optional(),
   tensileStrengthPa: quantity({ unit: "Pa", above: 1e7, max: 3e9 }).optional(),
-  lateByS: z.array(quantity({ unit: "s", min: 0, max: 1e5 })).max(8, "There are more than 8 delays. Keep the ones that matter.").optional(),
+  lateByS: z
+    .array(quantity({ unit: "s", min: 0, max: 1e5 }))
+    .max(8, "There are more than 8 delays. Keep the ones that matter.")
+    .optional(),
   items: z
     .array(
       z.strictObject({
@@ -298,6 +302,7 @@ export const caseFileSchema = z.discriminatedUnion(
     flashCaseSchema,
     nozzleCaseSchema,
     blowdownCaseSchema,
+    energyCase(fluid),
     methodCaseSchema,
     sizingCase(blowdownCaseSchema),
     studyCase(blowdownCaseSchema),
@@ -305,7 +310,7 @@ export const caseFileSchema = z.discriminatedUnion(
   {
     error: ({ input }) =>
       isObject(input)
-        ? 'Use one of "path", "flash", "nozzle", "blowdown", "method", "sizing", "study".'
+        ? 'Use one of "path", "flash", "nozzle", "blowdown", "energy", "method", "sizing", "study".'
         : "Give one case document, a JSON object.",
   },
 );

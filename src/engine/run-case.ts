@@ -3,20 +3,23 @@ import { runBlowdown, type BlowdownOptions } from "./cases/blowdown/run-blowdown
 import type { BlowdownCase } from "./cases/blowdown-case";
 import type { BlowdownResult, Confirmation } from "./cases/blowdown-result";
 import { confirm } from "./cases/blowdown/confirm";
+import type { EnergyCase, EnergyResult } from "./cases/energy-case";
 import type { FlashCase, FlashResult } from "./cases/flash-case";
 import type { NozzleCase, NozzleResult } from "./cases/nozzle-case";
 import type { PathCase, PathResult } from "./cases/path-case";
 import type { SizingCase, SizingResult } from "./cases/sizing-case";
 import type { Outcome, StudyCase, StudyResult } from "./cases/study-case";
 import { runNozzle } from "./cases/nozzle/run-nozzle";
+import { runEnergy } from "./energy/held-energy";
 import { runFlash } from "./flash/run-flash";
 import { runMethod, type MethodCase, type MethodResult } from "./methods/run-method";
 import { runPath } from "./path/run-path";
 import { runSizing } from "./sizing/run-sizing";
 import { assembleStudy, runStudy } from "./studies/run-study";
 
-export type EngineCase = PathCase | FlashCase | NozzleCase | BlowdownCase | MethodCase | SizingCase | StudyCase;
-export type EngineResult = PathResult | FlashResult | NozzleResult | BlowdownResult | MethodResult | SizingResult | StudyResult;
+export type EngineCase = PathCase | FlashCase | NozzleCase | BlowdownCase | EnergyCase | MethodCase | SizingCase | StudyCase;
+export type EngineResult =
+  PathResult | FlashResult | NozzleResult | BlowdownResult | EnergyResult | MethodResult | SizingResult | StudyResult;
 
 export type RunContext = Pick<BlowdownOptions, "onProgress" | "isCancelled" | "coarse"> & {
   engineVersion: string;
@@ -40,6 +43,8 @@ export function runCase(document: EngineCase, context: RunContext): EngineResult
       return runMethod(document);
     case "blowdown":
       return stamp<BlowdownResult>(() => runBlowdown(document, context), context);
+    case "energy":
+      return stamp<EnergyResult>(() => runEnergy(document), context);
     case "sizing":
       return stamp<SizingResult>(() => runSizing(document, context), context);
     case "study":
