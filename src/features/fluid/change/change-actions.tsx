@@ -3,21 +3,22 @@
 import { useState } from "react";
 import { Button } from "@/components/button/button";
 import { useUnits } from "@/components/units/units-provider";
-import type { PathCase, PathResult } from "@/engine/cases/path-case";
+import type { PathCase } from "@/engine/cases/path-case";
+import type { ChangeAnswer } from "@/workers/fluid-asks";
 import { changeText } from "./change-text";
 
-type Props = { document: PathCase | undefined; result: PathResult | undefined; onClear: () => void };
+type Props = { document: PathCase | undefined; change: ChangeAnswer | null; onClear: () => void };
 
 /** The case as a file for the command line, the result as text to cite, and a clean sheet. */
-export function ChangeActions({ document, result, onClear }: Props) {
+export function ChangeActions({ document, change, onClear }: Props) {
   const { system } = useUnits();
   const [told, setTold] = useState("");
 
   const copy = async () => {
-    if (!document || !result) return;
+    if (!document || !change) return;
     const date = new Date().toLocaleDateString("en-GB", { day: "numeric", month: "long", year: "numeric" });
     try {
-      await navigator.clipboard.writeText(changeText(document, result, { system, date }));
+      await navigator.clipboard.writeText(changeText(document, change, { system, date }));
       setTold("Copied.");
     } catch {
       setTold("This browser does not let a page copy. Take the case file instead.");
@@ -29,7 +30,7 @@ export function ChangeActions({ document, result, onClear }: Props) {
       <span role="status" className="text-small text-ink-2">
         {told}
       </span>
-      {document && result && (
+      {document && change && (
         <>
           <Button onClick={() => void copy()}>Copy as text</Button>
           <Button onClick={() => save(document)}>Case file</Button>

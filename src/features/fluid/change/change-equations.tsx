@@ -9,7 +9,7 @@ import type { EquationId } from "@/engine/cases/fluid-spec";
 import type { ComparedChange } from "@/engine/properties/compare-changes";
 import { spreadOf } from "../equations/equation-rows";
 import { FitnessCell, wideFirst } from "../equations/fitness-cell";
-import { stateWords } from "../state/phase-words";
+import { briefStateWords } from "../state/phase-words";
 import { properties } from "./step-words";
 
 /** The same change by every equation, with how fit each is for both ends, and the spread of those that are. */
@@ -35,7 +35,7 @@ export function ChangeEquations({
         <thead>
           <tr>
             <HeadCell>Equation</HeadCell>
-            <HeadCell>Phases, from and to</HeadCell>
+            <HeadCell>Phases, from and to, by mole</HeadCell>
             {heads.map(({ key, head }) => (
               <HeadCell key={key} numeric>
                 {head}
@@ -54,11 +54,11 @@ export function ChangeEquations({
                   inUse={equation === inUse}
                 />
               </Cell>
-              <Cell label="Phases, from and to" wholeRow>
+              <Cell label="Phases, from and to, by mole" wholeRow>
                 {result ? (
                   <>
-                    {stateWords(result.from)}
-                    <span className="block">{stateWords(result.to)}</span>
+                    {briefStateWords(result.from)}
+                    <span className="block">{briefStateWords(result.to)}</span>
                   </>
                 ) : (
                   "–"

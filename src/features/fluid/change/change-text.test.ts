@@ -1,6 +1,6 @@
 import { expect, it } from "vitest";
-import { runPath } from "@/engine/path/run-path";
 import type { PathCase } from "@/engine/cases/path-case";
+import { answerFluid } from "@/workers/fluid-asks";
 import { changeText } from "./change-text";
 
 const document: PathCase = {
@@ -12,8 +12,9 @@ const document: PathCase = {
 };
 
 it("names what it rests on, every step with its sign in plain ASCII, and the caution", () => {
-  const result = runPath(document);
-  const text = changeText(document, result, { system: "SI", date: "1 December 2026" });
+  const { kind, value } = answerFluid({ kind: "change", document });
+  if (kind !== "change") throw new Error("another answer came back");
+  const text = changeText(document, value, { system: "SI", date: "1 December 2026" });
   expect(text).toContain("Equation: Peng–Robinson 1976, binary interaction as published");
   expect(text).toContain("Composition, mol %: Methane 100.000");
   expect(text).toContain("From: 100 bar(a), 26.9 °C, supercritical");

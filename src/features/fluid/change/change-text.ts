@@ -5,18 +5,20 @@ import type { UnitSystem } from "@/components/units/unit-system";
 import { componentName } from "@/contracts/component-list";
 import { equationTitles } from "@/contracts/equation-titles";
 import { screeningCaution } from "@/engine/cautions";
-import type { PathCase, PathResult } from "@/engine/cases/path-case";
+import type { PathCase } from "@/engine/cases/path-case";
+import type { StateProperties } from "@/engine/properties/state-properties";
+import type { ChangeAnswer } from "@/workers/fluid-asks";
 import { stateWords } from "../state/phase-words";
 import { properties, stepKeys, stepNames } from "./step-words";
 
 /** date   the day it was computed, in words */
 export function changeText(
   document: PathCase,
-  result: PathResult,
+  { result, from, to }: ChangeAnswer,
   { system, date }: { system: UnitSystem; date: string },
 ): string {
   const { fluid } = document;
-  const state = (at: PathResult["from"]) =>
+  const state = (at: StateProperties) =>
     [
       formatQuantity("pressure", at.pressurePa, shownAbsolutePressure[system]).text,
       formatQuantity("temperature", at.temperatureK, shownUnit("temperature", system)).text,
@@ -26,8 +28,8 @@ export function changeText(
     `Change of state by departure functions, ${date}`,
     `Equation: ${equationTitles[fluid.equation]}, binary interaction ${fluid.interaction === "none" ? "none" : "as published"}`,
     `Composition, mol %: ${fluid.components.map(({ id, moleFraction }) => `${componentName(id)} ${formatMolePercent(moleFraction)}`).join(", ")}`,
-    `From: ${state(result.from)}`,
-    `To:   ${state(result.to)}`,
+    `From: ${state(from)}`,
+    `To:   ${state(to)}`,
     "",
     ...properties.flatMap(({ key, name, quantity }) => {
       const unit = shownUnit(quantity, system);

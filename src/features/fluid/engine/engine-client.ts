@@ -1,5 +1,6 @@
 import type { PreviewAnswer, WorkerRequest } from "@/workers/browser";
 import type { FluidAnswer, FluidAsk } from "@/workers/fluid-asks";
+import { sentence } from "./sentence";
 
 export type Told = { answer: FluidAnswer } | { problem: string };
 
@@ -112,10 +113,4 @@ function toldOf(answer: Extract<PreviewAnswer, { type: "fluid" | "refused" | "fa
   if (answer.type === "refused")
     return { problem: answer.error.problems.map(({ message }) => sentence(message)).join(" ") || "This can't be computed." };
   return { problem: `The engine stopped: ${answer.message}` };
-}
-
-/** The engine's own words begin small and end without a stop. */
-function sentence(words: string): string {
-  const text = words.trim();
-  return `${text.charAt(0).toUpperCase()}${text.slice(1)}${/[.!?]$/.test(text) ? "" : "."}`;
 }

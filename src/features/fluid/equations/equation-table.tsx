@@ -9,7 +9,7 @@ import { equationTitles } from "@/contracts/equation-titles";
 import type { EquationId } from "@/engine/cases/fluid-spec";
 import type { Fitness, FitnessDeviation } from "@/engine/eos/fitness";
 import { fromSi, type QuantityId } from "@/engine/units";
-import { stateWords } from "../state/phase-words";
+import { briefStateWords } from "../state/phase-words";
 import { spreadOf, type Ends } from "./equation-rows";
 import { FitnessCell, wideFirst } from "./fitness-cell";
 
@@ -33,7 +33,7 @@ export function EquationTable({ entries, inUse, stale }: Props) {
         <thead>
           <tr>
             <HeadCell>Equation</HeadCell>
-            <HeadCell>Phases</HeadCell>
+            <HeadCell>Phases, by mole</HeadCell>
             <HeadCell numeric>{density}</HeadCell>
             <HeadCell numeric>Z</HeadCell>
             <HeadCell numeric>{departure}</HeadCell>
@@ -47,8 +47,8 @@ export function EquationTable({ entries, inUse, stale }: Props) {
               <Cell wholeRow>
                 <FitnessCell title={equationTitles[equation]} verdict={verdict} notes={notes} inUse={equation === inUse} />
               </Cell>
-              <Cell label="Phases" wholeRow>
-                {values ? stateWords(values) : "–"}
+              <Cell label="Phases, by mole" wholeRow>
+                {values ? briefStateWords(values) : "–"}
               </Cell>
               <Cell numeric label={density}>
                 {write("density", values?.densityKgPerM3)}

@@ -1,8 +1,9 @@
 import type { FitnessVerdict } from "@/engine/eos/fitness";
+import { sentence } from "../engine/sentence";
 import { fitnessWords, isAdmitted } from "./fitness-words";
 
 /** Room for the words of the first two columns of a table, off phones. */
-export const wideFirst = "[&_thead_th:first-child]:w-[34%] [&_thead_th:nth-child(2)]:w-[14%]";
+export const wideFirst = "[&_thead_th:first-child]:w-[32%] [&_thead_th:nth-child(2)]:w-[17%]";
 
 type Props = { title: string; verdict: FitnessVerdict; notes: readonly string[]; inUse: boolean };
 
@@ -15,7 +16,7 @@ export function FitnessCell({ title, verdict, notes, inUse }: Props) {
       <span className={`block text-small ${isAdmitted(verdict) ? "text-ink-2" : "text-near"}`}>{fitnessWords[verdict]}</span>
       {notes.map((note) => (
         <span key={note} className="block font-serif text-label leading-[1.35] text-ink-3">
-          {note}
+          {sentence(note)}
         </span>
       ))}
     </>

@@ -1,7 +1,7 @@
 "use client";
 
 import Link from "next/link";
-import { useMemo, useState, type ReactNode } from "react";
+import { useMemo, type ReactNode } from "react";
 import { ButtonLink } from "@/components/button/button-link";
 import { Notice } from "@/components/caution/notice";
 import { MarginHead, MarginNote } from "@/components/shell/margin";
@@ -12,14 +12,10 @@ import { useUnits } from "@/components/units/units-provider";
 import type { FluidSpec } from "@/engine/cases/fluid-spec";
 import { FluidDiagram, isPure, useEnvelope } from "../diagram/fluid-diagram";
 import { FluidEngine, useFluidAnswer } from "../engine/fluid-engine";
-import { EquationTable } from "../equations/equation-table";
+import { EquationSection } from "../equations/equation-section";
 import { stateFromText, stateToText } from "../keep/state-text";
 import { useKept } from "../keep/use-kept";
-import { BasisSwitch, type Basis } from "../state/basis-switch";
-import { PhaseComposition } from "../state/phase-composition";
-import { stateWords } from "../state/phase-words";
-import { PropertyTable } from "../state/property-table";
-import { StateFields } from "../state/state-fields";
+import { StateSection } from "../state/state-section";
 import { readState, typedState, type TypedState } from "../state/typed";
 import type { FluidOfScreening } from "./fluid-of-screening";
 import { ReportedComposition } from "./reported-composition";
@@ -86,7 +82,7 @@ function FluidPage({ titleBlock, subject, equationTitle, edits, changeHref }: Pr
               ? "Binary interaction: none, all zero."
               : "Binary interaction: published values, where there are any."}
           </MarginNote>
-          <WarningNotes warnings={atStart.value?.warnings ?? []} />
+          <WarningNotes title="To be known of the start" warnings={start ? (atStart.value?.warnings ?? []) : []} />
         </>
       }
     >
@@ -113,7 +109,7 @@ function FluidPage({ titleBlock, subject, equationTitle, edits, changeHref }: Pr
         </div>
       )}
       {fluid && typed === null && <WaitingLines lines={6} />}
-      {fluid && typed !== null && <Computed {...{ fluid, start, path, pathIsOlder, envelope, typed, setTyped }} />}
+      {fluid && typed !== null && <Computed {...{ fluid, start, path, pathIsOlder, envelope, typed }} onType={setTyped} />}
     </SheetWithMargin>
   );
 }
@@ -122,16 +118,12 @@ type ComputedProps = Pick<FluidOfScreening, "start" | "path" | "pathIsOlder"> & 
   fluid: FluidSpec;
   envelope: ReturnType<typeof useEnvelope>;
   typed: TypedState;
-  setTyped: (state: TypedState) => void;
+  onType: (state: TypedState) => void;
 };
 
-function Computed({ fluid, start, path, pathIsOlder, envelope, typed, setTyped }: ComputedProps) {
+function Computed({ fluid, start, path, pathIsOlder, envelope, typed, onType }: ComputedProps) {
   const { barometricPressurePa } = useUnits();
-  const [basis, setBasis] = useState<Basis>("mole");
   const point = useMemo(() => readState(typed, barometricPressurePa), [typed, barometricPressurePa]);
-  const state = useFluidAnswer<"state">(point && { kind: "state", fluid, point });
-  const equations = useFluidAnswer<"equations">(point && { kind: "equations", fluid, point });
-
   return (
     <>
       <section aria-label="Phase diagram" className="mt-8">
@@ -145,65 +137,8 @@ function Computed({ fluid, start, path, pathIsOlder, envelope, typed, setTyped }
           }
         />
       </section>
-      <section aria-label="Properties at a state" className="mt-8">
-        <div className="mb-3 flex flex-wrap items-end justify-between gap-x-5 gap-y-3">
-          <h2>Properties at a state</h2>
-          <BasisSwitch basis={basis} onChange={setBasis} />
-        </div>
-        <div className="max-w-[480px]">
-          <StateFields of="state" state={typed} onChange={setTyped} />
-        </div>
-        {state.problem ? (
-          <div className="mt-3">
-            <Notice tone="error" title="No state.">
-              {state.problem}
-            </Notice>
-          </div>
-        ) : state.value ? (
-          <>
-            <p role="status" className="py-3 font-serif text-prose">
-              {state.current ? `${stateWords(state.value)}.` : point ? "\u00a0" : "Type pressure and temperature."}
-            </p>
-            <PropertyTable state={state.value} basis={basis} stale={!state.current} />
-            <p className="pt-1.5 text-label text-ink-3">
-              Zero of energies and entropy: each component as ideal gas at 25 °C and 1 bar(a). Viscosity and conductivity within
-              about 10 %.
-            </p>
-            {state.value.phases.length > 1 && (
-              <div className="mt-5">
-                <h3>What the phases are made of</h3>
-                <PhaseComposition state={state.value} stale={!state.current} />
-              </div>
-            )}
-          </>
-        ) : (
-          <WaitingLines lines={5} label="Computing the state" />
-        )}
-        {state.current && state.value && state.value.warnings.length > 0 && (
-          <ul className="pt-2 font-serif text-note text-ink-2">
-            {state.value.warnings.map(({ code, message }) => (
-              <li key={code + message} className="border-t py-1.5">
-                {message}
-              </li>
-            ))}
-          </ul>
-        )}
-      </section>
-      <section aria-label="Equations of state side by side" className="mt-8">
-        <h2 className="mb-1">Equations of state side by side</h2>
-        <p className="pb-2 font-serif text-note text-ink-2">
-          The same composition at the same state. Departure: real fluid less ideal gas at the same temperature and pressure.
-        </p>
-        {equations.problem ? (
-          <Notice tone="error" title="Not compared.">
-            {equations.problem}
-          </Notice>
-        ) : equations.value ? (
-          <EquationTable entries={equations.value} inUse={fluid.equation} stale={!equations.current} />
-        ) : (
-          <WaitingLines lines={7} label="Comparing the equations" />
-        )}
-      </section>
+      <StateSection {...{ fluid, point, typed, onType }} />
+      <EquationSection {...{ fluid, point }} />
     </>
   );
 }

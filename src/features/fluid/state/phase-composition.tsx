@@ -10,16 +10,17 @@ import { phaseNames } from "./phase-words";
 /** What each of several phases is made of, and the ratio of vapour to liquid for each component. */
 export function PhaseComposition({ state, stale }: { state: StateProperties; stale: boolean }) {
   if (state.phases.length < 2) return null;
+  const names = phaseNames(state.phases);
   return (
     <div className={stale ? "text-ink-3" : undefined}>
-      <Table caption="Composition of the phases" settled stack={false}>
+      <Table caption="Composition of the phases" settled stack={state.phases.length > 2}>
         <thead>
           <tr>
             <HeadCell>Component</HeadCell>
             <HeadCell numeric hideOnPhone>
               Whole, mol %
             </HeadCell>
-            {phaseNames(state.phases).map((name) => (
+            {names.map((name) => (
               <HeadCell key={name} numeric>
                 {name}, mol %
               </HeadCell>
@@ -30,16 +31,18 @@ export function PhaseComposition({ state, stale }: { state: StateProperties; sta
         <tbody>
           {state.components.map(({ id, moleFraction, ratio }, i) => (
             <Row key={id}>
-              <Cell head>{componentName(id)}</Cell>
+              <Cell head wholeRow>
+                {componentName(id)}
+              </Cell>
               <Cell numeric hideOnPhone>
                 {formatMolePercent(moleFraction)}
               </Cell>
               {state.phases.map(({ composition }, phase) => (
-                <Cell key={phase} numeric>
+                <Cell key={phase} numeric label={names[phase]}>
                   {formatMolePercent(composition[i] ?? Number.NaN)}
                 </Cell>
               ))}
-              <Cell numeric strong>
+              <Cell numeric strong label="K-value">
                 <Ratio value={ratio} />
               </Cell>
             </Row>

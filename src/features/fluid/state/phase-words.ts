@@ -21,9 +21,19 @@ type Described = { phase: PhaseKind | "two-phase"; vapourMoleFraction: number; p
 export function stateWords({ phase, vapourMoleFraction, phases }: Described): string {
   if (phase !== "two-phase") return words[phase];
   if (!(vapourMoleFraction > 0)) return phases ? listed(phaseNames(phases)) : "Two liquids";
+  return `${phases ? listed(phaseNames(phases)) : "Vapour and liquid"}, ${vapourShare(vapourMoleFraction)} vapour by mole`;
+}
+
+/** The same for a column of a table whose head says that shares are by mole. */
+export function briefStateWords({ phase, vapourMoleFraction }: Described): string {
+  if (phase !== "two-phase") return words[phase];
+  return vapourMoleFraction > 0 ? `${vapourShare(vapourMoleFraction)} vapour` : "Two liquids";
+}
+
+function vapourShare(vapourMoleFraction: number): string {
   const percent = vapourMoleFraction * 100;
   const figure = percent < 0.05 ? "below 0.1" : percent > 99.95 ? "above 99.9" : percent.toFixed(1);
-  return `${phases ? listed(phaseNames(phases)) : "Vapour and liquid"}, ${figure}\u00a0% vapour by mole`;
+  return `${figure}\u00a0%`;
 }
 
 function listed(names: readonly string[]): string {

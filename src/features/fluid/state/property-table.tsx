@@ -15,17 +15,18 @@ export function PropertyTable({ state, basis, stale }: { state: StateProperties;
   const shown = useShown();
   const { system } = useUnits();
   const two = state.phases.length > 1;
+  const names = phaseNames(state.phases);
   const write = ({ quantity, decimals }: PropertyRow, value: number | undefined) =>
     decimals === undefined ? shown(quantity, value).number : formatNumber(value, { decimals });
   return (
     <div className={`${two ? "" : "max-w-[760px]"} ${stale ? "text-ink-3" : ""}`}>
-      <Table caption="Properties at the state" settled stack={false}>
+      <Table caption="Properties at the state" settled stack={two}>
         <thead>
           <tr>
             <HeadCell>Property</HeadCell>
             <HeadCell>Unit</HeadCell>
             {two && <HeadCell numeric>Whole</HeadCell>}
-            {phaseNames(state.phases).map((name) => (
+            {names.map((name) => (
               <HeadCell key={name} numeric>
                 {name}
               </HeadCell>
@@ -36,21 +37,33 @@ export function PropertyTable({ state, basis, stale }: { state: StateProperties;
           {two && (
             <>
               <Row>
-                <Cell head>Share by mole</Cell>
-                <Cell muted>%</Cell>
-                <Cell numeric>100</Cell>
+                <Cell head wholeRow>
+                  Share by mole
+                </Cell>
+                <Cell muted label="Unit">
+                  %
+                </Cell>
+                <Cell numeric label="Whole">
+                  100
+                </Cell>
                 {state.phases.map(({ moleFraction }, i) => (
-                  <Cell key={i} numeric strong>
+                  <Cell key={i} numeric strong label={names[i]}>
                     {share(moleFraction)}
                   </Cell>
                 ))}
               </Row>
               <Row>
-                <Cell head>Share by mass</Cell>
-                <Cell muted>%</Cell>
-                <Cell numeric>100</Cell>
+                <Cell head wholeRow>
+                  Share by mass
+                </Cell>
+                <Cell muted label="Unit">
+                  %
+                </Cell>
+                <Cell numeric label="Whole">
+                  100
+                </Cell>
                 {state.phases.map(({ massFraction }, i) => (
-                  <Cell key={i} numeric strong>
+                  <Cell key={i} numeric strong label={names[i]}>
                     {share(massFraction)}
                   </Cell>
                 ))}
@@ -59,14 +72,20 @@ export function PropertyTable({ state, basis, stale }: { state: StateProperties;
           )}
           {propertyRows(state, basis).map((row) => (
             <Row key={row.name}>
-              <Cell head>
+              <Cell head wholeRow>
                 {row.name}
                 {row.note && <span className="block text-label text-ink-3">{row.note}</span>}
               </Cell>
-              <Cell muted>{shownUnit(row.quantity, system)}</Cell>
-              {two && <Cell numeric>{write(row, row.overall)}</Cell>}
+              <Cell muted label={two ? "Unit" : undefined}>
+                {shownUnit(row.quantity, system)}
+              </Cell>
+              {two && (
+                <Cell numeric label="Whole">
+                  {write(row, row.overall)}
+                </Cell>
+              )}
               {row.phases.map((value, i) => (
-                <Cell key={i} numeric strong>
+                <Cell key={i} numeric strong label={names[i]}>
                   {write(row, value)}
                 </Cell>
               ))}
