@@ -171,13 +171,15 @@ const furtherReleases = z
   .max(8, "There are more than 8 further releases. Join the smallest.");
 
 const coefficient = quantity({ unit: "W/(m² K)", min: 0, max: 1e6 });
+/** Multiplies what a correlation or a fire law gives. */
+const doubt = quantity({ unit: "", min: 0.1, max: 10 });
 const none = z.strictObject({ model: z.literal("none") });
 const inside = z.discriminatedUnion(
   "model",
   [
     none,
     z.strictObject({ model: z.literal("constant"), coefficientWPerM2K: coefficient }),
-    z.strictObject({ model: z.literal("correlations") }),
+    z.strictObject({ model: z.literal("correlations"), factor: doubt.optional() }),
   ],
   { error: 'Use one of "none", "constant", "correlations".' },
 );
@@ -198,11 +200,13 @@ const outside = z.discriminatedUnion(
       model: z.literal("pool-fire"),
       drainage: choice(["adequate", "inadequate"]),
       environmentFactor: quantity({ unit: "", above: 0, max: 1 }),
+      factor: doubt.optional(),
     }),
     z.strictObject({
       model: z.literal("surface-fire"),
       basis: choice(["open-pool", "confined-pool", "jet"]),
       heatFluxWPerM2: quantity({ unit: "W/m²", above: 0, max: 1e6 }).optional(),
+      factor: doubt.optional(),
     }),
   ],
   { error: 'Use one of "adiabatic", "constant-heat", "ambient", "pool-fire", "surface-fire".' },

@@ -70,14 +70,15 @@ export type ReliefRelease = ReleaseCommon & {
 };
 export type ReleaseSpec = OrificeRelease | ValveRelease | SizedRelease | ReliefRelease;
 
-export type InsideFilm = { model: "none" } | { model: "constant"; coefficientWPerM2K: number } | { model: "correlations" };
+export type InsideFilm =
+  { model: "none" } | { model: "constant"; coefficientWPerM2K: number } | { model: "correlations"; factor?: number };
 export type WallModel = { model: "none" } | { model: "lumped" } | { model: "conduction" };
 export type Outside =
   | { model: "adiabatic" }
   | { model: "constant-heat"; heatW: number }
   | { model: "ambient"; temperatureK: number; coefficientWPerM2K: number }
-  | { model: "pool-fire"; drainage: "adequate" | "inadequate"; environmentFactor: number }
-  | { model: "surface-fire"; basis: FireBasis; heatFluxWPerM2?: number };
+  | { model: "pool-fire"; drainage: "adequate" | "inadequate"; environmentFactor: number; factor?: number }
+  | { model: "surface-fire"; basis: FireBasis; heatFluxWPerM2?: number; factor?: number };
 
 export type RunSpec = { stopTimeS: number; stopPressurePa: number; relativeTolerance: number };
 

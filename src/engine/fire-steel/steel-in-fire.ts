@@ -76,10 +76,11 @@ function fireOf({ heat: { outside }, steelInFire: given = {} }: BlowdownCase): F
   if (outside.model !== "pool-fire" && outside.model !== "surface-fire") return undefined;
   const surface = outside.model === "surface-fire" ? outside : undefined;
   const basis = given.basis ?? surface?.basis ?? "open-pool";
-  const fixed = given.heatFluxWPerM2 ?? surface?.heatFluxWPerM2;
-  return fixed === undefined
-    ? { basis, fluxWPerM2: (T) => fireFluxWPerM2(basis, T) }
-    : { basis, fixedFluxWPerM2: fixed, fluxWPerM2: () => fixed };
+  const stated = given.heatFluxWPerM2 ?? surface?.heatFluxWPerM2;
+  const factor = outside.factor ?? 1;
+  if (stated === undefined) return { basis, fluxWPerM2: (T) => factor * fireFluxWPerM2(basis, T) };
+  const fixed = factor * stated;
+  return { basis, fixedFluxWPerM2: fixed, fluxWPerM2: () => fixed };
 }
 
 type Surroundings = {
@@ -136,7 +137,7 @@ function filmOf(inside: BlowdownCase["heat"]["inside"], fluid: FluidModel, along
       fluid.phaseAtPressure(along.fluidAt(time), along.pressureAt(time), fluid.feed, "vapour"),
       fluid.feed,
     );
-    return films[k](difference);
+    return (inside.factor ?? 1) * films[k](difference);
   };
 }
 

@@ -25,14 +25,16 @@ export function outsideHeat({ heat: { outside }, vessel: { wall } }: BlowdownCas
     }
     case "pool-fire":
       return poolFire(outside, vessel);
-    case "surface-fire":
-      return (T) => area * (outside.heatFluxWPerM2 ?? fireFluxWPerM2(outside.basis, T));
+    case "surface-fire": {
+      const exposed = area * (outside.factor ?? 1);
+      return (T) => exposed * (outside.heatFluxWPerM2 ?? fireFluxWPerM2(outside.basis, T));
+    }
   }
 }
 
 type PoolFire = Extract<BlowdownCase["heat"]["outside"], { model: "pool-fire" }>;
 
-function poolFire({ drainage, environmentFactor }: PoolFire, vessel: MeasuredVessel): OutsideHeat {
+function poolFire({ drainage, environmentFactor, factor = 1 }: PoolFire, vessel: MeasuredVessel): OutsideHeat {
   const { below } = vessel;
   if (!below) {
     throw new EngineError(
@@ -44,6 +46,6 @@ function poolFire({ drainage, environmentFactor }: PoolFire, vessel: MeasuredVes
   }
   return (_T, liquidVolumeM3) => {
     const level = levelAtVolume(vessel, liquidVolumeM3) ?? 0;
-    return poolFireHeatW(below(level).areaM2, drainage, environmentFactor);
+    return poolFireHeatW(below(level).areaM2, drainage, factor * environmentFactor);
   };
 }

@@ -3,8 +3,8 @@
  *
  * Extremes are read at the ends and in the middle of each step, which is enough for steel (slow) and for a load that falls from the start.
  */
-import { Balance } from "../cases/blowdown/balance";
 import { integrateRun } from "../cases/blowdown/integrate-run";
+import { makeBalance } from "../cases/blowdown/make-balance";
 import { makeVesselModel } from "../cases/blowdown/vessel-model";
 import type { BlowdownCase, OrificeRelease } from "../cases/blowdown-case";
 import type { EndedBy } from "../cases/blowdown-result";
@@ -49,7 +49,7 @@ export function orificeOf(release: BlowdownCase["release"], diameterM: number): 
 }
 
 export function figuresOfBore(blowdown: BlowdownCase, { relativeTolerance, isCancelled, counted }: BoreOptions): BoreFigures {
-  const balance = new Balance(makeVesselModel(blowdown));
+  const balance = makeBalance(makeVesselModel(blowdown));
   const run = integrateRun(balance, blowdown, { relativeTolerance, maxEvaluations, ...(isCancelled ? { isCancelled } : {}) });
   counted.runs++;
   counted.evaluations += run.evaluations;
@@ -59,7 +59,8 @@ export function figuresOfBore(blowdown: BlowdownCase, { relativeTolerance, isCan
     for (const step of segment.dense.steps) {
       for (const t of [step.t0, (step.t0 + step.t1) / 2, step.t1]) {
         const { instant } = balance.within(segment, step, t);
-        coldest = Math.min(coldest, instant.heat.innerSurfaceK ?? Number.POSITIVE_INFINITY);
+        const { innerSurfaceK, liquidSurfaceK } = instant.heat;
+        coldest = Math.min(coldest, innerSurfaceK ?? Number.POSITIVE_INFINITY, liquidSurfaceK ?? Number.POSITIVE_INFINITY);
         peak = Math.max(peak, instant.ventRateKgPerS);
       }
     }

@@ -103,7 +103,9 @@ export const inputRules: Record<InputId, InputRule> = {
     high: 2,
     vary: (blowdown, by) => {
       const { inside } = blowdown.heat;
-      if (inside.model !== "constant") return undefined;
+      if (inside.model === "none") return undefined;
+      if (inside.model === "correlations")
+        return { ...blowdown, heat: { ...blowdown.heat, inside: { ...inside, factor: (inside.factor ?? 1) * by } } };
       const coefficientWPerM2K = inside.coefficientWPerM2K * by;
       return { ...blowdown, heat: { ...blowdown.heat, inside: { ...inside, coefficientWPerM2K } } };
     },
@@ -141,15 +143,15 @@ export const inputRules: Record<InputId, InputRule> = {
   },
   "outside-heat": {
     ...factor,
-    title: "Heat or flux stated for the outside",
+    title: "Heat of the fire, or stated for the outside",
     low: 0.7,
     high: 1.3,
     vary: (blowdown, by) => {
       const { outside } = blowdown.heat;
       if (outside.model === "constant-heat" && outside.heatW !== 0)
         return { ...blowdown, heat: { ...blowdown.heat, outside: { ...outside, heatW: outside.heatW * by } } };
-      if (outside.model === "surface-fire" && outside.heatFluxWPerM2 !== undefined)
-        return { ...blowdown, heat: { ...blowdown.heat, outside: { ...outside, heatFluxWPerM2: outside.heatFluxWPerM2 * by } } };
+      if (outside.model === "surface-fire" || outside.model === "pool-fire")
+        return { ...blowdown, heat: { ...blowdown.heat, outside: { ...outside, factor: (outside.factor ?? 1) * by } } };
       return undefined;
     },
   },

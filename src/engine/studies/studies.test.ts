@@ -238,6 +238,22 @@ describe("inputs", () => {
     expect(of(larger) / of(walled)).toBeCloseTo(1.05, 12);
   });
 
+  it("varies films from correlations and the heat of fires by a factor, which acts as a stated flux would", () => {
+    const outside = { model: "surface-fire", basis: "open-pool", heatFluxWPerM2: 2e4 } as const;
+    const fire: BlowdownCase = { ...walled, heat: { inside: { model: "correlations" }, wall: { model: "lumped" }, outside } };
+    expect(inputsOf(fire)).toEqual(expect.arrayContaining(["inside-film", "outside-heat"]));
+    const varied = inputRules["outside-heat"].vary(fire, 1.3);
+    const stated = { ...fire, heat: { ...fire.heat, outside: { ...outside, heatFluxWPerM2: 1.3 * 2e4 } } };
+    const wallOf = (one: BlowdownCase | undefined) =>
+      one && runBlowdown({ ...one, run: { ...gas.run, stopTimeS: 200 } }, { coarse: true }).series.gasWallTemperatureK?.at(-1);
+    expect(wallOf(varied)).toBeCloseTo(wallOf(stated) ?? 0, 6);
+    const still = { ...fire, heat: { ...fire.heat, outside: { model: "adiabatic" } as const } };
+    const fluidOf = (by: number): number =>
+      runBlowdown(inputRules["inside-film"].vary(still, by) ?? still, { coarse: true }).summary.minimumFluidTemperatureK;
+    expect(fluidOf(2)).toBeGreaterThan(fluidOf(1));
+    expect(fluidOf(0.5)).toBeLessThan(fluidOf(1));
+  });
+
   it("has a study of every kind for a case with a wall", () => {
     const small: StudyCase = { ...head, of: walled, study: "percentiles", samples: 3, seed: 1 };
     expect(planOf(small).inputs.map(({ input }) => input)).toEqual(inputsOf(walled));

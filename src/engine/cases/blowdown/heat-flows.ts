@@ -22,7 +22,7 @@ export type HeatFlows = {
 };
 
 export function heatFlows(model: VesselModel, contents: Contents, wallMeanK: number | undefined): HeatFlows {
-  const { wall, insideAreaM2: area, outside, fluid, vessel, film } = model;
+  const { wall, insideAreaM2: area, outside, fluid, vessel, film, filmFactor } = model;
   const { temperatureK: fluidK, liquidVolumeM3 } = contents;
   const fromOutsideW = outside(wallMeanK ?? fluidK, liquidVolumeM3);
   if (!wall || wallMeanK === undefined) return { fromWallW: 0, fromOutsideW, innerSurfaceK: undefined };
@@ -34,7 +34,8 @@ export function heatFlows(model: VesselModel, contents: Contents, wallMeanK: num
     const qIn = film.coefficientWPerM2K > 0 ? (still - fluidK) / (1 / film.coefficientWPerM2K + resistances.inside) : 0;
     return { fromWallW: qIn * area, fromOutsideW, innerSurfaceK: still - qIn * resistances.inside };
   }
-  const heatAt = correlatedFilmW(fluid, vessel, contents);
+  const filmW = correlatedFilmW(fluid, vessel, contents);
+  const heatAt = (dT: number): number => filmFactor * filmW(dT);
   const surface = surfaceTemperature(heatAt, { stillK: still, fluidK, resistanceKPerW: resistances.inside / area });
   return { fromWallW: heatAt(surface - fluidK), fromOutsideW, innerSurfaceK: surface };
 }

@@ -8,8 +8,8 @@
  */
 import { EngineError } from "../../errors";
 import type { BlowdownCase, OrificeRelease, SizedRelease } from "../blowdown-case";
-import { Balance } from "./balance";
 import { integrateRun, type RunOptions } from "./integrate-run";
+import { makeBalance } from "./make-balance";
 import { makeVesselModel } from "./vessel-model";
 
 export type SizedCase = { document: BlowdownCase; diameterM: number; timeS: number; runs: number; evaluations: number };
@@ -77,7 +77,7 @@ const orificeOf = ({ targetPressurePa: _p, targetTimeS: _t, ...rest }: SizedRele
 
 /** Area [m²] that would empty the vessel exponentially to the target at its first rate. */
 function firstArea(oneMetre: BlowdownCase, { targetPressurePa, targetTimeS }: SizedRelease): number {
-  const balance = new Balance(makeVesselModel(oneMetre));
+  const balance = makeBalance(makeVesselModel(oneMetre));
   const { start } = balance.model;
   if (!(targetPressurePa < start.pressurePa)) {
     throw new EngineError(
@@ -97,7 +97,7 @@ function timeToTarget(
   { firstDiameterM: _first, ...options }: SizeOptions & { relativeTolerance: number },
 ): { timeS: number | undefined; evaluations: number } {
   const toTarget = { ...blowdown, run: { ...blowdown.run, stopPressurePa: targetPressurePa, stopTimeS: never * targetTimeS } };
-  const run = integrateRun(new Balance(makeVesselModel(toTarget)), toTarget, options);
+  const run = integrateRun(makeBalance(makeVesselModel(toTarget)), toTarget, options);
   if (run.endedBy === "pressure") return { timeS: run.endTimeS, evaluations: run.evaluations };
   if (run.endedBy !== "solid-phase") return { timeS: undefined, evaluations: run.evaluations };
   throw new EngineError(

@@ -22,6 +22,8 @@ export type VesselModel = {
   settled: Settled | undefined;
   wall: Wall | undefined;
   film: "none" | "correlations" | { coefficientWPerM2K: number };
+  /** Multiplies films from correlations. */
+  filmFactor: number;
   insideAreaM2: number;
   outside: OutsideHeat;
   /** Which part of the inside the outside heats. */
@@ -57,6 +59,7 @@ export function makeVesselModel(blowdown: BlowdownCase): VesselModel {
     settled,
     wall: walled && given.wall ? makeWall(heat.wall.model, given.wall, vessel, start.temperatureK) : undefined,
     film: !walled ? "none" : heat.inside.model === "constant" ? heat.inside : heat.inside.model,
+    filmFactor: heat.inside.model === "correlations" ? (heat.inside.factor ?? 1) : 1,
     insideAreaM2: vessel.innerAreaM2 ?? 0,
     outside: outsideHeat(blowdown, vessel),
     outsideActsOn: heat.outside.model === "pool-fire" ? "wetted" : "all",
