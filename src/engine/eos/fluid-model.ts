@@ -214,6 +214,11 @@ export interface ResidualModel {
   volumeAtPressure(T: number, p: number, root: Root): number;
   /** Volumes at or below this are impossible (the co-volume of a cubic; the density bound of a reference equation). */
   minimumVolume(): number;
+  /**
+   * Are these two volumes, found to be in equilibrium at T, beyond doubt those of saturated vapour and liquid of a pure fluid, and not of false
+   * branches? `false` only means that it has to be looked into.
+   */
+  isSaturation?(T: number, vapourVolume: number, liquidVolume: number): boolean;
   /** Saturated volumes of one mole of a pure fluid, where the equation has a faster way to them than the general one. */
   saturation?(T: number): SaturationVolumes | undefined;
 }

@@ -46,7 +46,8 @@ export function assemble(model: FluidModel, T: number, p: number, inputs: readon
 
 function assemblePhase(model: FluidModel, T: number, p: number, input: PhaseInput): EquilibriumPhase {
   const { moleFraction, molarVolume } = input;
-  const composition = Float64Array.from(input.composition);
+  const composition =
+    input.composition instanceof Float64Array ? input.composition.slice() : Float64Array.from(input.composition);
   const state = model.phaseAtVolume(T, molarVolume, composition, createPhaseState());
   state.enthalpyJPerMol += (p - state.pressurePa) * molarVolume;
   state.pressurePa = p;

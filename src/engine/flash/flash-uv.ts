@@ -337,10 +337,13 @@ function assembleTwo(model: FluidModel, state: TwoPhaseVolumes): Equilibrium {
     nv += v[i]!;
     nl += l[i]!;
   }
-  const share = (moles: Float64Array, total: number) => moles.map((amount) => amount / total);
+  for (let i = 0; i < v.length; i++) {
+    v[i] = v[i]! / nv; // the unknowns are spent: they leave as the compositions
+    l[i] = l[i]! / nl;
+  }
   return assemble(model, temperatureK, pressurePa, [
-    { moleFraction: nv, composition: share(v, nv), molarVolume: vapourVolume / nv },
-    { moleFraction: nl, composition: share(l, nl), molarVolume: liquidVolume / nl },
+    { moleFraction: nv, composition: v, molarVolume: vapourVolume / nv },
+    { moleFraction: nl, composition: l, molarVolume: liquidVolume / nl },
   ]);
 }
 

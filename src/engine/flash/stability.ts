@@ -101,16 +101,25 @@ function likeliestPure(
   searches: number,
 ): number[] {
   const { trial, d } = work;
-  const heights: { index: number; height: number }[] = [];
+  const chosen: number[] = [];
+  const heights: number[] = [];
   for (let i = 0; i < z.length; i++) {
     if (!(z[i]! > 1e-12)) continue;
     trial.composition.fill(0);
     trial.composition[i] = 1;
     evaluateLnPhi(model, trial, T, p, "stable", 1);
-    heights.push({ index: i, height: trial.lnPhi[i]! - d[i]! });
+    const height = trial.lnPhi[i]! - d[i]!;
+    let place = chosen.length;
+    while (place > 0 && heights[place - 1]! > height) place--;
+    if (place >= searches) continue;
+    chosen.splice(place, 0, i);
+    heights.splice(place, 0, height);
+    if (chosen.length > searches) {
+      chosen.pop();
+      heights.pop();
+    }
   }
-  heights.sort((a, b) => a.height - b.height);
-  return heights.slice(0, searches).map(({ index }) => index);
+  return chosen;
 }
 
 /** Follows W from where it stands to a stationary point of tm, or until tm < 0 is certain. */

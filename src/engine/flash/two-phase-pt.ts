@@ -26,6 +26,7 @@ export interface TwoPhaseWork {
 export type TwoPhaseOutcome = "converged" | "one-phase" | "failed";
 
 const substitutions = 30;
+const longestOutside = 5;
 const leastShare = 1e-13;
 /** ln K beyond which a component is in one phase alone for all that numbers can tell. */
 const extreme = 300;
@@ -49,6 +50,7 @@ export function solveTwoPhase(
   const { vapour, liquid, lnK, step } = work;
   const count = z.length;
   let before = 0;
+  let outside = 0;
 
   for (let iteration = 0; iteration < substitutions; iteration++) {
     split(z, work);
@@ -69,7 +71,8 @@ export function solveTwoPhase(
     if (!Number.isFinite(error)) return "failed";
     if (distinct < 1e-5) return "one-phase";
     const inside = work.beta > 0 && work.beta < 1;
-    if (error < 1e-18 && !inside) return "one-phase";
+    // One phase and its trial is what the stability test does better.
+    if (!inside && (++outside === longestOutside || error < 1e-18)) return "one-phase";
     if (inside && iteration >= 2 && error < 1e-4) break;
     const lambda = iteration > 0 ? along / before : 0;
     if (iteration % 4 === 3 && inside && lambda > 0 && lambda < 0.97) {

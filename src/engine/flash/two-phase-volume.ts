@@ -124,6 +124,7 @@ export function solveAtVolume(model: FluidModel, z: ArrayLike<number>, target: V
     step[rowT] = balance;
     if (target.hold === "entropy") addEntropyTerms(work, active, size, scaleV, pv - pl);
 
+    const lastStep = error < 1e-9 && error < 1e-2 * previous;
     const settled = error < 1e-13 || (error < 1e-10 && error >= 0.5 * previous);
     const stable = pv > 0 && pl > 0 && nv / (Vv * Vv) + light.FVV > 0 && nl / (Vl * Vl) + dense.FVV > 0;
     if (settled) {
@@ -149,7 +150,7 @@ export function solveAtVolume(model: FluidModel, z: ArrayLike<number>, target: V
     const changeV = scaleV * step[rowV]!;
     if (!Number.isFinite(changeT) || !Number.isFinite(changeV)) return false;
     if (Math.abs(changeT) > 0.15 * T) length = Math.min(length, (0.15 * T) / Math.abs(changeT));
-    length = volumeLimit(work, model, state, active, length, changeV);
+    if (error > smallStep) length = volumeLimit(work, model, state, active, length, changeV);
     if (!(length > 1e-6)) return false;
 
     for (let k = 0; k < active; k++) {
@@ -172,8 +173,38 @@ export function solveAtVolume(model: FluidModel, z: ArrayLike<number>, target: V
       state.liquidVolume = Vl - length * changeV;
       state.vapourVolume = target.molarVolume - state.liquidVolume;
     }
+    if (lastStep && stable && meets(model, work, state)) {
+      return distinct(state, nv, nl) && onRightRoots(model, work, state, active === 1);
+    }
   }
   return false;
+}
+
+/** Below this residual a step is too short to carry a phase past its smallest volume. */
+const smallStep = 1e-2;
+
+/**
+ * Newton squares its error: from below 1e-9 the step just taken has reached round-off, and one look at the two pressures, which are the most
+ * sensitive of all, proves it. Sets the pressure.
+ */
+function meets(model: FluidModel, { light, dense }: VolumeWork, state: TwoPhaseVolumes): boolean {
+  const { residual, gasConstantJPerMolK: R } = model;
+  const { v, l, vapourVolume, liquidVolume, temperatureK: T } = state;
+  let nv = 0;
+  let nl = 0;
+  for (let i = 0; i < v.length; i++) {
+    nv += v[i]!;
+    nl += l[i]!;
+  }
+  residual.setComposition(l);
+  residual.evaluate(T, liquidVolume, 0, dense);
+  residual.setComposition(v);
+  residual.evaluate(T, vapourVolume, 0, light);
+  const pv = nv / vapourVolume - light.FV;
+  const pl = nl / liquidVolume - dense.FV;
+  if (!(Math.abs(pv - pl) <= 1e-9 * pv)) return false;
+  state.pressurePa = R * T * pv;
+  return true;
 }
 
 /** Shortens the step until both phases stay above their smallest possible volume. */
@@ -233,6 +264,12 @@ const equalRoots = 1e-8;
  * stable-looking branches between them.
  */
 function onRightRoots(model: FluidModel, work: VolumeWork, { v, l, ...state }: TwoPhaseVolumes, isPure: boolean): boolean {
+  const { residual } = model;
+  if (isPure) {
+    if (!residual.hasFalseBranches) return true;
+    const moles = (amounts: Float64Array) => amounts.reduce((sum, amount) => sum + amount, 0);
+    if (residual.isSaturation?.(state.temperatureK, state.vapourVolume / moles(v), state.liquidVolume / moles(l))) return true;
+  }
   return (
     isOnRightRoot(model, work, v, state.vapourVolume, state, isPure) &&
     isOnRightRoot(model, work, l, state.liquidVolume, state, isPure)
@@ -248,7 +285,6 @@ function isOnRightRoot(
   isPure: boolean,
 ): boolean {
   const { residual, gasConstantJPerMolK: R } = model;
-  if (isPure && !residual.hasFalseBranches) return true;
   let total = 0;
   for (let i = 0; i < moles.length; i++) total += moles[i]!;
   for (let i = 0; i < moles.length; i++) trial[i] = moles[i]! / total;

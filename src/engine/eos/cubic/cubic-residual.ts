@@ -30,6 +30,8 @@ export class CubicResidual implements ResidualModel {
   private readonly q: Float64Array;
   /** 1 − k_ij, row-major; undefined when every k_ij is zero. */
   private readonly affinity: Float64Array | undefined;
+  private readonly np: Float64Array; // n_i p_i
+  private readonly nq: Float64Array;
   private readonly delta1: number;
   private readonly delta2: number;
   private readonly kind: CubicEquation["alpha"]["kind"];
@@ -87,56 +89,54 @@ export class CubicResidual implements ResidualModel {
     });
     this.maximumTemperatureK = ceiling;
     if (kij.some((k) => k !== 0)) this.affinity = kij.map((k) => 1 - k);
+    this.np = new Float64Array(count);
+    this.nq = new Float64Array(count);
   }
 
-  setComposition(n: ArrayLike<number>): void {
-    const { count, b, p, q, affinity } = this;
+  setComposition(amounts: ArrayLike<number>): void {
+    const { count, b, p, q, n, Sp, Sq, np, nq, affinity } = this;
     let total = 0;
     let B = 0;
+    let sp = 0;
+    let sq = 0;
     for (let i = 0; i < count; i++) {
-      const amount = n[i]!;
-      this.n[i] = amount;
+      const amount = amounts[i]!;
+      n[i] = amount;
       total += amount;
       B += amount * b[i]!;
+      sp += np[i] = amount * p[i]!;
+      sq += nq[i] = amount * q[i]!;
     }
     this.total = total;
     this.B = B;
-    if (affinity) {
-      let pp = 0;
-      let pq = 0;
-      let qq = 0;
-      for (let i = 0; i < count; i++) {
-        let sp = 0;
-        let sq = 0;
-        const row = i * count;
-        for (let j = 0; j < count; j++) {
-          const weight = affinity[row + j]! * this.n[j]!;
-          sp += weight * p[j]!;
-          sq += weight * q[j]!;
-        }
-        this.Sp[i] = sp;
-        this.Sq[i] = sq;
-        const amount = this.n[i]!;
-        pp += amount * p[i]! * sp;
-        pq += amount * p[i]! * sq;
-        qq += amount * q[i]! * sq;
-      }
-      this.Dpp = pp;
-      this.Dpq = pq;
-      this.Dqq = qq;
-    } else {
-      let sp = 0;
-      let sq = 0;
-      for (let i = 0; i < count; i++) {
-        sp += this.n[i]! * p[i]!;
-        sq += this.n[i]! * q[i]!;
-      }
-      this.Sp.fill(sp);
-      this.Sq.fill(sq);
+    if (!affinity) {
+      Sp.fill(sp);
+      Sq.fill(sq);
       this.Dpp = sp * sp;
       this.Dpq = sp * sq;
       this.Dqq = sq * sq;
+      return;
     }
+    let pp = 0;
+    let pq = 0;
+    let qq = 0;
+    for (let i = 0, at = 0; i < count; i++) {
+      sp = 0;
+      sq = 0;
+      for (let j = 0; j < count; j++, at++) {
+        const weight = affinity[at]!;
+        sp += weight * np[j]!;
+        sq += weight * nq[j]!;
+      }
+      Sp[i] = sp;
+      Sq[i] = sq;
+      pp += np[i]! * sp;
+      pq += np[i]! * sq;
+      qq += nq[i]! * sq;
+    }
+    this.Dpp = pp;
+    this.Dpq = pq;
+    this.Dqq = qq;
   }
 
   minimumVolume(): number {

@@ -1,6 +1,9 @@
 import type { NonAnalyticTerm } from "./reference-data";
 import type { ReducedDerivatives } from "./reduced-terms";
 
+/** Exponent past which ψ is below 1e-22: the term cannot reach a digit of anything. */
+const farAway = 50;
+
 /**
  * Adds one non-analytic term n Δ^b δ ψ, which bends the equation near the critical point.
  *
@@ -15,6 +18,8 @@ export function addNonAnalytic(term: NonAnalyticTerm, delta: number, tau: number
   const x = Math.abs(delta - 1) < 1e-10 ? 1e-10 : delta - 1;
   const y = tau - 1;
   const xx = x * x;
+  const remoteness = C * xx + D * y * y;
+  if (remoteness > farAway) return;
   const power = xx ** (1 / (2 * beta) - 1);
   const theta = -y + A * power * xx;
   const bowl = B * xx ** (a - 1);
@@ -26,14 +31,14 @@ export function addNonAnalytic(term: NonAnalyticTerm, delta: number, tau: number
     2 * A * A * (1 / beta) ** 2 * power * power * xx +
     A * theta * (4 / beta) * (1 / (2 * beta) - 1) * power;
   const P = Delta ** b;
-  const P1 = b * Delta ** (b - 1);
-  const P2 = b * (b - 1) * Delta ** (b - 2);
+  const P1 = (b * P) / Delta;
+  const P2 = ((b - 1) * P1) / Delta;
   const P_d = P1 * Delta_d;
   const P_dd = P1 * Delta_dd + P2 * Delta_d * Delta_d;
   const P_t = -2 * theta * P1;
   const P_tt = 2 * P1 + 4 * theta * theta * P2;
   const P_dt = -A * (2 / beta) * P1 * x * power - 2 * theta * P2 * Delta_d;
-  const psi = Math.exp(-C * xx - D * y * y);
+  const psi = Math.exp(-remoteness);
   const psi_d = -2 * C * x * psi;
   const psi_dd = (2 * C * xx - 1) * 2 * C * psi;
   const psi_t = -2 * D * y * psi;

@@ -68,6 +68,8 @@ export class ReducedTerms {
   private readonly lPowers: Float64Array;
   private readonly lDecay: Float64Array;
   private readonly extra = createReducedDerivatives();
+  private delta = Number.NaN;
+  private tau = Number.NaN;
 
   constructor(groups: readonly (readonly (ReferenceTerm | KunzTerm)[])[]) {
     const isSimple = (term: ReferenceTerm | KunzTerm): term is SimpleTerm => term.type === "power" || term.type === "exponential";
@@ -98,8 +100,11 @@ export class ReducedTerms {
     );
   }
 
-  /** Fills `sums` for every group. */
+  /** Fills `sums` for every group; asked again for the same point, it has them already. */
   evaluate(delta: number, tau: number): void {
+    if (delta === this.delta && tau === this.tau) return;
+    this.delta = delta;
+    this.tau = tau;
     this.byDelta.raise(delta);
     this.byTau.raise(tau);
     const lnDelta = Math.log(delta);

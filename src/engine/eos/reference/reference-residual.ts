@@ -8,6 +8,8 @@ import { createReducedDerivatives, ReducedTerms, type ReducedDerivatives } from 
 const densestReduced = 5;
 /** The saturation-pressure ancillaries are within 0.1 %: outside this band they decide the phase, inside it the Gibbs energy does. */
 const undecided = 0.01;
+/** The density ancillaries are within 1 % well below the critical point: two volumes this near them are not of a false branch. */
+const ancillaryBand = 0.02;
 
 /** F = n αr(δ, τ) of a pure fluid by its reference equation. */
 export class ReferenceResidual implements ResidualModel {
@@ -106,6 +108,14 @@ export class ReferenceResidual implements ResidualModel {
       return this.reduce(rho / this.rhoR, this.Tr / this.T).a + p / (rho * this.R * this.T) + Math.log(rho);
     };
     return gibbs(dense) < gibbs(thin) ? dense : thin;
+  }
+
+  isSaturation(T: number, vapourVolume: number, liquidVolume: number): boolean {
+    const { rhoLiquid, rhoVapour } = this.fluid.saturationAncillaries;
+    return (
+      Math.abs(liquidVolume * ancillary(rhoLiquid, T) - 1) < ancillaryBand &&
+      Math.abs(vapourVolume * ancillary(rhoVapour, T) - 1) < ancillaryBand
+    );
   }
 
   /**
