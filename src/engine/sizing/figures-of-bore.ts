@@ -1,8 +1,9 @@
 /**
  * The figures of one run that a bore is judged by, without its series: time to a pressure, coldest steel, peak load.
  *
- * Extremes are read at the ends and in the middle of each step, which is enough for steel (slow) and for a load that falls from the start.
+ * Steel is read at the ends and in the middle of each step, and so is the load where that costs no more; a load peaks at the start or slowly.
  */
+import { DenseRun } from "../cases/blowdown/dense-run";
 import { integrateRun } from "../cases/blowdown/integrate-run";
 import { makeBalance } from "../cases/blowdown/make-balance";
 import { makeVesselModel } from "../cases/blowdown/vessel-model";
@@ -53,18 +54,23 @@ export function figuresOfBore(blowdown: BlowdownCase, { relativeTolerance, isCan
   const run = integrateRun(balance, blowdown, { relativeTolerance, maxEvaluations, ...(isCancelled ? { isCancelled } : {}) });
   counted.runs++;
   counted.evaluations += run.evaluations;
+  // A lumped wall is read off its heat content; a surface of its own needs the film, and so the state of the fluid.
+  const { wall, zones } = balance.model;
+  const lump = wall && !zones && blowdown.heat.wall.model === "lumped" ? wall : undefined;
   let coldest = Number.POSITIVE_INFINITY;
   let peak = 0;
-  for (const segment of run.segments) {
-    for (const step of segment.dense.steps) {
-      for (const t of [step.t0, (step.t0 + step.t1) / 2, step.t1]) {
-        const { instant } = balance.within(segment, step, t);
-        const { innerSurfaceK, liquidSurfaceK } = instant.heat;
-        coldest = Math.min(coldest, innerSurfaceK ?? Number.POSITIVE_INFINITY, liquidSurfaceK ?? Number.POSITIVE_INFINITY);
-        peak = Math.max(peak, instant.ventRateKgPerS);
+  run.segments.forEach((segment, s) =>
+    segment.dense.steps.forEach((step, i) => {
+      const moments = [step.t0, (step.t0 + step.t1) / 2, step.t1];
+      if (lump)
+        for (const t of moments) coldest = Math.min(coldest, lump.temperatureAtK(balance.wallEnergyJ(DenseRun.inside(step, t))));
+      for (const t of lump ? moments.slice(s + i === 0 ? 0 : 2) : moments) {
+        const { heat, ventRateKgPerS } = balance.within(segment, step, t).instant;
+        peak = Math.max(peak, ventRateKgPerS);
+        if (!lump) coldest = Math.min(coldest, heat.innerSurfaceK ?? Infinity, heat.liquidSurfaceK ?? Infinity);
       }
-    }
-  }
+    }),
+  );
   return {
     endTimeS: run.endTimeS,
     endedBy: run.endedBy,

@@ -106,6 +106,19 @@ describe("the window of bores", () => {
     expect(steelOf(1.01 * (high.coldBelow?.diameterM ?? 0))).toBeGreaterThan(246);
   });
 
+  it("finds the smallest bore beyond the jump where a smaller one never reaches the target in the fire", () => {
+    const hot = {
+      ...fire,
+      vessel: { ...fire.vessel, geometry: { shape: "volume", volumeM3: 0.1, innerAreaM2: 1.4 } },
+    } as BlowdownCase;
+    const jump: BlowdownCase = { ...hot, limits: { targetPressurePa: 4e6, targetTimeS: 300 } };
+    const { smallest } = runSizing(sizing({ fire: jump, cold: undefined, rangeM: undefined }));
+    const reach = (bore: number) => runBlowdown(withBore(jump, bore), { coarse: true }).summary.timeToTargetPressureS;
+    expect(smallest?.value).toBeLessThan(300);
+    expect(reach(1.001 * (smallest?.diameterM ?? 0))).toBeLessThan(300);
+    expect(reach(0.998 * (smallest?.diameterM ?? 0)) ?? Infinity).toBeGreaterThan(300);
+  });
+
   it("sizes for one case alone", () => {
     expect(runSizing(sizing({ cold: undefined })).window.state).toBe("no-upper-edge");
     expect(runSizing(sizing({ fire: undefined })).largest?.diameterM).toBeCloseTo(result.largest?.diameterM ?? 0, 5);

@@ -3,6 +3,8 @@
  *
  * The time falls as the area grows, nearly as its inverse: secant on ln t against ln A with first slope −1, inside a bracket. An adiabatic vessel
  * obeys t A = constant and needs two runs; wall heat and fire bend the line. First runs are loose; the last are at the case's own tolerance.
+ * A fire can heat a vessel so that a little smaller bore never reaches the target: the time then jumps, and the smallest bore beyond the jump is
+ * the answer, with a time below the target.
  * Returns  the case with an orifice of that bore, and the bore
  * Throws   EngineError "no-convergence" where no bore up to the limits reaches the target in that time; what a run itself throws
  */
@@ -14,50 +16,36 @@ import { makeVesselModel } from "./vessel-model";
 
 export type SizedCase = { document: BlowdownCase; diameterM: number; timeS: number; runs: number; evaluations: number };
 
-const closeEnough = 1e-4;
-const looseTolerance = 1e-4;
-/** Nearer than this in time the loose runs' own error counts. */
-const looseIsGoodEnough = 3e-3;
-const mostRuns = 40;
 /** A run that takes this many times the target time counts as "never". */
-const never = 30;
+const never = 8;
+const mostRuns = 40;
+const largestLnArea = Math.log(100);
 
-type SizeOptions = Omit<RunOptions, "relativeTolerance" | "onProgress"> & { firstDiameterM?: number };
+/** How near in time, how near in area where the time jumps, and how far to step where one side is unknown. */
+type Search = { tolerance: number; closeEnough: number; jumpWidth: number; stride: number };
+const loose: Search = { tolerance: 1e-4, closeEnough: 3e-3, jumpWidth: 1e-3, stride: 1.5 };
+const tight: Search = { tolerance: 1e-5, closeEnough: 1e-4, jumpWidth: 1e-4, stride: 0.01 };
+
+type SizeOptions = Omit<RunOptions, "relativeTolerance" | "onProgress">;
 
 export function sizeBore(blowdown: BlowdownCase, release: SizedRelease, options: SizeOptions): SizedCase {
   const { targetPressurePa, targetTimeS } = release;
   const withBore = (diameterM: number): BlowdownCase => ({ ...blowdown, release: orificeOf(release, diameterM) });
-  const tight = Math.min(blowdown.run.relativeTolerance, 1e-5);
-  let lnA = Math.log(options.firstDiameterM ? areaOf(options.firstDiameterM) : firstArea(withBore(1), release));
-  let low = Number.NEGATIVE_INFINITY;
-  let high = Number.POSITIVE_INFINITY;
-  let before: { lnA: number; lnT: number } | undefined;
-  let tolerance = looseTolerance;
-  let evaluations = 0;
-  for (let runs = 1; runs <= mostRuns; runs++) {
-    const diameterM = Math.sqrt((4 * Math.exp(lnA)) / Math.PI);
-    const { timeS, evaluations: used } = timeToTarget(withBore(diameterM), release, { ...options, relativeTolerance: tolerance });
-    evaluations += used;
-    const lnT = timeS === undefined ? Number.POSITIVE_INFINITY : Math.log(timeS / targetTimeS);
-    if (timeS !== undefined && Math.abs(lnT) < closeEnough && tolerance <= tight)
-      return { document: withBore(diameterM), diameterM, timeS, runs, evaluations };
-    if (Math.abs(lnT) < looseIsGoodEnough && tolerance > tight) {
-      // A bracket from loose runs may be off by their error.
-      [low, high, tolerance] = [low - 2 * looseIsGoodEnough, high + 2 * looseIsGoodEnough, tight];
-      if (Math.abs(lnT) < closeEnough) {
-        before = undefined;
-        continue;
-      }
-    }
-    if (lnT > 0) low = Math.max(low, lnA);
-    else high = Math.min(high, lnA);
-    const slope = before && Number.isFinite(lnT) && before.lnA !== lnA ? (lnT - before.lnT) / (lnA - before.lnA) : -1;
-    let next = Number.isFinite(lnT) && slope < -0.05 ? lnA - lnT / slope : lnA + 1.5;
-    if (next <= low || next >= high)
-      next = high === Number.POSITIVE_INFINITY ? low + 1.5 : low === Number.NEGATIVE_INFINITY ? high - 1.5 : (low + high) / 2;
-    before = Number.isFinite(lnT) ? { lnA, lnT } : undefined;
-    if (high - low < 1e-9 || lnA > Math.log(100)) break;
-    lnA = next;
+  const counted = { runs: 0, evaluations: 0 };
+  const timeWith =
+    (relativeTolerance: number) =>
+    (lnA: number): number | undefined => {
+      const found = timeToTarget(withBore(diameterOf(lnA)), release, { ...options, relativeTolerance });
+      counted.runs++;
+      counted.evaluations += found.evaluations;
+      return found.timeS;
+    };
+  const own = { ...tight, tolerance: Math.min(blowdown.run.relativeTolerance, tight.tolerance) };
+  const near = search(timeWith(loose.tolerance), targetTimeS, Math.log(firstArea(withBore(1), release)), loose);
+  const found = near && search(timeWith(own.tolerance), targetTimeS, near.lnA, own);
+  if (found) {
+    const diameterM = diameterOf(found.lnA);
+    return { document: withBore(diameterM), diameterM, timeS: found.timeS, ...counted };
   }
   throw new EngineError(
     "no-convergence",
@@ -67,7 +55,37 @@ export function sizeBore(blowdown: BlowdownCase, release: SizedRelease, options:
   );
 }
 
-const areaOf = (diameterM: number): number => (Math.PI / 4) * diameterM ** 2;
+type Found = { lnA: number; timeS: number };
+
+function search(
+  timeAt: (lnA: number) => number | undefined,
+  targetTimeS: number,
+  from: number,
+  { closeEnough, jumpWidth, stride }: Search,
+): Found | undefined {
+  let [lnA, low, high] = [from, Number.NEGATIVE_INFINITY, Number.POSITIVE_INFINITY];
+  let fast: Found | undefined;
+  let before: { lnA: number; lnT: number } | undefined;
+  for (let runs = 0; runs < mostRuns && lnA < largestLnArea; runs++) {
+    const timeS = timeAt(lnA);
+    const lnT = timeS === undefined ? Number.POSITIVE_INFINITY : Math.log(timeS / targetTimeS);
+    if (timeS !== undefined && Math.abs(lnT) < closeEnough) return { lnA, timeS };
+    if (timeS !== undefined && lnT < 0) [high, fast] = [lnA, { lnA, timeS }];
+    else low = lnA;
+    if (fast && high - low < jumpWidth) return fast;
+    const slope = before && Number.isFinite(lnT) ? (lnT - before.lnT) / (lnA - before.lnA) : -1;
+    before = Number.isFinite(lnT) ? { lnA, lnT } : undefined;
+    const secant = before && slope < -0.05 ? lnA - lnT / slope : Number.NaN;
+    // A jump draws the secant to one side for ever; every third run halves the bracket.
+    if (secant > low && secant < high && runs % 3 !== 2) lnA = secant;
+    else if (high === Number.POSITIVE_INFINITY) lnA = low + stride;
+    else if (low === Number.NEGATIVE_INFINITY) lnA = high - stride;
+    else lnA = (low + high) / 2;
+  }
+  return undefined;
+}
+
+const diameterOf = (lnA: number): number => Math.sqrt((4 * Math.exp(lnA)) / Math.PI);
 
 const orificeOf = ({ targetPressurePa: _p, targetTimeS: _t, ...rest }: SizedRelease, diameterM: number): OrificeRelease => ({
   ...rest,
@@ -94,7 +112,7 @@ function firstArea(oneMetre: BlowdownCase, { targetPressurePa, targetTimeS }: Si
 function timeToTarget(
   blowdown: BlowdownCase,
   { targetPressurePa, targetTimeS }: SizedRelease,
-  { firstDiameterM: _first, ...options }: SizeOptions & { relativeTolerance: number },
+  options: SizeOptions & { relativeTolerance: number },
 ): { timeS: number | undefined; evaluations: number } {
   const toTarget = { ...blowdown, run: { ...blowdown.run, stopPressurePa: targetPressurePa, stopTimeS: never * targetTimeS } };
   const run = integrateRun(makeBalance(makeVesselModel(toTarget)), toTarget, options);
