@@ -39,15 +39,25 @@ const pseudo = z.strictObject({
   relativeDensity: quantity({ unit: "", min: 0.1, max: 2 }),
 });
 
+const plus = z.strictObject({
+  molarMassKgPerMol: quantity({ unit: "kg/mol", above: 0, max: 2 }),
+  relativeDensity: quantity({ unit: "", min: 0.1, max: 2 }),
+  pieces: quantity({ unit: "", min: 1, max: 8 })
+    .refine(Number.isInteger, { error: "Give a whole number from 1 to 8." })
+    .optional(),
+  lightestMolarMassKgPerMol: quantity({ unit: "kg/mol", above: 0.05, max: 1 }).optional(),
+});
+
 const component = z
   .strictObject({
     id: text(60).refine((id) => id.length > 0, { error: "This is empty. Give the component's id." }),
     moleFraction: fraction,
+    plus: plus.optional(),
     pseudo: pseudo.optional(),
     custom: custom.optional(),
   })
-  .refine((one) => !(one.pseudo && one.custom), {
-    error: "A component is either a pseudo-component or has its own constants. Keep one of the two.",
+  .refine((one) => [one.plus, one.pseudo, one.custom].filter(Boolean).length <= 1, {
+    error: "A component is a plus fraction, a pseudo-component or has its own constants. Keep one of the three.",
     path: ["custom"],
   });
 

@@ -31,9 +31,18 @@ export interface PseudoComponent {
   relativeDensity: number;
 }
 
+/** A heavy fraction (C7+) known by its means, cut into pseudo-components before the equation is built. */
+export interface PlusFraction extends PseudoComponent {
+  /** How many pieces of equal mass; left out: 3. */
+  pieces?: number | undefined;
+  /** Where the fraction begins; left out: 0.090 kg/mol. */
+  lightestMolarMassKgPerMol?: number | undefined;
+}
+
 export interface ComponentSpec {
   id: string;
   moleFraction: number;
+  plus?: PlusFraction;
   pseudo?: PseudoComponent;
   custom?: CustomComponent;
 }

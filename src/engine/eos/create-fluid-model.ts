@@ -1,5 +1,6 @@
 import type { FluidSpec } from "../cases/fluid-spec";
 import { EngineError } from "../errors";
+import { expandPlusFractions } from "../substances/plus-fraction";
 import { resolveComponent } from "../substances/resolve-component";
 import type { FluidModel } from "./fluid-model";
 import { equations } from "./registry";
@@ -10,7 +11,8 @@ const maximumComponents = 25;
  * The fluid of a case document as a model: library ids, pseudo-components and custom constants resolved, interaction
  * parameters looked up. Throws EngineError "invalid-case" with the path of the field, or "not-applicable".
  */
-export function createFluidModel(fluid: FluidSpec): FluidModel {
+export function createFluidModel(given: FluidSpec): FluidModel {
+  const fluid = expandPlusFractions(given);
   const entry = equations[fluid.equation];
   if (!entry) {
     throw new EngineError("not-applicable", `the equation "${fluid.equation}" is not available`, {}, "fluid.equation");

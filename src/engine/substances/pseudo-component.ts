@@ -89,11 +89,19 @@ export function edmisterAcentricFactor({ Tb, Tc, pc }: { Tb: number; Tc: number;
   return ((3 / 7) * Math.log10(pc / 14.7)) / (Tc / Tb - 1) - 1;
 }
 
-/** A heavy end from molar mass and relative density: Riazi-Daubert 1987, Edmister, Kesler-Lee heat capacity. */
+/** Above this molar mass [g/mol] the correlation of Riazi and Daubert ends, and that of Kesler and Lee goes on. */
+const riaziDaubertLimit = 300;
+/** A boiling point of about 900 K, where Kesler and Lee end. */
+const keslerLeeLimit = 550;
+
+/**
+ * A heavy end from molar mass and relative density: Riazi-Daubert 1987 with Edmister's acentric factor up to 300 g/mol; above, the boiling
+ * point at which Kesler and Lee 1976 find that molar mass, and their constants. Heat capacity by Kesler and Lee.
+ */
 export function pseudoSubstance(id: string, molarMassKgPerMol: number, relativeDensity: number): Substance {
   const M = molarMassKgPerMol * 1000;
-  if (!(M >= 70 && M <= 300)) {
-    throw new EngineError("outside-validity", "a pseudo-component needs a molar mass between 0.070 and 0.300 kg/mol", {
+  if (!(M >= 70 && M <= keslerLeeLimit)) {
+    throw new EngineError("outside-validity", "a pseudo-component needs a molar mass between 0.070 and 0.550 kg/mol", {
       molarMassKgPerMol,
     });
   }
@@ -102,9 +110,9 @@ export function pseudoSubstance(id: string, molarMassKgPerMol: number, relativeD
       relativeDensity,
     });
   }
-  const { Tc, pc, Tb } = riaziDaubertFromMolarMass(M, relativeDensity);
-  const omega = edmisterAcentricFactor({ Tb, Tc, pc });
-  if (!(omega > 0 && omega < 1.5 && Tb < Tc)) {
+  const heavy = M > riaziDaubertLimit;
+  const { Tc, pc, Tb, omega } = heavy ? byKeslerLee(M, relativeDensity) : byRiaziDaubert(M, relativeDensity);
+  if (!(omega > 0 && omega < 2 && Tb < Tc)) {
     throw new EngineError("outside-validity", "molar mass and relative density do not belong to one petroleum fraction", {
       molarMassKgPerMol,
       relativeDensity,
@@ -121,7 +129,28 @@ export function pseudoSubstance(id: string, molarMassKgPerMol: number, relativeD
     heatCapacity: keslerLeeHeatCapacity({ M, Tb, SG: relativeDensity, omega }),
     heatCapacityRangeK: [255, 922],
     notes: [
-      `${id}: critical constants by Riazi and Daubert 1987, acentric factor by Edmister 1958, heat capacity by Kesler and Lee 1976, from molar mass and relative density.`,
+      heavy
+        ? `${id}: critical constants, acentric factor and heat capacity by Kesler and Lee 1976, from molar mass and relative density.`
+        : `${id}: critical constants by Riazi and Daubert 1987, acentric factor by Edmister 1958, heat capacity by Kesler and Lee 1976, from molar mass and relative density.`,
     ],
   };
+}
+
+function byRiaziDaubert(M: number, SG: number) {
+  const { Tc, pc, Tb } = riaziDaubertFromMolarMass(M, SG);
+  return { Tc, pc, Tb, omega: edmisterAcentricFactor({ Tb, Tc, pc }) };
+}
+
+/** The boiling point at which Kesler and Lee's molar mass is M; it rises with boiling point over the range searched. */
+function byKeslerLee(M: number, SG: number) {
+  let low = 1000;
+  let high = 1800;
+  for (let k = 0; k < 80; k++) {
+    const middle = 0.5 * (low + high);
+    if (keslerLee(middle, SG).M < M) low = middle;
+    else high = middle;
+  }
+  const Tb = 0.5 * (low + high);
+  const { Tc, pc, omega } = keslerLee(Tb, SG);
+  return { Tc, pc, Tb, omega };
 }

@@ -5,6 +5,7 @@ import { aroundRun } from "../../after/around-run";
 import { EngineError } from "../../errors";
 import { assess } from "../../limits/assess";
 import { blowdownFigures } from "../../limits/blowdown-figures";
+import { expandPlusFractions } from "../../substances/plus-fraction";
 import type { BlowdownCase } from "../blowdown-case";
 import type { BlowdownResult, BlowdownSummary, EnergyAccount } from "../blowdown-result";
 import type { Balance, Instant } from "./balance";
@@ -39,7 +40,8 @@ const previewGaps = 3;
 /** What the fit of a preview may leave unresolved, in parts of what a stored run may. */
 const previewLooseness = 30;
 
-export function runBlowdown(given: BlowdownCase, options: BlowdownOptions = {}): BlowdownBody {
+export function runBlowdown(asked: BlowdownCase, options: BlowdownOptions = {}): BlowdownBody {
+  const given: BlowdownCase = { ...asked, fluid: expandPlusFractions(asked.fluid) };
   const maxEvaluations = options.maxEvaluations ?? 200_000;
   const sized =
     given.release.path === "sized"
@@ -77,7 +79,8 @@ export function runBlowdown(given: BlowdownCase, options: BlowdownOptions = {}):
       series,
       summary,
       contentsAt: (t) => instantAt(balance, run, t, "last").instant.contents,
-      rerun: (other) => runBlowdown(other, { coarse: true, ...(options.isCancelled ? { isCancelled: options.isCancelled } : {}) }),
+      rerun: (other) =>
+        runBlowdown(other, { coarse: true, ...(options.isCancelled ? { isCancelled: options.isCancelled } : {}) }),
     },
     endOfRun(balance, ends, rows),
   );
