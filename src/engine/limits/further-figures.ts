@@ -22,6 +22,8 @@ export type LookedAt = {
 
 /** Moments that are looked at besides the coldest. */
 const moments = 16;
+/** So far from solid at the coldest moments, the others are not looked at. */
+const farFromSolidK = 40;
 
 export function furtherFigures(blowdown: BlowdownCase, looked: LookedAt): { figures: Figure[]; warnings: Warning[] } {
   const { model, series, summary } = looked;
@@ -29,9 +31,10 @@ export function furtherFigures(blowdown: BlowdownCase, looked: LookedAt): { figu
   const carriesOver = model.from === "vapour" && series.vapourMoleFraction.some((share) => share < 1);
   const least = { vessel: farthestK, behind: farthestK };
   let swelled = 0;
-  for (const i of freezes || carriesOver ? rowsToLookAt(series) : []) {
-    const timeS = series.timeS[i] ?? 0;
-    const contents = looked.contentsAt(timeS);
+  const seesLevel = carriesOver && model.vessel.below !== undefined;
+  const { coldest, even } = rowsToLookAt(series);
+  const look = (i: number): void => {
+    const contents = looked.contentsAt(series.timeS[i] ?? 0);
     if (freezes) {
       least.vessel = Math.min(least.vessel, freezingDistanceK(model.fluid, contents, model.solids));
       least.behind = Math.min(
@@ -39,8 +42,10 @@ export function furtherFigures(blowdown: BlowdownCase, looked: LookedAt): { figu
         behindOpening(model, contents, series.outletTemperatureK[i] ?? contents.temperatureK),
       );
     }
-    if (carriesOver) swelled = Math.max(swelled, swelledAt(model, contents, series.ventRateKgPerS[i] ?? 0));
-  }
+    if (seesLevel) swelled = Math.max(swelled, swelledAt(model, contents, series.ventRateKgPerS[i] ?? 0));
+  };
+  if (freezes || seesLevel) coldest.forEach(look);
+  if (seesLevel || Math.min(least.vessel, least.behind) < farFromSolidK) even.forEach(look);
   const wet = hydrateDistance(blowdown, looked);
   return {
     figures: [
@@ -52,12 +57,13 @@ export function furtherFigures(blowdown: BlowdownCase, looked: LookedAt): { figu
   };
 }
 
-/** Evenly over the rows, with the coldest inside and behind the opening. */
-function rowsToLookAt({ timeS, fluidTemperatureK, outletTemperatureK }: BlowdownSeries): number[] {
+/** The coldest inside and behind the opening and the last; and others, evenly over the rows. */
+function rowsToLookAt({ timeS, fluidTemperatureK, outletTemperatureK }: BlowdownSeries): { coldest: number[]; even: number[] } {
   const lowest = (values: number[]): number => values.reduce((best, value, i) => (value < (values[best] ?? 0) ? i : best), 0);
   const last = timeS.length - 1;
+  const coldest = [...new Set([lowest(fluidTemperatureK), lowest(outletTemperatureK), last])].sort((a, b) => a - b);
   const even = Array.from({ length: moments + 1 }, (_, k) => Math.round((k * last) / moments));
-  return [...new Set([...even, lowest(fluidTemperatureK), lowest(outletTemperatureK)])].sort((a, b) => a - b);
+  return { coldest, even: [...new Set(even)].filter((i) => !coldest.includes(i)) };
 }
 
 function behindOpening({ fluid, solids, backPressurePa }: VesselModel, contents: Contents, temperatureK: number): number {
