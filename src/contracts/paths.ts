@@ -21,7 +21,9 @@ export const pages = {
   /** Two computed cases or revisions side by side. */
   compare: (screeningId: string) => `/screenings/${screeningId}/compare`,
   /** The bores between too slow in the fire case and too cold in the cold one. */
-  window: (screeningId: string) => `/screenings/${screeningId}/form/window`,
+  window: (screeningId: string, rev?: number) => `/screenings/${screeningId}/window${rev ? `?rev=${rev}` : ""}`,
+  /** How sure the figures of a computed case are. */
+  studies: (screeningId: string, rev?: number) => `/screenings/${screeningId}/studies${rev ? `?rev=${rev}` : ""}`,
   fluid: (screeningId: string, rev?: number) => `/screenings/${screeningId}/fluid${rev ? `?rev=${rev}` : ""}`,
   /** What is typed there stands in the fragment of the address. */
   changeOfState: "/change-of-state",

@@ -36,9 +36,10 @@ export function timeScale({ x, series, limits = [] }: Curves, most = 5): AxisSca
 }
 
 /** Scale of the values: holds all curves, marks and limits, widened to round ends. */
-export function valueScale({ y, series, limits = [], marks = [] }: Curves, most = 5): AxisScale {
+export function valueScale({ y, series, bands = [], limits = [], marks = [] }: Curves, most = 5): AxisScale {
   const [low, high] = extent([
     ...series.flatMap((curve) => curve.y),
+    ...bands.flatMap(({ low: lower, high: upper }) => [...lower, ...upper]),
     ...marks.map((mark) => mark.y),
     ...limits.filter((limit) => limit.axis === "y").map((limit) => limit.at),
   ]);

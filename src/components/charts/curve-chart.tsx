@@ -47,13 +47,21 @@ export function CurveChart({
   x,
   y,
   series,
+  bands,
   limits,
   marks,
 }: Props) {
   const [readingX, setReadingX] = useState<number | null>(null);
   const curves = useMemo(
-    () => ({ x, y, series: stale ? series.map((curve) => ({ ...curve, tone: "ghost" as const })) : series, limits, marks }),
-    [x, y, series, limits, marks, stale],
+    () => ({
+      x,
+      y,
+      series: stale ? series.map((curve) => ({ ...curve, tone: "ghost" as const })) : series,
+      bands,
+      limits,
+      marks,
+    }),
+    [x, y, series, bands, limits, marks, stale],
   );
   const scale = useMemo(() => timeScale(curves), [curves]);
   const inRange = readingX !== null && readingX >= scale.min && readingX <= scale.max;

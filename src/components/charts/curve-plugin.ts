@@ -27,6 +27,14 @@ export function setCurveDrawing(chart: Chart, drawing: CurveDrawing): void {
 /** Axis names, limits, posts, marked points, direct labels and the reading post. */
 export const curvePlugin: Plugin<"line"> = {
   id: "ebbmark-curves",
+  beforeDatasetsDraw(chart) {
+    const drawing = drawings.get(chart as Chart);
+    if (!drawing?.bands) return;
+    const paper = paperOf(chart as Chart, drawing);
+    chart.ctx.save();
+    drawBands(paper);
+    chart.ctx.restore();
+  },
   afterDatasetsDraw(chart) {
     const drawing = drawings.get(chart as Chart);
     if (!drawing) return;
@@ -68,6 +76,22 @@ function paperOf(chart: Chart, drawing: CurveDrawing): Paper {
     toX: (value) => x?.getPixelForValue(value) ?? 0,
     toY: (value) => y?.getPixelForValue(value) ?? 0,
   };
+}
+
+function drawBands({ drawing, context, area, ink, toX, toY }: Paper): void {
+  context.beginPath();
+  context.rect(area.left, area.top, area.right - area.left, area.bottom - area.top);
+  context.clip();
+  context.globalAlpha = 0.2;
+  for (const { tone, x, low, high } of drawing.bands ?? []) {
+    context.fillStyle = ink(curveLooks[tone].colour);
+    context.beginPath();
+    x.forEach((at, i) => context.lineTo(toX(at), toY(high[i] ?? Number.NaN)));
+    for (let i = x.length - 1; i >= 0; i--) context.lineTo(toX(x[i] ?? Number.NaN), toY(low[i] ?? Number.NaN));
+    context.closePath();
+    context.fill();
+  }
+  context.globalAlpha = 1;
 }
 
 function drawBaseLine({ context, area, ink }: Paper): void {

@@ -22,6 +22,9 @@ export type CurveSeries = {
   quiet?: boolean;
 };
 
+/** A shaded band between two curves over the same x, drawn behind everything: a spread. It has the colour of its tone. */
+export type CurveBand = { id: string; tone: CurveTone; x: readonly number[]; low: readonly number[]; high: readonly number[] };
+
 /** A limit, dashed, its words at the line: at a height (`axis: "y"`) or at a moment (`axis: "x"`). */
 export type CurveLimit = { axis: "x" | "y"; at: number; label: string };
 
@@ -51,6 +54,7 @@ export type Curves = {
   x: CurveAxis;
   y: CurveAxis;
   series: readonly CurveSeries[];
+  bands?: readonly CurveBand[];
   limits?: readonly CurveLimit[];
   marks?: readonly CurveMark[];
 };

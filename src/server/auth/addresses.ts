@@ -62,6 +62,8 @@ export const pageAddresses: Record<string, "open" | "signed-in"> = {
   "/screenings/[screeningId]/form/[part]": "signed-in",
   "/screenings/[screeningId]/fluid": "signed-in",
   "/screenings/[screeningId]/compare": "signed-in",
+  "/screenings/[screeningId]/window": "signed-in",
+  "/screenings/[screeningId]/studies": "signed-in",
   "/screenings/[screeningId]/sign": "signed-in",
   "/screenings/[screeningId]/decide": "signed-in",
   "/change-of-state": "signed-in",

@@ -14,6 +14,7 @@ import { NewRevisionButton } from "./new-revision-button";
  */
 export function SheetActions({ screening, more }: { screening: ScreeningView; more?: ReactNode }) {
   const { id, rev, state, may, draft, prepared } = screening;
+  const shown = rev === screening.revisions[0]?.rev ? undefined : rev;
   return (
     <ButtonRow>
       {may.sign && (
@@ -32,6 +33,8 @@ export function SheetActions({ screening, more }: { screening: ScreeningView; mo
       {prepared && (prepared.content.cases.length > 1 || screening.revisions.length > 1) && (
         <ButtonLink href={pages.compare(id)}>Side by side</ButtonLink>
       )}
+      {prepared && <ButtonLink href={pages.studies(id, shown)}>How sure</ButtonLink>}
+      {prepared && <ButtonLink href={pages.window(id, shown)}>Window of bores</ButtonLink>}
       {prepared && <DataButton prepared={prepared} />}
       {more}
     </ButtonRow>
