@@ -6,7 +6,7 @@
  */
 import { z } from "zod";
 import type { BlowdownCase } from "@/engine/cases/blowdown-case";
-import { equationIds } from "@/engine/cases/fluid-spec";
+import { equationIds, volumeTranslations } from "@/engine/cases/fluid-spec";
 import type { NozzleCase } from "@/engine/cases/nozzle-case";
 import { steelIds } from "@/engine/steels/steel";
 import { choice, describe, fraction, pressure, quantity, sumToOne, temperature, text } from "./case-fields";
@@ -77,6 +77,7 @@ const fluid = z.strictObject({
     .superRefine(sumToOne),
   equation: choice(equationIds),
   interaction: interaction.default("library"),
+  volumeTranslation: choice(volumeTranslations).optional(),
 });
 
 const head = { format: z.literal("ebbmark-case/1", { error: 'Give "format": "ebbmark-case/1".' }), title: text(200).optional() };

@@ -52,9 +52,17 @@ export interface PairInteraction {
   kij: number;
 }
 
+export const volumeTranslations = ["none", "library", "peneloux"] as const;
+export type VolumeTranslation = (typeof volumeTranslations)[number];
+
 export interface FluidSpec {
   components: readonly ComponentSpec[];
   equation: EquationId;
+  /**
+   * Volume shift of a Soave or Peng-Robinson equation. "library": fitted to the saturated liquid at 0.7 Tc of each component; "peneloux": from the
+   * Rackett factor estimated by the acentric factor. Left out: "none".
+   */
+  volumeTranslation?: VolumeTranslation | undefined;
   /** Left out: "library". Pairs that a list does not name have kij = 0. */
   interaction?: "library" | "none" | readonly PairInteraction[];
 }

@@ -53,6 +53,13 @@ describe("the fields of a fitness entry", () => {
     expect(srk.published).toBeUndefined();
   });
 
+  it("take a volume translation along only where an equation has one", () => {
+    const spec: FluidSpec = { ...fluid({ propane: 1 }), volumeTranslation: "library" };
+    const found = verdicts(spec, 300, 2e6);
+    expect(found["gerg-2008"]!.verdict).toBe("fit");
+    expect(Math.abs(found["soave-redlich-kwong"]!.deviation!.densityPercent)).toBeLessThan(2);
+  });
+
   it("say when two equations find other phases, between their boiling pressures", () => {
     // saturation of propane at 300 K: reference 9.978 bar; van der Waals boils far above
     const found = verdicts(fluid({ propane: 1 }), 300, 1.05e6);

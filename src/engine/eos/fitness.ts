@@ -8,6 +8,7 @@ import type { FluidModel } from "./fluid-model";
 import { judgeEquation, type FitnessVerdict, type PublishedRange } from "./fitness-rules";
 import { referenceFluids } from "./reference/reference-data";
 import { equations } from "./registry";
+import { byEquation } from "./spread";
 
 export type { FitnessVerdict };
 
@@ -67,7 +68,7 @@ export function fitness(fluid: FluidSpec, point: Point): Fitness[] {
     const base = { equation, title: entry.title };
     let model: FluidModel;
     try {
-      model = createFluidModel(withEquation(fluid, equation));
+      model = createFluidModel(byEquation(fluid, equation));
     } catch (error) {
       if (!(error instanceof EngineError) || error.code === "invalid-case") throw error;
       return { ...base, verdict: "not-applicable" as const, notes: [error.message] };
@@ -112,7 +113,7 @@ export function bestEquation(fluid: FluidSpec): EquationId | undefined {
     referenceFluids.has(present[0].id)
   )
     return "reference";
-  return attempt(() => createFluidModel(withEquation(fluid, "gerg-2008"))) ? "gerg-2008" : undefined;
+  return attempt(() => createFluidModel(byEquation(fluid, "gerg-2008"))) ? "gerg-2008" : undefined;
 }
 
 function requirePoint({ temperatureK, pressurePa }: Point): void {
@@ -122,11 +123,6 @@ function requirePoint({ temperatureK, pressurePa }: Point): void {
   ] as const) {
     if (!(value > 0 && Number.isFinite(value))) throw new EngineError("invalid-case", `${field} must be above 0`, {}, field);
   }
-}
-
-function withEquation(fluid: FluidSpec, equation: EquationId): FluidSpec {
-  const list = Array.isArray(fluid.interaction) && equation !== fluid.equation;
-  return { ...fluid, equation, interaction: list ? "library" : fluid.interaction };
 }
 
 function measured(model: FluidModel, point: Point): FitnessValues {

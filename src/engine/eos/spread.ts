@@ -1,7 +1,10 @@
 import type { EquationId, FluidSpec } from "../cases/fluid-spec";
 import { EngineError } from "../errors";
+import { cubicEquations, type CubicEquation, type CubicEquationId } from "./cubic/cubic-equations";
 import { createFluidModel } from "./create-fluid-model";
 import type { FluidModel } from "./fluid-model";
+
+const cubic: Record<CubicEquationId, CubicEquation> = cubicEquations;
 
 export type SpreadEntry = { equation: EquationId; value: number } | { equation: EquationId; refused: string };
 
@@ -19,9 +22,7 @@ export interface Spread {
 export function spread(fluid: FluidSpec, equations: readonly EquationId[], quantity: (model: FluidModel) => number): Spread {
   const entries = equations.map((equation): SpreadEntry => {
     try {
-      // Interaction lists are fitted to one equation: each other one takes its own published set.
-      const interaction = equation === fluid.equation ? fluid.interaction : fluid.interaction === "none" ? "none" : "library";
-      return { equation, value: quantity(createFluidModel({ ...fluid, equation, interaction })) };
+      return { equation, value: quantity(createFluidModel(byEquation(fluid, equation))) };
     } catch (error) {
       if (error instanceof EngineError) return { equation, refused: error.message };
       throw error;
@@ -29,4 +30,18 @@ export function spread(fluid: FluidSpec, equations: readonly EquationId[], quant
   });
   const values = entries.flatMap((entry) => ("value" in entry ? [entry.value] : []));
   return values.length === 0 ? { entries } : { entries, low: Math.min(...values), high: Math.max(...values) };
+}
+
+/**
+ * The same fluid by another equation. Interaction lists are fitted to one equation: each other one takes its own published set. A volume
+ * translation goes along only to equations that have one.
+ */
+export function byEquation(fluid: FluidSpec, equation: EquationId): FluidSpec {
+  const { volumeTranslation, ...rest } = fluid;
+  const interaction = equation === fluid.equation ? fluid.interaction : fluid.interaction === "none" ? "none" : "library";
+  const translated =
+    volumeTranslation && equation in cubicEquations && cubic[equation as CubicEquationId].interaction
+      ? { volumeTranslation }
+      : {};
+  return { ...rest, ...translated, equation, interaction };
 }

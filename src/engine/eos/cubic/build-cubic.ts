@@ -7,6 +7,8 @@ import { createIdealGasModel } from "../ideal-gas";
 import { interactionMatrix } from "../interaction-matrix";
 import { cubicEquations, type CubicEquation, type CubicEquationId } from "./cubic-equations";
 import { CubicResidual } from "./cubic-residual";
+import { TranslatedResidual } from "./translated-residual";
+import { volumeShift } from "./volume-translation";
 
 /** Below this no cubic and no heat-capacity form means anything for the fluids in the library but helium. */
 const minimumTemperatureK = 10;
@@ -21,6 +23,7 @@ export function buildCubic(
   const equation: CubicEquation = cubicEquations[id];
   const { kij, notes } = interactionMatrix(fluid, substances, equation.interaction);
   const residual = new CubicResidual(equation, substances, kij);
+  const shift = volumeShift(fluid, substances, equation.interaction);
   return deriveFluidModel({
     equation: id,
     substances,
@@ -28,8 +31,8 @@ export function buildCubic(
     feed,
     gasConstantJPerMolK: gasConstant,
     temperatureRangeK: [minimumTemperatureK, Math.min(maximumTemperatureK, residual.maximumTemperatureK)],
-    notes: [...substances.flatMap((substance) => substance.notes), ...notes],
-    residual,
+    notes: [...substances.flatMap((substance) => substance.notes), ...notes, ...(shift ? shift.notes : [])],
+    residual: shift ? new TranslatedResidual(residual, shift.c) : residual,
     idealHelmholtz: createIdealGasModel(substances.map((substance) => substance.heatCapacity)),
   });
 }

@@ -1,6 +1,7 @@
 import type { FluidSpec } from "../../cases/fluid-spec";
 import { EngineError } from "../../errors";
 import type { Substance } from "../../substances/substance";
+import { notTranslated } from "../cubic/volume-translation";
 import { deriveFluidModel } from "../derive-fluid-model";
 import type { FluidModel } from "../fluid-model";
 import { createIdealGasModel } from "../ideal-gas";
@@ -27,6 +28,7 @@ export function buildGerg(fluid: FluidSpec, substances: readonly Substance[], fe
       "fluid.interaction",
     );
   }
+  if (fluid.volumeTranslation && fluid.volumeTranslation !== "none") throw notTranslated("GERG-2008 and reference equations");
   const own = substances.map((substance): Substance => {
     const row = gergComponents.get(substance.id)!;
     return {

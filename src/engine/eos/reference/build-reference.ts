@@ -2,6 +2,7 @@ import type { FluidSpec } from "../../cases/fluid-spec";
 import { EngineError } from "../../errors";
 import type { HeatCapacity } from "../../substances/heat-capacity";
 import type { Substance } from "../../substances/substance";
+import { notTranslated } from "../cubic/volume-translation";
 import { deriveFluidModel } from "../derive-fluid-model";
 import type { FluidModel } from "../fluid-model";
 import { createIdealGasModel } from "../ideal-gas";
@@ -12,7 +13,7 @@ import { ReferenceResidual } from "./reference-residual";
 const stretch = { below: 0.6, above: 1.3 };
 
 /** A pure fluid by its own multiparameter equation. */
-export function buildReference(_fluid: FluidSpec, substances: readonly Substance[], feed: Float64Array): FluidModel {
+export function buildReference(fluid: FluidSpec, substances: readonly Substance[], feed: Float64Array): FluidModel {
   if (substances.length !== 1) {
     throw new EngineError(
       "not-applicable",
@@ -21,6 +22,7 @@ export function buildReference(_fluid: FluidSpec, substances: readonly Substance
       "fluid.components",
     );
   }
+  if (fluid.volumeTranslation && fluid.volumeTranslation !== "none") throw notTranslated("GERG-2008 and reference equations");
   const substance = substances[0]!;
   const data = substance.origin === "library" ? referenceFluids.get(substance.id) : undefined;
   if (!data) {
