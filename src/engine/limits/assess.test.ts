@@ -23,6 +23,21 @@ const wall = (value: number | undefined, limit: number | undefined): Figure => (
 const verdictOf = (figure: Figure, band = {}) => assess([figure], band).limits[0]?.verdict;
 
 describe("assess", () => {
+  it("counts what is used up of a least value as its limit over the value", () => {
+    const ratio: Figure = {
+      id: "least-strength-ratio",
+      title: "r",
+      unit: "1",
+      sense: "at-least",
+      value: 4,
+      limit: 1,
+      required: false,
+    };
+    expect(assess([ratio], {}).limits[0]).toMatchObject({ verdict: "within", inHand: 3, share: 0.25 });
+    expect(assess([{ ...ratio, value: 1.05 }], {}).verdict).toBe("near");
+    expect(assess([{ ...ratio, value: 0.9 }], {}).verdict).toBe("beyond");
+  });
+
   it.each([
     [800, 900, "within"],
     [809.9, 900, "within"],

@@ -49,7 +49,8 @@ function judge(figure: Figure, { bandK, bandFraction }: NearBand): { limit: Asse
   const inHand = sense === "at-most" ? limit - value : value - limit;
   const near = unit === "K" ? bandK : bandFraction * Math.abs(limit);
   const verdict: Verdict = inHand <= 0 ? "beyond" : inHand < near ? "near" : "within";
-  const share = unit === "K" || limit === 0 ? {} : { share: value / limit };
+  const used = sense === "at-most" ? value / limit : limit / value;
+  const share = unit === "K" || !Number.isFinite(used) ? {} : { share: used };
   return { limit: { ...shown, inHand, ...share, verdict, governs: false }, relative: inHand / near };
 }
 
