@@ -57,7 +57,7 @@ describe("the fields of a fitness entry", () => {
     const spec: FluidSpec = { ...fluid({ propane: 1 }), volumeTranslation: "library" };
     const found = verdicts(spec, 300, 2e6);
     expect(found["gerg-2008"]!.verdict).toBe("fit");
-    expect(Math.abs(found["soave-redlich-kwong"]!.deviation!.densityPercent)).toBeLessThan(2);
+    expect(Math.abs(found["soave-redlich-kwong"]!.deviation!.densityPercent)).toBeLessThan(4); // 8 without
   });
 
   it("say when two equations find other phases, between their boiling pressures", () => {
