@@ -6,7 +6,8 @@
 import type { BlowdownCase } from "../cases/blowdown-case";
 import type { LateOpening } from "../cases/blowdown-result";
 import { EngineError } from "../errors";
-import { steelInFire, type FireRun } from "./steel-in-fire";
+import { steelInFire } from "./steel-in-fire";
+import type { FireRun } from "./surroundings";
 
 /** A run of another case, with its curves; coarse will do. */
 export type Rerun = (blowdown: BlowdownCase) => Pick<FireRun, "series" | "summary">;

@@ -2,7 +2,7 @@
  * Does the blowdown lower the stress faster than the fire takes the strength?
  *
  * Each piece of steel heats up from the start of the fire, which is the opening of the valve. Dry steel is cooled by the gas film only (not
- * at all where the run has none). Wetted steel stays `boilingExcessK` above the liquid until the liquid is gone, and then heats up like dry steel.
+ * at all where the run has none). Wetted steel stays 50 K above the liquid until the liquid is gone, and then heats up like dry steel.
  *
  *   ratio = strength / stress, least over the run          1 is rupture; near up to 1.1
  *
@@ -12,23 +12,15 @@
  * Checks   steel-in-fire.test.ts
  */
 import type { BlowdownCase } from "../cases/blowdown-case";
-import type { BlowdownSeries, BlowdownSummary, SteelInFire, SteelInFireItem, Verdict } from "../cases/blowdown-result";
-import type { FluidModel } from "../eos/fluid-model";
-import { naturalConvection, type FilmFlux } from "../heat/natural-convection";
-import { fireFluxWPerM2 } from "../heat/surface-fire";
-import { heatUp } from "./heat-up";
+import type { SteelInFire, SteelInFireItem, Verdict } from "../cases/blowdown-result";
+import { follow, leastOf, thinned, type Setting } from "./follow";
 import { itemsInFire, type Item } from "./items";
-import { crossingTime, strengthPa, stressPa, type StrengthRule } from "./rupture";
-
-export type FireRun = { fluid: FluidModel; series: BlowdownSeries; summary: BlowdownSummary };
+import type { StrengthRule } from "./rupture";
+import { fireOf, liquidUntil, surroundingsOf, type FireRun } from "./surroundings";
 
 const defaultStrengthFraction = 0.85;
 const moreFlux = 1.3;
 const nearRatio = 1.1;
-/** Nucleate boiling holds a wetted wall within 10 to 50 K of its liquid; the upper end is taken. */
-const boilingExcessK = 50;
-const steps = 600;
-const shownPoints = 100;
 /** Shut in, at least an hour of fire is looked at. */
 const shutInHorizonS = 3600;
 const softeningK = 673.15;
@@ -66,78 +58,6 @@ export function steelInFire(blowdown: BlowdownCase, run: FireRun): SteelInFire |
     depressurisationWins,
     verdict: worstOf(judged.map((item) => item.verdict)),
     sentence: governing ? sentence(governing) : "",
-  };
-}
-
-type Fire = { basis: SteelInFire["fire"]["basis"]; fixedFluxWPerM2?: number; fluxWPerM2: (wallK: number) => number };
-
-/** The case's own words first; a pool fire burns on dry steel as the set for an open pool. */
-function fireOf({ heat: { outside }, steelInFire: given = {} }: BlowdownCase): Fire | undefined {
-  if (outside.model !== "pool-fire" && outside.model !== "surface-fire") return undefined;
-  const surface = outside.model === "surface-fire" ? outside : undefined;
-  const basis = given.basis ?? surface?.basis ?? "open-pool";
-  const stated = given.heatFluxWPerM2 ?? surface?.heatFluxWPerM2;
-  const factor = outside.factor ?? 1;
-  if (stated === undefined) return { basis, fluxWPerM2: (T) => factor * fireFluxWPerM2(basis, T) };
-  const fixed = factor * stated;
-  return { basis, fixedFluxWPerM2: fixed, fluxWPerM2: () => fixed };
-}
-
-type Surroundings = {
-  startK: number;
-  pressureAt: (timeS: number) => number;
-  fluidAt: (timeS: number) => number;
-  film: (timeS: number, differenceK: number) => number;
-  liquidUntilS: number;
-  liquidAt: (timeS: number) => number;
-};
-type Setting = Surroundings & {
-  fire: (wallK: number) => number;
-  horizonS: number;
-  shutInPressurePa: number;
-  strengthFraction: number;
-};
-
-/** Last time at which there was liquid; 0 where there was none. */
-function liquidUntil({ timeS, liquidLevelM, vapourMoleFraction }: BlowdownSeries): number {
-  for (let i = timeS.length - 1; i >= 0; i--)
-    if (liquidLevelM ? (liquidLevelM[i] ?? 0) > 1e-6 : (vapourMoleFraction[i] ?? 1) < 1 - 1e-9) return timeS[i] ?? 0;
-  return 0;
-}
-
-function surroundingsOf({ heat }: BlowdownCase, { fluid, series, summary }: FireRun): Surroundings {
-  const { timeS } = series;
-  const pressureAt = (t: number): number => between(timeS, series.pressurePa, t);
-  const gas = series.vapourTemperatureK ?? series.fluidTemperatureK;
-  const liquid = series.liquidTemperatureK ?? series.fluidTemperatureK;
-  const fluidAt = (t: number): number => between(timeS, gas, t);
-  return {
-    startK: summary.initialTemperatureK,
-    pressureAt,
-    fluidAt,
-    liquidUntilS: liquidUntil(series),
-    liquidAt: (t) => between(timeS, liquid, t),
-    film: filmOf(heat.inside, fluid, { pressureAt, fluidAt, endS: summary.endTimeS }),
-  };
-}
-
-type Along = { pressureAt: (t: number) => number; fluidAt: (t: number) => number; endS: number };
-
-/** Heat from wall to gas [W/m²]. Films from correlations are made at a few moments; each holds until the next. */
-function filmOf(inside: BlowdownCase["heat"]["inside"], fluid: FluidModel, along: Along): Surroundings["film"] {
-  if (inside.model === "none") return () => 0;
-  if (inside.model === "constant") return (_t, difference) => inside.coefficientWPerM2K * difference;
-  const moments = 24;
-  const films: FilmFlux[] = [];
-  return (t, difference) => {
-    const k = Math.min(Math.floor((moments * t) / along.endS), moments - 1);
-    const time = ((k + 0.5) * along.endS) / moments;
-    films[k] ??= naturalConvection(
-      fluid,
-      fluid.phaseAtPressure(along.fluidAt(time), along.pressureAt(time), fluid.feed, "vapour"),
-      fluid.feed,
-    );
-    return (inside.factor ?? 1) * films[k](difference);
   };
 }
 
@@ -185,84 +105,6 @@ function look(
     governs: false,
     series: thinned(blownDown),
   };
-}
-
-type Followed = {
-  timeS: number[];
-  wallTemperatureK: number[];
-  stressPa: number[];
-  strengthPa: number[];
-  ruptureTimeS: number | undefined;
-};
-
-function follow(
-  item: Item,
-  setting: Setting,
-  rule: StrengthRule,
-  { fluxFactor, untilS, heldPressurePa }: { fluxFactor: number; untilS: number; heldPressurePa?: number },
-): Followed {
-  const wetUntilS = item.part === "wet" ? Math.min(heldPressurePa === undefined ? setting.liquidUntilS : untilS, untilS) : 0;
-  const parts = 1 - wetUntilS / untilS;
-  const timeS: number[] = [];
-  const wallTemperatureK: number[] = [];
-  let startK = setting.startK;
-  for (let i = 0, count = Math.round(steps * (1 - parts)); i < count; i++) {
-    const t = (i * wetUntilS) / count;
-    timeS.push(t);
-    wallTemperatureK.push(Math.max(setting.liquidAt(t) + (i === 0 ? 0 : boilingExcessK), setting.startK));
-    startK = wallTemperatureK.at(-1) ?? startK;
-  }
-  if (wetUntilS < untilS) {
-    const dry = heatUp(
-      {
-        steel: item.steel,
-        thicknessM: item.thicknessM,
-        startK,
-        fireFluxWPerM2: (T) => fluxFactor * setting.fire(T),
-        insideFluxWPerM2: (t, T) => setting.film(t, T - setting.fluidAt(t)),
-      },
-      { fromS: wetUntilS, untilS, steps: Math.max(Math.round(steps * parts), 20) },
-    );
-    timeS.push(...dry.timeS);
-    wallTemperatureK.push(...dry.temperatureK);
-  }
-  const stress = timeS.map((t) => stressPa(item, heldPressurePa ?? setting.pressureAt(t)));
-  const strength = wallTemperatureK.map((T) => strengthPa(item.steel, rule, T));
-  return { timeS, wallTemperatureK, stressPa: stress, strengthPa: strength, ruptureTimeS: crossingTime(timeS, strength, stress) };
-}
-
-/** Without stress there is no ratio; a large one stands for it. */
-const largestRatio = 1000;
-
-function leastOf({ timeS, stressPa: stress, strengthPa: strength }: Followed): { leastRatio: number; leastRatioTimeS: number } {
-  let leastRatio = largestRatio;
-  let leastRatioTimeS = 0;
-  stress.forEach((load, i) => {
-    const ratio = load > 0 ? (strength[i] ?? 0) / load : largestRatio;
-    if (ratio >= leastRatio) return;
-    leastRatio = ratio;
-    leastRatioTimeS = timeS[i] ?? 0;
-  });
-  return { leastRatio, leastRatioTimeS };
-}
-
-function thinned({ timeS, wallTemperatureK, stressPa: stress, strengthPa: strength }: Followed): SteelInFireItem["series"] {
-  const every = Math.max(Math.floor(timeS.length / shownPoints), 1);
-  const keep = <T>(list: T[]): T[] => list.filter((_, i) => i % every === 0 || i === list.length - 1);
-  return { timeS: keep(timeS), wallTemperatureK: keep(wallTemperatureK), stressPa: keep(stress), strengthPa: keep(strength) };
-}
-
-/** On the straight line between neighbours; the end values hold outside. */
-function between(x: readonly number[], y: readonly number[], at: number): number {
-  let [low, high] = [0, x.length - 1];
-  if (at >= (x[high] ?? 0)) return y[high] ?? 0;
-  while (high - low > 1) {
-    const middle = (low + high) >> 1;
-    if ((x[middle] ?? 0) <= at) low = middle;
-    else high = middle;
-  }
-  const [x0, x1, y0, y1] = [x[low] ?? 0, x[high] ?? 0, y[low] ?? 0, y[high] ?? 0];
-  return x1 > x0 ? y0 + ((y1 - y0) * Math.max(at - x0, 0)) / (x1 - x0) : y1;
 }
 
 const worstOf = (verdicts: Verdict[]): Verdict =>
