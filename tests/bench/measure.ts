@@ -1,8 +1,14 @@
-/** Prints the speed of the engine: CPU milliseconds, evaluations, steps, and the ratio to one vector of ln φ of the same fluid. */
+/** Prints the speed of the engine: CPU milliseconds, evaluations, steps, and the ratio to one vector of ln φ of the same fluid. `npm run bench -- fuzz [flashes]` runs random flashes instead. */
 import { createFluidModel } from "@/engine/eos/create-fluid-model";
 import type { FluidSpec } from "@/engine/cases/fluid-spec";
 import { runBlowdown } from "@/engine/cases/blowdown/run-blowdown";
 import { benchCases } from "./cases";
+
+if (process.argv[2] === "fuzz") {
+  const { randomFlashes } = await import("./random-flashes");
+  randomFlashes(Number(process.argv[3] ?? 100_000));
+  process.exit();
+}
 
 const repeats = Number(process.argv[2] ?? 25);
 
