@@ -66,7 +66,13 @@ export function assembleCase(draft: DraftDocument, letter: string, site: SiteFac
     },
     run: { stopTimeS: required("7.10"), stopPressurePa: required("7.11"), relativeTolerance: 1e-6 },
     limits: limitsOf(values, site),
+    ...afterwardsOf(values),
   };
+}
+
+function afterwardsOf({ si }: Values): Pick<BlowdownCase, "afterwards"> {
+  const given = { ...optional("ambientTemperatureK", si("6.14")), ...optional("coefficientWPerM2K", si("6.15")) };
+  return Object.keys(given).length > 0 ? { afterwards: given } : {};
 }
 
 function wallOf({ choice, si, required }: Values): WallSpec {
@@ -83,27 +89,49 @@ function wallOf({ choice, si, required }: Values): WallSpec {
   };
 }
 
-function startOf({ choice, required }: Values, liquidPart: number | undefined): StartSpec {
+function startOf({ choice, si, required }: Values, liquidPart: number | undefined): StartSpec {
   const condition = choice("2.08");
-  if (condition === "pressure-temperature") return { pressurePa: required("2.09"), temperatureK: required("2.10") };
+  const rest = optional("restAtTemperatureK", si("2.11"));
+  if (condition === "pressure-temperature") return { pressurePa: required("2.09"), temperatureK: required("2.10"), ...rest };
   if (liquidPart === undefined) throw new RangeError("the liquid at start is not settled");
   return condition === "temperature-level"
-    ? { temperatureK: required("2.10"), liquidVolumeFraction: liquidPart }
-    : { pressurePa: required("2.09"), liquidVolumeFraction: liquidPart };
+    ? { temperatureK: required("2.10"), liquidVolumeFraction: liquidPart, ...rest }
+    : { pressurePa: required("2.09"), liquidVolumeFraction: liquidPart, ...rest };
 }
 
 function releaseOf({ choice, si, required }: Values, site: SiteFacts): ReleaseSpec {
   const from = choice("5.06") as ReleaseSpec["from"];
-  const outlet = { from, backPressurePa: required("5.04"), openingTimeS: required("5.05") };
+  const outlet = { from, backPressurePa: required("5.04"), openingTimeS: required("5.05"), ...tailPipeOf({ choice, required }) };
   if (choice("5.01") === "valve")
     return { path: "valve", cv: required("5.07"), xt: required("5.08"), ...outlet, flowModel: "frozen" };
   const orifice = { ...outlet, dischargeCoefficient: required("5.03"), flowModel: choice("5.09") as ReleaseSpec["flowModel"] };
   if (choice("5.01") === "orifice") return { path: "orifice", diameterM: required("5.02"), ...orifice };
+  if (choice("5.01") === "relief") {
+    return {
+      path: "relief",
+      areaM2: required("5.12"),
+      setPressurePa: required("5.13"),
+      reseatPressurePa: required("5.14"),
+      ...orifice,
+    };
+  }
   return {
     path: "sized",
     targetPressurePa: si("5.10") ?? targetPressure(si, site),
     targetTimeS: si("5.11") ?? si("7.01") ?? site.policy.targetTimeS,
     ...orifice,
+  };
+}
+
+function tailPipeOf({ choice, required }: Pick<Values, "choice" | "required">): Pick<ReleaseSpec, "tailPipe"> {
+  if (choice("5.15") !== "fitted") return {};
+  return {
+    tailPipe: {
+      lengthM: required("5.16"),
+      diameterM: required("5.17"),
+      roughnessM: required("5.18"),
+      lossCoefficient: required("5.19"),
+    },
   };
 }
 
@@ -130,7 +158,7 @@ function outsideOf({ choice, si, required }: Values): Outside {
   }
 }
 
-function limitsOf({ asked, si }: Values, site: SiteFacts): LimitSpec {
+function limitsOf({ asked, choice, si }: Values, site: SiteFacts): LimitSpec {
   const limit = (no: LineNo) => (asked(no) ? (si(no) ?? policyLimit(no, site) ?? undefined) : undefined);
   return {
     ...optional("targetTimeS", limit("7.01")),
@@ -138,6 +166,7 @@ function limitsOf({ asked, si }: Values, site: SiteFacts): LimitSpec {
     ...optional("minimumMetalMarginK", limit("7.02")),
     ...optional("ventCapacityKgPerS", limit("7.04")),
     ...optional("minimumOutletTemperatureK", limit("7.03")),
+    ...(choice("7.13") === "present" ? { waterPresent: true } : {}),
     ...optional("nearBandK", limit("7.08")),
     ...optional("nearBandFraction", limit("7.12")),
   };

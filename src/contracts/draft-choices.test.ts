@@ -163,6 +163,33 @@ const choices: [name: string, draft: DraftDocument, says: object][] = [
     { release: { from, flowModel: "equilibrium" } },
   ]),
   [
+    "a pipe run",
+    draftOf({ ...gas, "2.02-1": "pipe", "2.04-1": 0.3, "2.05-1": 40 }, methane),
+    { vessel: { geometry: { shape: "pipe", insideDiameterM: 0.3, lengthM: 40 } } },
+  ],
+  [
+    "a section closed in until it is cold",
+    draftOf({ ...gas, "2.11": 273.15, "A6.14": 268.15, "A6.15": 10, "A7.13": "present" }, methane),
+    {
+      start: { pressurePa: 6e6, temperatureK: 300, restAtTemperatureK: 273.15 },
+      afterwards: { ambientTemperatureK: 268.15, coefficientWPerM2K: 10 },
+      limits: { waterPresent: true },
+    },
+  ],
+  [
+    "a relief device in a surface fire",
+    draftOf(
+      { ...gas, "A5.01": "relief", "A5.12": 2e-4, "A5.13": 6.5e6, "A5.14": 5.8e6, "A6.02": "surface-fire", "A7.10": 200 },
+      methane,
+    ),
+    { release: { path: "relief", areaM2: 2e-4, setPressurePa: 6.5e6, reseatPressurePa: 5.8e6 } },
+  ],
+  [
+    "an orifice with a tail pipe",
+    draftOf({ ...gas, "A5.15": "fitted", "A5.16": 30, "A5.17": 0.08, "A5.19": 1.5 }, methane),
+    { release: { tailPipe: { lengthM: 30, diameterM: 0.08, roughnessM: 4.6e-5, lossCoefficient: 1.5 } } },
+  ],
+  [
     "a back pressure and a wider near band",
     draftOf({ ...drum, "A5.04": 180000, "A7.08": 15, "A7.12": 0.2 }),
     { release: { backPressurePa: 180000 }, limits: { nearBandK: 15, nearBandFraction: 0.2 } },
@@ -196,6 +223,7 @@ describe("lines held against each other", () => {
     ["2.07-1", { ...drum, "2.07-1": 1.7 }, "above the top"],
     ["A6.02", { ...drum, "2.02-1": "volume", "2.06-1": 5, "4.04": 18, "2.14": 0.4, "A6.02": "pool-fire" }, "wetted surface"],
     ["A5.10", { ...gas, "A5.01": "sized", "A5.10": 9e6 }, "below the pressure at start"],
+    ["A5.14", { ...gas, "A5.01": "relief", "A5.12": 2e-4, "A5.13": 5e6, "A5.14": 5e6 }, "reseat below"],
     ["A5.10", { ...gas, "A5.01": "sized", "A5.10": 2e5, "A5.04": 3e5 }, "above the back pressure"],
   ] as [string, Lines, string][])("cites line %s", (line, given, words) => {
     const { document, problems } = caseFromDraft(draftOf(given, methane), "A", site);

@@ -24,6 +24,10 @@ export function crossProblems(draft: DraftDocument, letter: string, site: SiteFa
   if (reached !== undefined && reached <= (si("5.04") ?? 0))
     say("5.10", "The pressure to be reached must be above the back pressure, line 5.04.");
 
+  const [set, reseat] = [si("5.13"), si("5.14")];
+  if (set !== undefined && reseat !== undefined && reseat >= set)
+    say("5.14", "The device must reseat below its set pressure, line 5.13.");
+
   const geometry = shapeGeometry(draft);
   const bore = si("5.02");
   if (geometry && bore !== undefined && bore > geometry.largestBoreM)

@@ -42,11 +42,13 @@ function dished(what: string) {
 
 function volumeWords({ document }: ShapeGeometry): string {
   if (document.shape === "sphere") return "line 2.04: π D³/6";
+  if (document.shape === "pipe") return "lines 2.04 and 2.05: π D² L/4";
   return document.shape === "cylinder" ? `lines 2.03 to 2.05: shell π D² L/4, ${heads[document.heads].volume}` : "";
 }
 
 function areaWords({ document }: ShapeGeometry): string {
   if (document.shape === "sphere") return "line 2.04: π D²";
+  if (document.shape === "pipe") return "lines 2.04 and 2.05: π D L, ends left out";
   return document.shape === "cylinder" ? `lines 2.03 to 2.05: shell π D L, ${heads[document.heads].area}` : "";
 }
 

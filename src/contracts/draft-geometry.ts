@@ -30,6 +30,10 @@ export function shapeGeometry(draft: DraftDocument): ShapeGeometry | undefined {
   if (shape === "sphere") return measured({ shape: "sphere", insideDiameterM }, insideDiameterM);
 
   const tangentLengthM = valueOf(draft, "2.05")?.si;
+  if (shape === "pipe") {
+    if (typeof tangentLengthM !== "number" || !(tangentLengthM > 0)) return undefined;
+    return measured({ shape: "pipe", insideDiameterM, lengthM: tangentLengthM }, insideDiameterM);
+  }
   const heads = valueOf(draft, "2.03")?.typed;
   if (typeof tangentLengthM !== "number" || !(tangentLengthM >= 0) || !heads) return undefined;
   const orientation = shape === "cylinder-vertical" ? "vertical" : "horizontal";

@@ -89,7 +89,7 @@ function ViewOf({ view, layout: { pixelsPerM, floor, underFloor }, length, outle
             from={at({ x: profile.tangents[0], y: 0 }).x}
             to={at({ x: profile.tangents[1], y: 0 }).x}
             y={floor + underFloor}
-            words={`${length(item.geometry.shape === "cylinder" ? item.geometry.tangentLengthM : 0)} between tangents`}
+            words={lengthWords(item, length)}
           />
         </>
       )}
@@ -117,6 +117,11 @@ function ViewOf({ view, layout: { pixelsPerM, floor, underFloor }, length, outle
       )}
     </g>
   );
+}
+
+function lengthWords({ geometry }: VesselItem, length: (metres: number) => string): string {
+  if (geometry.shape === "pipe") return length(geometry.lengthM);
+  return geometry.shape === "cylinder" ? `${length(geometry.tangentLengthM)} between tangents` : "";
 }
 
 /** The liquid's surface, and three hairlines beneath it that get shorter with the shape. */

@@ -37,6 +37,14 @@ export function profileOf(vessel: VesselShape): Profile | undefined {
       };
     case "cylinder":
       return vessel.orientation === "vertical" ? standing(vessel) : lying(vessel);
+    case "pipe":
+      return lying({
+        shape: "cylinder",
+        orientation: "horizontal",
+        insideDiameterM: vessel.insideDiameterM,
+        tangentLengthM: vessel.lengthM,
+        heads: "flat",
+      });
     default:
       return undefined;
   }

@@ -36,6 +36,8 @@ export function vesselSentence(
 
 function shapeWords(geometry: VesselItem["geometry"], length: (metres: number) => string): string {
   if (geometry.shape === "sphere") return `a sphere of ${length(geometry.insideDiameterM)} inside diameter`;
+  if (geometry.shape === "pipe")
+    return `a pipe of ${length(geometry.insideDiameterM)} inside diameter, ${length(geometry.lengthM)} long`;
   if (geometry.shape !== "cylinder") return "a plain volume without a shape";
   const { orientation, insideDiameterM, tangentLengthM, heads } = geometry;
   return `a ${orientation} cylinder of ${length(insideDiameterM)} inside diameter, ${length(tangentLengthM)} between tangents, ${headWords[heads]}`;

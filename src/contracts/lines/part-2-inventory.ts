@@ -1,7 +1,8 @@
-import { both, chosen, not, plainVolume, startsWithLevel } from "./asked";
+import { both, chosen, either, not, plainVolume, startsWithLevel } from "./asked";
 import type { Line } from "./line";
 
 const cylinder = chosen("2.02", "cylinder-horizontal", "cylinder-vertical");
+const hasLength = either(cylinder, chosen("2.02", "pipe"));
 const typedAsHeight = both(startsWithLevel, not(plainVolume), chosen("2.13", "height"));
 const typedAsPart = both(startsWithLevel, (read) => plainVolume(read) || read.choice("2.13") === "part");
 const item = { part: 2, group: "Vessel", perItem: true } as const;
@@ -19,6 +20,7 @@ export const inventoryLines: Line[] = [
       { value: "cylinder-horizontal", label: "Cylinder, horizontal", phrase: "with heads" },
       { value: "cylinder-vertical", label: "Cylinder, vertical", phrase: "with heads" },
       { value: "sphere", label: "Sphere", phrase: "inside diameter given" },
+      { value: "pipe", label: "Pipe run", phrase: "between valves, no heads" },
       { value: "volume", label: "Plain volume", phrase: "volume and inside surface given" },
     ],
     initial: "cylinder-horizontal",
@@ -54,11 +56,12 @@ export const inventoryLines: Line[] = [
     ...item,
     kind: "quantity",
     no: "2.05",
-    label: "Length between tangents",
-    asked: cylinder,
+    label: "Length",
+    hint: "between tangents; of the whole run for a pipe",
+    asked: hasLength,
     quantity: "length",
     min: 0,
-    max: 500,
+    max: 100000,
     shown: { SI: "m", US: "ft" },
   },
   {
@@ -156,6 +159,18 @@ export const inventoryLines: Line[] = [
     min: 0,
     max: 1,
     shown: { SI: "%", US: "%" },
+  },
+  {
+    ...start,
+    kind: "quantity",
+    no: "2.11",
+    label: "Closed in until all is at",
+    hint: "cooled or warmed at constant volume; empty: opened at once",
+    optional: true,
+    quantity: "temperature",
+    min: 180,
+    max: 350,
+    shown: { SI: "°C", US: "°F" },
   },
   {
     ...start,

@@ -3,6 +3,7 @@ import type { Line } from "./line";
 
 const inside = { part: 6, group: "Inside" } as const;
 const outside = { part: 6, group: "Outside" } as const;
+const after = { part: 6, group: "Afterwards, closed in" } as const;
 const air = chosen("6.02", "ambient");
 const poolFire = chosen("6.02", "pool-fire");
 const surfaceFire = chosen("6.02", "surface-fire");
@@ -152,5 +153,30 @@ export const heatLines: Line[] = [
     maxLength: 200,
     sourceFree: true,
     initialText: "API Std 521 / ISO 23251",
+  },
+  {
+    ...after,
+    kind: "quantity",
+    no: "6.14",
+    label: "Surroundings after the blowdown",
+    hint: "empty takes line 6.10, or the temperature at start",
+    optional: true,
+    quantity: "temperature",
+    min: 180,
+    max: 350,
+    shown: { SI: "°C", US: "°F" },
+  },
+  {
+    ...after,
+    kind: "quantity",
+    no: "6.15",
+    label: "Film coefficient, afterwards",
+    hint: "empty takes line 6.11, or 8 W/(m²·K)",
+    optional: true,
+    quantity: "filmCoefficient",
+    min: 0,
+    max: 1e4,
+    exclusiveMin: true,
+    shown: { SI: "W/(m²·K)", US: "Btu/(h·ft²·°F)" },
   },
 ];

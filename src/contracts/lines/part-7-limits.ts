@@ -4,6 +4,7 @@ import type { Line } from "./line";
 const target = { part: 7, group: "Time and pressure" } as const;
 const steel = { part: 7, group: "Steel" } as const;
 const vent = { part: 7, group: "Disposal" } as const;
+const water = { part: 7, group: "Hydrate and ice" } as const;
 const near = { part: 7, group: "Near band" } as const;
 const run = { part: 7, group: "How long to compute" } as const;
 
@@ -71,6 +72,19 @@ export const limitLines: Line[] = [
     max: 1e5,
     shown: { SI: "kg/s", US: "lb/h" },
     optional: true,
+  },
+  {
+    ...water,
+    kind: "choice",
+    no: "7.13",
+    label: "Free water",
+    hint: "hydrate and ice are judged where there is some",
+    sourceFree: true,
+    options: [
+      { value: "by-composition", label: "As the composition says" },
+      { value: "present", label: "Present in any case" },
+    ],
+    initial: "by-composition",
   },
   {
     ...near,

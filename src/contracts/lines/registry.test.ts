@@ -81,6 +81,14 @@ const given: Record<string, string> = {
   "6.13": "Environment factor",
   "7.08": "Near, by temperature",
   "7.12": "Near, by share",
+  "2.11": "Closed in until all is at",
+  "5.12": "Effective discharge area",
+  "5.13": "Set pressure",
+  "5.14": "Reseating pressure",
+  "5.15": "Tail pipe",
+  "6.14": "Surroundings after the blowdown",
+  "6.15": "Film coefficient, afterwards",
+  "7.13": "Free water",
 };
 
 describe("numbers given once", () => {

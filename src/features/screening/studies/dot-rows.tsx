@@ -40,7 +40,7 @@ export function DotRows({
         role="img"
         aria-label={summary}
         viewBox={`0 0 ${width} ${bottom + 34}`}
-        className="block h-auto w-full min-w-[480px] font-num text-[13px]"
+        className="block h-auto w-full min-w-[480px] max-w-[620px] font-num text-[13px]"
       >
         {fit.length > 1 && (
           <rect

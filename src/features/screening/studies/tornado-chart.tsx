@@ -10,8 +10,8 @@ export type TornadoRow = {
   high: { value: number | undefined; text: string; past: boolean };
 };
 
-const width = 640;
-const plot = { left: 190, right: width - 16 };
+const width = 760;
+const plot = { left: 300, right: width - 16 };
 const rowHeight = 44;
 const top = 40;
 
@@ -43,7 +43,7 @@ export function TornadoChart({
         role="img"
         aria-label={summary}
         viewBox={`0 0 ${width} ${bottom + 36}`}
-        className="block h-auto w-full min-w-[520px] font-num text-[13px]"
+        className="block h-auto w-full min-w-[640px] max-w-[860px] font-num text-[13px]"
       >
         {roundTicks(min, max, 5).map((tick) => (
           <g key={tick}>
