@@ -96,7 +96,7 @@ describe("parseCase", () => {
       "fluid.components[1].id",
       /stands twice/,
     ],
-    ["kind", "relief", "kind", /"path", "flash", "nozzle", "blowdown"/],
+    ["kind", "flare", "kind", /"path", "flash", "nozzle", "blowdown"/],
     ["format", "ebbmark-case/2", "format", /ebbmark-case\/1/],
     ["limits", { targetPressure: 1 }, "limits.targetPressure", /not a key/],
     ["vessel", 7, "vessel", /does not belong here/],

@@ -11,6 +11,7 @@ import type { NozzleCase } from "@/engine/cases/nozzle-case";
 import { steelIds } from "@/engine/steels/steel";
 import { choice, describe, fraction, pressure, quantity, sumToOne, temperature, text } from "./case-fields";
 import { energyCase } from "./case-energy";
+import { reliefCase } from "./case-relief";
 import { sizingCase, studyCase } from "./case-studies";
 import { diameter, geometry, sectionPart, start, wall } from "./case-vessel";
 import { readJsonText } from "./json-text";
@@ -317,6 +318,7 @@ export const caseFileSchema = z.discriminatedUnion(
     flashCaseSchema,
     nozzleCaseSchema,
     blowdownCaseSchema,
+    reliefCase(fluid),
     energyCase(fluid),
     methodCaseSchema,
     sizingCase(blowdownCaseSchema),
@@ -325,7 +327,7 @@ export const caseFileSchema = z.discriminatedUnion(
   {
     error: ({ input }) =>
       isObject(input)
-        ? 'Use one of "path", "flash", "nozzle", "blowdown", "energy", "method", "sizing", "study".'
+        ? 'Use one of "path", "flash", "nozzle", "blowdown", "relief", "energy", "method", "sizing", "study".'
         : "Give one case document, a JSON object.",
   },
 );

@@ -7,6 +7,7 @@ import type { EnergyCase, EnergyResult } from "./cases/energy-case";
 import type { FlashCase, FlashResult } from "./cases/flash-case";
 import type { NozzleCase, NozzleResult } from "./cases/nozzle-case";
 import type { PathCase, PathResult } from "./cases/path-case";
+import type { ReliefCase, ReliefResult } from "./cases/relief-case";
 import type { SizingCase, SizingResult } from "./cases/sizing-case";
 import type { Outcome, StudyCase, StudyResult } from "./cases/study-case";
 import { runNozzle } from "./cases/nozzle/run-nozzle";
@@ -14,12 +15,22 @@ import { runEnergy } from "./energy/held-energy";
 import { runFlash } from "./flash/run-flash";
 import { runMethod, type MethodCase, type MethodResult } from "./methods/run-method";
 import { runPath } from "./path/run-path";
+import { runRelief } from "./relief/run-relief";
 import { runSizing } from "./sizing/run-sizing";
 import { assembleStudy, runStudy } from "./studies/run-study";
 
-export type EngineCase = PathCase | FlashCase | NozzleCase | BlowdownCase | EnergyCase | MethodCase | SizingCase | StudyCase;
+export type EngineCase =
+  PathCase | FlashCase | NozzleCase | BlowdownCase | ReliefCase | EnergyCase | MethodCase | SizingCase | StudyCase;
 export type EngineResult =
-  PathResult | FlashResult | NozzleResult | BlowdownResult | EnergyResult | MethodResult | SizingResult | StudyResult;
+  | PathResult
+  | FlashResult
+  | NozzleResult
+  | BlowdownResult
+  | ReliefResult
+  | EnergyResult
+  | MethodResult
+  | SizingResult
+  | StudyResult;
 
 export type RunContext = Pick<BlowdownOptions, "onProgress" | "isCancelled" | "coarse"> & {
   engineVersion: string;
@@ -43,6 +54,8 @@ export function runCase(document: EngineCase, context: RunContext): EngineResult
       return runMethod(document);
     case "blowdown":
       return stamp<BlowdownResult>(() => runBlowdown(document, context), context);
+    case "relief":
+      return stamp<ReliefResult>(() => runRelief(document), context);
     case "energy":
       return stamp<EnergyResult>(() => runEnergy(document), context);
     case "sizing":

@@ -23,7 +23,7 @@ describe("the page of the case format", () => {
 
   it("covers every kind, steel, head and equation", () => {
     expect(new Set(examples.map((text) => (JSON.parse(text) as { kind: string }).kind))).toEqual(
-      new Set(["flash", "path", "nozzle", "energy", "method", "blowdown", "sizing", "study"]),
+      new Set(["flash", "path", "nozzle", "relief", "energy", "method", "blowdown", "sizing", "study"]),
     );
     for (const word of [...steelIds, ...headShapes, ...equationIds, ...inputIds]) expect(page).toContain(`\`${word}\``);
   });

@@ -5,7 +5,6 @@
 import type { ReliefDevice, SizedArea } from "../cases/relief-case";
 import type { FluidModel } from "../eos/fluid-model";
 import { EngineError } from "../errors";
-import type { Equilibrium } from "../flash/equilibrium";
 import { flashPS } from "../flash/flash-ph";
 import { flashTQ } from "../flash/flash-quality";
 import { equilibriumNozzle } from "../flow/equilibrium-nozzle";
