@@ -1,6 +1,6 @@
 "use client";
 
-import { useId } from "react";
+import { useId, useState } from "react";
 import { UnitField } from "@/components/line/unit-field";
 import { WarningSign } from "@/components/line/warning-sign";
 import { useUnits } from "@/components/units/units-provider";
@@ -36,7 +36,13 @@ type FieldProps = { of: string; quantity: StateQuantity; typed: Typed; onChange:
 function StateField({ of, quantity, typed, onChange }: FieldProps) {
   const { system, barometricPressurePa } = useUnits();
   const id = useId();
-  const shown = shownTyped(quantity, typed, system, barometricPressurePa);
+  // A unit of the other system, once typed or chosen, holds until the whole page is switched.
+  const [typedIn, setTypedIn] = useState(system);
+  const shown = typedIn === system ? typed : shownTyped(quantity, typed, system, barometricPressurePa);
+  const change = (next: Typed) => {
+    setTypedIn(system);
+    onChange(next);
+  };
   const read = readTyped(quantity, shown, barometricPressurePa);
   const problem = "problem" in read ? read.problem : undefined;
   return (
@@ -53,11 +59,11 @@ function StateField({ of, quantity, typed, onChange }: FieldProps) {
         units={unitSymbols(quantity)}
         tone={problem ? "bad" : "rest"}
         describedBy={problem ? `${id}-problem` : undefined}
-        onValueChange={(text) => onChange({ text, unit: shown.unit })}
-        onUnitChange={(unit) => onChange(inUnit(quantity, shown, unit, barometricPressurePa))}
+        onValueChange={(text) => change({ text, unit: shown.unit })}
+        onUnitChange={(unit) => change(inUnit(quantity, shown, unit, barometricPressurePa))}
         onLeave={() => {
           const apart = unitApart(quantity, shown, barometricPressurePa);
-          if (apart !== shown) onChange(apart);
+          if (apart !== shown) change(apart);
         }}
       />
       {problem && (
