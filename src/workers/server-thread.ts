@@ -13,11 +13,24 @@ import type * as Engine from "./engine-entry";
 import type { ComputedTwice, ErrorDocument, Outcome } from "./engine-entry";
 
 export type ThreadData = { enginePath: string; engineVersion: string };
-export type ThreadRequest = { id: string; document: unknown; twice: boolean; timeLimitMs: number; cancel?: SharedArrayBuffer };
+export type ThreadRequest = {
+  id: string;
+  document: unknown;
+  twice: boolean;
+  /** Where the document is a study that is run in parts. */
+  study?: StudyAct;
+  timeLimitMs: number;
+  cancel?: SharedArrayBuffer;
+};
+export type StudyAct =
+  | { act: "count" }
+  | { act: "part"; from: number; to: number }
+  | { act: "assemble"; outcomes: Parameters<typeof Engine.assembleStudyParts>[1] };
+type Answered = Outcome | ComputedTwice | ReturnType<typeof Engine.countStudyRuns> | ReturnType<typeof Engine.runStudyPart>;
 export type ThreadAnswer =
   | { type: "ready"; engineVersion: string }
   | { type: "progress"; id: string; part: number }
-  | { type: "done"; id: string; outcome: Outcome | ComputedTwice }
+  | { type: "done"; id: string; outcome: Answered }
   | { type: "failed"; id: string; message: string };
 
 const { enginePath, engineVersion } = workerData as ThreadData;
@@ -36,7 +49,7 @@ port.on("message", (request: ThreadRequest) => {
 });
 say({ type: "ready", engineVersion });
 
-function run({ id, document, twice, timeLimitMs, cancel }: ThreadRequest): Outcome | ComputedTwice {
+function run({ id, document, twice, study, timeLimitMs, cancel }: ThreadRequest): Answered {
   const flag = cancel ? new Int32Array(cancel) : undefined;
   const deadline = performance.now() + timeLimitMs;
   let lastSaid = Number.NEGATIVE_INFINITY;
@@ -55,10 +68,25 @@ function run({ id, document, twice, timeLimitMs, cancel }: ThreadRequest): Outco
       return late || (flag !== undefined && Atomics.load(flag, 0) === 1);
     },
   };
-  const outcome = twice ? engine.runDocumentTwice(document, context) : engine.runDocument(document, context);
+  const outcome = study
+    ? actOn(study, document, context)
+    : twice
+      ? engine.runDocumentTwice(document, context)
+      : engine.runDocument(document, context);
   return late && outcome.status === 3 && outcome.error.code === "cancelled"
     ? { status: 3, error: outOfTime(timeLimitMs) }
     : outcome;
+}
+
+function actOn(study: StudyAct, document: unknown, context: Engine.EntryContext): Answered {
+  switch (study.act) {
+    case "count":
+      return engine.countStudyRuns(document);
+    case "part":
+      return engine.runStudyPart(document, study, context);
+    case "assemble":
+      return engine.assembleStudyParts(document, study.outcomes, context);
+  }
 }
 
 const outOfTime = (timeLimitMs: number): ErrorDocument => ({

@@ -6,6 +6,7 @@ import { fileURLToPath } from "node:url";
 import { Worker } from "node:worker_threads";
 import { build } from "esbuild";
 import { afterAll, beforeAll, describe, expect, it } from "vitest";
+import type { Outcome as StudyOutcome } from "@/engine/cases/study-case";
 import type { ComputedTwice } from "@/workers/engine-entry";
 import type { ThreadAnswer, ThreadData, ThreadRequest } from "@/workers/server-thread";
 import { buildEngine } from "@/ops/build-engine.mjs";
@@ -84,6 +85,33 @@ describe("the server's thread", () => {
     expect(outcome?.confirmation.figures.length).toBeGreaterThan(3);
     expect(outcome?.resultText).not.toContain("wallClockMs");
     expect(answers.some((one) => one.type === "ready")).toBe(true);
+  }, 60_000);
+
+  it("counts, runs and assembles the parts of a study", async () => {
+    const study = {
+      format: "ebbmark-case/1",
+      kind: "study",
+      study: "tornado",
+      inputs: [{ input: "volume", low: 0.9, high: 1.1 }],
+      of: bank,
+    };
+    const ordinary = { document: study, twice: false, timeLimitMs: 60_000 };
+    ask({ ...ordinary, id: "count", study: { act: "count" } });
+    expect(await answerTo("count")).toMatchObject({ type: "done", outcome: { status: 0, runs: 3 } });
+    const outcomes: StudyOutcome[] = [];
+    for (const part of [
+      { from: 0, to: 2 },
+      { from: 2, to: 3 },
+    ]) {
+      ask({ ...ordinary, id: `part-${part.from}`, study: { act: "part", ...part } });
+      const answer = await answerTo(`part-${part.from}`);
+      if (answer.type === "done" && "outcomes" in answer.outcome) outcomes.push(...answer.outcome.outcomes);
+    }
+    ask({ ...ordinary, id: "assemble", study: { act: "assemble", outcomes } });
+    expect(await answerTo("assemble")).toMatchObject({
+      type: "done",
+      outcome: { status: 0, result: { study: "tornado", bars: [{ input: "volume" }] } },
+    });
   }, 60_000);
 
   it("answers an invalid document with its problems, and goes on", async () => {

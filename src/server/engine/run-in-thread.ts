@@ -6,6 +6,7 @@ import { z } from "zod";
 import type { CaseProblem } from "@/contracts/case-file";
 import type { BlowdownResult, Confirmation } from "@/engine/cases/blowdown-result";
 import type { EngineResult } from "@/engine/run-case";
+import type { Outcome as StudyOutcome } from "@/engine/cases/study-case";
 import { env } from "@/server/env";
 import { Refusal } from "@/server/refusal";
 import { PoolError, ThreadPool, type Protocol } from "@/server/threads/thread-pool";
@@ -21,7 +22,9 @@ export type Computed<Result extends EngineResult = EngineResult> = {
 };
 export type ComputedTwice = Computed<BlowdownResult> & { confirmation: Confirmation; confirmationText: string };
 
-type Job = { document: unknown; twice: boolean };
+/** As `src/workers/server-thread.ts` reads it. */
+type StudyAct = { act: "count" } | { act: "part"; from: number; to: number } | { act: "assemble"; outcomes: StudyOutcome[] };
+type Job = { document: unknown; twice: boolean; study?: StudyAct };
 
 /** The run itself stops a little before its thread would be ended, so that the usual end is a sentence. */
 const timeLimitMs = 60_000;
@@ -38,6 +41,8 @@ const protocol: Protocol = {
   },
 };
 
+const poolSize = (): number => Math.max(1, availableParallelism() - 1);
+
 type Holder = { ebbmarkEnginePool?: ThreadPool };
 
 const pool = (): ThreadPool => ((globalThis as Holder).ebbmarkEnginePool ??= makePool());
@@ -47,7 +52,7 @@ function makePool(): ThreadPool {
   const { file, engineVersion } = currentEngine(engineFolder);
   return new ThreadPool({
     file: engineThread,
-    size: Math.max(1, availableParallelism() - 1),
+    size: poolSize(),
     longestQueue,
     budgetMs: killAfterMs,
     resourceLimits: { maxOldGenerationSizeMb: 256, maxYoungGenerationSizeMb: 64 },
@@ -80,7 +85,39 @@ export function runTwice(document: unknown): Promise<ComputedTwice> {
   return run<ComputedTwice>({ document, twice: true });
 }
 
-async function run<T extends Computed>(job: Job): Promise<T> {
+/** So many runs of a study go to a thread at a time: others get their turn in between, and each part keeps to the time limit. */
+const runsAtATime = 40;
+
+/**
+ * A study in parts, which may take longer than one case may.
+ *
+ * Throws   as `runOnce`
+ */
+export async function runStudy(document: unknown): Promise<Computed> {
+  const job = { document, twice: false };
+  const { runs } = await run<{ status: 0; runs: number }>({ ...job, study: { act: "count" } });
+  const parts = Array.from({ length: Math.ceil(runs / runsAtATime) }, (_, i) => ({
+    from: i * runsAtATime,
+    to: Math.min((i + 1) * runsAtATime, runs),
+  }));
+  const done: StudyOutcome[] = [];
+  const work = async (): Promise<void> => {
+    for (let part = parts.shift(); part; part = parts.shift()) {
+      const answer = run<{ status: 0; outcomes: StudyOutcome[] }>({ ...job, study: { act: "part", ...part } });
+      // One part that fails ends the study: the others are not worth a thread then.
+      done.push(...(await answer.catch(giveUp)).outcomes);
+    }
+  };
+  const giveUp = (error: unknown): never => {
+    parts.length = 0;
+    throw error;
+  };
+  // No more at once than there are threads, so that a long study does not fill the queue.
+  await Promise.all(Array.from({ length: poolSize() }, work));
+  return run<Computed>({ ...job, study: { act: "assemble", outcomes: done } });
+}
+
+async function run<T extends { status: 0 }>(job: Job): Promise<T> {
   const outcome = await pool()
     .run<T | Failure>(job)
     .catch((error: unknown) => {
