@@ -1,7 +1,7 @@
 import { render, screen, within } from "@testing-library/react";
 import userEvent from "@testing-library/user-event";
 import { afterEach, beforeEach, describe, expect, it, vi } from "vitest";
-import { stubWorker } from "../engine/worker-for-tests";
+import { stubWorker } from "../../../../tests/fixtures/engine-worker";
 import { FluidSheet } from "./fluid-sheet";
 import type { FluidOfScreening } from "./fluid-of-screening";
 
