@@ -3,11 +3,15 @@ import type { FluidModel } from "../eos/fluid-model";
 import { assemble } from "./assemble";
 import type { Equilibrium } from "./equilibrium";
 import { onlyComponent, saturationAtPressure, saturationAtTemperature, type PureSaturation } from "./saturation-pure";
+import { mayHoldWater } from "./third-phase";
+import { withEveryPhase } from "./vapour-fraction-search";
+import { verifyPhases } from "./verify-phases";
 import { createSaturationWork, solveSaturation, type SaturationPoint, type SaturationWork } from "./saturation-newton";
 
 /**
- * Saturated state at given temperature and vapour mole fraction Q: bubble point at Q = 0, dew point at Q = 1. Where a retrograde
- * mixture has two dew points at one temperature, the answer is the lower one.
+ * Saturated state at given temperature and vapour mole fraction Q: bubble point at Q = 0, dew point at Q = 1. Free water and a second liquid
+ * count as liquid: a dew point is that of whichever liquid forms first. Where a retrograde mixture has two dew points at one temperature, the
+ * answer is the lower one.
  *
  * Throws   EngineError "not-applicable" above the critical point of a pure fluid; "no-convergence" where no such point was found
  */
@@ -55,7 +59,14 @@ type Given = { lnT: number; lnP?: undefined } | { lnP: number; lnT?: undefined }
 
 function solve(model: FluidModel, z: ArrayLike<number>, Q: number, given: Given): Equilibrium {
   const work = createSaturationWork(z.length);
-  return result(model, z, Q, saturationPoint(model, z, Q, given, work), work);
+  let found: Equilibrium | undefined;
+  try {
+    found = result(model, z, Q, saturationPoint(model, z, Q, given, work), work);
+    if (verifyPhases(model, found) === "sound") return found;
+  } catch (error) {
+    if (!(error instanceof EngineError) || error.code !== "no-convergence" || !mayHoldWater(model, z)) throw error;
+  }
+  return withEveryPhase(model, z, Q, given, found);
 }
 
 /** The converged unknowns of a mixture's saturated state; `work` is left with both phases evaluated there. */

@@ -70,6 +70,11 @@ describe("the phase envelope", () => {
             ? point.pressurePa < 2e6 && flashPQ(fluid, { pressurePa: point.pressurePa, vapourMoleFraction: 1 })
             : flashTQ(fluid, { temperatureK: point.temperatureK, vapourMoleFraction: 0 });
         if (!found) continue;
+        // Below 107 K a second liquid splits off the rich gas, which the envelope leaves out and the flash does not.
+        if (found.phases.length > 2) {
+          expect(point.temperatureK).toBeLessThan(110);
+          continue;
+        }
         expect(Math.abs(found.temperatureK / point.temperatureK - 1)).toBeLessThan(1e-8);
         expect(Math.abs(found.pressurePa / point.pressurePa - 1)).toBeLessThan(1e-8);
       }

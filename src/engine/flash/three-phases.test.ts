@@ -8,10 +8,12 @@ import { waterSaturationPressure } from "../solids/solid-lines";
 import type { Equilibrium } from "./equilibrium";
 import { flashPH, flashPS } from "./flash-ph";
 import { flashPT } from "./flash-pt";
+import { flashPQ, flashTQ } from "./flash-quality";
 import { flashSV, flashUV } from "./flash-uv";
 import { phaseWarnings } from "./phase-warnings";
 import { saturationAtTemperature } from "./saturation-pure";
 import { testStability } from "./stability";
+import { verifyPhases } from "./verify-phases";
 
 const modelOf = (composition: Record<string, number>, equation: EquationId = "peng-robinson-1976") =>
   createFluidModel({ equation, components: Object.entries(composition).map(([id, moleFraction]) => ({ id, moleFraction })) });
@@ -118,6 +120,37 @@ describe("vapour, hydrocarbon liquid and water", () => {
     expect(relativeError(gas.composition[6]!, 0.0012)).toBeLessThan(0.13);
     expect(relativeError(saturation, waterSaturationPressure(T))).toBeCloseTo(0.13, 2);
     expect(phaseWarnings(model, found)[0]!.message).toContain("vapour pressure of water is −13.1 % off");
+  });
+});
+
+describe("saturated states with free water", () => {
+  const model = modelOf({ methane: 0.3, propane: 0.2, n_butane: 0.2, n_hexane: 0.2, water: 0.1 });
+
+  it("are found by temperature and by pressure alike, and are those of the PT flash", () => {
+    for (const vapourMoleFraction of [0.1, 0.5, 0.9]) {
+      const byTemperature = flashTQ(model, { temperatureK: 310, vapourMoleFraction });
+      expect(byTemperature.phases.length).toBeGreaterThan(2);
+      expect(byTemperature.vapourMoleFraction).toBeCloseTo(vapourMoleFraction, 8);
+      const { pressurePa } = byTemperature;
+      expect(flashPQ(model, { pressurePa, vapourMoleFraction }).temperatureK).toBeCloseTo(310, 5);
+      expect(flashPT(model, byTemperature).phases.length).toBe(byTemperature.phases.length);
+      expect(verifyPhases(model, byTemperature)).toBe("sound");
+    }
+  });
+
+  it("have the water dew point first where there is much of it: its partial pressure is its vapour pressure", () => {
+    const dew = flashTQ(model, { temperatureK: 310, vapourMoleFraction: 1 });
+    const pure = saturationAtTemperature(model, 310, [0, 0, 0, 0, 1]).pressurePa;
+    expect(relativeError(dew.pressurePa, pure / 0.1)).toBeLessThan(0.02);
+    expect(dew.phases.at(-1)!.composition[4]).toBeGreaterThan(0.999);
+  });
+
+  it("boil a liquid of propane over water at the one pressure that both fix", () => {
+    const two = modelOf({ propane: 0.5, water: 0.5 });
+    const half = flashTQ(two, { temperatureK: 300, vapourMoleFraction: 0.2 });
+    expect(half.phases).toHaveLength(3);
+    expect(half.vapourMoleFraction).toBeCloseTo(0.2, 6);
+    expect(flashPQ(two, { pressurePa: half.pressurePa, vapourMoleFraction: 0.2 }).temperatureK).toBeCloseTo(300, 4);
   });
 });
 

@@ -48,7 +48,10 @@ function atLevel(fluid: FluidModel, start: AtLevel, path: string, z: ArrayLike<n
   }
 }
 
+/** Part of the volume that liquids fill, free water among them. */
 function liquidPart({ phases, molarVolumeM3PerMol }: Equilibrium): number {
-  const dense = phases.length === 2 ? phases[1] : phases.find((phase) => phase.kind === "liquid");
-  return dense ? (dense.moleFraction * dense.state.molarVolumeM3PerMol) / molarVolumeM3PerMol : 0;
+  const liquids = phases.length > 1 ? phases.slice(1) : phases.filter((phase) => phase.kind === "liquid");
+  return (
+    liquids.reduce((sum, { moleFraction, state }) => sum + moleFraction * state.molarVolumeM3PerMol, 0) / molarVolumeM3PerMol
+  );
 }
