@@ -83,6 +83,20 @@ describe("the engine's client", () => {
     expect(workers[0]?.ended).toBe(true);
   });
 
+  it("starts once more when its code did not arrive, and then says so", () => {
+    const told: Told[] = [];
+    client().ask("table", equations(300), (one) => told.push(one));
+    const fail = (worker: FakeWorker | undefined) => worker?.onerror?.({} as ErrorEvent);
+    fail(workers[0]);
+    expect(workers.map(({ ended, asked }) => [ended, asked.length])).toEqual([
+      [true, 1],
+      [false, 1],
+    ]);
+    expect(told).toEqual([]);
+    fail(workers[1]);
+    expect(told).toEqual([{ problem: expect.stringContaining("could not be started") as string }]);
+  });
+
   it("tells nothing once an ask is taken back", () => {
     const told: Told[] = [];
     const back = client().ask("table", equations(300), (one) => told.push(one));

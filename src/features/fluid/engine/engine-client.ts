@@ -33,6 +33,8 @@ export class EngineClient {
   private readonly live = new Map<string, Live>();
   private busySince: number | undefined;
   private newest = 0;
+  /** Starts that failed one after another. */
+  private failed = 0;
 
   constructor(private readonly start: () => EngineWorker) {}
 
@@ -61,13 +63,14 @@ export class EngineClient {
     if (!this.worker) {
       this.worker = this.start();
       this.worker.onmessage = ({ data }) => this.hear(data);
-      this.worker.onerror = () => this.failAll(notStarted);
+      this.worker.onerror = () => this.startAgain();
     }
     this.busySince ??= performance.now();
     this.worker.postMessage({ id, ask, lane });
   }
 
   private hear(answer: PreviewAnswer): void {
+    this.failed = 0;
     if (answer.type === "progress" || answer.type === "result") return;
     if (answer.type === "replaced") return;
     const found = [...this.live.values()].find(({ id }) => id === answer.id);
@@ -84,7 +87,15 @@ export class EngineClient {
     found.tell({ problem: tooLong });
   }
 
+  /** Its code may not have arrived: a connection that dropped is given one more chance. */
+  private startAgain(): void {
+    this.failed += 1;
+    if (this.failed > 1) return this.failAll(notStarted);
+    this.restart();
+  }
+
   private failAll(problem: string): void {
+    this.failed = 0;
     const all = [...this.live.values()];
     this.end();
     for (const { tell } of all) tell({ problem });
