@@ -76,6 +76,15 @@ describe("warming up again", () => {
     expect(found?.state).toBe("already-above");
   });
 
+  it("needs no state of the fluid at the temperature of steel that comes out of a fire", () => {
+    const glowing = ended({ wallMeanK: 1300, coldestSteelK: 1300, temperatureK: 600 });
+    const found = afterwards(given(), {
+      ...glowing,
+      fluid: { ...glowing.fluid, temperatureRangeK: [50, 1000] } as EndOfRun["fluid"],
+    })?.rewarm;
+    expect(found).toMatchObject({ state: "already-above", coldestAtStopK: 1300, coldestAfterwardsK: 600 });
+  });
+
   it("never warms above its rating where the surroundings are colder than that", () => {
     expect(afterwards(given({ minimumDesignMetalTemperatureK: 295 }), ended())?.rewarm).toMatchObject({ state: "never" });
     expect(afterwards(given({ minimumDesignMetalTemperatureK: 295 }), ended())?.rewarm?.timeS).toBeUndefined();

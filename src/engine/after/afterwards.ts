@@ -94,6 +94,11 @@ function rewarming(
   if (!wall || wallMeanK === undefined || coldestSteelK === undefined || ratedTemperatureK === undefined || !areaM2)
     return undefined;
 
+  // After a fire the steel may be too hot for the equation; it meets the fluid somewhere above the colder of the two.
+  const leastK = Math.min(coldestSteelK, wallMeanK, end.temperatureK);
+  if (wallMeanK > 0.97 * end.fluid.temperatureRangeK[1] && leastK >= ratedTemperatureK)
+    return { state: "already-above", ratedTemperatureK, coldestAtStopK: coldestSteelK, coldestAfterwardsK: leastK };
+
   const at = stateFinder(end);
   const energyJ = (T: number): number => totalMolesMol * at(T).internalEnergyJPerMol + wall.energyAtJ(T);
   const whole = end.internalEnergyJ + wall.energyAtJ(wallMeanK);
