@@ -250,7 +250,28 @@ function nested(
   const near = found.phases.length > 1 ? fromNear(model, z, target, found, state) : undefined;
   if (near) return near;
   const polished = found.phases.length === 1 ? onePhase(model, target, z, T) : undefined;
-  return polished && isStable(model, polished, z) ? assembleOne(model, polished, z) : found;
+  if (polished && isStable(model, polished, z)) return assembleOne(model, polished, z);
+  return asAsked(model, target, found);
+}
+
+/** Largest error of volume, and of energy over R T, that a nested search may leave. */
+const closeEnough = 1e-7;
+
+/** What the nested searches ended in, if it has the volume and the energy: at a jump that they cannot divide it has not. */
+function asAsked(model: FluidModel, target: HeldTarget, found: Equilibrium): Equilibrium {
+  const R = model.gasConstantJPerMolK;
+  const off =
+    target.hold === "energy"
+      ? (found.internalEnergyJPerMol - target.value) / (R * found.temperatureK)
+      : (found.entropyJPerMolK - target.value) / R;
+  const offVolume = found.molarVolumeM3PerMol / target.molarVolume - 1;
+  if (Math.abs(off) <= closeEnough && Math.abs(offVolume) <= closeEnough) return found;
+  throw new EngineError("no-convergence", "the search for the equilibrium of this energy and volume did not close", {
+    temperatureK: found.temperatureK,
+    pressurePa: found.pressurePa,
+    volumeError: offVolume,
+    energyError: off,
+  });
 }
 
 function meanCriticalTemperature(model: FluidModel, z: ArrayLike<number>): number {
