@@ -17,11 +17,12 @@ export type AroundRun = {
   cautions: Caution[];
 };
 
-export function aroundRun(blowdown: BlowdownCase, looked: LookedAt, end: EndOfRun): AroundRun {
+/** Without an end of the run, nothing is said of what follows it. */
+export function aroundRun(blowdown: BlowdownCase, looked: LookedAt, end: EndOfRun | undefined): AroundRun {
   const { model, series, summary } = looked;
   const missed: Warning[] = [];
   const settleOut = model.settled && settleOutReport(model.fluid, model.settled, blowdown.start);
-  const after = orNothing("What follows the blowdown", missed, () => afterwards(blowdown, end));
+  const after = end && orNothing("What follows the blowdown", missed, () => afterwards(blowdown, end));
   const fire = orNothing("Steel in the fire", missed, () => {
     const found = steelInFire(blowdown, { fluid: model.fluid, series, summary });
     const late = found && blowdown.steelInFire?.lateByS ? lateOpenings(blowdown, model.fluid, looked.rerun) : undefined;

@@ -32,6 +32,7 @@ export function outcomeOf(index: number, blowdown: BlowdownCase, options: StudyO
   try {
     const { summary, verdict, limits, series, numerics } = runBlowdown(blowdown, {
       coarse: true,
+      figuresOnly: true,
       ...(options.isCancelled ? { isCancelled: options.isCancelled } : {}),
     });
     const figures: Figures = {};

@@ -26,6 +26,8 @@ export type BlowdownOptions = {
   isCancelled?: () => boolean;
   /** For a preview: a loose tolerance and wider gaps in the series. */
   coarse?: boolean;
+  /** For one of many runs of a study: leaves out what follows the blowdown. */
+  figuresOnly?: boolean;
   relativeTolerance?: number;
   maxEvaluations?: number;
 };
@@ -82,7 +84,7 @@ export function runBlowdown(asked: BlowdownCase, options: BlowdownOptions = {}):
       rerun: (other) =>
         runBlowdown(other, { coarse: true, ...(options.isCancelled ? { isCancelled: options.isCancelled } : {}) }),
     },
-    endOfRun(balance, ends, rows),
+    options.figuresOnly ? undefined : endOfRun(balance, ends, rows),
   );
   const warnings = [...warningsOf(blowdown, model, run, rows, summary), ...around.warnings];
   const assessed = assess([...blowdownFigures(blowdown, summary, series), ...around.figures], {
