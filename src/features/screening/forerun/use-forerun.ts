@@ -9,6 +9,8 @@ import type { PreviewAnswer, PreviewRequest } from "@/workers/browser";
 const restMs = 250;
 /** A run that takes longer is given up, so that one case can't hold the form. */
 const patienceMs = 20_000;
+/** A worker that has just been started fetches the engine first, which may take long on a slow line. */
+const loadingMs = 40_000;
 /** How long an older run may stand in the way of the newest one. Starting a worker anew costs less than that. */
 const inTheWayMs = 1_000;
 
@@ -72,6 +74,7 @@ export function useForerun(document: BlowdownCase | undefined, letter: string): 
       // A run can't be broken off from outside; one that is in the way for long is ended with its worker.
       if (busySince.current !== undefined && started - busySince.current > inTheWayMs) stop(worker, busySince);
       const asked = JSON.parse(text) as BlowdownCase; // written from a case above
+      const loading = worker.current === undefined ? loadingMs : 0;
       worker.current ??= new Worker(new URL("../../../workers/browser.ts", import.meta.url), { type: "module" });
       worker.current.onerror = () =>
         giveUp("The preview could not be started in this browser. Compute in full works without it.");
@@ -85,7 +88,8 @@ export function useForerun(document: BlowdownCase | undefined, letter: string): 
       };
       busySince.current ??= started;
       setState((before) => ({ ...before, running: true }));
-      patience = setTimeout(() => giveUp("The preview takes too long for this case. Compute in full to see it."), patienceMs);
+      const tooLong = () => giveUp("The preview takes too long for this case. Compute in full to see it.");
+      patience = setTimeout(tooLong, patienceMs + loading);
       worker.current.postMessage({ id, document: asked, coarse: true } satisfies PreviewRequest);
     }, restMs);
     return () => {
