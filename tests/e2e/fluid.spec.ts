@@ -17,6 +17,7 @@ async function noViolations(page: Page, where: string): Promise<void> {
 }
 
 test("a rich gas from its lines to its page, and on to a change of state", async ({ browser }) => {
+  test.setTimeout(300_000); // five pages, and the engine starting anew on each of them
   const { page, context, complaints } = await personAt(browser, "engineer");
 
   await test.step("the phase diagram follows the composition while it is typed", async () => {
