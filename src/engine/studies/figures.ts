@@ -67,7 +67,7 @@ function curveOf({ timeS, pressurePa, fluidTemperatureK, gasWallTemperatureK }: 
   };
 }
 
-/** The figure that decides the case: that with the least in hand relative to its limit's usual band, or the lowest temperature there is. */
+/** The figure that bars are sorted by: the steel where the run has any, then the time to the target, then the fluid. */
 export function leadingFigure(figures: Figures): FigureId {
   const wanted: FigureId[] = ["minimumWallTemperatureK", "timeToTargetPressureS", "minimumFluidTemperatureK"];
   return wanted.find((id) => figures[id] !== undefined) ?? "endTimeS";
