@@ -1,17 +1,16 @@
 import { createPhaseState, type FluidModel, type PhaseState } from "../eos/fluid-model";
 import { EngineError } from "../errors";
-import { assemble } from "./assemble";
+import { attempted } from "./attempted";
 import { bracketedRoot } from "./bracketed-root";
 import type { Equilibrium } from "./equilibrium";
+import { equilibriumAtVolume } from "./equilibrium-at-volume";
 import { flashPT } from "./flash-pt";
-import { lever, type Sides } from "./lever";
-import { insideDome, saturatedMix } from "./pure-volume";
+import { pureAtVolume, type HeldTarget } from "./pure-at-volume";
 import { onlyComponent } from "./saturation-pure";
-import { solveAtVolume, type TwoPhaseVolumes, type VolumeTarget } from "./two-phase-volume";
-import { createThreePhaseVolumes, solveThreeAtVolume, type ThreePhaseVolumes } from "./three-phase-volume";
 import { mayHoldWater, splitsFurther } from "./third-phase";
-import { verifyPhases } from "./verify-phases";
-import { createTwoPhaseVolumes, seedFrom, seedThreeFrom } from "./volume-seed";
+import { solveAtVolume, type TwoPhaseVolumes } from "./two-phase-volume";
+import { assembleOne, assembleTwo, fromNear, fromThree, isStable, volumesFor, withThird } from "./volume-phases";
+import { seedFrom } from "./volume-seed";
 
 /**
  * Equilibrium of a closed rigid volume: given molar internal energy and molar volume (kind "UV"), or molar entropy and molar
@@ -54,8 +53,6 @@ export function flashSV(
   );
 }
 
-type HeldTarget = VolumeTarget & { hold: "energy" | "entropy" };
-
 function flashAtVolume(model: FluidModel, target: HeldTarget, z: ArrayLike<number>, seed?: Equilibrium): Equilibrium {
   const v = target.molarVolume;
   model.residual.setComposition(z);
@@ -77,7 +74,7 @@ function flashAtVolume(model: FluidModel, target: HeldTarget, z: ArrayLike<numbe
 
   const only = onlyComponent(z);
   const single = onePhase(model, target, z, seed?.temperatureK ?? 300);
-  if (only >= 0) return pure(model, target, z, single, state);
+  if (only >= 0) return pureAtVolume(model, target, z, single, state);
 
   if (single && single.pressurePa > 0 && single.pressureByVolume < 0) {
     if (isStable(model, single, z)) return assembleOne(model, single, z);
@@ -95,20 +92,6 @@ function flashAtVolume(model: FluidModel, target: HeldTarget, z: ArrayLike<numbe
   return nested(model, target, z, single, state, seed);
 }
 
-/** Two or three phases by Newton from an equilibrium near by; undefined where that fails or leaves a phase out. */
-function fromNear(
-  model: FluidModel,
-  z: ArrayLike<number>,
-  target: VolumeTarget,
-  near: Equilibrium,
-  state: TwoPhaseVolumes,
-): Equilibrium | undefined {
-  if (near.phases.length === 3) return fromThree(model, z, target, near);
-  if (!seedFrom(near, z, target.molarVolume, state) || !solveAtVolume(model, z, target, state)) return undefined;
-  const found = assembleTwo(model, state);
-  return splitsFurther(model, found) ? withThird(model, z, target, found) : found;
-}
-
 /** Two phases that came from a seed, or three where a test finds one more. */
 function completed(
   model: FluidModel,
@@ -122,29 +105,6 @@ function completed(
   return three ?? nested(model, target, z, undefined, volumesFor(z.length), seed);
 }
 
-function withThird(model: FluidModel, z: ArrayLike<number>, target: VolumeTarget, found: Equilibrium): Equilibrium | undefined {
-  const near = attempted(() => flashPT(model, found, z, found));
-  return near && fromThree(model, z, target, near);
-}
-
-function fromThree(model: FluidModel, z: ArrayLike<number>, target: VolumeTarget, near: Equilibrium): Equilibrium | undefined {
-  const state = threeFor(z.length);
-  if (!seedThreeFrom(near, z, target.molarVolume, state)) return undefined;
-  if (target.hold === "temperature") state.temperatureK = target.value;
-  if (!solveThreeAtVolume(model, z, target, state)) return undefined;
-  const found = assembleThree(model, state);
-  return attempted(() => verifyPhases(model, found)) === "sound" ? found : undefined;
-}
-
-/** The root of lowest Gibbs energy at its own pressure, and no split there. */
-function isStable(model: FluidModel, single: PhaseState, z: ArrayLike<number>): boolean {
-  const { temperatureK: T, pressurePa: p, molarVolumeM3PerMol: v } = single;
-  model.residual.setComposition(z);
-  const best = model.residual.volumeAtPressure(T, p, "stable");
-  if (Math.abs(best / v - 1) > 1e-6) return false;
-  return model.stability(T, p, z).stable;
-}
-
 function onePhase(model: FluidModel, target: HeldTarget, z: ArrayLike<number>, guess: number): PhaseState | undefined {
   try {
     return target.hold === "energy"
@@ -154,60 +114,6 @@ function onePhase(model: FluidModel, target: HeldTarget, z: ArrayLike<number>, g
     if (error instanceof EngineError && (error.code === "no-convergence" || error.code === "outside-validity")) return undefined;
     throw error;
   }
-}
-
-/** The value, or undefined where the engine says no: one attempt of several. */
-function attempted<Value>(attempt: () => Value): Value | undefined {
-  try {
-    return attempt();
-  } catch (error) {
-    if (error instanceof EngineError) return undefined;
-    throw error;
-  }
-}
-
-function pure(
-  model: FluidModel,
-  target: HeldTarget,
-  z: ArrayLike<number>,
-  single: PhaseState | undefined,
-  state: TwoPhaseVolumes,
-): Equilibrium {
-  const v = target.molarVolume;
-  // A one-phase state in tension is no answer; nor is one so cold that its saturation pressure is beyond all numbers.
-  const outside = single && single.pressurePa > 0 && attempted(() => insideDome(model, single.temperatureK, v, z) === undefined);
-  if (outside) return assembleOne(model, single, z);
-  const start = domeStart(model, v, z, single?.temperatureK);
-  if (start === undefined) {
-    throw new EngineError("no-convergence", "no equilibrium state has this energy at this volume", {
-      molarVolumeM3PerMol: v,
-      value: target.value,
-    });
-  }
-  const { saturation, quality } = saturatedMix(model, z, { v, value: target.value, kind: target.hold }, start);
-  const index = onlyComponent(z);
-  state.v.fill(0);
-  state.l.fill(0);
-  state.v[index] = quality;
-  state.l[index] = 1 - quality;
-  state.temperatureK = saturation.temperatureK;
-  state.vapourVolume = quality * saturation.vapourVolume;
-  state.liquidVolume = v - state.vapourVolume;
-  if (quality > 1e-12 && quality < 1 - 1e-12 && solveAtVolume(model, z, target, state)) return assembleTwo(model, state);
-  return assemble(model, saturation.temperatureK, saturation.pressurePa, [
-    { moleFraction: quality, composition: z, molarVolume: saturation.vapourVolume },
-    { moleFraction: 1 - quality, composition: z, molarVolume: saturation.liquidVolume },
-  ]);
-}
-
-/** A temperature at which v lies inside the dome: from near the critical one downwards. */
-function domeStart(model: FluidModel, v: number, z: ArrayLike<number>, near: number | undefined): number | undefined {
-  const Tc = model.criticalTemperaturesK[onlyComponent(z)]!;
-  const candidates: number[] = [];
-  for (let reduced = 0.98; reduced > 0.25; reduced -= 0.06) candidates.push(reduced * Tc);
-  for (const reduced of [0.99, 0.995, 0.998, 0.9995]) candidates.push(reduced * Tc);
-  if (near !== undefined && near < Tc) candidates.push(near);
-  return candidates.find((T) => T > model.temperatureRangeK[0] && attempted(() => insideDome(model, T, v, z)) !== undefined);
 }
 
 /**
@@ -278,116 +184,4 @@ function meanCriticalTemperature(model: FluidModel, z: ArrayLike<number>): numbe
   let mean = 0;
   for (let i = 0; i < z.length; i++) mean += z[i]! * model.criticalTemperaturesK[i]!;
   return mean;
-}
-
-/** Equilibrium at given temperature and molar volume. */
-export function equilibriumAtVolume(
-  model: FluidModel,
-  T: number,
-  v: number,
-  z: ArrayLike<number>,
-  seed?: Equilibrium,
-): Equilibrium {
-  const single = model.phaseAtVolume(T, v, z, createPhaseState());
-  if (single.pressurePa > 0 && single.pressureByVolume < 0 && isStable(model, single, z)) return assembleOne(model, single, z);
-  const state = volumesFor(z.length);
-  const target: VolumeTarget = { hold: "temperature", value: T, molarVolume: v };
-  if (seed?.phases.length === 2 && seedFrom(seed, z, v, state)) {
-    state.temperatureK = T;
-    if (solveAtVolume(model, z, target, state)) {
-      const found = assembleTwo(model, state);
-      if (!splitsFurther(model, found)) return found;
-    }
-  }
-  if (seed?.phases.length === 3) {
-    const found = fromThree(model, z, target, seed);
-    if (found) return found;
-  }
-  let latest: Equilibrium | undefined;
-  const sides: Sides = {};
-  const excess = (lnP: number): number => {
-    latest = flashPT(model, { temperatureK: T, pressurePa: Math.exp(lnP) }, z, latest);
-    const difference = Math.log(latest.molarVolumeM3PerMol / v);
-    if (difference < 0) sides.below = latest;
-    else sides.above = latest;
-    return difference;
-  };
-  const start = single.pressurePa > 1e3 ? single.pressurePa : (0.5 * model.gasConstantJPerMolK * T) / v;
-  let a = Math.log(start);
-  let fa = excess(a);
-  let b = a;
-  let fb = fa;
-  for (let k = 0, jump = 0.25; k < 40 && fa * fb > 0; k++, jump = Math.min(2 * jump, 3)) {
-    a = b;
-    fa = fb;
-    b += fb > 0 ? jump : -jump;
-    fb = excess(b);
-  }
-  const lnP = bracketedRoot(excess, { a, fa, b, fb }, { within: 1e-13, what: "pressure at given temperature and volume" });
-  const left = excess(lnP);
-  const found = (Math.abs(left) > 1e-7 && between(model, v, sides)) || latest!;
-  if (found.phases.length === 3) return fromThree(model, z, target, found) ?? found;
-  if (found.phases.length === 2 && seedFrom(found, z, v, state)) {
-    state.temperatureK = T;
-    if (solveAtVolume(model, z, target, state)) {
-      const polished = assembleTwo(model, state);
-      if (!splitsFurther(model, polished)) return polished;
-    }
-  }
-  return found;
-}
-
-/** At a jump of the volume: the two sides together. */
-function between(model: FluidModel, v: number, { below, above }: Sides): Equilibrium | undefined {
-  if (!below || !above) return undefined;
-  const [low, high] = [below.molarVolumeM3PerMol, above.molarVolumeM3PerMol];
-  return lever(model, below, above, (v - low) / (high - low));
-}
-
-function assembleOne(model: FluidModel, single: PhaseState, z: ArrayLike<number>): Equilibrium {
-  return assemble(model, single.temperatureK, single.pressurePa, [
-    { moleFraction: 1, composition: z, molarVolume: single.molarVolumeM3PerMol },
-  ]);
-}
-
-function assembleTwo(model: FluidModel, state: TwoPhaseVolumes): Equilibrium {
-  const { v, l, vapourVolume, liquidVolume, temperatureK, pressurePa } = state;
-  let nv = 0;
-  let nl = 0;
-  for (let i = 0; i < v.length; i++) {
-    nv += v[i]!;
-    nl += l[i]!;
-  }
-  for (let i = 0; i < v.length; i++) {
-    v[i] = v[i]! / nv; // the unknowns are spent: they leave as the compositions
-    l[i] = l[i]! / nl;
-  }
-  return assemble(model, temperatureK, pressurePa, [
-    { moleFraction: nv, composition: v, molarVolume: vapourVolume / nv },
-    { moleFraction: nl, composition: l, molarVolume: liquidVolume / nl },
-  ]);
-}
-
-function assembleThree(model: FluidModel, { moles, volumes, temperatureK, pressurePa }: ThreePhaseVolumes): Equilibrium {
-  const phases = moles.map((amounts, k) => {
-    const total = amounts.reduce((sum, amount) => sum + amount, 0);
-    return { moleFraction: total, composition: amounts.map((amount) => amount / total), molarVolume: volumes[k]! / total };
-  });
-  return assemble(model, temperatureK, pressurePa, phases);
-}
-
-const threes = new Map<number, ThreePhaseVolumes>();
-
-function threeFor(count: number): ThreePhaseVolumes {
-  let state = threes.get(count);
-  if (!state) threes.set(count, (state = createThreePhaseVolumes(count)));
-  return state;
-}
-
-const states = new Map<number, TwoPhaseVolumes>();
-
-function volumesFor(count: number): TwoPhaseVolumes {
-  let state = states.get(count);
-  if (!state) states.set(count, (state = createTwoPhaseVolumes(count)));
-  return state;
 }

@@ -7,7 +7,7 @@
  */
 import type { FluidModel } from "../eos/fluid-model";
 import type { Equilibrium } from "../flash/equilibrium";
-import { equilibriumAtVolume } from "../flash/flash-uv";
+import { equilibriumAtVolume } from "../flash/equilibrium-at-volume";
 import { flashTQ } from "../flash/flash-quality";
 import { insideDome } from "../flash/pure-volume";
 import { onlyComponent } from "../flash/saturation-pure";
