@@ -16,7 +16,7 @@ import { onIsentrope } from "./on-isentrope";
 export type MixedThroat = { x: number; state: Equilibrium };
 
 const settled = 1e-8;
-const mostSteps = 16;
+const mostSteps = 24;
 
 export function mixedThroat(
   fluid: FluidModel,
@@ -31,6 +31,7 @@ export function mixedThroat(
   let low: MixedThroat | undefined;
   let high: MixedThroat | undefined;
   let before: { x: number; excess: number; phases: number } | undefined;
+  let closings = 0;
   let x = guess.x;
   try {
     for (let i = 0; i < mostSteps; i++) {
@@ -46,15 +47,19 @@ export function mixedThroat(
       else high = { x, state };
       const step = -excess / slope;
       if (Math.abs(step) < settled) return { x, state };
-      if (low && high && low.state.phases.length !== high.state.phases.length && high.state.phases.length === 2) {
+      const overBoundary = low && high && low.state.phases.length !== high.state.phases.length && high.state.phases.length === 2;
+      // The root is mostly inside the two-phase part, where steps on that branch alone find it; only then is the boundary itself looked for.
+      if (low && high && overBoundary && ++closings > 5) {
         const kink = boundary(at, low.x, high);
         if (!kink) return undefined;
         const beyond = equilibriumSoundTerm(fluid, kink.state);
         if (beyond !== undefined && h0 - kink.state.enthalpyJPerMol - beyond / 2 >= 0) return kink;
         low = kink;
+        closings = -mostSteps;
       }
       let next = x + Math.max(Math.min(step, 0.5), -0.5 * x);
-      if ((low && next <= low.x) || (high && next >= high.x)) next = ((low?.x ?? 0) + (high?.x ?? 2 * x)) / 2;
+      if (overBoundary && low && high && next <= low.x) next = low.x + 0.1 * (high.x - low.x);
+      else if ((low && next <= low.x) || (high && next >= high.x)) next = ((low?.x ?? 0) + (high?.x ?? 2 * x)) / 2;
       if (low && high && high.x - low.x < 1e-12) return low;
       x = next;
     }

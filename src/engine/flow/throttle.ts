@@ -15,6 +15,9 @@ import type { Equilibrium } from "../flash/equilibrium";
 import { flashPH } from "../flash/flash-ph";
 import { flashPQ } from "../flash/flash-quality";
 import { onlyComponent } from "../flash/saturation-pure";
+import { solveAtVolume, type TwoPhaseVolumes } from "../flash/two-phase-volume";
+import { createTwoPhaseVolumes, seedFrom } from "../flash/volume-seed";
+import { assembleVolumes } from "./incipient-split";
 
 export type Stream = { temperatureK: number; pressurePa: number; enthalpyJPerMol: number };
 
@@ -42,13 +45,20 @@ export class Throttle {
     const { enthalpyJPerMol: h } = stream;
     if (pressurePa >= stream.pressurePa) return stream.temperatureK;
     if (dome && h >= dome.liquid && h <= dome.vapour) return dome.temperatureK;
+    const near = this.seed && nearTwoPhases(fluid, this.seed, h, pressurePa, z);
+    if (near) {
+      this.seed = near;
+      return near.temperatureK;
+    }
     const alone = this.asOnePhase(stream, z);
     if (alone !== undefined) {
+      this.seed = undefined;
       this.lastK = alone;
       return alone;
     }
-    this.seed = flashPH(fluid, { pressurePa, enthalpyJPerMol: h }, z, this.seed);
-    return this.seed.temperatureK;
+    const found = flashPH(fluid, { pressurePa, enthalpyJPerMol: h }, z, this.seed);
+    this.seed = found.phases.length === 2 ? found : undefined;
+    return found.temperatureK;
   }
 
   private asOnePhase({ enthalpyJPerMol, temperatureK }: Stream, z: ArrayLike<number>): number | undefined {
@@ -64,6 +74,43 @@ export class Throttle {
       throw error;
     }
   }
+}
+
+const mostSteps = 12;
+
+/**
+ * Two phases of given enthalpy and pressure from two near by: at each volume the phases of internal energy h − p v are found by Newton, and a secant in
+ * ln v brings their pressure to p. Undefined where that fails, or where one of the phases goes.
+ */
+function nearTwoPhases(
+  fluid: FluidModel,
+  near: Equilibrium,
+  enthalpyJPerMol: number,
+  pressurePa: number,
+  z: ArrayLike<number>,
+): Equilibrium | undefined {
+  const state = createTwoPhaseVolumes(z.length);
+  let lnV = Math.log(near.molarVolumeM3PerMol);
+  let before: { lnV: number; gap: number } | undefined;
+  for (let i = 0; i < mostSteps; i++) {
+    const molarVolume = Math.exp(lnV);
+    const value = enthalpyJPerMol - pressurePa * molarVolume;
+    if (i === 0 && !seedFrom(near, z, molarVolume, state)) return undefined;
+    if (i > 0) rescale(state, molarVolume);
+    if (!(state.vapourVolume > 0) || !solveAtVolume(fluid, z, { hold: "energy", value, molarVolume }, state)) return undefined;
+    const gap = Math.log(state.pressurePa / pressurePa);
+    if (Math.abs(gap) < 1e-9) return assembleVolumes(fluid, state);
+    const slope = before ? (gap - before.gap) / (lnV - before.lnV) : -1;
+    before = { lnV, gap };
+    if (!(slope < 0)) return undefined;
+    lnV -= Math.max(Math.min(gap / slope, 0.5), -0.5);
+  }
+  return undefined;
+}
+
+/** Another volume for the same phases: the vapour takes the difference. */
+function rescale(state: TwoPhaseVolumes, molarVolume: number): void {
+  state.vapourVolume = molarVolume - state.liquidVolume;
 }
 
 /** Saturated enthalpies of a pure fluid at a pressure; undefined for mixtures, and where the fluid has no saturation there. */
