@@ -150,3 +150,60 @@ describe("levelTable", () => {
     expect(levelTable(measureVessel({ shape: "volume", volumeM3: 1 }))).toBeUndefined();
   });
 });
+
+describe("a pipe and a section of several shapes", () => {
+  const pipe: VesselShape = { shape: "pipe", insideDiameterM: 0.5, lengthM: 20 };
+  const section: VesselShape = { shape: "section", parts: [lying("ellipsoidal-2-1"), standing("flat", 1, 3), pipe] };
+
+  it("wets half of a pipe at half its height, and counts no ends", () => {
+    const { volumeM3, innerAreaM2, below, wallVolume } = measureVessel(pipe);
+    expect(volumeM3).toBeCloseTo((Math.PI / 4) * 0.25 * 20, 12);
+    expect(innerAreaM2).toBeCloseTo(Math.PI * 0.5 * 20, 12);
+    expect(below?.(0.25).volumeM3).toBeCloseTo(volumeM3 / 2, 12);
+    expect(below?.(0.25).areaM2).toBeCloseTo((innerAreaM2 ?? 0) / 2, 12);
+    expect(wallVolume(0.01)).toBeCloseTo(Math.PI * (0.26 ** 2 - 0.25 ** 2) * 20, 12);
+  });
+
+  it("adds volumes, areas, steel and what a level fills, each part from its own lowest point", () => {
+    const whole = measureVessel(section);
+    const parts = [lying("ellipsoidal-2-1"), standing("flat", 1, 3), pipe].map(measureVessel);
+    const sum = (pick: (part: (typeof parts)[number]) => number | undefined): number =>
+      parts.reduce((total, part) => total + (pick(part) ?? Number.NaN), 0);
+    expect(whole.volumeM3).toBeCloseTo(
+      sum((part) => part.volumeM3),
+      12,
+    );
+    expect(whole.innerAreaM2).toBeCloseTo(
+      sum((part) => part.innerAreaM2),
+      12,
+    );
+    expect(whole.heightM).toBe(3);
+    expect(whole.wallVolume(0.02)).toBeCloseTo(
+      sum((part) => part.wallVolume(0.02)),
+      12,
+    );
+    for (const level of [0.1, 0.5, 1.3, 2.5]) {
+      expect(whole.below?.(level).volumeM3).toBeCloseTo(
+        sum((part) => part.below?.(level).volumeM3),
+        12,
+      );
+      expect(levelAtVolume(whole, whole.below?.(level).volumeM3 ?? 0)).toBeCloseTo(level, 9);
+    }
+  });
+
+  it("has a table of levels although one part is full before another", () => {
+    const whole = measureVessel(section);
+    const table = levelTable(whole);
+    for (const part of [0.01, 0.2, 0.5, 0.8, 0.97]) {
+      const exact = levelAtVolume(whole, part * whole.volumeM3) ?? Number.NaN;
+      expect(Math.abs((table?.at(part * whole.volumeM3).levelM ?? Number.NaN) - exact)).toBeLessThan(2e-3 * 3);
+    }
+  });
+
+  it("knows no level where one part has no shape", () => {
+    const unknown = measureVessel({ shape: "section", parts: [pipe, { shape: "volume", volumeM3: 1 }] });
+    expect(unknown.below).toBeUndefined();
+    expect(unknown.innerAreaM2).toBeUndefined();
+    expect(unknown.volumeM3).toBeGreaterThan(1);
+  });
+});
