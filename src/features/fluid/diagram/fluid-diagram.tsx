@@ -53,9 +53,9 @@ export function FluidDiagram({ envelope, ...props }: DiagramProps & { envelope: 
     () => ({
       envelope: envelope.problem ? null : envelope.value,
       lines: lines.current ? lines.value : null,
-      ...{ pure, wet, start, path, state },
+      ...{ pure, wet, start, path, state, figuresAtMarks: compact },
     }),
-    [envelope, lines, pure, wet, start, path, state],
+    [envelope, lines, pure, wet, start, path, state, compact],
   );
   const drawn = useMemo(() => drawDiagram(input, system), [input, system]);
   const notes = useMemo(() => diagramNotes(input, write), [input, write]);

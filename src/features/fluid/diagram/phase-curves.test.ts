@@ -30,6 +30,12 @@ describe("the diagram of a fluid", () => {
     });
   });
 
+  it("carries the figures at the marks where no table stands beside it", () => {
+    const labels = (figuresAtMarks: boolean) => drawDiagram({ ...input, figuresAtMarks }, "SI").marks.map(({ label }) => label);
+    expect(labels(false)).toContain("cricondentherm");
+    expect(labels(true)[1]).toMatch(/^cricondentherm .*°C$/);
+  });
+
   it("follows the system of units", () => {
     const { x, y, lines } = drawDiagram(input, "US");
     expect([x.unit, y.unit]).toEqual(["°F", "psia"]);

@@ -23,6 +23,8 @@ export type DiagramInput = {
   path?: RunPath | undefined;
   /** Another state to be marked. */
   state?: StatePoint | undefined;
+  /** No table of the marked points stands beside the chart: their figures go to the marks. */
+  figuresAtMarks?: boolean;
 };
 
 export type DrawnDiagram = {
@@ -34,7 +36,10 @@ export type DrawnDiagram = {
   points: { name: string; at: string }[];
 };
 
-export function drawDiagram({ envelope, lines, pure, start, path, state }: DiagramInput, system: UnitSystem): DrawnDiagram {
+export function drawDiagram(
+  { envelope, lines, pure, start, path, state, figuresAtMarks }: DiagramInput,
+  system: UnitSystem,
+): DrawnDiagram {
   const units = { pressure: shownAbsolutePressure[system], temperature: shownUnit("temperature", system) };
   const place = ({ temperatureK, pressurePa }: StatePoint): PhasePoint => ({
     x: fromSi("temperature", temperatureK, units.temperature),
@@ -45,6 +50,8 @@ export function drawDiagram({ envelope, lines, pure, start, path, state }: Diagr
   const temperature = (si: number) => formatQuantity("temperature", si, units.temperature).text;
   const pressure = (si: number) => formatQuantity("pressure", si, units.pressure).text;
 
+  const named = (name: string, figure: string | undefined) => (figuresAtMarks && figure ? `${name} ${figure}` : name);
+
   const marked: { name: string; label: string; at: StatePoint | undefined }[] = [
     { name: "Critical point", label: "critical", at: envelope?.critical },
     ...(pure
@@ -52,12 +59,12 @@ export function drawDiagram({ envelope, lines, pure, start, path, state }: Diagr
       : [
           {
             name: "Cricondentherm, highest temperature of two phases",
-            label: envelope?.cricondentherm ? `cricondentherm ${temperature(envelope.cricondentherm.temperatureK)}` : "",
+            label: named("cricondentherm", envelope?.cricondentherm && temperature(envelope.cricondentherm.temperatureK)),
             at: envelope?.cricondentherm,
           },
           {
             name: "Cricondenbar, highest pressure of two phases",
-            label: envelope?.cricondenbar ? `cricondenbar ${pressure(envelope.cricondenbar.pressurePa)}` : "",
+            label: named("cricondenbar", envelope?.cricondenbar && pressure(envelope.cricondenbar.pressurePa)),
             at: envelope?.cricondenbar,
           },
         ]),

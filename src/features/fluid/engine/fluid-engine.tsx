@@ -5,7 +5,7 @@ import type { FluidAnswer, FluidAnswers, FluidAsk, FluidAskKind } from "@/worker
 import { EngineClient, type Told } from "./engine-client";
 
 /** A pause short enough that figures follow the typing, long enough that a number is finished. */
-const restMs = 120;
+const restMs = 60;
 
 type Clients = { quick: EngineClient; slow: EngineClient };
 

@@ -24,7 +24,7 @@ export function PropertyTable({ state, basis, stale }: { state: StateProperties;
         <thead>
           <tr>
             <HeadCell>Property</HeadCell>
-            <HeadCell>Unit</HeadCell>
+            <HeadCell hideOnPhone>Unit</HeadCell>
             {two && <HeadCell numeric>Whole</HeadCell>}
             {names.map((name) => (
               <HeadCell key={name} numeric>
@@ -39,8 +39,9 @@ export function PropertyTable({ state, basis, stale }: { state: StateProperties;
               <Row>
                 <Cell head wholeRow>
                   Share by mole
+                  <UnitOnPhone unit="%" />
                 </Cell>
-                <Cell muted label="Unit">
+                <Cell muted hideOnPhone>
                   %
                 </Cell>
                 <Cell numeric label="Whole">
@@ -55,8 +56,9 @@ export function PropertyTable({ state, basis, stale }: { state: StateProperties;
               <Row>
                 <Cell head wholeRow>
                   Share by mass
+                  <UnitOnPhone unit="%" />
                 </Cell>
-                <Cell muted label="Unit">
+                <Cell muted hideOnPhone>
                   %
                 </Cell>
                 <Cell numeric label="Whole">
@@ -74,9 +76,10 @@ export function PropertyTable({ state, basis, stale }: { state: StateProperties;
             <Row key={row.name}>
               <Cell head wholeRow>
                 {row.name}
+                <UnitOnPhone unit={shownUnit(row.quantity, system)} />
                 {row.note && <span className="block text-label text-ink-3">{row.note}</span>}
               </Cell>
-              <Cell muted label={two ? "Unit" : undefined}>
+              <Cell muted hideOnPhone>
                 {shownUnit(row.quantity, system)}
               </Cell>
               {two && (
@@ -95,6 +98,11 @@ export function PropertyTable({ state, basis, stale }: { state: StateProperties;
       </Table>
     </div>
   );
+}
+
+/** Phones have no room for a column of units. */
+function UnitOnPhone({ unit }: { unit: string }) {
+  return unit === "–" ? null : <span className="hidden text-ink-3 phone:inline">, {unit}</span>;
 }
 
 /** "93.4"; the unit stands in its own column. */
