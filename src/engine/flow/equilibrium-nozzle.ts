@@ -63,7 +63,7 @@ export function equilibriumNozzle(
   }
   const throat =
     (hints.throat && mixedThroat(fluid, stagnation, z, hints.throat)) ?? walkedThroat(fluid, stagnation, z, backPressurePa);
-  hints.throat = throat.state.phases.length === 2 ? throat : undefined;
+  hints.throat = throat;
 
   const molarMass = fluid.mixtureMolarMass(z);
   const fluxOf = (state: Equilibrium): number => fluxAt(stagnation, state, molarMass);

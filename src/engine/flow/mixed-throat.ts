@@ -76,14 +76,16 @@ function boundary(at: (x: number) => Equilibrium, single: number, two: MixedThro
   let low = single;
   let high = two;
   let last: { x: number; share: number } | undefined;
-  for (let i = 0; i < 40; i++) {
+  let overshot = true;
+  for (let i = 0; i < 60; i++) {
     const now = share(high.state);
-    const slope = last ? (last.share - now) / (last.x - high.x) : now / (high.x - low);
+    const slope = last ? (last.share - now) / (last.x - high.x) : Number.NaN;
     if (high.x - low < 1e-11 || now / slope < 1e-11) return high;
     const aimed = high.x - (now / slope) * (1 - 1e-6);
-    const x = aimed > low && aimed < high.x ? aimed : (low + high.x) / 2;
+    const x = !overshot && aimed > low && aimed < high.x ? aimed : (low + high.x) / 2;
     const state = at(x);
-    if (state.phases.length === 2) {
+    overshot = state.phases.length !== 2;
+    if (!overshot) {
       last = { x: high.x, share: now };
       high = { x, state };
     } else low = x;
