@@ -6,7 +6,7 @@ import { VerdictWord } from "./verdict-word";
 /**
  * One limit as shown. Texts are formatted by the caller, who knows the units and never rounds across a verdict.
  *
- * no         line it stands on, with the case's letter ("A7.02")
+ * no         line it stands on, with the case's letter ("A7.02"); an en dash where it has none
  * computed   "−27.2 °C", or null when nothing was computed
  * limit      "not below −29.0 °C", or null when none was entered
  * inHand     distance left, in the limit's unit ("1.8 K"); null when there is none
@@ -62,8 +62,13 @@ export function LimitTable({ rows, caption }: { rows: readonly LimitRow[]; capti
         </tr>
       </thead>
       <tbody>
-        {rows.map((row) => (
-          <tr key={row.no} id={`limit-${row.no}`} className={row.governs ? rowOf[row.verdict] : undefined}>
+        {/* Limits that physics sets have no line of their own; the title tells them apart. */}
+        {rows.map((row, at) => (
+          <tr
+            key={at}
+            {...(row.no === "–" ? {} : { id: `limit-${row.no}` })}
+            className={row.governs ? rowOf[row.verdict] : undefined}
+          >
             <td className="line-no">{row.no}</td>
             <td className="font-semibold">
               {row.title}
