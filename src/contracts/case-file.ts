@@ -210,6 +210,7 @@ const outside = z.discriminatedUnion(
     z.strictObject({ model: z.literal("ambient"), temperatureK: temperature, coefficientWPerM2K: coefficient }),
     z.strictObject({
       model: z.literal("pool-fire"),
+      bottomAboveGroundM: quantity({ unit: "m", min: 0, max: 200 }).optional(),
       drainage: choice(["adequate", "inadequate"]),
       environmentFactor: quantity({ unit: "", above: 0, max: 1 }),
       factor: doubt.optional(),

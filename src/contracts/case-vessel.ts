@@ -49,6 +49,12 @@ export const wall = z.strictObject({
       conductivityWPerMK: quantity({ unit: "W/(m K)", above: 0, max: 1e3 }),
     })
     .optional(),
+  fireProofing: z
+    .strictObject({
+      thicknessM: quantity({ unit: "m", above: 0, max: 5 }),
+      conductivityWPerMK: quantity({ unit: "W/(m K)", above: 0, max: 1e3 }),
+    })
+    .optional(),
 });
 
 export const statePair = z

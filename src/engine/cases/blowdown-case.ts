@@ -17,6 +17,8 @@ export type WallSpec = {
   designPressurePa?: number;
   minimumDesignMetalTemperatureK?: number;
   insulation?: Insulation;
+  /** Passive fire protection, its own heat content left out. */
+  fireProofing?: Insulation;
 };
 
 /** What one vessel holds: two of pressure, temperature and level. */
@@ -77,7 +79,13 @@ export type Outside =
   | { model: "adiabatic" }
   | { model: "constant-heat"; heatW: number }
   | { model: "ambient"; temperatureK: number; coefficientWPerM2K: number }
-  | { model: "pool-fire"; drainage: "adequate" | "inadequate"; environmentFactor: number; factor?: number }
+  | {
+      model: "pool-fire";
+      drainage: "adequate" | "inadequate";
+      environmentFactor: number;
+      factor?: number;
+      bottomAboveGroundM?: number;
+    }
   | { model: "surface-fire"; basis: FireBasis; heatFluxWPerM2?: number; factor?: number };
 
 export type RunSpec = { stopTimeS: number; stopPressurePa: number; relativeTolerance: number };

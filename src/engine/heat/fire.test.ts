@@ -1,3 +1,7 @@
+import type { BlowdownCase } from "../cases/blowdown-case";
+import { measureVessel, type VesselShape } from "../vessel/geometry";
+import { environmentFactorOf, fluxBehind } from "./fire-proofing";
+import { outsideHeat } from "./outside-heat";
 import { describe, expect, it } from "vitest";
 import { poolFireHeatW } from "./pool-fire";
 import { fireFluxWPerM2, fireSets, type FireBasis } from "./surface-fire";
@@ -31,5 +35,59 @@ describe("fireFluxWPerM2", () => {
     expect(first).toBeGreaterThan(low);
     expect(first).toBeLessThan(high);
     expect(fireFluxWPerM2(basis, fireSets[basis].flameTemperatureK + 200)).toBeLessThan(0);
+  });
+});
+
+describe("fire proofing and the reach of flames", () => {
+  const layer = { thicknessM: 0.025, conductivityWPerMK: 0.5 };
+
+  it("M6-02: environment factor of a conductance of 22.71 W/(m² K) at 15.6 °C is 0.303", () => {
+    expect(environmentFactorOf({ thicknessM: 1 / 22.71, conductivityWPerMK: 1 }, 288.75)).toBeCloseTo(0.303, 3);
+    expect(environmentFactorOf({ thicknessM: 1e-6, conductivityWPerMK: 1 }, 288.75)).toBe(1);
+  });
+
+  it("passes what the layer conducts: the fire's flux at its outer side equals the flux through it", () => {
+    const fire = (T: number) => fireFluxWPerM2("open-pool", T);
+    const steelK = 300;
+    const q = fluxBehind(layer, fire, steelK);
+    expect(Math.abs(fire(steelK + (q * layer.thicknessM) / layer.conductivityWPerMK) / q - 1)).toBeLessThan(1e-6);
+    expect(q).toBeLessThan(0.3 * fire(steelK));
+    expect(fluxBehind({ ...layer, thicknessM: 1e-7 }, fire, steelK) / fire(steelK)).toBeCloseTo(1, 3);
+  });
+
+  it("ends at 7.6 m above the ground, for a sphere not below its equator", () => {
+    const heat = (geometry: VesselShape, bottomAboveGroundM?: number) => {
+      const vessel = measureVessel(geometry);
+      const outside = outsideHeat(
+        {
+          vessel: { geometry },
+          heat: {
+            inside: { model: "none" },
+            wall: { model: "none" },
+            outside: {
+              model: "pool-fire",
+              drainage: "adequate",
+              environmentFactor: 1,
+              ...(bottomAboveGroundM === undefined ? {} : { bottomAboveGroundM }),
+            },
+          },
+        } as BlowdownCase,
+        vessel,
+      );
+      return outside(300, vessel.volumeM3);
+    };
+    const column: VesselShape = {
+      shape: "cylinder",
+      orientation: "vertical",
+      insideDiameterM: 2,
+      tangentLengthM: 12,
+      heads: "flat",
+    };
+    // From 2 m to 7.6 m: the bottom and 5.6 m of shell.
+    expect(heat(column, 2) / (43200 * (Math.PI + Math.PI * 2 * 5.6) ** 0.82)).toBeCloseTo(1, 6);
+    expect(heat(column) / (43200 * (2 * Math.PI + Math.PI * 2 * 12) ** 0.82)).toBeCloseTo(1, 6);
+    expect(heat(column, 8)).toBe(0);
+    const sphere: VesselShape = { shape: "sphere", insideDiameterM: 4 };
+    expect(heat(sphere, 10) / (43200 * (8 * Math.PI) ** 0.82)).toBeCloseTo(1, 6);
   });
 });
