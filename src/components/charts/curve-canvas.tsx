@@ -130,7 +130,11 @@ function optionsOf(curves: Curves, low: boolean): ChartOptions<"line"> {
         },
         grid: { drawTicks: false, color: ({ chart }: { chart: ChartJs }) => inkOf(chart.canvas, "--rule") },
         border: { display: false },
-        ticks: { ...ticks, padding: 7, callback: tickWriter(y.ticks) },
+        ticks: {
+          ...ticks,
+          padding: 7,
+          callback: curves.y.log ? (value: number | string) => tickWriter([Number(value)])(value) : tickWriter(y.ticks),
+        },
       },
     },
   };

@@ -65,9 +65,7 @@ export function SteelFire({ run: { result } }: { run: CaseRunView }) {
             <tbody>
               {fire.items.map((item) => (
                 <Row key={item.id}>
-                  <Cell head>
-                    {item.name}, {item.part}
-                  </Cell>
+                  <Cell head>{item.name}</Cell>
                   <Cell numeric label="Wall">
                     {shown("length", item.thicknessM).text}
                   </Cell>
@@ -88,7 +86,7 @@ export function SteelFire({ run: { result } }: { run: CaseRunView }) {
             Least ratio of hot strength, {formatNumber(100 * fire.strengthFraction, { decimals: 0 })} % of it counted, to hoop
             stress; rupture is where it comes to one. Fire: {fires[fire.fire.basis]},{" "}
             {shown("heatFlux", fire.fire.initialFluxWPerM2).text} into steel at start. Without blowdown the pressure is held at{" "}
-            {shown("pressure", fire.shutInPressurePa).text}. With 30 % more flux and the blowdown, {governing.name} ruptures:{" "}
+            {shown("pressure", fire.shutInPressurePa).text}. With 30 % more flux, the blowdown running, rupture:{" "}
             {minutes(governing.ruptureTimeAtMoreFluxS)}. Longitudinal stress, supports and flanges are not screened here.
           </p>
           <CautionBeside id="C4" result={result} />

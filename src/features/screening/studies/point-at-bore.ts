@@ -1,4 +1,4 @@
-import type { SizingPoint } from "@/engine/cases/sizing-case";
+import type { SizingPoint, SizingResult } from "@/engine/cases/sizing-case";
 
 type Column = Exclude<keyof SizingPoint, "diameterM">;
 const columns: Column[] = ["timeToTargetS", "minimumWallTemperatureK", "peakVentRateFireKgPerS", "peakVentRateColdKgPerS"];
@@ -15,4 +15,14 @@ export function pointAtBore(curve: readonly SizingPoint[], diameterM: number): S
     if (low !== undefined && high !== undefined) point[column] = low + part * (high - low);
   }
   return point;
+}
+
+/** The row of bores that was run with the edges put in, so that a curve meets its limit where the edge stands. */
+export function curveWithEdges({ curve, smallest, largest, coldBelow }: SizingResult): SizingPoint[] {
+  const edges = [smallest, largest, coldBelow].flatMap((edge): SizingPoint[] => {
+    if (!edge || curve.some(({ diameterM }) => diameterM === edge.diameterM)) return [];
+    const read = pointAtBore(curve, edge.diameterM);
+    return [edge.unit === "s" ? { ...read, timeToTargetS: edge.value } : { ...read, minimumWallTemperatureK: edge.value }];
+  });
+  return [...curve, ...edges].sort((a, b) => a.diameterM - b.diameterM);
 }

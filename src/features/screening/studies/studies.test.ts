@@ -1,9 +1,10 @@
 import { describe, expect, it } from "vitest";
 import { madeContent, madeRun } from "../../../../tests/fixtures/screening-view";
+import type { SizingResult } from "@/engine/cases/sizing-case";
 import type { PreparedView } from "@/contracts/views";
 import { parseCase } from "@/contracts/case-file";
 import { leadingFigureOf, limitOfFigure } from "./limit-of-figure";
-import { pointAtBore } from "./point-at-bore";
+import { curveWithEdges, pointAtBore } from "./point-at-bore";
 import { sizingOf } from "./sizing-of";
 import { spreadBand } from "./spread-band";
 
@@ -21,6 +22,22 @@ describe("figures between two bores", () => {
     expect(pointAtBore(curve, 0.035)).toEqual({ diameterM: 0.035, minimumWallTemperatureK: expect.closeTo(237.5, 9) as number });
     expect(pointAtBore(curve, 0.02)).toMatchObject({ timeToTargetS: 900 });
     expect(pointAtBore(curve, 0.05)).toEqual({ diameterM: 0.05 });
+  });
+});
+
+describe("a row of bores", () => {
+  it("meets its limit where the edge stands", () => {
+    const edge = { diameterM: 0.025, governedBy: "fire-time", value: 700, limit: 700, unit: "s", confirmed: [] } as const;
+    const curve = [
+      { diameterM: 0.02, timeToTargetS: 900, minimumWallTemperatureK: 250 },
+      { diameterM: 0.03, timeToTargetS: 400, minimumWallTemperatureK: 240 },
+    ];
+    const drawn = curveWithEdges({ curve, smallest: edge } as unknown as SizingResult); // what is read
+    expect(drawn.map(({ diameterM, timeToTargetS }) => [diameterM, timeToTargetS])).toEqual([
+      [0.02, 900],
+      [0.025, 700],
+      [0.03, 400],
+    ]);
   });
 });
 

@@ -13,7 +13,7 @@ import type { SizingCase, SizingPoint, SizingResult } from "@/engine/cases/sizin
 import { fromSi } from "@/engine/units";
 import type { Showing } from "../results/limit-rows";
 import { useShowing } from "../results/use-showing";
-import { pointAtBore } from "./point-at-bore";
+import { curveWithEdges, pointAtBore } from "./point-at-bore";
 import { useWindow } from "./use-window";
 import { WindowChart, type WindowPanel, type WindowZones } from "./window-chart";
 
@@ -38,7 +38,8 @@ export function WindowSheet({
   const [moved, setMoved] = useState<number | null>(null);
   const showing = useShowing();
   const bore = moved ?? result?.chosen?.diameterM;
-  const point = result && bore !== undefined ? (moved === null ? result.chosen : pointAtBore(result.curve, bore)) : undefined;
+  const point =
+    result && bore !== undefined ? (moved === null ? result.chosen : pointAtBore(curveWithEdges(result), bore)) : undefined;
   return (
     <SheetWithMargin
       titleBlock={titleBlock}
@@ -107,10 +108,12 @@ function Found({ result, bore, point, showing }: At & { result: SizingResult; sh
 }
 
 function chartOf(
-  { curve, limits, window, smallest, coldBelow }: SizingResult,
+  result: SizingResult,
   { bore, point }: At,
   { system, barometricPressurePa }: Showing,
 ): { panels: WindowPanel[]; zones: WindowZones; bore: number | undefined; unit: string } {
+  const { limits, window, smallest, coldBelow } = result;
+  const curve = curveWithEdges(result);
   const unit = shownUnit("length", system);
   const inBore = (metres: number) => fromSi("length", metres, unit);
   const temperatureUnit = shownUnit("temperature", system);
