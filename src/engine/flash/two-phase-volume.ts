@@ -124,7 +124,6 @@ export function solveAtVolume(model: FluidModel, z: ArrayLike<number>, target: V
     step[rowT] = balance;
     if (target.hold === "entropy") addEntropyTerms(work, active, size, scaleV, pv - pl);
 
-    const lastStep = error < 1e-9 && error < 1e-2 * previous;
     const settled = error < 1e-13 || (error < 1e-10 && error >= 0.5 * previous);
     const stable = pv > 0 && pl > 0 && nv / (Vv * Vv) + light.FVV > 0 && nl / (Vl * Vl) + dense.FVV > 0;
     if (settled) {
@@ -173,39 +172,12 @@ export function solveAtVolume(model: FluidModel, z: ArrayLike<number>, target: V
       state.liquidVolume = Vl - length * changeV;
       state.vapourVolume = target.molarVolume - state.liquidVolume;
     }
-    if (lastStep && stable && meets(model, work, state)) {
-      return distinct(state, nv, nl) && onRightRoots(model, work, state, active === 1);
-    }
   }
   return false;
 }
 
 /** Below this residual a step is too short to carry a phase past its smallest volume. */
 const smallStep = 1e-2;
-
-/**
- * Newton squares its error: from below 1e-9 the step just taken has reached round-off, and one look at the two pressures, which are the most
- * sensitive of all, proves it. Sets the pressure.
- */
-function meets(model: FluidModel, { light, dense }: VolumeWork, state: TwoPhaseVolumes): boolean {
-  const { residual, gasConstantJPerMolK: R } = model;
-  const { v, l, vapourVolume, liquidVolume, temperatureK: T } = state;
-  let nv = 0;
-  let nl = 0;
-  for (let i = 0; i < v.length; i++) {
-    nv += v[i]!;
-    nl += l[i]!;
-  }
-  residual.setComposition(l);
-  residual.evaluate(T, liquidVolume, 0, dense);
-  residual.setComposition(v);
-  residual.evaluate(T, vapourVolume, 0, light);
-  const pv = nv / vapourVolume - light.FV;
-  const pl = nl / liquidVolume - dense.FV;
-  if (!(Math.abs(pv - pl) <= 1e-9 * pv)) return false;
-  state.pressurePa = R * T * pv;
-  return true;
-}
 
 /** Shortens the step until both phases stay above their smallest possible volume. */
 function volumeLimit(
