@@ -18,6 +18,7 @@ const tally = new Map<string, number[]>();
 const note = (what: string, seed: number): void => void tally.set(what, [...(tally.get(what) ?? []), seed]);
 
 for (let seed = first; seed < first + count; seed++) {
+  if (seed > first && (seed - first) % 50 === 0) report(seed - first);
   const document = randomBlowdown(seed);
   const before = cpuMs();
   const until = performance.now() + limitMs;
@@ -47,8 +48,12 @@ for (let seed = first; seed < first + count; seed++) {
     else note(`UNTYPED ${String(error).slice(0, 120)}`, seed);
   }
 }
-times.sort((a, b) => a - b);
-const at = (part: number): string => (times[Math.floor(part * (times.length - 1))] ?? Number.NaN).toFixed(1);
-console.log(`${count} cases from ${first}: CPU ms median ${at(0.5)}, p95 ${at(0.95)}, p99 ${at(0.99)}, most ${at(1)}`);
-for (const [what, seeds] of [...tally].sort((a, b) => b[1].length - a[1].length))
-  console.log(`${seeds.length} ${what}${what === "confirmed" || what === "ended" ? "" : ` [${seeds.slice(0, 12).join(" ")}]`}`);
+report(count);
+
+function report(done: number): void {
+  const sorted = [...times].sort((a, b) => a - b);
+  const at = (part: number): string => (sorted[Math.floor(part * (sorted.length - 1))] ?? Number.NaN).toFixed(1);
+  console.log(`${done} cases from ${first}: CPU ms median ${at(0.5)}, p95 ${at(0.95)}, p99 ${at(0.99)}, most ${at(1)}`);
+  for (const [what, seeds] of [...tally].sort((a, b) => b[1].length - a[1].length))
+    console.log(`${seeds.length} ${what}${what === "confirmed" || what === "ended" ? "" : ` [${seeds.slice(0, 12).join(" ")}]`}`);
+}
