@@ -11,7 +11,7 @@ const line = (page: Page, key: string) => page.locator(`[id="line-${key}"]`);
 const choose = (page: Page, key: string, label: string) => page.locator(`[id="value-${key}"]`).selectOption({ label });
 
 test("a propane drum with a level, cold and in a pool fire", async ({ browser }) => {
-  test.setTimeout(300_000); // two cases run twice each, a search for bores and a study, on a machine that may be busy
+  test.setTimeout(480_000); // two cases run twice each, a search for bores and a study, on a machine that may be busy
   const { page, context, complaints } = await personAt(browser, "engineer");
   const forerun = page.getByRole("complementary", { name: "Forerun" });
 
