@@ -64,7 +64,7 @@ export function runBlowdown(asked: BlowdownCase, options: BlowdownOptions = {}):
     onProgress: options.onProgress,
     isCancelled: options.isCancelled,
   });
-  const pieces = fitRun(balance, run, options.coarse ? previewLooseness : 1);
+  const pieces = fitRun(balance, run, options.coarse ? previewLooseness : 1, options.isCancelled);
   const rows = sampleRows(balance, pieces, options.coarse ? previewGaps : 1);
   const found = extremesOf(balance, rows);
   const ends = endStates(balance, run, found.fluid);

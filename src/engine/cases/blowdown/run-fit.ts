@@ -4,6 +4,7 @@
  *
  * A kink inside a step stops the halving after a few times; the row next to it is then as good as the last halving.
  */
+import { EngineError } from "../../errors";
 import type { Balance, Instant } from "./balance";
 import { cardinal, coarse, fine, integralOf, nearestPlace, unresolved, valueAt } from "./chebyshev";
 import type { KeptStep } from "./dense-run";
@@ -52,10 +53,13 @@ const relative: Partial<Record<Quantity, number>> = {
 };
 const deepest = 4;
 
-export function fitRun(balance: Balance, run: Run, looseness = 1): FitPiece[] {
+export function fitRun(balance: Balance, run: Run, looseness = 1, isCancelled?: () => boolean): FitPiece[] {
   const pieces: FitPiece[] = [];
   for (const segment of run.segments)
-    for (const step of segment.dense.steps) fitPart(balance, { segment, step, t0: step.t0, t1: step.t1 }, looseness, 0, pieces);
+    for (const step of segment.dense.steps) {
+      if (isCancelled?.()) throw new EngineError("cancelled", "The calculation was cancelled.", { timeS: step.t0 });
+      fitPart(balance, { segment, step, t0: step.t0, t1: step.t1 }, looseness, 0, pieces);
+    }
   return pieces;
 }
 
