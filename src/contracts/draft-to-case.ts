@@ -12,8 +12,6 @@ import { crossProblems } from "./draft-cross-checks";
 import type { LineKey, QuantityLine } from "./lines/line";
 import type { LimitPolicy } from "./policy";
 
-export { compositionSum, moleFractions } from "./draft-composition";
-
 export type LineProblem = { line: LineKey; message: string };
 
 export type CaseFromDraft = {

@@ -12,7 +12,7 @@ import { formatNumber } from "@/components/quantity/format";
 import { Cell, HeadCell, Row, Table } from "@/components/table/table";
 import { componentList } from "@/contracts/component-list";
 import { molePercentOf } from "@/contracts/derive-si";
-import { compositionSum, moleFractions } from "@/contracts/draft-to-case";
+import { compositionSum, moleFractions } from "@/contracts/draft-composition";
 import type { LineKey } from "@/contracts/lines/line";
 import { useDraft } from "./draft-context";
 import { SourceField } from "./source-field";
