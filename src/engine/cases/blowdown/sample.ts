@@ -1,5 +1,5 @@
 /** One row of the series, read off the fitted run. */
-import { levelAtVolume } from "../../vessel/geometry";
+import { levelTable } from "../../vessel/level-table";
 import type { Balance } from "./balance";
 import { indexOf, quantities, readPiece, type FitPiece } from "./run-fit";
 
@@ -51,4 +51,4 @@ export function sampleOf(piece: FitPiece, t: number, hasWall: boolean): Sample {
 }
 
 export const levelOf = (balance: Balance, sample: Sample): number | undefined =>
-  levelAtVolume(balance.model.vessel, sample.liquidVolumeM3);
+  levelTable(balance.model.vessel)?.at(sample.liquidVolumeM3).levelM;
