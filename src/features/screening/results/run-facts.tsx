@@ -18,8 +18,8 @@ export function RunFacts({ prepared }: { prepared: PreparedView }) {
         <MarginNote key={letter} no={prepared.runs.length > 1 ? `Case ${letter}` : undefined}>
           {shown("time", summary.endTimeS, { unit: { SI: "s", US: "s" } }).text} integrated in{" "}
           {formatNumber(numerics.steps, { decimals: 0 })} steps and {formatNumber(numerics.evaluations, { decimals: 0 })}{" "}
-          evaluations, relative tolerance <Power value={numerics.relativeTolerance} figures={1} />. Energy closes to{" "}
-          {summary.energyClosure === 0 ? "0" : <Power value={summary.energyClosure} figures={1} />}.{" "}
+          evaluations, relative tolerance <Power value={numerics.relativeTolerance} figures={1} />. Energy, counted again from the
+          states, closes to <Closure value={Math.max(summary.energyClosure, summary.energyClosureRecounted ?? 0)} />.{" "}
           {endingWords[summary.endedBy]}
         </MarginNote>
       ))}
@@ -36,3 +36,5 @@ export function RunFacts({ prepared }: { prepared: PreparedView }) {
     </>
   );
 }
+
+const Closure = ({ value }: { value: number }) => (value === 0 ? <>0</> : <Power value={value} figures={1} />);

@@ -12,7 +12,8 @@ import { fromSi } from "@/engine/units";
 export function WholeRun({ run }: { run: CaseRunView }) {
   const shown = useShown();
   const { wholeRun } = run.result.energyAccount;
-  const { energyClosure, massClosure, ventedMassKg, heatFromOutsideJ } = run.result.summary;
+  const { energyClosure, massClosure, ventedMassKg, heatFromOutsideJ, ...summary } = run.result.summary;
+  const recounted = summary.energyClosureRecounted;
   const walled = run.document.heat.wall.model !== "none";
   const unit = shownUnit("energy", useUnits().system);
   const energy = (si: number, signed = true) => shown("energy", si, { signed }).text;
@@ -53,8 +54,14 @@ export function WholeRun({ run }: { run: CaseRunView }) {
       </Table>
       <p className="pt-1.5 text-label text-ink-3">
         {walled && heatFromOutsideJ !== 0 && `${energy(heatFromOutsideJ, false)} went from outside into the wall. `}
-        The share is of all energy that moved. Mass closes to <Share value={massClosure} />. Reference: ideal gas at 25 °C, so
-        dense cold gas stands below zero.
+        The share is of all energy that moved. Mass closes to <Share value={massClosure} />.{" "}
+        {recounted !== undefined && (
+          <>
+            With outflow and heat counted again from the states along the run, energy closes to <Share value={recounted} /> and
+            mass to <Share value={summary.massClosureRecounted ?? 0} />.{" "}
+          </>
+        )}
+        Reference: ideal gas at 25 °C, so dense cold gas stands below zero.
       </p>
     </section>
   );
