@@ -4,6 +4,7 @@
  * Source   Brent, Algorithms for Minimization without Derivatives (1973), chapter 4 (inverse quadratic steps, bisection as safeguard).
  * Holds    f continuous with f(a) and f(b) of opposite sign; where f only jumps, the place of the jump is found by bisection
  * tolerance  absolute width of the last bracket
+ * accept     the search also ends where |f| is no more than this
  * Returns  x with a sign change of f within `tolerance` of it
  * Throws   RangeError where the ends don't bracket (NaN included)
  */
@@ -11,6 +12,7 @@ export function bracketedRoot(
   f: (x: number) => number,
   bracket: { a: number; fa: number; b: number; fb: number },
   tolerance: number,
+  accept = 0,
 ): number {
   let { a, fa, b, fb } = bracket;
   if (fa === 0) return a;
@@ -28,7 +30,7 @@ export function bracketedRoot(
     }
     const near = 2 * Number.EPSILON * Math.abs(b) + tolerance / 2;
     const half = (c - b) / 2;
-    if (Math.abs(half) <= near || fb === 0) return b;
+    if (Math.abs(half) <= near || Math.abs(fb) <= accept) return b;
 
     if (Math.abs(e) >= near && Math.abs(fa) > Math.abs(fb)) {
       const s = fb / fa;
