@@ -17,6 +17,8 @@ export interface LibraryRow {
   meltingPoint_K: number;
   cp0: { c0: number; terms: { n: number; theta_K: number }[]; range_K: [number, number]; method: string; note: string };
   volumeTranslation: { PR_m3_per_mol: number; SRK_m3_per_mol: number };
+  /** Net, gas at 25 °C to gaseous products; null where it does not burn or is not held. */
+  lowerHeatingValue_J_per_mol: number | null;
   alsoIn: { gerg2008: boolean; helmholtz: boolean };
   sources: { critical: string; nbp: string; melting: string; eosCitation?: string };
 }

@@ -6,7 +6,8 @@ export const ventGas = defineMethod({
   id: "disposal-vent-gas-quality",
   chapter: "disposal",
   title: "Molar mass and net calorific value of vent gas",
-  source: "Net calorific values at 25 °C as in ISO 6976",
+  source:
+    "Net calorific values at 25 °C from enthalpies of formation (ATcT and others, see the component library), as ISO 6976 defines them",
   formula: String.raw`M=\sum_i x_i M_i,\qquad H=\frac{\sum_i x_i H_i}{\sum_i x_i M_i}`,
   inputs: { composition: composition("Mole fractions of the vent gas") },
   outputs: {
