@@ -56,9 +56,16 @@ const config = [
     [node, database, ["@/features/*", "@/server/*"]],
     "Shared components know no feature and no server.",
   ),
-  never(["src/features/**", "src/workers/browser.ts"], [node, database, ["@/server/*"]], "Client code never imports server code."),
+  never(
+    ["src/features/**", "src/workers/browser.ts"],
+    [node, database, ["@/server/*"]],
+    "Client code never imports server code.",
+  ),
   never(["src/app/**"], [["pg", "drizzle-orm", "drizzle-orm/*", "@db/*"]], "Routes read and write through src/server."),
-  { files: ["src/engine/**/*.test.ts", "src/ledger/**/*.test.ts", "src/contracts/**/*.test.ts"], rules: { "no-restricted-imports": "off" } },
+  {
+    files: ["src/engine/**/*.test.ts", "src/ledger/**/*.test.ts", "src/contracts/**/*.test.ts"],
+    rules: { "no-restricted-imports": "off" },
+  },
 ];
 
 export default config;

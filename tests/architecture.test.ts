@@ -15,7 +15,12 @@ const layers: Layer[] = [
   { name: "engine", holds: "src/engine/", may: ["engine"], packages: /^odex$/ },
   { name: "ledger", holds: "src/ledger/", may: ["ledger"], packages: /^(@noble\/hashes\/.+\.js|canonicalize)$/ },
   { name: "contracts", holds: "src/contracts/", may: ["contracts", "engine"], packages: /^zod$/ },
-  { name: "components", holds: "src/components/", may: ["components", "contracts", "engine"], packages: /^(?!node:|pg|drizzle|iron-session|bcryptjs|server-only)/ },
+  {
+    name: "components",
+    holds: "src/components/",
+    may: ["components", "contracts", "engine"],
+    packages: /^(?!node:|pg|drizzle|iron-session|bcryptjs|server-only)/,
+  },
   {
     name: "features",
     holds: "src/features/",
@@ -23,8 +28,18 @@ const layers: Layer[] = [
     packages: /^(?!node:|pg|drizzle|iron-session|bcryptjs|server-only)/,
   },
   { name: "workers", holds: "src/workers/", may: ["workers", "engine", "contracts", "ledger"], packages: anyPackage },
-  { name: "server", holds: "src/server/", may: ["server", "contracts", "engine", "ledger", "db"], packages: /^(?!react|chart\.js|formik)/ },
-  { name: "app", holds: "src/app/", may: ["app", "features", "components", "contracts", "server", "engine", "ledger"], packages: /^(?!pg|drizzle)/ },
+  {
+    name: "server",
+    holds: "src/server/",
+    may: ["server", "contracts", "engine", "ledger", "db"],
+    packages: /^(?!react|chart\.js|formik)/,
+  },
+  {
+    name: "app",
+    holds: "src/app/",
+    may: ["app", "features", "components", "contracts", "server", "engine", "ledger"],
+    packages: /^(?!pg|drizzle)/,
+  },
   { name: "cli", holds: "src/cli/", may: ["cli", "ops", "verifier"], packages: anyPackage },
   { name: "ops", holds: "src/ops/", may: ["ops", "server", "contracts", "db", "engine", "ledger"], packages: anyPackage },
   { name: "db", holds: "db/", may: ["db", "server", "contracts"], packages: anyPackage },
@@ -35,7 +50,8 @@ const files = ["src", "db"]
   .filter((entry) => entry.isFile() && /\.(ts|tsx|mjs)$/.test(entry.name) && !/\.(test|bench)\.tsx?$|\.d\.ts$/.test(entry.name))
   .map((entry) => relative(root, join(entry.parentPath, entry.name)));
 
-const importPattern = /(?:^|[^\w.])(?:import|export)\s+(?:type\s+)?(?:[\w*{}\s,$]+\sfrom\s+)?["']([^"']+)["']|import\(\s*["']([^"']+)["']\s*\)/g;
+const importPattern =
+  /(?:^|[^\w.])(?:import|export)\s+(?:type\s+)?(?:[\w*{}\s,$]+\sfrom\s+)?["']([^"']+)["']|import\(\s*["']([^"']+)["']\s*\)/g;
 
 type Import = { from: string; to: string; typeOnly: boolean };
 

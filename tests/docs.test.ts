@@ -22,7 +22,9 @@ describe("the documents", () => {
   it.each(documents)("%s names only paths that are there", (document) => {
     const text = readFileSync(join(root, document), "utf8").replace(/```[\s\S]*?```/g, "");
     const paths = [...text.matchAll(pathPattern)].map((match) => match[1] as string);
-    const links = [...text.matchAll(linkPattern)].map((match) => relative(root, resolve(root, dirname(document), match[1] as string)));
+    const links = [...text.matchAll(linkPattern)].map((match) =>
+      relative(root, resolve(root, dirname(document), match[1] as string)),
+    );
     expect([...paths, ...links].filter((path) => !existsSync(join(root, path)))).toEqual([]);
   });
 });

@@ -265,7 +265,15 @@ export async function openPage(
 ) {
   const opened = await openCeremony(write, { personId: by.id, sessionIdSha256: null, screeningId, rev, act, shownSha256: shown });
   await proveCeremony(write, { nonce: opened.nonce, personId: by.id, sessionIdSha256: null, method: "password" });
-  return { personId: by.id, screeningId, rev, nonce: opened.nonce, idempotencyKey: opened.idempotencyKey, shownSha256: shown, factor: "Password again" };
+  return {
+    personId: by.id,
+    screeningId,
+    rev,
+    nonce: opened.nonce,
+    idempotencyKey: opened.idempotencyKey,
+    shownSha256: shown,
+    factor: "Password again",
+  };
 }
 
 export const sign = async (databases: Databases, act: Act) =>

@@ -25,7 +25,9 @@ for (const [dressed, dress] of dresses) {
         await photograph(page, `page-${role}-${address.replace(/\W+/g, "-")}-${dressed.replace(" ", "-")}`);
         const wide = await page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
         expect(wide, `${address} scrolls sideways by ${wide} px`).toBeLessThanOrEqual(0);
-        const { violations } = await new AxeBuilder({ page }).withTags(["wcag2a", "wcag2aa", "wcag21a", "wcag21aa", "wcag22aa"]).analyze();
+        const { violations } = await new AxeBuilder({ page })
+          .withTags(["wcag2a", "wcag2aa", "wcag21a", "wcag21aa", "wcag22aa"])
+          .analyze();
         expect(violations.map(({ id, nodes }) => `${address}: ${id} at ${nodes[0]?.target.join(" ")}`)).toEqual([]);
       }
       expect(complaints).toEqual([]);
@@ -42,7 +44,9 @@ test("a sheet, its form and a refusal, by both dresses", async ({ browser }) => 
     await expect(page.getByRole("heading", { level: 1 })).toBeVisible();
     await page.waitForTimeout(800);
     await photograph(page, `sheet-${dressed.replace(" ", "-")}`);
-    const { violations } = await new AxeBuilder({ page }).withTags(["wcag2a", "wcag2aa", "wcag21a", "wcag21aa", "wcag22aa"]).analyze();
+    const { violations } = await new AxeBuilder({ page })
+      .withTags(["wcag2a", "wcag2aa", "wcag21a", "wcag21aa", "wcag22aa"])
+      .analyze();
     expect(violations.map(({ id, nodes }) => `${id} at ${nodes[0]?.target.join(" ")}`)).toEqual([]);
     expect(complaints).toEqual([]);
     const answer = await page.goto("/people");

@@ -84,9 +84,15 @@ for (const [at, screening] of [bottleBank, exportLoop].entries()) {
       await page.getByRole("button", { name: "Start the screening" }).click();
       await expect(page.getByRole("heading", { level: 1, name: "Scope" })).toBeVisible();
       await screening.describe(page);
-      await expect(page.getByRole("complementary", { name: "Forerun" }).getByText("Peak vent load")).toBeVisible({ timeout: 45_000 });
+      await expect(page.getByRole("complementary", { name: "Forerun" }).getByText("Peak vent load")).toBeVisible({
+        timeout: 45_000,
+      });
       await photograph(page, `walk-${at}-1-form`);
-      record = (await page.getByText(/^SC-\d{4}$/).first().textContent()) ?? "";
+      record =
+        (await page
+          .getByText(/^SC-\d{4}$/)
+          .first()
+          .textContent()) ?? "";
     });
 
     await test.step("the server's own run stands on the sheet, cautions before the charts", async () => {
@@ -113,7 +119,11 @@ for (const [at, screening] of [bottleBank, exportLoop].entries()) {
       await expect(page.getByLabel("Password, once more")).toHaveCount(0);
     });
 
-    const approver = await personAt(browser, "approver", at === 0 ? { width: 1440, height: 900 } : { width: 390, height: 844, dark });
+    const approver = await personAt(
+      browser,
+      "approver",
+      at === 0 ? { width: 1440, height: 900 } : { width: 390, height: 844, dark },
+    );
     await test.step("the approver finds it waiting and countersigns", async () => {
       await expect(approver.page.getByText(record).first()).toBeVisible();
       await approver.page.goto(`${address}/decide`);
