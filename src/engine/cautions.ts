@@ -123,6 +123,17 @@ export const studyCaution: Caution = {
     "A percentile does not replace the worst credible case that a rule asks for. Inputs were varied independently of each other, within the bands shown.",
 };
 
+/** Of relief methods and scenarios. */
+export const reliefCaution =
+  "Relief case list, simultaneous events and device type are decided by the responsible engineer; the area shown is not a purchase specification.";
+
+/** Of held energy and blast. */
+export const fragmentCaution = "Fragment hazard is not quantified; for vessel bursts it usually governs the distance.";
+
+/** Of fire on a dry wall. */
+export const dryWallCaution =
+  "A relief device does not protect a dry wall: the metal can fail below the set pressure. See the time to rupture.";
+
 /** "−9 °C", with the true minus sign and a no-break space. */
 function celsius(temperatureK: number): string {
   const rounded = Math.round(temperatureK - 273.15);

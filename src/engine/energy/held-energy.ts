@@ -1,6 +1,6 @@
 /** What a vessel's contents can release: six published definitions side by side, and how far the blast of one of them reaches. */
 import type { EnergyCase, EnergyDefinition, EnergyResult, HeldEnergy, StandOff } from "../cases/energy-case";
-import { screeningCaution, standOffCaution } from "../cautions";
+import { fragmentCaution, screeningCaution, standOffCaution } from "../cautions";
 import { createFluidModel } from "../eos/create-fluid-model";
 import type { FluidModel } from "../eos/fluid-model";
 import { stateWarnings } from "../eos/state-warnings";
@@ -107,7 +107,7 @@ export function runEnergy(
     cautions: [
       screeningCaution.words,
       standOffCaution.words,
-      "Fragment hazard is not quantified; for vessel bursts it usually governs the distance.",
+      fragmentCaution,
       "The energy is that of the stated volume alone: count the whole isolatable section at its highest credible pressure.",
     ],
     numerics: {},

@@ -2,7 +2,7 @@
 import type { Verdict } from "../cases/blowdown-result";
 import type { ReliefCase, ReliefLimit, ReliefResult } from "../cases/relief-case";
 import type { Warning } from "../cases/warning";
-import { screeningCaution } from "../cautions";
+import { reliefCaution, screeningCaution } from "../cautions";
 import { createFluidModel } from "../eos/create-fluid-model";
 import type { FluidModel } from "../eos/fluid-model";
 import { stateWarnings } from "../eos/state-warnings";
@@ -80,7 +80,7 @@ export function runRelief(
     warnings: warningsOf(fluid, stream, sized, { balanced, backFraction }),
     cautions: [
       screeningCaution.words,
-      "Relief case list, simultaneous events and device type are decided by the responsible engineer; the area shown is not a purchase specification.",
+      reliefCaution,
       ...(occasion === "fire"
         ? [
             "The fire is an open pool of hydrocarbon-like fuel by the standard named. A jet fire on bare steel can weaken a wall faster than any relief device lowers its stress.",

@@ -1,7 +1,7 @@
+import { fragmentCaution } from "../../cautions";
 import { freeAirOverpressurePa, surfaceOverpressurePa, surfaceScaledDistance, surfaceScaledDistances } from "../../energy/blast";
 import { gives, number } from "../field";
 import { defineMethod } from "../method";
-import { fragmentCaution } from "./stored";
 
 const nearField = {
   words: "Scaled distance at least 4: nearer, a point charge over-predicts what a bursting vessel does (from memory).",

@@ -1,10 +1,9 @@
+import { fragmentCaution } from "../../cautions";
 import { fixedDistanceM, pressureTestEnergyJ, testDistanceM, tntJPerKg } from "../../energy/pressure-test";
 import { availabilityEnergyJ, brodeEnergyJ, isentropicEnergyJ, isothermalEnergyJ } from "../../energy/stored-energy";
 import { EngineError } from "../../errors";
 import { gives, number } from "../field";
 import { defineMethod } from "../method";
-
-export const fragmentCaution = "Fragment hazard is not quantified; for vessel bursts it usually governs the distance.";
 
 const vessel = {
   pressurePa: number("p_1", "Pressure in the vessel, absolute", "Pa", { above: 0, max: 1e9 }),

@@ -1,3 +1,4 @@
+import { dryWallCaution } from "../../cautions";
 import {
   hydrocarbonFireK,
   insulationFactor,
@@ -72,7 +73,7 @@ export const unwetted = defineMethod({
       holds: ({ relievingTemperatureK, wallTemperatureK }) => relievingTemperatureK < wallTemperatureK,
     },
   ],
-  cautions: ["A relief valve does not protect a dry wall: the metal can fail below the set pressure. See the time to rupture."],
+  cautions: [dryWallCaution],
   evaluate: (given) => ({
     massFlowKgPerS: unwettedReliefKgPerS({
       ...given,

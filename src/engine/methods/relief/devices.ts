@@ -1,3 +1,4 @@
+import { reliefCaution } from "../../cautions";
 import {
   gasBackPressureFactor,
   highestBackPressureFraction,
@@ -10,7 +11,7 @@ import { accumulatedPressureGaugePa, additionalSetGaugePa, reliefOccasions } fro
 import { reactionForceN } from "../../relief/reaction-force";
 import { gives, givesWord, number, oneOf } from "../field";
 import { defineMethod } from "../method";
-import { belowInlet, reliefCaution } from "./shared-fields";
+import { belowInlet } from "./shared-fields";
 
 export const accumulatedPressure = defineMethod({
   id: "relief-accumulated-pressure",

@@ -1,7 +1,7 @@
+import { reliefCaution } from "../../cautions";
 import { blockedInRisePaPerK, expansionFlowM3PerS } from "../../relief/thermal-expansion";
 import { gives, number } from "../field";
 import { defineMethod } from "../method";
-import { reliefCaution } from "./shared-fields";
 
 const expansion = number("\\alpha_v", "Cubic expansion coefficient of the liquid", "1/K", { above: 0, max: 0.1 });
 

@@ -1,3 +1,4 @@
+import { reliefCaution } from "../../cautions";
 import {
   criticalPressureRatio,
   flowCoefficient,
@@ -7,7 +8,7 @@ import {
 } from "../../relief/gas-sizing";
 import { gives, number } from "../field";
 import { defineMethod } from "../method";
-import { belowInlet, reliefCaution, sizingFactors } from "./shared-fields";
+import { belowInlet, sizingFactors } from "./shared-fields";
 
 const gas = {
   massFlowKgPerS: number("W", "Required mass flow", "kg/s", { above: 0, max: 1e5 }),

@@ -1,7 +1,8 @@
+import { reliefCaution } from "../../cautions";
 import { liquidAreaM2, liquidReynolds, viscosityEditions, viscosityFactor } from "../../relief/liquid-sizing";
 import { gives, number, oneOf } from "../field";
 import { defineMethod } from "../method";
-import { belowInlet, reliefCaution, sizingFactors } from "./shared-fields";
+import { belowInlet, sizingFactors } from "./shared-fields";
 
 const massFlowKgPerS = number("W", "Mass flow", "kg/s", { above: 0, max: 1e5 });
 const densityKgPerM3 = number("\\rho", "Density of the liquid", "kg/m³", { above: 0, max: 3e4 });

@@ -2,7 +2,7 @@ import { EngineError } from "../../errors";
 import { omegaSubcooledFlux, omegaTwoPhaseFlux } from "../../relief/omega";
 import { gives, givesWord, number } from "../field";
 import { defineMethod } from "../method";
-import { reliefCaution } from "./shared-fields";
+import { reliefCaution } from "../../cautions";
 
 const common = {
   pressurePa: number("p_0", "Stagnation pressure, absolute", "Pa", { above: 0, max: 1e9 }),
@@ -20,11 +20,9 @@ function insideInlet({ pressurePa, backPressurePa }: { pressurePa: number; backP
   }
 }
 
-const narrow = {
-  words:
-    "Reduced temperature below 0.9, reduced pressure below 0.5, one component or a boiling range below 80 K, no supercritical inlet (state these of the fluid).",
-  holds: () => true,
-};
+/** Not to be read from the inputs, so no bound that could be tested. */
+const fluidsItHoldsFor =
+  "Holds for a reduced temperature below 0.9, a reduced pressure below 0.5, one component or a boiling range below 80 K, and no supercritical inlet: check these of the fluid.";
 
 export const omegaTwoPhase = defineMethod({
   id: "relief-omega-two-phase",
@@ -42,8 +40,7 @@ export const omegaTwoPhase = defineMethod({
     criticalPressureRatio: gives("\\eta_c", "Critical pressure ratio", ""),
     flow: givesWord("Whether it chokes"),
   },
-  bounds: [narrow],
-  cautions: [reliefCaution],
+  cautions: [fluidsItHoldsFor, reliefCaution],
   evaluate: (given) => {
     insideInlet(given);
     const { massFluxKgPerM2S, criticalPressureRatio, choked } = omegaTwoPhaseFlux(given);
@@ -69,8 +66,7 @@ export const omegaSubcooled = defineMethod({
     subcooling: givesWord("Region: high or low subcooling"),
     flow: givesWord("Whether it chokes"),
   },
-  bounds: [narrow],
-  cautions: [reliefCaution],
+  cautions: [fluidsItHoldsFor, reliefCaution],
   evaluate: (given) => {
     insideInlet(given);
     if (given.saturationPressurePa > given.pressurePa) {

@@ -1,9 +1,6 @@
 import { EngineError } from "../../errors";
 import { number } from "../field";
 
-export const reliefCaution =
-  "Relief case list, simultaneous events and device type are decided by the responsible engineer; the area shown is not a purchase specification.";
-
 /** Kd and Kc, with the coefficient the standard takes before a device is chosen. */
 export const sizingFactors = (dischargeCoefficient: number) => ({
   dischargeCoefficient: number("K_d", "Effective coefficient of discharge", "", {

@@ -1,7 +1,8 @@
+import { reliefCaution } from "../../cautions";
 import { highestSteamPressurePa, napierCorrection, steamAreaM2 } from "../../relief/steam-sizing";
 import { gives, number } from "../field";
 import { defineMethod } from "../method";
-import { reliefCaution, sizingFactors } from "./shared-fields";
+import { sizingFactors } from "./shared-fields";
 
 export const steam = defineMethod({
   id: "relief-steam",

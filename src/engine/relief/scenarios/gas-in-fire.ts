@@ -6,6 +6,7 @@
  * Throws   EngineError "not-applicable" where the gas would be hotter than the wall before it relieves
  */
 import type { FeedState } from "../../cases/relief-case";
+import { dryWallCaution } from "../../cautions";
 import { EngineError } from "../../errors";
 import { flashPT } from "../../flash/flash-pt";
 import { unwettedReliefKgPerS } from "../../heat/fire-laws";
@@ -46,9 +47,7 @@ export function gasInFire(
     basis: `Gas expansion in fire by API Std 521 on ${exposedAreaM2} m² with the wall at ${wallTemperatureK} K; the gas relieves at ${temperatureK.toFixed(1)} K (ideal gas: ${ideal.toFixed(1)} K).`,
     state,
     composition: fluid.feed,
-    warnings: [
-      "A relief device does not protect a dry wall: the metal can fail below the set pressure. See the time to rupture.",
-    ],
+    warnings: [dryWallCaution],
   };
 }
 
