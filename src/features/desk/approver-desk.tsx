@@ -71,7 +71,10 @@ function Queue({ waits, now }: { waits: DeskView["waits"]; now: string }) {
                 {row.section.tag} {row.section.name}
               </span>
               <br />
-              <span className="text-ink-3">{row.title}</span>
+              <span className="text-ink-3">
+                {row.title}
+                {row.facility.demo && " demo"}
+              </span>
             </Cell>
             <Cell wholeRow>
               <span className="font-serif">{row.sentence}</span>
